@@ -1,0 +1,188 @@
+/* SPDX-License-Identifier: MIT */
+#include "base/text.h"
+
+#include <assert.h>
+#include <errno.h>
+#include <limits.h>
+#include <math.h>
+#include <stdarg.h>
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+
+struct text text_over(char *data, size_t capacity)
+{
+    assert(capacity >= 1);
+    data[0] = '\0';
+    return (struct text){.data = data, .capacity = capacity};
+}
+
+void text_add_bytes(struct text *t, const char *s, size_t n)
+{
+    size_t room = t->capacity - 1 - t->length;
+    if (n > room) {
+        t->cut = true;
+        n = room;
+        /* Step back to the start of the character that does not fit. */
+        while (n > 0 && ((unsigned char)s[n] & 0xC0) == 0x80)
+            n--;
+    }
+    memcpy(t->data + t->length, s, n);
+    t->length += n;
+    t->data[t->length] = '\0';
+}
+
+void text_add(struct text *t, const char *s)
+{
+    text_add_bytes(t, s, strlen(s));
+}
+
+void text_addf(struct text *t, const char *format, ...)
+{
+    char piece[1024];
+    va_list args;
+    va_start(args, format);
+    int n = vsnprintf(piece, sizeof piece, format, args);
+    va_end(args);
+    if (n < 0)
+        return;
+    if ((size_t)n >= sizeof piece)
+        t->cut = true;
+    text_add(t, piece);
+}
+
+size_t utf8_decode(const char *s, size_t len, uint32_t *code)
+{
+    static const uint32_t smallest[5] = {0, 0, 0x80, 0x800, 0x10000};
+    const unsigned char *p = (const unsigned char *)s;
+    *code = UTF8_INVALID;
+    if (p[0] < 0x80) {
+        *code = p[0];
+        return 1;
+    }
+    size_t n = p[0] >= 0xF0 ? 4 : p[0] >= 0xE0 ? 3 : 2;
+    if (p[0] < 0xC2 || p[0] > 0xF4 || n > len)
+        return 1;
+    uint32_t c = p[0] & (0xFFu >> (n + 1));
+    for (size_t i = 1; i < n; i++) {
+        if ((p[i] & 0xC0) != 0x80)
+            return 1;
+        c = c << 6 | (p[i] & 0x3Fu);
+    }
+    if (c < smallest[n] || c > 0x10FFFF || (c >= 0xD800 && c <= 0xDFFF))
+        return 1;
+    *code = c;
+    return n;
+}
+
+size_t utf8_encode(uint32_t code, char *out)
+{
+    if (code < 0x80) {
+        out[0] = (char)code;
+        return 1;
+    }
+    size_t n = code < 0x800 ? 2 : code < 0x10000 ? 3 : 4;
+    for (size_t i = n - 1; i > 0; i--) {
+        out[i] = (char)(0x80 | (code & 0x3F));
+        code >>= 6;
+    }
+    out[0] = (char)((0xF00u >> n & 0xFFu) | code);
+    return n;
+}
+
+bool utf8_valid(const char *s, size_t len)
+{
+    for (size_t i = 0; i < len;) {
+        uint32_t code;
+        i += utf8_decode(s + i, len - i, &code);
+        if (code == UTF8_INVALID)
+            return false;
+    }
+    return true;
+}
+
+size_t utf8_length(const char *s)
+{
+    size_t len = strlen(s);
+    size_t count = 0;
+    for (size_t i = 0; i < len; count++) {
+        uint32_t code;
+        i += utf8_decode(s + i, len - i, &code);
+    }
+    return count;
+}
+
+bool utf8_is_control(uint32_t code)
+{
+    return code < 0x20 || (code >= 0x7F && code < 0xA0);
+}
+
+static char ascii_lower(char c)
+{
+    return c >= 'A' && c <= 'Z' ? (char)(c - 'A' + 'a') : c;
+}
+
+bool text_starts_ignoring_case(const char *s, const char *prefix)
+{
+    for (; *prefix; s++, prefix++)
+        if (ascii_lower(*s) != ascii_lower(*prefix))
+            return false;
+    return true;
+}
+
+bool text_same_ignoring_case(const char *a, const char *b)
+{
+    return strlen(a) == strlen(b) && text_starts_ignoring_case(a, b);
+}
+
+size_t text_edit_distance(const char *a, const char *b)
+{
+    enum { LONGEST = 32 };
+    size_t la = strlen(a);
+    size_t lb = strlen(b);
+    if (la > LONGEST || lb > LONGEST)
+        return SIZE_MAX;
+    size_t row[LONGEST + 1];
+    for (size_t j = 0; j <= lb; j++)
+        row[j] = j;
+    for (size_t i = 1; i <= la; i++) {
+        size_t diagonal = row[0];
+        row[0] = i;
+        for (size_t j = 1; j <= lb; j++) {
+            bool same = ascii_lower(a[i - 1]) == ascii_lower(b[j - 1]);
+            size_t best = diagonal + (same ? 0 : 1);
+            diagonal = row[j];
+            if (row[j] + 1 < best)
+                best = row[j] + 1;
+            if (row[j - 1] + 1 < best)
+                best = row[j - 1] + 1;
+            row[j] = best;
+        }
+    }
+    return row[lb];
+}
+
+bool text_to_int(const char *s, int *value)
+{
+    const char *digits = s + (*s == '+' || *s == '-');
+    if (*digits == '\0' || digits[strspn(digits, "0123456789")] != '\0')
+        return false;
+    errno = 0;
+    long v = strtol(s, NULL, 10);
+    if (errno != 0 || v < INT_MIN || v > INT_MAX)
+        return false;
+    *value = (int)v;
+    return true;
+}
+
+bool text_to_double(const char *s, double *value)
+{
+    if (*s == '\0' || s[strspn(s, "+-.0123456789eE")] != '\0')
+        return false;
+    char *end;
+    double v = strtod(s, &end);
+    if (end == s || *end != '\0' || !isfinite(v))
+        return false;
+    *value = v;
+    return true;
+}
