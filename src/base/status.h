@@ -7,8 +7,7 @@
 #include <stddef.h>
 
 #define MUST_CHECK __attribute__((warn_unused_result))
-#define PRINTF_LIKE(format, first)                                             \
-    __attribute__((format(printf, format, first)))
+#define PRINTF_LIKE(at, first) __attribute__((format(printf, at, first)))
 
 /* One list makes the codes, their short texts and the exit status that the
  * program ends with: code, text, exit status. */
