@@ -1,0 +1,35 @@
+/* SPDX-License-Identifier: MIT */
+/* Where a number comes from: a citation and the source that used it. */
+#ifndef ELEMENT_PROVENANCE_H
+#define ELEMENT_PROVENANCE_H
+
+#include <stdbool.h>
+
+/* A bibliographic record. Fields that do not apply are NULL or 0. key is a
+ * BibTeX key; kind a BibTeX entry type: "article", "book", "misc", … */
+struct citation {
+    const char *key;
+    const char *kind;
+    const char *authors; /* "E. Clementi and D. L. Raimondi" */
+    const char *title;
+    const char *container; /* journal, book or publisher */
+    int year;
+    const char *volume;
+    const char *pages;
+    const char *doi;
+};
+
+/* The source of a reading; lives as long as the program or its data set.
+ * definition says what the number is ("covalent radius", "radius of maximum
+ * radial density", "Pauling scale"): only equal definitions are like with
+ * like. */
+struct provenance {
+    bool computed;
+    const char *id;    /* model or data set */
+    const char *title; /* one line */
+    const char *definition;
+    const struct citation *citations; /* citations[citation_count] */
+    int citation_count;
+};
+
+#endif

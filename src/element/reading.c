@@ -1,0 +1,67 @@
+/* SPDX-License-Identifier: MIT */
+#include "element/reading.h"
+
+#include <assert.h>
+#include <math.h>
+
+/* More than the seven digits that are promised, less than the noise of
+ * double precision: 2.55 stays 2.55. */
+#define COMPUTED_DIGITS 9
+
+static const struct {
+    const char *id;
+    const char *word;
+} states[READING_STATE_COUNT] = {
+#define READING_ROW(state, id, word) {id, word},
+    READING_STATE_LIST(READING_ROW)
+#undef READING_ROW
+};
+
+const char *reading_state_id(enum reading_state state)
+{
+    return states[state].id;
+}
+
+const char *reading_state_word(enum reading_state state)
+{
+    return states[state].word;
+}
+
+struct reading reading_computed(enum quantity_id quantity, double value,
+                                const struct provenance *provenance)
+{
+    assert(isfinite(value));
+    return (struct reading){
+        .state = READING_OK,
+        .quantity = quantity,
+        .value = number_round(value, COMPUTED_DIGITS, 0),
+        .provenance = provenance,
+        .reason = "",
+        .remark = "",
+    };
+}
+
+struct reading reading_gap(enum quantity_id quantity, enum reading_state state,
+                           const char *reason,
+                           const struct provenance *provenance)
+{
+    assert(state != READING_OK);
+    return (struct reading){
+        .state = state,
+        .quantity = quantity,
+        .provenance = provenance,
+        .reason = reason,
+        .remark = "",
+    };
+}
+
+struct reading reading_in_unit(struct reading reading, const struct unit *unit)
+{
+    assert(unit->dimension == quantity_at(reading.quantity)->dimension);
+    if (reading.state != READING_OK)
+        return reading;
+    reading.value = number_scale(reading.value, unit->per_base);
+    if (reading.has_u)
+        reading.u = number_scale(reading.u, unit->per_base);
+    return reading;
+}

@@ -1,0 +1,69 @@
+/* SPDX-License-Identifier: MIT */
+/* One number with everything that belongs to it, or the reason why there is
+ * none. */
+#ifndef ELEMENT_READING_H
+#define ELEMENT_READING_H
+
+#include <stdbool.h>
+
+#include "base/number.h"
+#include "element/element.h"
+#include "element/provenance.h"
+#include "element/quantity.h"
+
+/* state, its id in CSV, its word on screen */
+#define READING_STATE_LIST(X)                                                  \
+    X(READING_OK, "ok", "value")                                               \
+    X(READING_MISSING, "no-reference", "not stored")                           \
+    X(READING_OUTSIDE, "outside-model", "outside the model")                   \
+    X(READING_NOT_CONVERGED, "not-converged", "not converged")                 \
+    X(READING_PENDING, "not-solved", "not solved yet")
+
+enum reading_state {
+#define READING_ENUM(state, id, word) state,
+    READING_STATE_LIST(READING_ENUM)
+#undef READING_ENUM
+        READING_STATE_COUNT
+};
+
+const char *reading_state_id(enum reading_state state);
+const char *reading_state_word(enum reading_state state);
+
+/* value and u are in the base unit of the quantity's dimension unless a caller
+ * has converted them (reading_in_unit). u is one standard uncertainty. reason
+ * and remark are borrowed, never NULL: reason says why there is no number (""
+ * when there is one), remark what to know about the number ("" for nothing). */
+struct reading {
+    enum reading_state state;
+    enum quantity_id quantity;
+    int n, l; /* the subshell it belongs to; n = 0 when none */
+    struct number value;
+    struct number u;
+    bool has_u;
+    const struct provenance *provenance;
+    const char *reason;
+    const char *remark;
+};
+
+/* A reading with a computed value: decimal from here on, at least 9
+ * significant digits, finite. */
+struct reading reading_computed(enum quantity_id quantity, double value,
+                                const struct provenance *provenance);
+
+/* A reading without a number. */
+struct reading reading_gap(enum quantity_id quantity, enum reading_state state,
+                           const char *reason,
+                           const struct provenance *provenance);
+
+/* The same reading in another unit of its dimension. */
+struct reading reading_in_unit(struct reading reading, const struct unit *unit);
+
+/* One quantity from one source for all elements; readings[z], z = 1…Z_MAX,
+ * [0] unused. */
+struct sheet {
+    enum quantity_id quantity;
+    const struct provenance *provenance;
+    struct reading readings[Z_MAX + 1];
+};
+
+#endif

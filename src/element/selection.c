@@ -1,0 +1,160 @@
+/* SPDX-License-Identifier: MIT */
+#include "element/selection.h"
+
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "base/text.h"
+
+#define ACCEPTED                                                               \
+    "expected a symbol, name or number, an ion such as Fe3+, a run such as "   \
+    "Sc-Zn, period:1…7, group:1…18 or block:s|p|d|f"
+
+static void add(struct selection *s, struct chosen item)
+{
+    for (int i = 0; i < s->count; i++)
+        if (s->items[i].z == item.z &&
+            s->items[i].has_charge == item.has_charge &&
+            s->items[i].charge == item.charge)
+            return;
+    if (s->count < SELECTION_MAX)
+        s->items[s->count++] = item;
+}
+
+void selection_all(struct selection *selection)
+{
+    for (int z = 1; z <= Z_MAX; z++)
+        add(selection, (struct chosen){.z = z});
+}
+
+static bool unknown(const char *word, const char *part, struct status *st)
+{
+    const struct element *near = element_nearest(part);
+    if (near)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: no such element; did you mean %s (%s)?", word,
+                           near->symbol, near->name);
+    return status_fail(st, STATUS_USAGE, "%s: no such element; %s", word,
+                       ACCEPTED);
+}
+
+/* "Fe3+" and "O2-": symbol, digits that may be missing, sign. Sets *is_ion
+ * when the word has that shape. */
+static bool parse_ion(const char *word, struct chosen *item, bool *is_ion,
+                      struct status *st)
+{
+    size_t length = strlen(word);
+    size_t letters = strspn(word, "ABCDEFGHIJKLMNOPQRSTUVWXYZ"
+                                  "abcdefghijklmnopqrstuvwxyz");
+    size_t digits = strspn(word + letters, "0123456789");
+    *is_ion = letters > 0 && letters + digits + 1 == length &&
+              (word[length - 1] == '+' || word[length - 1] == '-');
+    if (!*is_ion)
+        return true;
+    char symbol[16];
+    if (letters >= sizeof symbol || digits > 3)
+        return unknown(word, "", st);
+    memcpy(symbol, word, letters);
+    symbol[letters] = '\0';
+    const struct element *e = element_by_symbol(symbol);
+    if (!e)
+        return unknown(word, symbol, st);
+    int charge = digits ? (int)strtol(word + letters, NULL, 10) : 1;
+    if (digits && (charge == 0 || word[letters] == '0'))
+        return status_fail(st, STATUS_USAGE,
+                           "%s: an ion has a charge of 1 or more", word);
+    if (word[length - 1] == '-')
+        charge = -charge;
+    if (charge > e->z)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: %s has only %d electrons to lose", word,
+                           e->name, e->z);
+    *item = (struct chosen){e->z, charge, true};
+    return true;
+}
+
+static bool parse_keyed(struct selection *s, const char *word,
+                        const char *value, struct status *st)
+{
+    int number = 0;
+    bool has_number = text_to_int(value, &number) && value[0] != '+';
+    bool period = strncmp(word, "period:", 7) == 0;
+    bool group = strncmp(word, "group:", 6) == 0;
+    bool block = strncmp(word, "block:", 6) == 0;
+    bool ok = (period && has_number && number >= 1 && number <= PERIOD_MAX) ||
+              (group && has_number && number >= 1 && number <= GROUP_MAX) ||
+              (block && strlen(value) == 1 && strchr("spdf", value[0]));
+    if (!ok)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: no such part of the table; %s", word, ACCEPTED);
+    for (int z = 1; z <= Z_MAX; z++) {
+        const struct element *e = element_at(z);
+        if ((period && e->period == number) || (group && e->group == number) ||
+            (block && e->block == value[0]))
+            add(s, (struct chosen){.z = z});
+    }
+    return true;
+}
+
+static bool parse_run(struct selection *s, const char *word, const char *dash,
+                      struct status *st)
+{
+    char first[32];
+    size_t length = (size_t)(dash - word);
+    if (length == 0 || length >= sizeof first || dash[1] == '\0')
+        return unknown(word, "", st);
+    memcpy(first, word, length);
+    first[length] = '\0';
+    const struct element *a = element_find(first);
+    const struct element *b = element_find(dash + 1);
+    if (!a)
+        return unknown(word, first, st);
+    if (!b)
+        return unknown(word, dash + 1, st);
+    if (a->z > b->z)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: a run goes upwards in atomic number; expected "
+                           "%s-%s",
+                           word, b->symbol, a->symbol);
+    for (int z = a->z; z <= b->z; z++)
+        add(s, (struct chosen){.z = z});
+    return true;
+}
+
+bool selection_add(struct selection *selection, const char *word,
+                   struct status *st)
+{
+    const char *colon = strchr(word, ':');
+    if (colon)
+        return parse_keyed(selection, word, colon + 1, st);
+    const struct element *e = element_find(word);
+    if (e) {
+        add(selection, (struct chosen){.z = e->z});
+        return true;
+    }
+    struct chosen item;
+    bool is_ion;
+    if (!parse_ion(word, &item, &is_ion, st))
+        return false;
+    if (is_ion) {
+        add(selection, item);
+        return true;
+    }
+    const char *dash = strchr(word, '-');
+    if (dash)
+        return parse_run(selection, word, dash, st);
+    return unknown(word, word, st);
+}
+
+const char *ion_print(int z, int charge, char out[ION_TEXT_MAX])
+{
+    int size = abs(charge);
+    const char *symbol = element_at(z)->symbol;
+    const char *sign = charge == 0 ? "" : charge > 0 ? "+" : "-";
+    if (size <= 1)
+        snprintf(out, ION_TEXT_MAX, "%s%s", symbol, sign);
+    else
+        snprintf(out, ION_TEXT_MAX, "%s%d%s", symbol, size, sign);
+    return out;
+}

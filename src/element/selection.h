@@ -1,0 +1,41 @@
+/* SPDX-License-Identifier: MIT */
+/* The words by which elements and ions are chosen. */
+#ifndef ELEMENT_SELECTION_H
+#define ELEMENT_SELECTION_H
+
+#include <stdbool.h>
+
+#include "base/status.h"
+#include "element/element.h"
+
+#define SELECTION_MAX 512
+
+/* Chosen elements in the order in which they were named, none twice at the
+ * same charge. has_charge: the word was an ion and carries its charge. */
+struct chosen {
+    int z;
+    int charge;
+    bool has_charge;
+};
+struct selection {
+    int count;
+    struct chosen items[SELECTION_MAX];
+};
+
+/* Adds what one word names: symbol, name or atomic number (Fe, iron, 26); an
+ * ion (Fe3+, Cs+, O2-, iron written by its symbol); a run by atomic number
+ * (Sc-Zn, 21-30); period:4, group:13, block:d. Fails with STATUS_USAGE naming
+ * the word, what would be accepted and, where one is near, the element that
+ * may have been meant. */
+MUST_CHECK bool selection_add(struct selection *selection, const char *word,
+                              struct status *st);
+
+/* All elements by atomic number. */
+void selection_all(struct selection *selection);
+
+/* Writes an ion as the trade does, "Fe3+", "Cs+", "O2-", and a neutral atom
+ * by its symbol. Returns out. */
+#define ION_TEXT_MAX 20
+const char *ion_print(int z, int charge, char out[ION_TEXT_MAX]);
+
+#endif

@@ -1,0 +1,44 @@
+/* SPDX-License-Identifier: MIT */
+/* An atom or ion in one configuration: what a model is asked about. */
+#ifndef ELEMENT_SPECIES_H
+#define ELEMENT_SPECIES_H
+
+#include <stdbool.h>
+
+#include "element/configuration.h"
+
+/* Where a configuration comes from. */
+enum configuration_origin {
+    ORIGIN_STORED,    /* an evaluated table */
+    ORIGIN_PREDICTED, /* a table entry that is itself a prediction */
+    ORIGIN_RULE,      /* electrons taken from highest n, then highest l */
+    ORIGIN_USER,      /* typed by the user */
+};
+
+/* Words for an origin: "stored", "predicted", "by rule", "given". */
+const char *configuration_origin_text(enum configuration_origin origin);
+
+#define TERM_TEXT_MAX 24
+
+/* A ground term as tables print it: "2P*1/2" ('*' odd parity), "J=4" when only
+ * J is known. -1 in multiplicity, big_l or twice_j: not known. */
+struct term {
+    char text[TERM_TEXT_MAX]; /* "" when unknown */
+    int multiplicity;         /* 2S+1 */
+    int big_l;                /* L: S P D F G H I K L M = 0…9 */
+    int twice_j;              /* 2J */
+};
+
+/* Reads a printed term; fields that the text does not hold are -1. False when
+ * the text is not of that form (then all are unknown). */
+bool term_parse(const char *text, struct term *term);
+
+struct species {
+    int z;
+    int charge;
+    struct configuration configuration;
+    enum configuration_origin origin;
+    struct term term;
+};
+
+#endif
