@@ -1,0 +1,81 @@
+/* SPDX-License-Identifier: MIT */
+/* What every model is: a const struct, solved once, read many times. */
+#ifndef MODEL_MODEL_H
+#define MODEL_MODEL_H
+
+#include <stdbool.h>
+#include <stddef.h>
+
+#include "base/status.h"
+#include "element/provenance.h"
+#include "element/reading.h"
+#include "element/species.h"
+
+/* What the numbers are; a reference set with the same words is like with
+ * like (data/ uses the same). */
+#define DEFINITION_RADIAL_MAXIMUM "radius of maximum radial density"
+#define DEFINITION_ISODENSITY "radius at 0.001 electrons per cubic bohr"
+#define DEFINITION_IONIZATION "ionization energy"
+#define DEFINITION_ZEFF_RULE "screening rule, Z - S"
+#define DEFINITION_ZEFF_EXPONENT "orbital exponent, n zeta"
+#define DEFINITION_ZEFF_ENERGY "from the energy, n sqrt(E/Ry)"
+#define DEFINITION_ALLRED_ROCHOW "Allred-Rochow scale"
+#define DEFINITION_MULLIKEN "Mulliken scale, eV"
+#define DEFINITION_ALLEN "Allen scale"
+
+/* One electron more, or less: what an energy difference needs. */
+struct question {
+    struct species species;
+    bool has_cation; /* the next charge state up; false for a bare nucleus */
+    struct species cation;
+    bool has_anion;
+    struct species anion;
+    /* Covalent radius of the element in pm, for scales that need one. */
+    bool has_covalent_radius;
+    double covalent_radius_pm;
+};
+
+/* Choices that some models take. */
+struct model_options {
+    bool average_term; /* average of configuration instead of Hund's term */
+};
+
+/* One kind of number that a model gives. */
+struct model_offer {
+    enum quantity_id quantity;
+    struct provenance provenance;
+};
+
+enum model_progress { MODEL_RUNNING, MODEL_DONE };
+
+/* id, title, domain: as shown. work_size: bytes of a work space, zeroed by the
+ * caller, opened once, used for any number of questions, closed. A closed rule
+ * is done in its first step. open and close may be NULL.
+ *   begin  takes a question; what is outside the model shows in read.
+ *   step   one unit of work, at most some milliseconds.
+ *   read   after MODEL_DONE: offer is an index into offers; n = 0 asks for
+ *          the outermost subshell, else for subshell n, l. Always a reading:
+ *          a number, or a state with its reason. */
+struct model {
+    const char *id;
+    const char *title;
+    const char *domain;
+    bool closed;
+    const struct model_offer *offers;
+    int offer_count;
+    size_t work_size;
+    bool (*open)(void *work, struct status *st);
+    void (*close)(void *work);
+    void (*begin)(void *work, const struct question *question,
+                  const struct model_options *options);
+    enum model_progress (*step)(void *work);
+    struct reading (*read)(const void *work, int offer, int n, int l);
+};
+
+/* Index of the offer for a quantity whose definition is the given one, or the
+ * first for that quantity; -1 when the model does not offer it. definition may
+ * be NULL. */
+int model_offer_for(const struct model *model, enum quantity_id quantity,
+                    const char *definition);
+
+#endif

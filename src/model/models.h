@@ -1,0 +1,12 @@
+/* SPDX-License-Identifier: MIT */
+/* The models that the registry lists; nothing else needs these names. */
+#ifndef MODEL_MODELS_H
+#define MODEL_MODELS_H
+
+#include "model/model.h"
+
+extern const struct model model_shells;
+extern const struct model model_slater;
+extern const struct model model_clementi;
+
+#endif

@@ -1,0 +1,56 @@
+/* SPDX-License-Identifier: MIT */
+#include "model/registry.h"
+
+#include <assert.h>
+#include <string.h>
+
+#include "model/models.h"
+
+static const struct model *const models[] = {
+    &model_shells,
+    &model_slater,
+    &model_clementi,
+};
+
+int model_count(void)
+{
+    return (int)(sizeof models / sizeof models[0]);
+}
+
+const struct model *model_at(int i)
+{
+    assert(i >= 0 && i < model_count());
+    return models[i];
+}
+
+const struct model *model_find(const char *id)
+{
+    for (int i = 0; i < model_count(); i++)
+        if (strcmp(models[i]->id, id) == 0)
+            return models[i];
+    return NULL;
+}
+
+int model_index(const struct model *model)
+{
+    int i = 0;
+    while (models[i] != model)
+        i++;
+    return i;
+}
+
+int model_offer_for(const struct model *model, enum quantity_id quantity,
+                    const char *definition)
+{
+    int first = -1;
+    for (int i = 0; i < model->offer_count; i++) {
+        if (model->offers[i].quantity != quantity)
+            continue;
+        if (first < 0)
+            first = i;
+        if (definition &&
+            strcmp(model->offers[i].provenance.definition, definition) == 0)
+            return i;
+    }
+    return first;
+}
