@@ -1,0 +1,59 @@
+/* SPDX-License-Identifier: MIT */
+/* A model's value beside the stored one: the line that every screen and every
+ * command shows. */
+#ifndef ANALYSIS_ROW_H
+#define ANALYSIS_ROW_H
+
+#include <stdbool.h>
+
+#include "element/reading.h"
+#include "element/species.h"
+
+/* What a row says of itself, its id in CSV. The first is the only one with a
+ * residual. */
+#define ROW_STATE_LIST(X)                                                      \
+    X(ROW_OK, "ok")                                                            \
+    X(ROW_NO_REFERENCE, "no-reference")                                        \
+    X(ROW_OTHER_SCALE, "other-scale")                                          \
+    X(ROW_REFERENCE_ONLY, "reference-only")                                    \
+    X(ROW_OUTSIDE_MODEL, "outside-model")                                      \
+    X(ROW_NOT_CONVERGED, "not-converged")                                      \
+    X(ROW_NOT_SOLVED, "not-solved")
+
+enum row_state {
+#define ROW_ENUM(state, id) state,
+    ROW_STATE_LIST(ROW_ENUM)
+#undef ROW_ENUM
+        ROW_STATE_COUNT
+};
+
+const char *row_state_id(enum row_state state);
+
+/* value and reference are in `unit`. value.provenance is NULL when no model
+ * offers the quantity; reference.provenance is NULL when no set was chosen.
+ * residual = value - reference, exact in decimal, and in per cent of the
+ * reference, only in ROW_OK (percent only where the reference is not zero).
+ * like_with_like: both have the same definition. reason: "" in ROW_OK, else one
+ * clause that says why there is no residual; borrowed. */
+struct row {
+    struct species species;
+    enum quantity_id quantity;
+    const struct unit *unit;
+    int n, l; /* subshell asked about; n = 0 where the quantity has none */
+    struct reading value;
+    struct reading reference;
+    enum row_state state;
+    bool like_with_like;
+    bool has_percent;
+    struct number residual;
+    struct number percent;
+    const char *reason;
+};
+
+/* Fills state, residual, percent and reason of a row whose species, quantity,
+ * unit and subshell are set, from two readings in base units. Numbers on two
+ * scales (DIMENSION_NUMBER with other definitions) are never subtracted. */
+void row_compare(struct row *row, struct reading value,
+                 struct reading reference);
+
+#endif
