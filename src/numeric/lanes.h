@@ -1,0 +1,84 @@
+/* SPDX-License-Identifier: MIT */
+/* Insides of numeric/radial: what its kernels, one per vector width, share.
+ * Levels are worked on in groups, one level per lane. */
+#ifndef NUMERIC_LANES_H
+#define NUMERIC_LANES_H
+
+#include "numeric/radial.h"
+
+enum { LANES_MAX = 4, LANES_ALIGN = 32 };
+
+/* Levels that share a potential; arrays of points × width, lane fastest. */
+struct lane_group {
+    int channel, used; /* lanes in use; the others repeat the last one */
+    int elements;      /* of the mesh, as far as these levels reach */
+    int filled;        /* elements that hold other than zeros */
+    _Alignas(LANES_ALIGN) double kappa[LANES_MAX];
+    _Alignas(LANES_ALIGN) double centrifugal[LANES_MAX]; /* κ(κ+1) */
+    _Alignas(LANES_ALIGN) double energy[LANES_MAX];
+    _Alignas(LANES_ALIGN) double slope[LANES_MAX]; /* χ_t/χ, first point */
+    _Alignas(LANES_ALIGN) double inner[LANES_MAX]; /* ∫ below / first value */
+    /* Results of a step. */
+    _Alignas(LANES_ALIGN) double below[LANES_MAX]; /* levels below energy */
+    _Alignas(LANES_ALIGN) double shift[LANES_MAX]; /* Rayleigh quotient - E */
+    double *chi;                                   /* function */
+    double *density;                               /* normalised P² + a2 Q² */
+};
+
+/* A potential, as the kernels want it. In all arrays with "hw" the factor is
+ * half the element length times the mesh weight. */
+struct lane_channel {
+    double *v;     /* V */
+    double *base;  /* hw (schwarz + 2 slope² V) */
+    double *first; /* 2 hw slope² V'/y; a2 > 0 only, as the next two */
+    double *twice; /* hw slope² V'' */
+    double *cube;  /* 3 hw slope² V'² */
+    double *beta;  /* slope V' */
+    double *moved; /* weight_y × change of V since the last potential */
+};
+
+struct lane_work {
+    double a2;
+    const struct mesh *mesh;
+    const double *stiffness;   /* lower triangle, each entry × width */
+    const double *derivative;  /* 2/length × derivative matrix */
+    const double *schwarz;     /* hw schwarz */
+    const double *mass;        /* hw slope² */
+    const double *centrifugal; /* hw slope²/y² */
+    double *factor;            /* of the matrix, elements × FACTOR × width */
+    double *norm;              /* -dG/dE, points × width */
+    double *right;             /* right-hand side, points × width */
+};
+
+enum {
+    LANES_TRIANGLE = LOBATTO_POINTS * (LOBATTO_POINTS + 1) / 2,
+    LANES_FACTOR = LANES_TRIANGLE
+};
+
+struct lane_kernel {
+    int width;
+    /* Elements that the group needs at its energies, at most `limit`. */
+    int (*reach)(const struct lane_work *, const struct lane_channel *,
+                 const struct lane_group *, int limit);
+    /* WKB phase ∫ √(-G) dt of each lane at its energy, into below[]. */
+    void (*phase)(const struct lane_work *, const struct lane_channel *,
+                  struct lane_group *, int elements);
+    /* Factors at energy[], one inverse iteration: chi, below, shift. */
+    void (*step)(const struct lane_work *, const struct lane_channel *,
+                 struct lane_group *);
+    /* Normalises chi, fills density. */
+    void (*density)(const struct lane_work *, const struct lane_channel *,
+                    struct lane_group *);
+    /* First-order change of the energies, into shift[]. */
+    void (*moved)(const struct lane_work *, const struct lane_channel *,
+                  struct lane_group *);
+};
+
+/* Two lanes in portable code; four where the processor has them. Results are
+ * the same to the last bit: each lane does the same operations. */
+extern const struct lane_kernel lanes_two;
+#if defined(__x86_64__)
+extern const struct lane_kernel lanes_four;
+#endif
+
+#endif

@@ -1,0 +1,181 @@
+/* SPDX-License-Identifier: MIT */
+#include <check.h>
+#include <math.h>
+#include <stdio.h>
+#include <stdlib.h>
+
+#include "numeric/lobatto.h"
+#include "numeric/mesh.h"
+#include "numeric/radial.h"
+#include "support/near.h"
+#include "support/run.h"
+
+/* Abramowitz, Stegun, Handbook of Mathematical Functions, table 25.6
+ * (Lobatto abscissas and weights): the rule of 9 points. */
+START_TEST(lobatto_points_are_the_handbook_ones)
+{
+    static const double x[] = {0.0, 0.363117463826, 0.677186279511,
+                               0.899757995411, 1.0};
+    static const double w[] = {0.371519274376, 0.346428510973, 0.274538712500,
+                               0.165495361561, 0.027777777778};
+    struct lobatto rule;
+    lobatto_make(&rule);
+    ck_assert_int_eq(LOBATTO_POINTS, 9);
+    for (int i = 0; i < 5; i++) {
+        near(rule.x[4 + i], x[i], 1e-12, 0.0, "point %d", i);
+        near(rule.x[4 - i], -x[i], 1e-12, 0.0, "point -%d", i);
+        near(rule.w[4 + i], w[i], 1e-11, 0.0, "weight %d", i);
+    }
+}
+END_TEST
+
+START_TEST(polynomials_are_differentiated_and_integrated_exactly)
+{
+    struct lobatto rule;
+    lobatto_make(&rule);
+    for (int k = 1; k <= LOBATTO_ORDER; k++)
+        for (int i = 0; i < LOBATTO_POINTS; i++) {
+            double first = 0.0, second = 0.0, integral = 0.0;
+            double x = rule.x[i];
+            for (int j = 0; j < LOBATTO_POINTS; j++) {
+                double f = pow(rule.x[j], k);
+                first += rule.derivative[i][j] * f;
+                second += rule.second[i][j] * f;
+                integral += rule.cumulative[i][j] * f;
+            }
+            near(first, k * pow(x, k - 1), 1e-12, 1e-12, "x^%d'", k);
+            near(second, k > 1 ? k * (k - 1) * pow(x, k - 2) : 0.0, 1e-10,
+                 1e-11, "x^%d''", k);
+            near(integral, (pow(x, k + 1) - pow(-1.0, k + 1)) / (k + 1), 1e-13,
+                 1e-13, "integral of x^%d", k);
+        }
+}
+END_TEST
+
+START_TEST(mesh_integrates_interpolates_and_cumulates)
+{
+    struct status st = status_ok();
+    struct mesh mesh;
+    ck_assert(mesh_init(&mesh, 1e-3, 60.0, 1.0, &st));
+    double *f = calloc((size_t)mesh.points, sizeof *f);
+    double *g = calloc((size_t)mesh.points, sizeof *g);
+    double sum = 0.0;
+    for (int i = 0; i < mesh.points; i++) {
+        f[i] = mesh.y[i] * mesh.y[i] * exp(-mesh.y[i]);
+        sum += mesh.weight_y[i] * f[i];
+    }
+    /* y³/3 (1 - 3y/4 …) below; d f/dt = f' dy/dt */
+    double y0 = mesh.y[0];
+    double inner =
+        mesh_inner(&mesh, f[0], f[0] * (2.0 / y0 - 1.0) * mesh.slope[0], 2.0);
+    near(inner, y0 * y0 * y0 * (1.0 / 3.0 - y0 / 4.0), 0.0, 1e-5, "inner");
+    near(sum + inner, 2.0, 1e-9, 0.0, "∫ y² exp(-y)");
+    mesh_cumulate(&mesh, mesh.elements, f, inner, g);
+    for (double y = 0.01; y < 50.0; y *= 1.37) {
+        double exact = 2.0 - exp(-y) * (y * y + 2.0 * y + 2.0);
+        near(mesh_value(&mesh, g, y), exact, 1e-7, 0.0, "to y=%g", y);
+        near(mesh_value(&mesh, f, y), y * y * exp(-y), 1e-7, 0.0, "at %g", y);
+    }
+    free(f);
+    free(g);
+    mesh_clear(&mesh);
+}
+END_TEST
+
+/* Exact levels of the Coulomb field, in units of Z² hartree: -1/2n², and
+ * Sommerfeld's formula (Darwin, Proc. R. Soc. A 118, 654 (1928)). */
+static double coulomb_energy(double a2, int kappa, int n)
+{
+    if (a2 <= 0.0)
+        return -0.5 / (n * n);
+    double gamma = sqrt(kappa * kappa - a2);
+    double nr = n - abs(kappa) + gamma;
+    double root = sqrt(nr * nr + a2);
+    return -1.0 / (root * (root + nr));
+}
+
+/* Exact mean radius in units of 1/Z: (3n² - l(l+1))/2, and with the Dirac
+ * equation ((3N² - κ²) √(1 - a2/N²) - κ)/2 with
+ * the apparent quantum number N (Burke, Grant, Proc. Phys. Soc. 90, 297
+ * (1967)). */
+static double coulomb_radius(double a2, int kappa, int n)
+{
+    double l = kappa < 0 ? -kappa - 1 : kappa;
+    if (a2 <= 0.0)
+        return 0.5 * (3.0 * n * n - l * (l + 1.0));
+    double gamma = sqrt(kappa * kappa - a2), nr = n - abs(kappa);
+    double big = sqrt(n * n - 2.0 * nr * (abs(kappa) - gamma));
+    double root = sqrt(1.0 - a2 / (big * big));
+    return 0.5 * ((3.0 * big * big - kappa * kappa) * root - kappa);
+}
+
+static void check_coulomb(double Z, double c, double first, double length)
+{
+    struct status st = status_ok();
+    struct mesh mesh;
+    double a2 = c > 0.0 ? Z * Z / (c * c) : 0.0;
+    ck_assert(mesh_init(&mesh, first, 400.0, length, &st));
+    struct radial *radial = radial_new(&mesh, &st);
+    ck_assert(radial != NULL);
+    struct radial_level level[RADIAL_LEVELS_MAX];
+    int principal[RADIAL_LEVELS_MAX], count = 0;
+    for (int n = 1; n <= 7; n++)
+        for (int l = 0; l < n && l < 5; l++)
+            for (int kappa = -l - 1; kappa <= l; kappa += 2 * l + 1) {
+                if (kappa == 0 || (c <= 0.0 && kappa > 0))
+                    break;
+                principal[count] = n;
+                level[count++] =
+                    (struct radial_level){kappa, n - l - 1, 0, 1.0};
+            }
+    double *q = malloc((size_t)mesh.points * sizeof *q);
+    double *d = malloc((size_t)mesh.points * sizeof *d);
+    for (int i = 0; i < mesh.points; i++)
+        q[i] = -1.0;
+    radial_begin(radial, a2, mesh.elements, count, level);
+    radial_potential(radial, 0, q);
+    ck_assert_int_eq(radial_find(radial), 0);
+    radial_potential(radial, 0, q);
+    ck_assert_int_eq(radial_settle(radial, 1e-13), 0);
+    for (int i = 0; i < count; i++) {
+        int n = principal[i], kappa = level[i].kappa;
+        near(radial_energy(radial, i), coulomb_energy(a2, kappa, n), 0.0, 1e-9,
+             "Z=%g c=%g n=%d kappa=%d energy", Z, c, n, kappa);
+        radial_density(radial, i, d);
+        double r = 0.0;
+        for (int k = 0; k < mesh.points; k++)
+            r += mesh.weight_y[k] * mesh.y[k] * d[k];
+        near(r, coulomb_radius(a2, kappa, n), 0.0, 1e-8,
+             "Z=%g c=%g n=%d kappa=%d mean radius", Z, c, n, kappa);
+    }
+    free(q);
+    free(d);
+    radial_free(radial);
+    mesh_clear(&mesh);
+}
+
+START_TEST(coulomb_levels_are_exact_without_light_speed)
+{
+    check_coulomb(1.0, 0.0, 1e-3, 1.0);
+}
+END_TEST
+
+START_TEST(coulomb_levels_are_exact_for_dirac)
+{
+    for (int Z = 1; Z <= 118; Z++)
+        check_coulomb(Z, 137.035999177, 1e-5, 1.0);
+}
+END_TEST
+
+int main(void)
+{
+    Suite *suite = suite_create("numeric");
+    TCase *c = tcase_create("numeric");
+    suite_add_tcase(suite, c);
+    tcase_add_test(c, lobatto_points_are_the_handbook_ones);
+    tcase_add_test(c, polynomials_are_differentiated_and_integrated_exactly);
+    tcase_add_test(c, mesh_integrates_interpolates_and_cumulates);
+    tcase_add_test(c, coulomb_levels_are_exact_without_light_speed);
+    tcase_add_test(c, coulomb_levels_are_exact_for_dirac);
+    return run_suite(suite);
+}
