@@ -8,6 +8,7 @@
 #include <stdint.h>
 
 #include "base/status.h"
+#include "screen/glyph.h"
 #include "screen/role.h"
 
 #define CANVAS_ROWS_MAX 1000
@@ -23,7 +24,7 @@ struct cell {
 
 struct canvas {
     int rows, columns;
-    struct cell *cells; /* cells[rows * columns], row by row */
+    struct cell *cells;            /* cells[rows * columns], row by row */
     int cursor_row, cursor_column; /* where the hardware cursor is left */
     bool cursor_visible;
     bool ascii; /* glyphs outside ASCII are replaced by their twins */
@@ -33,6 +34,8 @@ struct canvas {
  * STATUS_MEMORY. canvas_clear frees it. */
 MUST_CHECK bool canvas_init(struct canvas *canvas, int rows, int columns,
                             struct status *st);
+/* Gives the canvas another size and blanks it; on failure (STATUS_MEMORY) it
+ * stays as it was. The ascii choice is kept. */
 MUST_CHECK bool canvas_resize(struct canvas *canvas, int rows, int columns,
                               struct status *st);
 void canvas_clear(struct canvas *canvas);
@@ -42,7 +45,8 @@ void canvas_erase(struct canvas *canvas);
 
 /* The drawing calls clip at the edges; outside places are ignored. */
 
-/* One character. With canvas.ascii its ASCII twin is put instead. */
+/* One character. With canvas.ascii its ASCII twin is put instead; a character
+ * that is not one column wide becomes a replacement mark. */
 void canvas_put(struct canvas *canvas, int row, int column, enum role role,
                 uint32_t character);
 
@@ -70,13 +74,10 @@ void canvas_paint(struct canvas *canvas, int row, int column, int rows,
 void canvas_reverse(struct canvas *canvas, int row, int column, int rows,
                     int columns);
 
-/* The ASCII twin of a character of our screens: itself when it is ASCII, '?'
- * when it has none. */
-uint32_t glyph_ascii(uint32_t character);
-
 /* Writes the canvas as two text grids parted by a line of '=': characters in
  * UTF-8, then the letters of the roles, '@' where reverse. Trailing blanks are
- * cut. The caller frees the result; NULL when memory is short. */
+ * cut, every row ends in a newline. The caller frees the result; NULL when
+ * memory is short. */
 char *canvas_to_text(const struct canvas *canvas);
 
 #endif

@@ -8,13 +8,13 @@
 
 enum event_kind {
     EVENT_NONE,
-    EVENT_KEY,    /* a key without a character: key */
+    EVENT_KEY,       /* a key without a character: key */
     EVENT_CHARACTER, /* a printable character: character */
-    EVENT_PASTE,  /* one character of pasted text: character */
-    EVENT_MOUSE,  /* a click or a wheel step: row, column, button */
-    EVENT_RESIZE, /* rows, columns */
-    EVENT_TICK,   /* half a second went by while a job is running */
-    EVENT_INTERRUPT /* the user's interrupt key */
+    EVENT_PASTE,     /* one character of pasted text: character */
+    EVENT_MOUSE,     /* a click or a wheel step: row, column, button */
+    EVENT_RESIZE,    /* rows, columns */
+    EVENT_TICK,      /* half a second went by while a job is running */
+    EVENT_INTERRUPT  /* the user's interrupt key */
 };
 
 enum key {
@@ -30,7 +30,7 @@ enum key {
     KEY_CODE_ESCAPE,
     KEY_CODE_TAB,
     KEY_CODE_BACKTAB,
-    KEY_CODE_ERASE,  /* backspace, either code */
+    KEY_CODE_ERASE, /* backspace, either code */
     KEY_CODE_DELETE,
     KEY_CODE_REPAINT /* control-L */
 };

@@ -4,7 +4,9 @@
 #define SCREEN_ROLE_H
 
 /* Steps of the two colour scales. */
-#define RAMP_STEPS 9   /* sequential: low to high, lightness strictly monotone */
+#define RAMP_STEPS                                                             \
+    9 /* sequential: low to high, lightness strictly monotone                  \
+       */
 #define BALANCE_STEPS 9 /* diverging: the middle one is "no difference" */
 
 /* role, letter in golden screens. A role never carries meaning alone: words,
