@@ -1,0 +1,30 @@
+/* SPDX-License-Identifier: MIT */
+#include "analysis/comparison.h"
+
+#include <math.h>
+#include <stdlib.h>
+
+#define PERCENT_DIGITS 7
+
+void comparison_clear(struct comparison *comparison)
+{
+    free(comparison->lines);
+    free(comparison->facts);
+    *comparison = (struct comparison){0};
+}
+
+bool comparison_difference(const struct comparison_line *line, int which,
+                           struct difference *difference)
+{
+    const struct reading *first = &line->readings[0];
+    const struct reading *other = &line->readings[which];
+    if (which == 0 || first->state != READING_OK || other->state != READING_OK)
+        return false;
+    double size = fabs(first->value.value);
+    difference->value = number_subtract(other->value, first->value);
+    difference->has_percent = size > 0.0;
+    if (difference->has_percent)
+        difference->percent = number_round(
+            100.0 * difference->value.value / size, PERCENT_DIGITS, 0);
+    return true;
+}

@@ -1,0 +1,164 @@
+/* SPDX-License-Identifier: MIT */
+#include "study/reference.h"
+
+#include <assert.h>
+#include <math.h>
+#include <string.h>
+
+#include "base/units.h"
+
+/* The stored set that Z_eff from an energy follows from. */
+#define IONIZATION_RANK 1
+
+static const struct citation ionization_citation[] = {
+    {"ionization_zeff", "misc", "common practice, no source",
+     "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)", NULL,
+     0, NULL, NULL, NULL},
+    {"nist_asd", "misc",
+     "A. Kramida and Yu. Ralchenko and J. Reader and NIST ASD Team",
+     "NIST Atomic Spectra Database, version 5.12",
+     "National Institute of Standards and Technology, Gaithersburg, MD", 2024,
+     NULL, NULL, "10.18434/T4W30F"},
+};
+
+static const struct provenance zeff_provenance = {
+    false,
+    REFERENCE_ZEFF_FROM_IONIZATION,
+    "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
+    "from the energy, n sqrt(E/Ry)",
+    ionization_citation,
+    2,
+};
+
+static void insert(struct reference_list *list, struct reference item)
+{
+    if (list->count == REFERENCE_MAX)
+        return;
+    int i = list->count++;
+    for (; i > 0; i--) {
+        const struct reference *before = &list->items[i - 1];
+        bool later =
+            item.quantity < before->quantity ||
+            (item.quantity == before->quantity && item.rank < before->rank);
+        if (!later)
+            break;
+        list->items[i] = *before;
+    }
+    list->items[i] = item;
+}
+
+/* A set without a rank stands behind all that have one. */
+static int rank_of(const struct dataset *set)
+{
+    return set->rank > 0 ? set->rank : 1000;
+}
+
+static bool is_outermost_only(const struct dataset *set)
+{
+    if (!quantity_at(set->quantity)->per_subshell)
+        return false;
+    for (int i = 0; i < set->count; i++)
+        if (set->values[i].n != 0)
+            return false;
+    return true;
+}
+
+void reference_list_fill(struct reference_list *list,
+                         const struct catalogue *catalogue)
+{
+    list->count = 0;
+    for (size_t i = 0; i < catalogue_count(catalogue); i++) {
+        const struct dataset *set = catalogue_at(catalogue, i);
+        if (set->kind != DATASET_VALUES)
+            continue;
+        insert(list,
+               (struct reference){&set->provenance, set->quantity, set,
+                                  rank_of(set), false, is_outermost_only(set)});
+        if (set->quantity == QUANTITY_IONIZATION &&
+            rank_of(set) == IONIZATION_RANK)
+            insert(list, (struct reference){&zeff_provenance, QUANTITY_ZEFF,
+                                            set, 0, true, true});
+    }
+}
+
+const struct reference *reference_find(const struct reference_list *list,
+                                       const char *id)
+{
+    for (int i = 0; i < list->count; i++)
+        if (strcmp(list->items[i].provenance->id, id) == 0)
+            return &list->items[i];
+    return NULL;
+}
+
+const struct reference *reference_default(const struct reference_list *list,
+                                          enum quantity_id quantity,
+                                          const char *definition, bool inner)
+{
+    const struct reference *first = NULL;
+    for (int i = 0; i < list->count; i++) {
+        const struct reference *r = &list->items[i];
+        if (r->quantity != quantity || (inner && r->outermost_only))
+            continue;
+        if (!first)
+            first = r;
+        if (definition && strcmp(r->provenance->definition, definition) == 0)
+            return r;
+    }
+    if (!first && inner)
+        return reference_default(list, quantity, definition, false);
+    return first;
+}
+
+/* Z_eff = n sqrt(I/Ry); du/dI = Z_eff/(2I). */
+static struct reading zeff_from_ionization(const struct reference *reference,
+                                           const struct species *species)
+{
+    const struct subshell *outer =
+        configuration_outermost(&species->configuration);
+    struct reading energy =
+        dataset_reading(reference->set, species->z, species->charge, 0, 0);
+    if (!outer)
+        return reading_gap(QUANTITY_ZEFF, READING_MISSING, "no electron left",
+                           reference->provenance);
+    if (energy.state != READING_OK)
+        return reading_gap(QUANTITY_ZEFF, READING_MISSING, energy.reason,
+                           reference->provenance);
+    double ev = energy.value.value;
+    double z_eff = outer->n * sqrt(ev / RYDBERG_EV);
+    struct reading r =
+        reading_computed(QUANTITY_ZEFF, z_eff, reference->provenance);
+    r.n = outer->n;
+    r.l = outer->l;
+    r.remark = energy.remark;
+    r.has_u = energy.has_u;
+    if (r.has_u)
+        r.u = number_round(0.5 * z_eff * energy.u.value / ev, 2, 0);
+    return r;
+}
+
+struct reading reference_read(const struct reference *reference,
+                              const struct species *species, int n, int l)
+{
+    const struct subshell *outer =
+        configuration_outermost(&species->configuration);
+    bool is_outer = n == 0 || (outer && outer->n == n && outer->l == l);
+    if (reference->outermost_only && !is_outer)
+        return reading_gap(reference->quantity, READING_MISSING,
+                           "this set holds outermost subshells only",
+                           reference->provenance);
+    if (reference->derived)
+        return zeff_from_ionization(reference, species);
+    /* A set by subshells is asked for the very subshell. */
+    bool by_subshell = quantity_at(reference->quantity)->per_subshell &&
+                       !reference->outermost_only;
+    if (by_subshell && n == 0 && outer) {
+        n = outer->n;
+        l = outer->l;
+    }
+    struct reading r =
+        dataset_reading(reference->set, species->z, species->charge,
+                        by_subshell ? n : 0, by_subshell ? l : 0);
+    if (r.state == READING_OK && species->origin == ORIGIN_USER)
+        r.remark = "stored for the ground configuration";
+    return r;
+}

@@ -1,0 +1,56 @@
+/* SPDX-License-Identifier: MIT */
+/* Reference values as every row sees them: stored sets, and quantities that
+ * follow from a stored one by definition. */
+#ifndef STUDY_REFERENCE_H
+#define STUDY_REFERENCE_H
+
+#include "element/reading.h"
+#include "element/species.h"
+#include "refdata/catalogue.h"
+
+/* Z_eff = n sqrt(I/Ry) from the measured ionization energy I. */
+#define REFERENCE_ZEFF_FROM_IONIZATION "zeff_from_ionization"
+
+#define REFERENCE_MAX 128
+
+/* One reference for one quantity. set: the stored set it is or follows from.
+ * rank: order among the references of its quantity, 1 first. outermost_only:
+ * it says nothing of inner subshells. */
+struct reference {
+    const struct provenance *provenance;
+    enum quantity_id quantity;
+    const struct dataset *set;
+    int rank;
+    bool derived;
+    bool outermost_only;
+};
+
+/* All references of a catalogue, sorted by quantity, then rank, then their
+ * order there. */
+struct reference_list {
+    int count;
+    struct reference items[REFERENCE_MAX];
+};
+
+void reference_list_fill(struct reference_list *list,
+                         const struct catalogue *catalogue);
+
+/* By the id of its data set (or of the derived one); NULL when none. */
+const struct reference *reference_find(const struct reference_list *list,
+                                       const char *id);
+
+/* The reference that a row takes when none was chosen: the first with the
+ * model's own definition, else the first of the quantity that covers such a
+ * subshell; NULL when the quantity has none. definition may be NULL; inner:
+ * the subshell asked about is not the outermost. */
+const struct reference *reference_default(const struct reference_list *list,
+                                          enum quantity_id quantity,
+                                          const char *definition, bool inner);
+
+/* Its value for a species, in base units; n = 0 asks for the outermost
+ * subshell or for a quantity without subshells. Always a reading; a gap says
+ * why. */
+struct reading reference_read(const struct reference *reference,
+                              const struct species *species, int n, int l);
+
+#endif

@@ -1,0 +1,371 @@
+/* SPDX-License-Identifier: MIT */
+#include "study/study.h"
+
+#include <assert.h>
+#include <math.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "study/solution.h"
+
+/* Models that can stand in the registry, and atoms that can wait. */
+#define WORK_MAX 16
+#define QUEUE_MAX 1024
+
+/* Single-bond radii of all elements: the radius in the Allred-Rochow scale. */
+#define COVALENT_SET "covalent_single_pyykko_2009"
+
+struct task {
+    const struct model *model;
+    struct question question;
+};
+
+struct study {
+    const struct catalogue *catalogue;
+    struct reference_list references;
+    struct model_options options;
+    void *works[WORK_MAX]; /* by place in the registry; made when needed */
+    const struct dataset *covalent;
+    struct solution_store solutions;
+    struct task *queue; /* queue[queued], the next one last */
+    int queued;
+    bool running; /* the last task of the queue has begun */
+    int done, total;
+};
+
+struct study *study_new(const struct catalogue *catalogue, struct status *st)
+{
+    struct study *study = calloc(1, sizeof *study);
+    if (!study) {
+        status_fail(st, STATUS_MEMORY, "out of memory");
+        return NULL;
+    }
+    assert(model_count() <= WORK_MAX);
+    study->catalogue = catalogue;
+    study->covalent = catalogue_find(catalogue, COVALENT_SET);
+    reference_list_fill(&study->references, catalogue);
+    return study;
+}
+
+void study_free(struct study *study)
+{
+    if (!study)
+        return;
+    for (int m = 0; m < model_count(); m++) {
+        if (study->works[m] && model_at(m)->close)
+            model_at(m)->close(study->works[m]);
+        free(study->works[m]);
+    }
+    solution_clear(&study->solutions);
+    free(study->queue);
+    free(study);
+}
+
+const struct catalogue *study_catalogue(const struct study *study)
+{
+    return study->catalogue;
+}
+
+const struct reference_list *study_references(const struct study *study)
+{
+    return &study->references;
+}
+
+void study_set_options(struct study *study, const struct model_options *options)
+{
+    study_stop(study);
+    solution_clear(&study->solutions);
+    study->options = *options;
+}
+
+bool study_species(const struct study *study, const struct ask *ask,
+                   struct species *species, struct status *st)
+{
+    const struct element *e = element_at(ask->z);
+    if (ask->charge > ask->z || ask->charge < -ask->z)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: charge %d does not exist; expected %d…%d",
+                           e->symbol, ask->charge, -ask->z, ask->z);
+    ground_state(study->catalogue, ask->z, ask->charge, species);
+    if (!ask->configuration ||
+        configuration_same(ask->configuration, &species->configuration))
+        return true;
+    double held = configuration_electrons(ask->configuration);
+    if (fabs(held - (ask->z - ask->charge)) > 1e-9)
+        return status_fail(st, STATUS_USAGE,
+                           "%s, charge %d: the configuration holds %.10g "
+                           "electrons; expected %d",
+                           e->symbol, ask->charge, held, ask->z - ask->charge);
+    *species = (struct species){
+        .z = ask->z,
+        .charge = ask->charge,
+        .configuration = *ask->configuration,
+        .origin = ORIGIN_USER,
+        .term = {"", -1, -1, -1},
+    };
+    return true;
+}
+
+/* One electron less: the stored ion where the atom is the stored one, else
+ * the outermost electron of the given configuration goes. */
+static bool cation_of(const struct study *study, const struct species *species,
+                      struct species *cation)
+{
+    if (species->charge >= species->z)
+        return false;
+    if (species->origin != ORIGIN_USER) {
+        ground_state(study->catalogue, species->z, species->charge + 1, cation);
+        return true;
+    }
+    *cation = *species;
+    cation->charge++;
+    const struct subshell *outer =
+        configuration_outermost(&species->configuration);
+    return outer && configuration_change(&cation->configuration, outer->n,
+                                         outer->l, -fmin(1.0, outer->occ));
+}
+
+static struct question question_of(const struct study *study,
+                                   const struct species *species)
+{
+    struct question q = {.species = *species};
+    q.has_cation = cation_of(study, species, &q.cation);
+    q.has_anion =
+        species->origin != ORIGIN_USER && species->charge > -species->z;
+    if (q.has_anion)
+        ground_state(study->catalogue, species->z, species->charge - 1,
+                     &q.anion);
+    if (study->covalent) {
+        struct reading r =
+            dataset_reading(study->covalent, species->z, 0, 0, 0);
+        q.has_covalent_radius = r.state == READING_OK;
+        q.covalent_radius_pm = q.has_covalent_radius ? r.value.value : 0.0;
+    }
+    return q;
+}
+
+/* The work space of a model, opened at its first use. */
+static void *work_of(struct study *study, const struct model *model,
+                     struct status *st)
+{
+    void **work = &study->works[model_index(model)];
+    if (*work)
+        return *work;
+    *work = calloc(1, model->work_size);
+    if (!*work) {
+        status_fail(st, STATUS_MEMORY, "out of memory");
+    } else if (model->open && !model->open(*work, st)) {
+        free(*work);
+        *work = NULL;
+    }
+    return *work;
+}
+
+/* A closed rule fits on the stack of its caller: no state is kept. */
+static struct reading ask_closed(const struct study *study,
+                                 const struct model *model,
+                                 const struct species *species, int offer,
+                                 int n, int l)
+{
+    union {
+        max_align_t align;
+        unsigned char bytes[4096];
+    } work = {.bytes = {0}};
+    assert(model->work_size <= sizeof work && !model->open);
+    struct question q = question_of(study, species);
+    model->begin(&work, &q, &study->options);
+    while (model->step(&work) != MODEL_DONE)
+        ;
+    return model->read(&work, offer, n, l);
+}
+
+static struct reading value_of(const struct study *study, const struct ask *ask,
+                               const struct species *species, int offer)
+{
+    const struct model *model = ask->model;
+    if (model->closed)
+        return ask_closed(study, model, species, offer, ask->n, ask->l);
+    const struct solution *s = solution_find(&study->solutions, model, species);
+    if (s)
+        return solution_read(s, offer, ask->n, ask->l);
+    return reading_gap(ask->quantity, READING_PENDING, "not solved yet",
+                       &model->offers[offer].provenance);
+}
+
+static bool is_inner(const struct ask *ask, const struct species *species)
+{
+    const struct subshell *outer =
+        configuration_outermost(&species->configuration);
+    return ask->n != 0 && (!outer || outer->n != ask->n || outer->l != ask->l);
+}
+
+/* Subshell of a row: the one asked about, or the outermost. */
+static void set_subshell(struct row *row, const struct ask *ask)
+{
+    const struct subshell *outer =
+        configuration_outermost(&row->species.configuration);
+    if (!quantity_at(ask->quantity)->per_subshell)
+        return;
+    row->n = ask->n ? ask->n : outer ? outer->n : 0;
+    row->l = ask->n ? ask->l : outer ? outer->l : 0;
+}
+
+struct row study_row(const struct study *study, const struct ask *ask)
+{
+    struct row row = {.quantity = ask->quantity};
+    struct status st = status_ok();
+    if (!study_species(study, ask, &row.species, &st))
+        assert(!"the caller checks the ask with study_species");
+    row.unit = ask->unit ? ask->unit
+                         : unit_base(quantity_at(ask->quantity)->dimension);
+    set_subshell(&row, ask);
+
+    const struct reference *reference = ask->reference;
+    const char *definition =
+        reference ? reference->provenance->definition : NULL;
+    int offer = ask->model
+                    ? model_offer_for(ask->model, ask->quantity, definition)
+                    : -1;
+    struct reading value =
+        reading_gap(ask->quantity, READING_MISSING, "not computed", NULL);
+    if (offer >= 0) {
+        value = value_of(study, ask, &row.species, offer);
+        definition = ask->model->offers[offer].provenance.definition;
+    }
+    if (!reference)
+        reference = reference_default(&study->references, ask->quantity,
+                                      definition, is_inner(ask, &row.species));
+    struct reading stored =
+        reference ? reference_read(reference, &row.species, ask->n, ask->l)
+                  : reading_gap(ask->quantity, READING_MISSING,
+                                "no reference set for this quantity", NULL);
+    row_compare(&row, value, stored);
+    return row;
+}
+
+static bool iterates(const struct ask *ask)
+{
+    return ask->model && !ask->model->closed &&
+           model_offer_for(ask->model, ask->quantity, NULL) >= 0;
+}
+
+bool study_row_now(struct study *study, const struct ask *ask, struct row *row,
+                   struct status *st)
+{
+    if (iterates(ask)) {
+        if (!study_want(study, ask, true, st))
+            return false;
+        while (study_step(study))
+            ;
+    }
+    *row = study_row(study, ask);
+    return true;
+}
+
+static int find_task(const struct study *study, const struct model *model,
+                     const struct species *species)
+{
+    for (int i = 0; i < study->queued; i++) {
+        const struct task *t = &study->queue[i];
+        if (t->model == model && t->question.species.z == species->z &&
+            t->question.species.charge == species->charge &&
+            configuration_same(&t->question.species.configuration,
+                               &species->configuration))
+            return i;
+    }
+    return -1;
+}
+
+bool study_want(struct study *study, const struct ask *ask, bool first,
+                struct status *st)
+{
+    struct species species;
+    if (!iterates(ask))
+        return true;
+    if (!study_species(study, ask, &species, st))
+        return false;
+    if (solution_find(&study->solutions, ask->model, &species))
+        return true;
+    if (!study->queue)
+        study->queue = calloc(QUEUE_MAX, sizeof *study->queue);
+    if (!study->queue || !work_of(study, ask->model, st))
+        return status_fail(st, STATUS_MEMORY, "out of memory");
+    int at = find_task(study, ask->model, &species);
+    if (at >= 0 && (!first || at == study->queued - 1))
+        return true;
+    struct task task = {ask->model, question_of(study, &species)};
+    /* The task that runs stays last; "first" means right after it. */
+    int head = study->queued - (study->running ? 1 : 0);
+    if (at >= 0) {
+        for (int i = at; i + 1 < head; i++)
+            study->queue[i] = study->queue[i + 1];
+        study->queue[head - 1] = task;
+        return true;
+    }
+    if (study->queued == QUEUE_MAX)
+        return true; /* asked for again when it is drawn again */
+    int place = first ? head : 0;
+    memmove(&study->queue[place + 1], &study->queue[place],
+            (size_t)(study->queued - place) * sizeof task);
+    study->queue[place] = task;
+    study->queued++;
+    study->total++;
+    return true;
+}
+
+bool study_step(struct study *study)
+{
+    if (study->queued == 0)
+        return false;
+    struct task *task = &study->queue[study->queued - 1];
+    void *work = study->works[model_index(task->model)];
+    if (!study->running) {
+        task->model->begin(work, &task->question, &study->options);
+        study->running = true;
+    }
+    if (task->model->step(work) == MODEL_DONE) {
+        struct status st = status_ok();
+        study->running = false;
+        study->queued--;
+        study->done++;
+        /* Without memory the atom stays unsolved and is asked for again. */
+        if (!solution_keep(&study->solutions, task->model, work,
+                           &task->question.species, &st))
+            study_stop(study);
+    }
+    if (study->queued > 0)
+        return true;
+    study->done = 0;
+    study->total = 0;
+    return false;
+}
+
+void study_stop(struct study *study)
+{
+    study->queued = 0;
+    study->running = false;
+    study->done = 0;
+    study->total = 0;
+}
+
+struct study_progress study_progress(const struct study *study)
+{
+    return (struct study_progress){study->done, study->total};
+}
+
+struct summary study_block_summary(const struct study *study,
+                                   const struct ask *ask, char block,
+                                   int without)
+{
+    struct summary summary = {0};
+    struct ask each = *ask;
+    for (int z = 1; z <= Z_MAX; z++) {
+        if (z == without || element_at(z)->block != block || each.charge > z)
+            continue;
+        each.z = z;
+        each.configuration = NULL;
+        struct row row = study_row(study, &each);
+        summary_add(&summary, &row);
+    }
+    return summary;
+}
