@@ -4,7 +4,7 @@
 #include <assert.h>
 #include <string.h>
 
-static const struct unit units[] = {
+const struct unit unit_table[] = {
     {"1", "pure number", DIMENSION_NUMBER, 1.0, 2},
     {"e", "elementary charges", DIMENSION_CHARGE, 1.0, 3},
     {"pm", "picometre", DIMENSION_LENGTH, 1.0, 1},
@@ -19,27 +19,27 @@ static const struct unit units[] = {
 
 size_t unit_count(void)
 {
-    return sizeof units / sizeof units[0];
+    return sizeof unit_table / sizeof unit_table[0];
 }
 
 const struct unit *unit_at(size_t i)
 {
     assert(i < unit_count());
-    return &units[i];
+    return &unit_table[i];
 }
 
 const struct unit *unit_find(const char *id)
 {
     for (size_t i = 0; i < unit_count(); i++)
-        if (strcmp(units[i].id, id) == 0)
-            return &units[i];
+        if (strcmp(unit_table[i].id, id) == 0)
+            return &unit_table[i];
     return NULL;
 }
 
 const struct unit *unit_base(enum dimension dimension)
 {
     size_t i = 0;
-    while (units[i].dimension != dimension)
+    while (unit_table[i].dimension != dimension)
         i++;
-    return &units[i];
+    return &unit_table[i];
 }

@@ -39,6 +39,10 @@ struct unit {
     int decimals;
 };
 
+/* The table itself, for tables that are made when the program is built; all
+ * others use the functions. */
+extern const struct unit unit_table[];
+
 /* Number of units, and the i-th one (0 <= i < count). The first unit of a
  * dimension is its base unit. */
 size_t unit_count(void);

@@ -1,0 +1,211 @@
+/* SPDX-License-Identifier: MIT */
+#include "refdata/dataset.h"
+
+#include <assert.h>
+
+#define ID3(name, id, words) id,
+#define WORDS3(name, id, words) words,
+#define ID2(name, id) id,
+
+const char *dataset_kind_id(enum dataset_kind kind)
+{
+    static const char *const ids[] = {DATASET_KIND_LIST(ID2)};
+    return ids[kind];
+}
+
+const char *evidence_id(enum evidence evidence)
+{
+    static const char *const ids[] = {EVIDENCE_LIST(ID3)};
+    return ids[evidence];
+}
+
+const char *evidence_word(enum evidence evidence)
+{
+    static const char *const words[] = {EVIDENCE_LIST(WORDS3)};
+    return words[evidence];
+}
+
+const char *gap_id(enum gap gap)
+{
+    static const char *const ids[] = {GAP_LIST(ID3)};
+    return ids[gap];
+}
+
+const char *gap_word(enum gap gap)
+{
+    static const char *const words[] = {GAP_LIST(WORDS3)};
+    return words[gap];
+}
+
+const char *spin_id(enum spin_state spin)
+{
+    static const char *const ids[] = {SPIN_LIST(ID3)};
+    return ids[spin];
+}
+
+const char *spin_word(enum spin_state spin)
+{
+    static const char *const words[] = {SPIN_LIST(WORDS3)};
+    return words[spin];
+}
+
+const char *coordination_id(enum coordination coordination)
+{
+    static const char *const ids[] = {COORDINATION_LIST(ID3)};
+    return ids[coordination];
+}
+
+int coordination_number(enum coordination coordination)
+{
+    static const int numbers[] = {COORDINATION_LIST(WORDS3)};
+    return numbers[coordination];
+}
+
+const char *configuration_status_id(enum configuration_status status)
+{
+    static const char *const ids[] = {CONFIGURATION_STATUS_LIST(ID3)};
+    return ids[status];
+}
+
+const char *radioactive_id(enum radioactive radioactive)
+{
+    static const char *const ids[] = {RADIOACTIVE_LIST(ID3)};
+    return ids[radioactive];
+}
+
+const char *radioactive_word(enum radioactive radioactive)
+{
+    static const char *const words[] = {RADIOACTIVE_LIST(WORDS3)};
+    return words[radioactive];
+}
+
+const char *dataset_text(const struct dataset *set, text_offset offset)
+{
+    assert(offset < set->strings_size);
+    return set->strings + offset;
+}
+
+const struct entry *dataset_lookup_site(const struct dataset *set, int z,
+                                        int charge,
+                                        enum coordination coordination,
+                                        enum spin_state spin)
+{
+    assert(set->kind == DATASET_VALUES && z >= 1 && z <= Z_MAX);
+    for (int i = set->first[z]; i < set->first[z + 1]; i++) {
+        const struct entry *e = &set->values[i];
+        if (e->charge == charge && e->n == 0 &&
+            e->coordination == coordination &&
+            (spin == SPIN_NONE ? e->preferred : e->spin == spin))
+            return e;
+    }
+    return NULL;
+}
+
+const struct entry *dataset_lookup(const struct dataset *set, int z, int charge,
+                                   int n, int l)
+{
+    assert(set->kind == DATASET_VALUES && z >= 1 && z <= Z_MAX);
+    /* Binary search over the element's entries: ionization energies have one
+     * per charge, up to 110. */
+    int low = set->first[z], high = set->first[z + 1];
+    while (low < high) {
+        int middle = low + (high - low) / 2;
+        const struct entry *e = &set->values[middle];
+        int order = e->charge != charge ? e->charge - charge
+                    : e->n != n         ? e->n - n
+                    : e->l != l
+                        ? e->l - l
+                        : (int)e->coordination - (int)set->default_coordination;
+        if (order < 0)
+            low = middle + 1;
+        else
+            high = middle;
+    }
+    /* The first of a group is its preferred one. */
+    if (low == set->first[z + 1])
+        return NULL;
+    const struct entry *e = &set->values[low];
+    bool same = e->charge == charge && e->n == n && e->l == l &&
+                e->coordination == set->default_coordination;
+    return same ? e : NULL;
+}
+
+/* A number in another unit. A change by a power of ten moves the point and
+ * keeps the digits as printed. */
+static struct number in_base(struct number n, double per_base)
+{
+    double factor = 1.0 / per_base;
+    int shift = 0;
+    double power = 1.0;
+    while (power < factor * 0.999 && shift < 6) {
+        power *= 10.0;
+        shift++;
+    }
+    bool exact = power > factor * (1 - 1e-12) && power < factor * (1 + 1e-12);
+    if (!exact)
+        return number_scale(n, factor);
+    int places = n.decimals > shift ? n.decimals - shift : 0;
+    /* 17 digits: more than a double holds, so that only `places` counts. */
+    return number_round(n.value * power, 1, places);
+}
+
+struct reading dataset_entry_reading(const struct dataset *set,
+                                     const struct entry *entry)
+{
+    if (!entry)
+        return reading_gap(set->quantity, READING_MISSING, set->absent,
+                           &set->provenance);
+    if (entry->gap != GAP_NONE)
+        return reading_gap(set->quantity, READING_MISSING,
+                           dataset_text(set, entry->note), &set->provenance);
+    struct reading r = {
+        .state = READING_OK,
+        .quantity = set->quantity,
+        .n = entry->n,
+        .l = entry->l,
+        .value = entry->value,
+        .u = entry->u,
+        .has_u = entry->has_u,
+        .provenance = &set->provenance,
+        .reason = "",
+        .remark = dataset_text(set, entry->remark),
+    };
+    if (set->quantity != QUANTITY_ELECTRONEGATIVITY &&
+        set->unit->per_base != 1.0) {
+        r.value = in_base(r.value, set->unit->per_base);
+        if (r.has_u)
+            r.u = in_base(r.u, set->unit->per_base);
+    }
+    return r;
+}
+
+struct reading dataset_reading(const struct dataset *set, int z, int charge,
+                               int n, int l)
+{
+    return dataset_entry_reading(set, dataset_lookup(set, z, charge, n, l));
+}
+
+const struct element_facts *dataset_element(const struct dataset *set, int z)
+{
+    assert(set->kind == DATASET_ELEMENTS && z >= 1 && z <= Z_MAX);
+    int i = set->first[z];
+    return i < set->first[z + 1] ? &set->elements[i] : NULL;
+}
+
+const struct availability *dataset_availability(const struct dataset *set,
+                                                int z)
+{
+    assert(set->kind == DATASET_AVAILABILITY && z >= 1 && z <= Z_MAX);
+    int i = set->first[z];
+    return i < set->first[z + 1] ? &set->availability[i] : NULL;
+}
+
+const struct configuration_entry *
+dataset_configuration(const struct dataset *set, int z, int charge)
+{
+    assert(set->kind == DATASET_CONFIGURATIONS && z >= 1 && z <= Z_MAX);
+    for (int i = set->first[z]; i < set->first[z + 1]; i++)
+        if (set->configurations[i].charge == charge)
+            return &set->configurations[i];
+    return NULL;
+}

@@ -1,0 +1,506 @@
+/* SPDX-License-Identifier: MIT */
+/* The head of a data set: who made it, what it holds. The entries are read by
+ * one function per kind. */
+#include "refdata/loader.h"
+
+#include <assert.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "base/file.h"
+#include "base/text.h"
+#include "refdata/json.h"
+#include "refdata/load.h"
+
+#define ID2(name, id) id,
+#define ID3(name, id, words) id,
+
+static const struct field root_fields[] = {
+    {"format", FIELD_INTEGER, true},
+    {"id", FIELD_TEXT, true},
+    {"kind", FIELD_TEXT, true},
+    {"title", FIELD_TEXT, true},
+    {"citations", FIELD_OBJECTS, true},
+    {"licence", FIELD_TEXT, false},
+    {"notes", FIELD_TEXTS, false},
+    {"absent", FIELD_TEXT, false},
+    {"entries", FIELD_OBJECTS, true},
+    /* The rest belongs to values alone; see values_only. */
+    {"quantity", FIELD_TEXT, false},
+    {"definition", FIELD_TEXT, false},
+    {"unit", FIELD_TEXT, false},
+    {"evidence", FIELD_TEXT, false},
+    {"rank", FIELD_INTEGER, false},
+    {"default_coordination", FIELD_TEXT, false},
+    {"marks", FIELD_OBJECTS, false},
+};
+#define ROOT_FIELD_COUNT (sizeof root_fields / sizeof root_fields[0])
+#define VALUES_ONLY_FROM 9
+
+static const struct field citation_fields[] = {
+    {"key", FIELD_TEXT, true},        {"type", FIELD_TEXT, true},
+    {"authors", FIELD_TEXTS, false},  {"title", FIELD_TEXT, false},
+    {"container", FIELD_TEXT, false}, {"year", FIELD_INTEGER, false},
+    {"volume", FIELD_TEXT, false},    {"pages", FIELD_TEXT, false},
+    {"doi", FIELD_TEXT, false},
+};
+
+static const struct field mark_fields[] = {
+    {"id", FIELD_TEXT, true},
+    {"meaning", FIELD_TEXT, true},
+};
+
+#define FIELD_COUNT(fields) (sizeof(fields) / sizeof(fields)[0])
+
+/* Publication years that are not a slip of the keyboard. */
+#define YEAR_MIN 1800
+#define YEAR_MAX 2100
+#define CITATIONS_MAX 100
+#define NOTES_MAX 100
+#define ID_BYTES_MAX 48
+
+static const char id_characters[] = "abcdefghijklmnopqrstuvwxyz0123456789_-.";
+
+static bool check_id(const char *id, const char *what, struct status *st)
+{
+    if (strlen(id) <= ID_BYTES_MAX && id[strspn(id, id_characters)] == '\0' &&
+        id[0] >= 'a' && id[0] <= 'z')
+        return true;
+    return status_fail(st, STATUS_DATA,
+                       "%s '%s': expected a letter and then letters, digits, "
+                       "'_', '-' or '.', all lower case, at most %d",
+                       what, quoted(id).text, ID_BYTES_MAX);
+}
+
+const char *load_copy(struct load *ld, const char *text)
+{
+    size_t size = strlen(text) + 1;
+    char *copy = arena_array(&ld->out->arena, size, 1, ld->st);
+    if (copy)
+        memcpy(copy, text, size);
+    return copy;
+}
+
+/* A copied text member; *out stays as it is when the key is absent. */
+static bool copy_member(struct load *ld, const cJSON *object, const char *key,
+                        const char **out)
+{
+    const char *text = object_text(object, key);
+    return !text || (*out = load_copy(ld, text)) != NULL;
+}
+
+/* Members of a list joined by a separator, copied; NULL without the key. */
+static bool copy_joined(struct load *ld, const cJSON *object, const char *key,
+                        const char *separator, const char **out)
+{
+    size_t size = 1;
+    const cJSON *item;
+    const cJSON *list = object_member(object, key);
+    *out = NULL;
+    if (!list)
+        return true;
+    cJSON_ArrayForEach(item, list)
+    {
+        size += strlen(item->valuestring) + strlen(separator);
+    }
+    char *joined = arena_array(&ld->out->arena, size, 1, ld->st);
+    if (!joined)
+        return false;
+    struct text t = text_over(joined, size);
+    cJSON_ArrayForEach(item, list)
+    {
+        text_add(&t, t.length ? separator : "");
+        text_add(&t, item->valuestring);
+    }
+    *out = joined;
+    return true;
+}
+
+bool load_joined(struct load *ld, const cJSON *object, const char *key,
+                 text_offset *offset)
+{
+    const char *joined;
+    *offset = 0;
+    return copy_joined(ld, object, key, "; ", &joined) &&
+           (!joined || pool_add(&ld->pool, joined, offset, ld->st));
+}
+
+bool load_text(struct load *ld, const cJSON *object, const char *key,
+               text_offset *offset)
+{
+    const char *text = object_text(object, key);
+    *offset = 0;
+    return !text || pool_add(&ld->pool, text, offset, ld->st);
+}
+
+bool load_word(struct load *ld, const cJSON *object, const char *key,
+               const char *const *words, int count, int *found)
+{
+    const char *text = object_text(object, key);
+    *found = 0;
+    if (!text)
+        return true;
+    char known[256];
+    struct text list = text_over(known, sizeof known);
+    for (int i = 0; i < count; i++) {
+        if (strcmp(words[i], text) == 0) {
+            *found = i;
+            return true;
+        }
+        if (words[i][0])
+            text_addf(&list, "%s%s", list.length ? " " : "", words[i]);
+    }
+    return status_fail(ld->st, STATUS_DATA, "%s '%s': expected one of: %s", key,
+                       quoted(text).text, known);
+}
+
+int load_element(struct load *ld, const cJSON *object)
+{
+    const char *symbol = object_text(object, "element");
+    const struct element *e = element_by_symbol(symbol);
+    if (e)
+        return e->z;
+    const struct element *meant = element_find(symbol);
+    if (!meant)
+        meant = element_nearest(symbol);
+    if (meant)
+        (void)status_fail(ld->st, STATUS_DATA,
+                          "element '%s': no such symbol; did you mean %s?",
+                          quoted(symbol).text, meant->symbol);
+    else
+        (void)status_fail(ld->st, STATUS_DATA,
+                          "element '%s': expected a symbol from H to Og",
+                          quoted(symbol).text);
+    return 0;
+}
+
+bool load_entry_context(struct load *ld, const cJSON *object, int place)
+{
+    const cJSON *symbol =
+        cJSON_IsObject(object) ? object_member(object, "element") : NULL;
+    if (cJSON_IsString(symbol) && element_by_symbol(symbol->valuestring))
+        return status_context(ld->st, "entry %d (%s)", place,
+                              symbol->valuestring);
+    return status_context(ld->st, "entry %d", place);
+}
+
+void load_index(struct dataset *set, int count, int (*z_of)(const void *row),
+                const void *rows, size_t row_size)
+{
+    int row = 0;
+    for (int z = 0; z <= Z_MAX + 1; z++) {
+        while (row < count &&
+               z_of((const char *)rows + (size_t)row * row_size) < z)
+            row++;
+        set->first[z] = (uint16_t)row;
+    }
+    set->count = count;
+}
+
+static bool load_citation(struct load *ld, const cJSON *object, bool first,
+                          struct citation *c)
+{
+    if (!object_check(object, citation_fields, FIELD_COUNT(citation_fields),
+                      ld->st))
+        return false;
+    static const char *const types[] = {"article", "book", "incollection",
+                                        "techreport", "misc"};
+    int type;
+    const char *key = object_text(object, "key");
+    if (!check_id(key, "key", ld->st) ||
+        !load_word(ld, object, "type", types, FIELD_COUNT(types), &type))
+        return false;
+    c->kind = types[type];
+    c->year = object_integer(object, "year", 0);
+    if (object_member(object, "year") &&
+        (c->year < YEAR_MIN || c->year > YEAR_MAX))
+        return status_fail(ld->st, STATUS_DATA,
+                           "year %d: expected one from %d to %d", c->year,
+                           YEAR_MIN, YEAR_MAX);
+    if (first && (!object_member(object, "authors") ||
+                  !object_member(object, "title") || c->year == 0))
+        return status_fail(ld->st, STATUS_DATA,
+                           "the first citation needs authors, title and year");
+    if (!object_member(object, "title") && !object_member(object, "container"))
+        return status_fail(ld->st, STATUS_DATA,
+                           "a title or a container is needed");
+    return copy_member(ld, object, "key", &c->key) &&
+           copy_joined(ld, object, "authors", " and ", &c->authors) &&
+           copy_member(ld, object, "title", &c->title) &&
+           copy_member(ld, object, "container", &c->container) &&
+           copy_member(ld, object, "volume", &c->volume) &&
+           copy_member(ld, object, "pages", &c->pages) &&
+           copy_member(ld, object, "doi", &c->doi);
+}
+
+static bool load_citations(struct load *ld)
+{
+    const cJSON *list = object_member(ld->root, "citations");
+    int count = cJSON_GetArraySize(list);
+    if (count > CITATIONS_MAX)
+        return status_fail(ld->st, STATUS_DATA, "citations: more than %d",
+                           CITATIONS_MAX);
+    struct citation *citations =
+        arena_array(&ld->out->arena, (size_t)count, sizeof *citations, ld->st);
+    if (!citations)
+        return false;
+    int place = 0;
+    const cJSON *object;
+    cJSON_ArrayForEach(object, list)
+    {
+        struct citation *c = &citations[place++];
+        bool ok = load_citation(ld, object, place == 1, c);
+        for (int i = 0; ok && i < place - 1; i++)
+            if (strcmp(citations[i].key, c->key) == 0)
+                ok = status_fail(ld->st, STATUS_DATA,
+                                 "key '%s' stands there twice", c->key);
+        if (!ok)
+            return status_context(ld->st, "citation %d", place);
+    }
+    ld->out->set.provenance.citations = citations;
+    ld->out->set.provenance.citation_count = count;
+    return true;
+}
+
+static bool load_notes(struct load *ld)
+{
+    const cJSON *list = object_member(ld->root, "notes");
+    int count = list ? cJSON_GetArraySize(list) : 0;
+    if (count > NOTES_MAX)
+        return status_fail(ld->st, STATUS_DATA, "notes: more than %d",
+                           NOTES_MAX);
+    const char **notes =
+        arena_array(&ld->out->arena, (size_t)count, sizeof *notes, ld->st);
+    if (!notes)
+        return false;
+    int place = 0;
+    const cJSON *item;
+    cJSON_ArrayForEach(item, list)
+    {
+        notes[place] = load_copy(ld, item->valuestring);
+        if (!notes[place++])
+            return false;
+    }
+    ld->out->set.notes = notes;
+    ld->out->set.note_count = count;
+    return true;
+}
+
+static bool load_marks(struct load *ld)
+{
+    const cJSON *list = object_member(ld->root, "marks");
+    int count = list ? cJSON_GetArraySize(list) : 0;
+    if (count > MARK_MAX)
+        return status_fail(ld->st, STATUS_DATA, "marks: more than %d",
+                           MARK_MAX);
+    struct mark *marks =
+        arena_array(&ld->out->arena, (size_t)count, sizeof *marks, ld->st);
+    if (!marks)
+        return false;
+    int place = 0;
+    const cJSON *object;
+    cJSON_ArrayForEach(object, list)
+    {
+        struct mark *m = &marks[place++];
+        if (!object_check(object, mark_fields, FIELD_COUNT(mark_fields),
+                          ld->st))
+            return status_context(ld->st, "mark %d", place);
+        for (int i = 0; i < place - 1; i++)
+            if (strcmp(marks[i].id, object_text(object, "id")) == 0)
+                return status_fail(ld->st, STATUS_DATA,
+                                   "mark %d: id '%s' stands there twice", place,
+                                   quoted(marks[i].id).text);
+        if (!copy_member(ld, object, "id", &m->id) ||
+            !copy_member(ld, object, "meaning", &m->meaning))
+            return false;
+    }
+    ld->out->set.marks = marks;
+    ld->out->set.mark_count = count;
+    return true;
+}
+
+static bool need(struct load *ld, const char *key)
+{
+    return object_member(ld->root, key) ||
+           status_fail(ld->st, STATUS_DATA,
+                       "key %s is missing; a set of values needs it", key);
+}
+
+/* Quantity, definition and unit, which must belong together. */
+static bool load_quantity(struct load *ld)
+{
+    struct dataset *set = &ld->out->set;
+    if (!need(ld, "quantity") || !need(ld, "unit"))
+        return false;
+    const char *names[QUANTITY_COUNT];
+    int quantity;
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        names[q] = quantity_at((enum quantity_id)q)->id;
+    if (!load_word(ld, ld->root, "quantity", names, QUANTITY_COUNT, &quantity))
+        return false;
+    set->quantity = (enum quantity_id)quantity;
+
+    const char *texts[16];
+    int place;
+    size_t count = definition_count(set->quantity);
+    assert(count <= FIELD_COUNT(texts));
+    for (size_t i = 0; i < count; i++)
+        texts[i] = definition_at(set->quantity, i)->text;
+    if (count > 1 && !need(ld, "definition"))
+        return false;
+    if (!load_word(ld, ld->root, "definition", texts, (int)count, &place))
+        return false;
+    ld->definition = definition_at(set->quantity, (size_t)place);
+    set->provenance.definition = ld->definition->text;
+
+    const char *ids[16];
+    const struct unit *units[16];
+    int unit_total = 0;
+    assert(unit_count() <= FIELD_COUNT(ids));
+    for (size_t i = 0; i < unit_count(); i++)
+        if (unit_at(i)->dimension == ld->definition->dimension) {
+            units[unit_total] = unit_at(i);
+            ids[unit_total++] = unit_at(i)->id;
+        }
+    if (!load_word(ld, ld->root, "unit", ids, unit_total, &place))
+        return false;
+    set->unit = units[place];
+    return true;
+}
+
+static bool load_values_head(struct load *ld)
+{
+    static const char *const evidence[] = {EVIDENCE_LIST(ID3)};
+    static const char *const coordinations[] = {COORDINATION_LIST(ID3)};
+    struct dataset *set = &ld->out->set;
+    int word;
+    if (!load_quantity(ld) || !load_marks(ld) ||
+        !load_word(ld, ld->root, "evidence", evidence, EVIDENCE_COUNT, &word))
+        return false;
+    set->evidence = (enum evidence)word;
+    if (!load_word(ld, ld->root, "default_coordination", coordinations,
+                   COORDINATION_COUNT, &word))
+        return false;
+    set->default_coordination = (enum coordination)word;
+    set->rank = object_integer(ld->root, "rank", 0);
+    if (object_member(ld->root, "rank") && (set->rank < 1 || set->rank > 1000))
+        return status_fail(ld->st, STATUS_DATA,
+                           "rank %d: expected 1 to 1000, or leave it out",
+                           set->rank);
+    return true;
+}
+
+static bool load_head(struct load *ld)
+{
+    static const char *const kinds[] = {DATASET_KIND_LIST(ID2)};
+    struct dataset *set = &ld->out->set;
+    int kind;
+    int format = object_integer(ld->root, "format", 0);
+    if (format != 1)
+        return status_fail(ld->st, STATUS_DATA,
+                           "format %d: expected 1, the only one there is",
+                           format);
+    if (!load_word(ld, ld->root, "kind", kinds, DATASET_KIND_COUNT, &kind))
+        return false;
+    set->kind = (enum dataset_kind)kind;
+    set->licence = "not stated";
+    set->absent = "not in this data set";
+    if (!copy_member(ld, ld->root, "title", &set->provenance.title) ||
+        !copy_member(ld, ld->root, "licence", &set->licence) ||
+        !copy_member(ld, ld->root, "absent", &set->absent) ||
+        !load_citations(ld) || !load_notes(ld))
+        return false;
+    if (set->kind == DATASET_VALUES)
+        return load_values_head(ld);
+    set->provenance.definition = set->provenance.title;
+    for (size_t i = VALUES_ONLY_FROM; i < ROOT_FIELD_COUNT; i++)
+        if (object_member(ld->root, root_fields[i].key))
+            return status_fail(ld->st, STATUS_DATA,
+                               "key %s belongs to sets of kind values only",
+                               root_fields[i].key);
+    return true;
+}
+
+static bool load_entries(struct load *ld)
+{
+    static bool (*const readers[DATASET_KIND_COUNT])(struct load *,
+                                                     const cJSON *) = {
+        [DATASET_VALUES] = load_values,
+        [DATASET_ELEMENTS] = load_elements,
+        [DATASET_CONFIGURATIONS] = load_configurations,
+        [DATASET_OXIDATION_STATES] = load_oxidation_states,
+        [DATASET_AVAILABILITY] = load_availability,
+    };
+    const cJSON *entries = object_member(ld->root, "entries");
+    if (cJSON_GetArraySize(entries) > DATASET_ENTRIES_MAX)
+        return status_fail(ld->st, STATUS_DATA, "entries: more than %d",
+                           DATASET_ENTRIES_MAX);
+    uint32_t empty;
+    if (!pool_add(&ld->pool, "", &empty, ld->st) ||
+        !readers[ld->out->set.kind](ld, entries))
+        return false;
+    char *strings = arena_array(&ld->out->arena, ld->pool.size, 1, ld->st);
+    if (!strings)
+        return false;
+    memcpy(strings, ld->pool.data, ld->pool.size);
+    ld->out->set.strings = strings;
+    ld->out->set.strings_size = ld->pool.size;
+    return true;
+}
+
+static bool load_root(struct load *ld)
+{
+    if (!object_check(ld->root, root_fields, ROOT_FIELD_COUNT, ld->st))
+        return false;
+    const char *id = object_text(ld->root, "id");
+    if (!check_id(id, "id", ld->st) ||
+        !copy_member(ld, ld->root, "id", &ld->out->set.provenance.id))
+        return false;
+    if (!load_head(ld) || !load_entries(ld))
+        return status_context(ld->st, "set %s", id);
+    return true;
+}
+
+bool dataset_load(const char *text, size_t size, struct loaded **out,
+                  struct status *st)
+{
+    *out = NULL;
+    if (!json_check(text, size, st))
+        return false;
+    struct load ld = {.st = st};
+    cJSON *root = cJSON_ParseWithLength(text, size);
+    bool ok = false;
+    ld.root = root;
+    ld.out = calloc(1, sizeof *ld.out);
+    if (!root || !ld.out)
+        (void)status_fail(st, STATUS_MEMORY, "out of memory");
+    else
+        ok = load_root(&ld);
+    cJSON_Delete(root);
+    pool_clear(&ld.pool);
+    if (ok)
+        *out = ld.out;
+    else
+        loaded_free(ld.out);
+    return ok;
+}
+
+bool dataset_load_file(const char *path, struct loaded **out, struct status *st)
+{
+    char *text;
+    size_t size;
+    *out = NULL;
+    if (!file_read(path, DATASET_BYTES_MAX, &text, &size, st))
+        return false;
+    bool ok = dataset_load(text, size, out, st);
+    free(text);
+    return ok || status_context(st, "%s", path);
+}
+
+void loaded_free(struct loaded *loaded)
+{
+    if (!loaded)
+        return;
+    arena_clear(&loaded->arena);
+    free(loaded);
+}
