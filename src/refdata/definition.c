@@ -5,7 +5,9 @@
 #include <string.h>
 
 static const struct definition definitions[] = {
-    {QUANTITY_ZEFF, "effective nuclear charge", DIMENSION_CHARGE, false},
+    {QUANTITY_ZEFF, "orbital exponent, n zeta", DIMENSION_CHARGE, false},
+    {QUANTITY_ZEFF, "from the energy, n sqrt(E/Ry)", DIMENSION_CHARGE, false},
+    {QUANTITY_ZEFF, "screening rule, Z - S", DIMENSION_CHARGE, false},
     {QUANTITY_RADIUS, "radius of maximum radial density", DIMENSION_LENGTH,
      false},
     {QUANTITY_RADIUS, "covalent radius", DIMENSION_LENGTH, false},
@@ -24,8 +26,9 @@ static const struct definition definitions[] = {
     {QUANTITY_ELECTRONEGATIVITY, "Allred-Rochow scale", DIMENSION_NUMBER,
      false},
     {QUANTITY_ELECTRONEGATIVITY, "Allen scale", DIMENSION_NUMBER, false},
-    {QUANTITY_ELECTRONEGATIVITY, "Mulliken scale", DIMENSION_ENERGY, false},
-    {QUANTITY_ISODENSITY, "isodensity radius", DIMENSION_LENGTH, false},
+    {QUANTITY_ELECTRONEGATIVITY, "Mulliken scale, eV", DIMENSION_ENERGY, false},
+    {QUANTITY_ISODENSITY, "radius at 0.001 electrons per cubic bohr",
+     DIMENSION_LENGTH, false},
     {QUANTITY_AFFINITY, "electron affinity", DIMENSION_ENERGY, true},
     {QUANTITY_POLARIZABILITY, "dipole polarizability", DIMENSION_VOLUME, false},
 };

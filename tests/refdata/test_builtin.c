@@ -6,10 +6,30 @@
 #include "element/configuration.h"
 #include "element/element.h"
 #include "refdata/catalogue.h"
-#include "refdata/csv.h"
 #include "refdata/dataset.h"
 #include "refdata/suites.h"
+#include "base/text.h"
+#include "support/csv.h"
 #include "support/near.h"
+
+static struct csv read_source(const char *name)
+{
+    char path[512];
+    snprintf(path, sizeof path, "%s/data/%s", TEST_DIR, name);
+    return csv_read_file(path);
+}
+
+static const char *cell(const struct csv *csv, int row, const char *heading)
+{
+    return csv_cell(csv, (size_t)row, heading);
+}
+
+static int cell_int(const struct csv *csv, int row, const char *heading)
+{
+    int value;
+    ck_assert(text_to_int(cell(csv, row, heading), &value));
+    return value;
+}
 
 static const struct dataset *need(const char *id)
 {
@@ -136,17 +156,17 @@ START_TEST(test_ionization_energies_are_the_source_digit_for_digit)
     };
     int counts[3] = {0};
     const struct dataset *set = need("ionization_nist_asd_2024");
-    struct csv csv = csv_read("ionization.csv");
-    ck_assert_int_eq(csv.count, 5847);
-    for (int i = 0; i < csv.count; i++) {
-        int z = csv_int(&csv, i, "z");
+    struct csv csv = read_source("ionization.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 5847);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        int z = cell_int(&csv, i, "z");
         const struct entry *e =
-            dataset_lookup(set, z, csv_int(&csv, i, "stage") - 1, 0, 0);
-        same_entry(set, e, z, csv_cell(&csv, i, "energy_eV"),
-                   csv_cell(&csv, i, "uncertainty_eV"));
-        ck_assert_str_eq(csv_cell(&csv, i, "symbol"), element_at(z)->symbol);
+            dataset_lookup(set, z, cell_int(&csv, i, "stage") - 1, 0, 0);
+        same_entry(set, e, z, cell(&csv, i, "energy_eV"),
+                   cell(&csv, i, "uncertainty_eV"));
+        ck_assert_str_eq(cell(&csv, i, "symbol"), element_at(z)->symbol);
         int k = 0;
-        while (strcmp(kinds[k].kind, csv_cell(&csv, i, "kind")) != 0)
+        while (strcmp(kinds[k].kind, cell(&csv, i, "kind")) != 0)
             ck_assert_int_lt(++k, 3);
         ck_assert_int_eq(e->evidence, kinds[k].evidence);
         ck_assert_str_eq(dataset_text(set, e->remark),
@@ -175,13 +195,13 @@ END_TEST
 
 START_TEST(test_radii_are_the_source_digit_for_digit)
 {
-    struct csv csv = csv_read("radii.csv");
-    ck_assert_int_eq(csv.count, 1043);
-    for (int i = 0; i < csv.count; i++) {
-        const struct dataset *set = need(csv_cell(&csv, i, "set"));
-        int z = csv_int(&csv, i, "z");
-        const char *note = csv_cell(&csv, i, "note");
-        const char *value = csv_cell(&csv, i, "value_pm");
+    struct csv csv = read_source("radii.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 1043);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        const struct dataset *set = need(cell(&csv, i, "set"));
+        int z = cell_int(&csv, i, "z");
+        const char *note = cell(&csv, i, "note");
+        const char *value = cell(&csv, i, "value_pm");
         /* Variants: take the one with these digits. */
         const struct entry *found = NULL;
         for (int k = set->first[z]; k < set->first[z + 1]; k++) {
@@ -189,7 +209,7 @@ START_TEST(test_radii_are_the_source_digit_for_digit)
             if (strcmp(number_print(set->values[k].value, text), value) == 0)
                 found = &set->values[k];
         }
-        same_entry(set, found, z, value, csv_cell(&csv, i, "uncertainty_pm"));
+        same_entry(set, found, z, value, cell(&csv, i, "uncertainty_pm"));
         /* What the note says of the value is kept, as text or as state. */
         if (strstr(note, "low spin"))
             ck_assert_int_eq(found->spin, SPIN_LOW);
@@ -213,28 +233,28 @@ START_TEST(test_ionic_radii_are_the_source_digit_for_digit)
                                     need("ionic_crystal_shannon_1976")};
     static const char *const headings[] = {"ionic_radius_pm",
                                            "crystal_radius_pm"};
-    struct csv csv = csv_read("ionic_radii_shannon_1976.csv");
-    ck_assert_int_eq(csv.count, 493);
-    for (int i = 0; i < csv.count; i++) {
-        int z = csv_int(&csv, i, "z");
-        const char *spin = csv_cell(&csv, i, "spin");
-        bool deuterium = strcmp(csv_cell(&csv, i, "symbol"), "D") == 0;
+    struct csv csv = read_source("ionic_radii_shannon_1976.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 493);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        int z = cell_int(&csv, i, "z");
+        const char *spin = cell(&csv, i, "spin");
+        bool deuterium = strcmp(cell(&csv, i, "symbol"), "D") == 0;
         for (int s = 0; s < 2; s++) {
             const struct dataset *set = sets[s];
             const struct entry *found = NULL;
             for (int k = set->first[z]; k < set->first[z + 1]; k++) {
                 const struct entry *e = &set->values[k];
-                if (e->charge == csv_int(&csv, i, "charge") &&
+                if (e->charge == cell_int(&csv, i, "charge") &&
                     strcmp(coordination_id((enum coordination)e->coordination),
-                           csv_cell(&csv, i, "coordination")) == 0 &&
+                           cell(&csv, i, "coordination")) == 0 &&
                     e->spin == (strcmp(spin, "HS") == 0   ? SPIN_HIGH
                                 : strcmp(spin, "LS") == 0 ? SPIN_LOW
                                                           : SPIN_NONE) &&
                     deuterium == (e->variant != 0))
                     found = e;
             }
-            same_entry(set, found, z, csv_cell(&csv, i, headings[s]), "");
-            const char *flag = csv_cell(&csv, i, "flag");
+            same_entry(set, found, z, cell(&csv, i, headings[s]), "");
+            const char *flag = cell(&csv, i, "flag");
             unsigned marks = 0;
             for (int m = 0; m < set->mark_count; m++)
                 if (strstr(flag, set->marks[m].id))
@@ -258,17 +278,17 @@ START_TEST(test_electronegativities_are_the_source_digit_for_digit)
         {"allen", "electronegativity_allen_2000"},
         {"mulliken", "electronegativity_mulliken_2016"},
     };
-    struct csv csv = csv_read("electronegativity.csv");
-    ck_assert_int_eq(csv.count, 420);
-    for (int i = 0; i < csv.count; i++) {
+    struct csv csv = read_source("electronegativity.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 420);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
         size_t s = 0;
-        while (strcmp(sets[s].scale, csv_cell(&csv, i, "scale")) != 0)
+        while (strcmp(sets[s].scale, cell(&csv, i, "scale")) != 0)
             ck_assert_uint_lt(++s, sizeof sets / sizeof *sets);
         const struct dataset *set = need(sets[s].id);
-        int z = csv_int(&csv, i, "z");
+        int z = cell_int(&csv, i, "z");
         const struct entry *e = dataset_lookup(set, z, 0, 0, 0);
-        same_entry(set, e, z, csv_cell(&csv, i, "value"), "");
-        const char *note = csv_cell(&csv, i, "note");
+        same_entry(set, e, z, cell(&csv, i, "value"), "");
+        const char *note = cell(&csv, i, "note");
         if (strncmp(note, "eV", 2) == 0)
             note += note[2] ? 4 : 2;
         ck_assert_str_eq(dataset_text(set, e->note), note);
@@ -282,14 +302,14 @@ START_TEST(test_affinities_and_polarizabilities_are_the_source)
 {
     const struct dataset *affinity = need("affinity_compiled_2024");
     const struct dataset *anions = need("anions_ning_lu_2022");
-    struct csv csv = csv_read("electron_affinity.csv");
-    for (int i = 0; i < csv.count; i++) {
-        int z = csv_int(&csv, i, "z");
-        const char *status = csv_cell(&csv, i, "status");
-        const char *configuration = csv_cell(&csv, i, "anion_configuration");
+    struct csv csv = read_source("electron_affinity.csv");
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        int z = cell_int(&csv, i, "z");
+        const char *status = cell(&csv, i, "status");
+        const char *configuration = cell(&csv, i, "anion_configuration");
         const struct entry *e = dataset_lookup(affinity, z, 0, 0, 0);
-        same_entry(affinity, e, z, csv_cell(&csv, i, "energy_eV"),
-                   csv_cell(&csv, i, "uncertainty_eV"));
+        same_entry(affinity, e, z, cell(&csv, i, "energy_eV"),
+                   cell(&csv, i, "uncertainty_eV"));
         ck_assert_str_eq(e->gap ? gap_id((enum gap)e->gap) : "measured",
                          status);
         ck_assert(!e->gap || dataset_text(affinity, e->note)[0]);
@@ -299,16 +319,15 @@ START_TEST(test_affinities_and_polarizabilities_are_the_source)
         ck_assert_str_eq(c ? dataset_text(anions, c->configuration) : "",
                          configuration);
         ck_assert_str_eq(c ? dataset_text(anions, c->term) : "",
-                         csv_cell(&csv, i, "anion_term"));
+                         cell(&csv, i, "anion_term"));
     }
     csv_free(&csv);
     const struct dataset *alpha = need("polarizability_schwerdtfeger_2019");
-    csv = csv_read("polarizability.csv");
-    ck_assert_int_eq(csv.count, 118);
-    for (int i = 0; i < csv.count; i++)
+    csv = read_source("polarizability.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 118);
+    for (int i = 0; i < (int)csv_rows(&csv); i++)
         same_entry(alpha, dataset_lookup(alpha, i + 1, 0, 0, 0), i + 1,
-                   csv_cell(&csv, i, "value_au"),
-                   csv_cell(&csv, i, "uncertainty_au"));
+                   cell(&csv, i, "value_au"), cell(&csv, i, "uncertainty_au"));
     csv_free(&csv);
 }
 END_TEST
@@ -317,16 +336,16 @@ END_TEST
 START_TEST(test_the_1963_table_is_the_source)
 {
     const struct dataset *set = need("zeff_clementi_1963");
-    struct csv csv = csv_read("clementi_zeff.csv");
-    ck_assert_int_eq(csv.count, 95);
-    for (int i = 0; i < csv.count; i++) {
+    struct csv csv = read_source("clementi_zeff.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 95);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
         int n, l;
         double zeta;
-        int z = csv_int(&csv, i, "z");
-        ck_assert(subshell_parse(csv_cell(&csv, i, "subshell"), &n, &l));
+        int z = cell_int(&csv, i, "z");
+        ck_assert(subshell_parse(cell(&csv, i, "subshell"), &n, &l));
         const struct entry *e = dataset_lookup(set, z, 0, n, l);
-        same_entry(set, e, z, csv_cell(&csv, i, "zeff"), "");
-        ck_assert(sscanf(csv_cell(&csv, i, "zeta"), "%lf", &zeta) == 1);
+        same_entry(set, e, z, cell(&csv, i, "zeff"), "");
+        ck_assert(sscanf(cell(&csv, i, "zeta"), "%lf", &zeta) == 1);
         near(e->value.value, n * zeta, 6e-5, 0.0, "Z = %d, n = %d", z, n);
     }
     csv_free(&csv);
@@ -336,37 +355,35 @@ END_TEST
 START_TEST(test_elements_are_the_source_and_agree_with_the_grid)
 {
     const struct dataset *set = catalogue_elements();
-    struct csv csv = csv_read("elements.csv");
-    ck_assert_int_eq(csv.count, 118);
-    for (int z = 1; z <= csv.count; z++) {
+    struct csv csv = read_source("elements.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 118);
+    for (int z = 1; z <= (int)csv_rows(&csv); z++) {
         const struct element *e = element_at(z);
         const struct element_facts *f = dataset_element(set, z);
-        const char *group = csv_cell(&csv, z - 1, "group");
-        const char *weight = csv_cell(&csv, z - 1, "standard_atomic_weight");
-        const char *mass = csv_cell(&csv, z - 1, "longest_lived_mass_number");
-        ck_assert_int_eq(csv_int(&csv, z - 1, "z"), z);
-        ck_assert_str_eq(csv_cell(&csv, z - 1, "symbol"), e->symbol);
-        ck_assert_int_eq(csv_int(&csv, z - 1, "period"), e->period);
-        ck_assert_int_eq(group[0] ? csv_int(&csv, z - 1, "group") : 0,
+        const char *group = cell(&csv, z - 1, "group");
+        const char *weight = cell(&csv, z - 1, "standard_atomic_weight");
+        const char *mass = cell(&csv, z - 1, "longest_lived_mass_number");
+        ck_assert_int_eq(cell_int(&csv, z - 1, "z"), z);
+        ck_assert_str_eq(cell(&csv, z - 1, "symbol"), e->symbol);
+        ck_assert_int_eq(cell_int(&csv, z - 1, "period"), e->period);
+        ck_assert_int_eq(group[0] ? cell_int(&csv, z - 1, "group") : 0,
                          e->group);
-        ck_assert_int_eq(csv_cell(&csv, z - 1, "block")[0], e->block);
-        ck_assert_str_eq(csv_cell(&csv, z - 1, "configuration"),
+        ck_assert_int_eq(cell(&csv, z - 1, "block")[0], e->block);
+        ck_assert_str_eq(cell(&csv, z - 1, "configuration"),
                          dataset_text(set, f->configuration));
-        ck_assert_str_eq(csv_cell(&csv, z - 1, "term"),
-                         dataset_text(set, f->term));
-        ck_assert_str_eq(csv_cell(&csv, z - 1, "category"),
+        ck_assert_str_eq(cell(&csv, z - 1, "term"), dataset_text(set, f->term));
+        ck_assert_str_eq(cell(&csv, z - 1, "category"),
                          dataset_text(set, f->category));
-        ck_assert_str_eq(csv_cell(&csv, z - 1, "note"),
-                         dataset_text(set, f->note));
+        ck_assert_str_eq(cell(&csv, z - 1, "note"), dataset_text(set, f->note));
         ck_assert_int_eq(f->has_weight, weight[0] != '\0');
         if (f->has_weight)
             same_digits(f->weight, weight, "weight", z);
         ck_assert_int_eq(
             f->longest_lived,
-            mass[0] ? csv_int(&csv, z - 1, "longest_lived_mass_number") : 0);
+            mass[0] ? cell_int(&csv, z - 1, "longest_lived_mass_number") : 0);
         ck_assert_int_eq(
             f->has_stable_isotope,
-            strcmp(csv_cell(&csv, z - 1, "has_stable_isotope"), "yes") == 0);
+            strcmp(cell(&csv, z - 1, "has_stable_isotope"), "yes") == 0);
         ck_assert_int_eq(f->status, z <= 103 ? CONFIGURATION_LISTED
                                              : CONFIGURATION_PREDICTED);
     }
@@ -377,19 +394,19 @@ END_TEST
 START_TEST(test_cations_are_the_source)
 {
     const struct dataset *set = need("cations_nist_asd_2024");
-    struct csv csv = csv_read("cation_configurations.csv");
-    ck_assert_int_eq(csv.count, 828);
-    for (int i = 0; i < csv.count; i++) {
-        int z = csv_int(&csv, i, "z");
+    struct csv csv = read_source("cation_configurations.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 828);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        int z = cell_int(&csv, i, "z");
         const struct configuration_entry *c =
-            dataset_configuration(set, z, csv_int(&csv, i, "charge"));
+            dataset_configuration(set, z, cell_int(&csv, i, "charge"));
         ck_assert_ptr_nonnull(c);
-        ck_assert_str_eq(csv_cell(&csv, i, "configuration"),
+        ck_assert_str_eq(cell(&csv, i, "configuration"),
                          dataset_text(set, c->configuration));
-        ck_assert_str_eq(csv_cell(&csv, i, "term"), dataset_text(set, c->term));
-        ck_assert_str_eq(csv_cell(&csv, i, "note"), dataset_text(set, c->note));
+        ck_assert_str_eq(cell(&csv, i, "term"), dataset_text(set, c->term));
+        ck_assert_str_eq(cell(&csv, i, "note"), dataset_text(set, c->note));
         ck_assert_int_eq(c->irregular,
-                         strcmp(csv_cell(&csv, i, "irregular"), "yes") == 0);
+                         strcmp(cell(&csv, i, "irregular"), "yes") == 0);
     }
     csv_free(&csv);
 }
@@ -398,27 +415,26 @@ END_TEST
 START_TEST(test_oxidation_states_and_availability_are_the_source)
 {
     const struct dataset *set = catalogue_oxidation_states();
-    struct csv csv = csv_read("oxidation_states.csv");
-    ck_assert_int_eq(csv.count, set->count);
-    for (int i = 0; i < csv.count; i++) {
-        int z = csv_int(&csv, i, "z");
+    struct csv csv = read_source("oxidation_states.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), set->count);
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
+        int z = cell_int(&csv, i, "z");
         bool found = false;
         for (int k = set->first[z]; k < set->first[z + 1]; k++) {
             const struct oxidation_state *o = &set->oxidation_states[k];
-            bool is_main = strcmp(csv_cell(&csv, i, "kind"), "main") == 0;
-            if (o->state == csv_int(&csv, i, "state") && o->main == is_main)
+            bool is_main = strcmp(cell(&csv, i, "kind"), "main") == 0;
+            if (o->state == cell_int(&csv, i, "state") && o->main == is_main)
                 found = true;
         }
         ck_assert_msg(found, "Z = %d, row %d", z, i);
     }
     csv_free(&csv);
     set = catalogue_availability();
-    csv = csv_read("availability.csv");
-    for (int i = 0; i < csv.count; i++) {
+    csv = read_source("availability.csv");
+    for (int i = 0; i < (int)csv_rows(&csv); i++) {
         const struct availability *a = dataset_availability(set, i + 1);
-        const char *crust = csv_cell(&csv, i, "crustal_abundance_mg_per_kg");
-        const char *bulk =
-            csv_cell(&csv, i, "crustal_abundance_rg2014_mg_per_kg");
+        const char *crust = cell(&csv, i, "crustal_abundance_mg_per_kg");
+        const char *bulk = cell(&csv, i, "crustal_abundance_rg2014_mg_per_kg");
         ck_assert_int_eq(a->has_abundance, crust[0] != '\0');
         if (a->has_abundance)
             same_digits(a->abundance, crust, "abundance", i + 1);
@@ -426,11 +442,11 @@ START_TEST(test_oxidation_states_and_availability_are_the_source)
         if (a->has_abundance_2014)
             same_digits(a->abundance_2014, bulk, "abundance_2014", i + 1);
         ck_assert_str_eq(radioactive_id((enum radioactive)a->radioactive),
-                         csv_cell(&csv, i, "radioactive"));
+                         cell(&csv, i, "radioactive"));
         ck_assert_str_eq(dataset_text(set, a->hazards),
-                         csv_cell(&csv, i, "hazard"));
+                         cell(&csv, i, "hazard"));
         ck_assert_str_eq(dataset_text(set, a->critical),
-                         csv_cell(&csv, i, "critical_raw_material"));
+                         cell(&csv, i, "critical_raw_material"));
         ck_assert_int_eq(a->hazards != 0, a->hazard_basis != 0);
     }
     csv_free(&csv);
