@@ -1,0 +1,45 @@
+/* SPDX-License-Identifier: MIT */
+/* Where everything stands for a size of the terminal: one pure function. */
+#ifndef SCREEN_LAYOUT_H
+#define SCREEN_LAYOUT_H
+
+#include <stdbool.h>
+
+#include "element/element.h"
+
+#define NEEDED_ROWS 6     /* below this only a sentence fits */
+#define NEEDED_COLUMNS 24
+
+struct area {
+    int row, column, rows, columns;
+};
+
+enum map_form {
+    FORM_SENTENCE, /* too small for anything but saying so */
+    FORM_LIST,     /* elements below each other */
+    FORM_SINGLE,   /* grid or pane, one at a time */
+    FORM_WHOLE     /* grid, scale, pane, keys together */
+};
+
+/* rows 0 is the title, the last two are message and keys (in FORM_LIST and
+ * FORM_SINGLE the last row is both). Areas with no rows are absent. side:
+ * facts of the element, right of the grid; where it is absent they stand in
+ * the gap of the grid above the d block. */
+struct map_layout {
+    enum map_form form;
+    enum grid_width width;
+    int cell_columns, cell_rows;
+    struct area grid; /* with its headings: one row above, three columns left */
+    struct area scale;
+    struct area pane;
+    struct area side;
+    int message_row, key_row;
+};
+
+struct map_layout layout_map(int rows, int columns, enum grid_width wanted);
+
+/* Top left of an element's cell. */
+struct area layout_cell(const struct map_layout *layout, int z,
+                        enum grid_group3 group3);
+
+#endif

@@ -1,0 +1,85 @@
+/* SPDX-License-Identifier: MIT */
+#include "screen/scale.h"
+
+#include <assert.h>
+#include <math.h>
+#include <stdlib.h>
+
+#define INNER (SCALE_CLASSES - 1)
+
+static int by_value(const void *a, const void *b)
+{
+    double x = *(const double *)a;
+    double y = *(const double *)b;
+    return (x > y) - (x < y);
+}
+
+/* The smallest of 1, 2, 2.5, 5 times a power of ten that is not below x. */
+static double round_up(double x, int *places)
+{
+    static const double steps[] = {1.0, 2.0, 2.5, 5.0, 10.0};
+    double power = pow(10.0, floor(log10(x)));
+    int i = 0;
+    while (steps[i] * power < x * (1.0 - 1e-12))
+        i++;
+    double step = steps[i] * power;
+    /* 2.5, and half steps of 1 and 5 on a balance, need one place more. */
+    int need = -(int)floor(log10(step) + 1e-9) + 1;
+    *places = need > 0 ? need : 0;
+    return step;
+}
+
+static double quantile(const double *sorted, int count, double q)
+{
+    return sorted[(int)(q * (count - 1) + 0.5)];
+}
+
+struct scale scale_fit(double *values, int count, bool balance)
+{
+    struct scale s = {.balance = balance, .count = count};
+    if (count == 0)
+        return s;
+    qsort(values, (size_t)count, sizeof *values, by_value);
+    s.lowest = values[0];
+    s.highest = values[count - 1];
+    double low = quantile(values, count, 0.05);
+    double high = quantile(values, count, 0.95);
+    if (balance) {
+        double size = fmax(fabs(low), fabs(high));
+        double step = round_up(size > 0.0 ? size / (INNER - 1) * 2.0 : 1.0,
+                               &s.places);
+        for (int i = 0; i < INNER; i++)
+            s.inner[i] = (i - (INNER - 1) / 2.0) * step;
+        return s;
+    }
+    double span = high - low;
+    double step = round_up(
+        span > 0.0 ? span / (INNER - 1) : fmax(fabs(high), 1.0) / 10.0,
+        &s.places);
+    double start = ceil(low / step) * step;
+    for (int i = 0; i < INNER; i++)
+        s.inner[i] = start + i * step;
+    return s;
+}
+
+int scale_class(const struct scale *scale, double value)
+{
+    int c = 0;
+    while (c < INNER && value >= scale->inner[c])
+        c++;
+    return c;
+}
+
+enum role scale_role(const struct scale *scale, int class_index)
+{
+    assert(class_index >= 0 && class_index < SCALE_CLASSES);
+    return (enum role)((scale->balance ? ROLE_BALANCE : ROLE_RAMP) +
+                       class_index);
+}
+
+char scale_glyph(const struct scale *scale, int class_index)
+{
+    static const char ramp[] = "123456789";
+    static const char balance[] = "vv--=++^^";
+    return scale->balance ? balance[class_index] : ramp[class_index];
+}

@@ -1,0 +1,159 @@
+/* SPDX-License-Identifier: MIT */
+/* The state of the screens, and the two functions that change and show it.
+ * Nothing here knows a terminal or writes a file: what is to be done outside
+ * comes back as an effect. */
+#ifndef SCREEN_UI_H
+#define SCREEN_UI_H
+
+#include <stdio.h>
+
+#include "analysis/comparison.h"
+#include "element/element.h"
+#include "screen/canvas.h"
+#include "screen/event.h"
+#include "screen/scale.h"
+#include "study/study.h"
+
+#define UI_TEXT_MAX 256
+#define PIN_MAX COMPARISON_MAX
+
+/* Which screen is shown; order of screen_list in ui.c. */
+enum screen_id { SCREEN_MAP, SCREEN_COMPARE, SCREEN_SOURCES, SCREEN_KEYS };
+
+/* What colours the map. */
+enum shown { SHOWN_VALUE, SHOWN_REFERENCE, SHOWN_RESIDUAL, SHOWN_COUNT };
+
+/* What the loop is to do; text is in ui->effect_path where a file is meant. */
+enum effect {
+    EFFECT_NONE,
+    EFFECT_REDRAW,
+    EFFECT_WRITE,   /* ui_export into the file ui->path */
+    EFFECT_REPAINT, /* paint everything anew */
+    EFFECT_FORGET,  /* remove the remembered view */
+    EFFECT_MOUSE,   /* mouse on or off as ui->mouse says */
+    EFFECT_QUIT
+};
+
+/* What an export holds. */
+enum export_scope { SCOPE_ROW, SCOPE_PINS, SCOPE_SHEET, SCOPE_COMPARE };
+
+/* A line being typed. */
+enum prompt_kind {
+    PROMPT_NONE,
+    PROMPT_JUMP,
+    PROMPT_FILE,
+    PROMPT_OVERWRITE
+};
+struct prompt {
+    enum prompt_kind kind;
+    char text[UI_TEXT_MAX]; /* UTF-8 */
+    int length;             /* bytes */
+};
+
+/* A list to choose from. */
+enum chooser_kind {
+    CHOOSER_NONE,
+    CHOOSER_QUANTITY,
+    CHOOSER_MODEL,
+    CHOOSER_REFERENCE,
+    CHOOSER_SUBSHELL,
+    CHOOSER_UNIT,
+    CHOOSER_EXPORT
+};
+#define CHOOSER_MAX 64
+struct chooser {
+    enum chooser_kind kind;
+    int count, at, top;
+    char labels[CHOOSER_MAX][80];
+    int values[CHOOSER_MAX]; /* meaning by kind */
+};
+
+struct pin {
+    int z, charge;
+};
+
+/* What is chosen; everything that a remembered view keeps. */
+struct choice {
+    int z;
+    int charge;
+    enum quantity_id quantity;
+    const struct model *model;         /* NULL: no model offers the quantity */
+    const struct reference *reference; /* NULL: the default one */
+    enum shown shown;
+    int n, l; /* n = 0: outermost */
+    const struct unit *units[DIMENSION_VOLUME + 1]; /* NULL: base unit */
+    enum grid_width grid;
+    enum grid_group3 group3;
+    int pin_count;
+    struct pin pins[PIN_MAX];
+};
+
+/* One element on the map, prepared once per choice. */
+struct map_cell {
+    enum row_state state;
+    bool has_value;
+    double value;
+    int class_index;
+};
+
+struct ui {
+    struct study *study;
+    struct choice choice;
+    enum screen_id screen;
+    enum screen_id before_keys; /* where the key help was opened */
+    bool detail;                /* FORM_SINGLE: pane instead of grid */
+    bool mouse;
+    int scroll[SCREEN_KEYS + 1];
+    int column_scroll; /* first pinned column shown in Compare */
+    struct prompt prompt;
+    struct chooser chooser;
+    enum export_scope scope;
+    char path[UI_TEXT_MAX];
+    bool replace;
+    char message[UI_TEXT_MAX];
+    bool caution; /* the message is a failure or a caution */
+    int rows, columns;
+
+    /* Derived from the choice; rebuilt when stale. */
+    bool stale;
+    struct map_cell cells[Z_MAX + 1];
+    struct scale scale;
+    int solved, gaps;
+    struct summary block_summary[4]; /* s p d f, the whole block */
+};
+
+/* A ui over a study, with the first view: Z_eff by Slater's rules. The study
+ * must outlive it. */
+void ui_init(struct ui *ui, struct study *study);
+
+/* Takes one event and says what is to be done. */
+enum effect ui_update(struct ui *ui, const struct event *event);
+
+/* Draws everything; changes nothing but the canvas and what is derived. */
+void ui_draw(struct ui *ui, struct canvas *canvas);
+
+/* Work for the models that iterate: queues what the screen wants to show, does
+ * one step, says whether more is left; *changed when the picture moved on. */
+bool ui_step(struct ui *ui, bool *changed);
+bool ui_has_work(const struct ui *ui);
+
+/* Writes the export that the user asked for (ui->scope), as the command of
+ * the same choice prints it. */
+MUST_CHECK bool ui_export(const struct ui *ui, FILE *out, struct status *st);
+
+/* That command, as it would be typed. */
+void ui_export_command(const struct ui *ui, struct text *t);
+
+/* Result of an effect: a message for the message line. */
+void ui_report(struct ui *ui, bool caution, const char *format, ...)
+    PRINTF_LIKE(3, 4);
+
+/* The file is there already: asks whether to overwrite it. */
+void ui_ask_overwrite(struct ui *ui);
+
+/* The view as text, one `key value` per line, and back. Unknown or impossible
+ * lines are passed over: an old view never stops a start. */
+void ui_save_view(const struct ui *ui, struct text *t);
+void ui_load_view(struct ui *ui, const char *text);
+
+#endif
