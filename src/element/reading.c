@@ -57,7 +57,10 @@ struct reading reading_gap(enum quantity_id quantity, enum reading_state state,
 
 struct reading reading_in_unit(struct reading reading, const struct unit *unit)
 {
-    assert(unit->dimension == quantity_at(reading.quantity)->dimension);
+    /* A base unit changes nothing, so an electronegativity in electronvolts
+     * passes. */
+    assert(unit->per_base == 1.0 ||
+           unit->dimension == quantity_at(reading.quantity)->dimension);
     if (reading.state != READING_OK)
         return reading;
     reading.value = number_scale(reading.value, unit->per_base);

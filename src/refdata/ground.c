@@ -4,7 +4,6 @@
 #include <assert.h>
 #include <string.h>
 
-#include "element/selection.h"
 #include "refdata/catalogue.h"
 
 /* The stored configuration of an ion, with the set that holds it. */
@@ -56,36 +55,59 @@ static bool from_tables(int z, int charge, struct species *species,
     return configuration_parse(configuration, &species->configuration, st);
 }
 
+/* Takes the outermost electron away. */
+static void lose_one(struct configuration *c)
+{
+    const struct subshell *outer = configuration_outermost(c);
+    bool changed = outer && configuration_change(c, outer->n, outer->l, -1.0);
+    assert(changed);
+    (void)changed;
+}
+
+/* Puts one electron into the first subshell with room, in the order of n + l
+ * and then n. */
+static void gain_one(struct configuration *c)
+{
+    for (int sum = 1; sum <= N_MAX; sum++)
+        for (int l = (sum - 1) / 2; l >= 0; l--)
+            if (l <= L_MAX && configuration_change(c, sum - l, l, 1.0))
+                return;
+    assert(!"no room in any subshell");
+}
+
+/* The nearest charge towards the neutral atom that the tables hold. */
+static int nearest_stored(int z, int charge, struct species *s,
+                          struct status *st)
+{
+    int step = charge > 0 ? -1 : 1;
+    while (!from_tables(z, charge, s, st))
+        charge += step;
+    return charge;
+}
+
 bool ground_state(int z, int charge, struct species *species, struct status *st)
 {
     assert(z >= 1 && z <= Z_MAX);
-    char ion[ION_TEXT_MAX];
-    struct species s = {.z = z, .charge = charge};
+    struct species s = {.z = z};
     if (charge > z)
         return status_fail(st, STATUS_USAGE,
                            "charge %d: %s has only %d electrons to lose",
                            charge, element_at(z)->symbol, z);
-    if (from_tables(z, charge, &s, st)) {
-        *species = s;
-        return true;
-    }
-    if (charge < 0)
+    if (charge < CHARGE_LOWEST)
         return status_fail(st, STATUS_USAGE,
-                           "%s: no ground configuration of this anion is "
-                           "stored; give one",
-                           ion_print(z, charge, ion));
-    int base = charge - 1;
-    while (!from_tables(z, base, &s, st))
-        base--;
-    for (; base < charge; base++) {
-        const struct subshell *outer =
-            configuration_outermost(&s.configuration);
-        if (!outer ||
-            !configuration_change(&s.configuration, outer->n, outer->l, -1.0))
-            assert(!"a neutral atom holds z electrons");
+                           "charge %d: no such anion of %s; expected %d or "
+                           "above",
+                           charge, element_at(z)->symbol, CHARGE_LOWEST);
+    int base = nearest_stored(z, charge, &s, st);
+    if (base != charge) {
+        for (int q = base; q < charge; q++)
+            lose_one(&s.configuration);
+        for (int q = base; q > charge; q--)
+            gain_one(&s.configuration);
+        s.origin = ORIGIN_RULE;
+        (void)term_parse("", &s.term);
     }
-    s.origin = ORIGIN_RULE;
-    (void)term_parse("", &s.term);
+    s.charge = charge;
     *species = s;
     return true;
 }

@@ -6,6 +6,8 @@
 #include <stdlib.h>
 #include <string.h>
 
+#include "refdata/definition.h"
+#include "refdata/ground.h"
 #include "study/solution.h"
 
 /* Models that can stand in the registry, and atoms that can wait. */
@@ -81,12 +83,9 @@ void study_set_options(struct study *study, const struct model_options *options)
 bool study_species(const struct study *study, const struct ask *ask,
                    struct species *species, struct status *st)
 {
-    const struct element *e = element_at(ask->z);
-    if (ask->charge > ask->z || ask->charge < -ask->z)
-        return status_fail(st, STATUS_USAGE,
-                           "%s: charge %d does not exist; expected %d…%d",
-                           e->symbol, ask->charge, -ask->z, ask->z);
-    ground_state(study->catalogue, ask->z, ask->charge, species);
+    (void)study; /* the ground states are those built in */
+    if (!ground_state(ask->z, ask->charge, species, st))
+        return false;
     if (!ask->configuration ||
         configuration_same(ask->configuration, &species->configuration))
         return true;
@@ -95,7 +94,8 @@ bool study_species(const struct study *study, const struct ask *ask,
         return status_fail(st, STATUS_USAGE,
                            "%s, charge %d: the configuration holds %.10g "
                            "electrons; expected %d",
-                           e->symbol, ask->charge, held, ask->z - ask->charge);
+                           element_at(ask->z)->symbol, ask->charge, held,
+                           ask->z - ask->charge);
     *species = (struct species){
         .z = ask->z,
         .charge = ask->charge,
@@ -108,15 +108,13 @@ bool study_species(const struct study *study, const struct ask *ask,
 
 /* One electron less: the stored ion where the atom is the stored one, else
  * the outermost electron of the given configuration goes. */
-static bool cation_of(const struct study *study, const struct species *species,
-                      struct species *cation)
+static bool cation_of(const struct species *species, struct species *cation)
 {
     if (species->charge >= species->z)
         return false;
-    if (species->origin != ORIGIN_USER) {
-        ground_state(study->catalogue, species->z, species->charge + 1, cation);
-        return true;
-    }
+    struct status st = status_ok();
+    if (species->origin != ORIGIN_USER)
+        return ground_state(species->z, species->charge + 1, cation, &st);
     *cation = *species;
     cation->charge++;
     const struct subshell *outer =
@@ -129,12 +127,10 @@ static struct question question_of(const struct study *study,
                                    const struct species *species)
 {
     struct question q = {.species = *species};
-    q.has_cation = cation_of(study, species, &q.cation);
-    q.has_anion =
-        species->origin != ORIGIN_USER && species->charge > -species->z;
-    if (q.has_anion)
-        ground_state(study->catalogue, species->z, species->charge - 1,
-                     &q.anion);
+    q.has_cation = cation_of(species, &q.cation);
+    struct status st = status_ok();
+    q.has_anion = species->origin != ORIGIN_USER &&
+                  ground_state(species->z, species->charge - 1, &q.anion, &st);
     if (study->covalent) {
         struct reading r =
             dataset_reading(study->covalent, species->z, 0, 0, 0);
@@ -210,14 +206,24 @@ static void set_subshell(struct row *row, const struct ask *ask)
     row->l = ask->n ? ask->l : outer ? outer->l : 0;
 }
 
+/* A scale may have a unit of its own: Mulliken's values are energies. */
+static const struct unit *unit_of(const struct ask *ask, const char *definition)
+{
+    const struct definition *d =
+        definition ? definition_find(ask->quantity, definition) : NULL;
+    enum dimension dimension =
+        d ? d->dimension : quantity_at(ask->quantity)->dimension;
+    if (ask->unit && ask->unit->dimension == dimension)
+        return ask->unit;
+    return unit_base(dimension);
+}
+
 struct row study_row(const struct study *study, const struct ask *ask)
 {
     struct row row = {.quantity = ask->quantity};
     struct status st = status_ok();
     if (!study_species(study, ask, &row.species, &st))
-        assert(!"the caller checks the ask with study_species");
-    row.unit = ask->unit ? ask->unit
-                         : unit_base(quantity_at(ask->quantity)->dimension);
+        assert(!"the caller has checked the ask with study_species");
     set_subshell(&row, ask);
 
     const struct reference *reference = ask->reference;
@@ -239,6 +245,9 @@ struct row study_row(const struct study *study, const struct ask *ask)
         reference ? reference_read(reference, &row.species, ask->n, ask->l)
                   : reading_gap(ask->quantity, READING_MISSING,
                                 "no reference set for this quantity", NULL);
+    if (reference && !definition)
+        definition = reference->provenance->definition;
+    row.unit = unit_of(ask, definition);
     row_compare(&row, value, stored);
     return row;
 }

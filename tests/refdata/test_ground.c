@@ -120,17 +120,39 @@ START_TEST(test_what_is_no_ion_is_refused)
     ck_assert(!ground_state(3, 4, &s, &st));
     ck_assert_int_eq(st.code, STATUS_USAGE);
     ck_assert_str_eq(st.message, "charge 4: Li has only 3 electrons to lose");
-    ck_assert(!ground_state(2, -1, &s, &st));
-    ck_assert_str_eq(st.message, "He-: no ground configuration of this anion "
-                                 "is stored; give one");
-    ck_assert(!ground_state(8, -2, &s, &st));
+    ck_assert(!ground_state(8, CHARGE_LOWEST - 1, &s, &st));
+    ck_assert_int_eq(st.code, STATUS_USAGE);
     ck_assert_int_eq(s.z, -1);
+}
+END_TEST
+
+START_TEST(test_anions_fill_the_first_room_by_rule)
+{
+    /* Common practice, no source: the closed shells of oxide, nitride and
+     * hydride. */
+    static const struct {
+        int z, charge;
+        const char *configuration;
+    } anions[] = {{8, -2, "[He] 2s2 2p6"},
+                  {7, -3, "[He] 2s2 2p6"},
+                  {16, -2, "[Ne] 3s2 3p6"},
+                  {2, -1, "[He] 2s1"}};
+    for (size_t i = 0; i < sizeof anions / sizeof anions[0]; i++) {
+        struct species s;
+        struct status st = status_ok();
+        char out[CONFIGURATION_TEXT_MAX];
+        ck_assert(ground_state(anions[i].z, anions[i].charge, &s, &st));
+        ck_assert_int_eq(s.origin, ORIGIN_RULE);
+        ck_assert_str_eq(configuration_print(&s.configuration, out),
+                         anions[i].configuration);
+    }
 }
 END_TEST
 
 TCase *ground_case(void)
 {
     TCase *tc = tcase_create("ground");
+    tcase_add_test(tc, test_anions_fill_the_first_room_by_rule);
     tcase_add_test(tc, test_every_ground_state_holds_z_minus_charge_electrons);
     tcase_add_test(tc, test_stored_states_come_first);
     tcase_add_test(tc,

@@ -1,0 +1,230 @@
+/* SPDX-License-Identifier: MIT */
+#include <check.h>
+#include <math.h>
+#include <stdio.h>
+#include <string.h>
+
+#include "refdata/ground.h"
+#include "study/study.h"
+#include "support/near.h"
+#include "support/run.h"
+
+static struct study *study;
+
+static void open_study(void)
+{
+    struct status st = status_ok();
+    study = study_new(catalogue_builtin(), &st);
+    ck_assert_ptr_nonnull(study);
+}
+
+static void close_study(void)
+{
+    study_free(study);
+}
+
+static struct row row_of(int z, enum quantity_id quantity, const char *model)
+{
+    struct ask ask = {.z = z, .quantity = quantity, .model = model_find(model)};
+    return study_row(study, &ask);
+}
+
+START_TEST(z_eff_of_lithium_from_its_ionization_energy)
+{
+    /* Common practice, no source: 1.26 for Li 2s. */
+    struct row row = row_of(3, QUANTITY_ZEFF, "slater");
+    ck_assert_str_eq(row.reference.provenance->id,
+                     REFERENCE_ZEFF_FROM_IONIZATION);
+    near(row.reference.value.value, 1.26, 0.005, 0, "Li 2s");
+    ck_assert(row.reference.has_u);
+}
+END_TEST
+
+START_TEST(every_row_has_a_residual_or_a_reason)
+{
+    int ok = 0;
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        for (int m = -1; m < model_count(); m++)
+            for (int z = 1; z <= Z_MAX; z++) {
+                struct ask ask = {.z = z, .quantity = (enum quantity_id)q};
+                ask.model = m < 0 ? NULL : model_at(m);
+                struct row row = study_row(study, &ask);
+                if (row.state == ROW_OK) {
+                    ok++;
+                    struct number d =
+                        number_subtract(row.value.value, row.reference.value);
+                    ck_assert(d.value == row.residual.value);
+                    ck_assert_str_eq(row.reason, "");
+                } else {
+                    ck_assert_str_ne(row.reason, "");
+                }
+                ck_assert_ptr_nonnull(row.unit);
+            }
+    ck_assert_int_gt(ok, 700);
+}
+END_TEST
+
+START_TEST(every_reference_answers_every_ask)
+{
+    const struct reference_list *list = study_references(study);
+    ck_assert_int_gt(list->count, 20);
+    for (int r = 0; r < list->count; r++) {
+        int values = 0;
+        for (int z = 1; z <= Z_MAX; z++)
+            for (int charge = 0; charge <= (z < 4 ? z : 4); charge++) {
+                struct ask ask = {.z = z,
+                                  .charge = charge,
+                                  .quantity = list->items[r].quantity,
+                                  .reference = &list->items[r]};
+                struct row row = study_row(study, &ask);
+                values += row.reference.state == READING_OK;
+                ck_assert(row.reference.state == READING_OK ||
+                          row.reference.reason[0] != '\0');
+            }
+        ck_assert_msg(values > 0 || list->items[r].quantity == QUANTITY_ZEFF,
+                      "%s", list->items[r].provenance->id);
+        ck_assert_ptr_eq(reference_find(list, list->items[r].provenance->id),
+                         &list->items[r]);
+    }
+}
+END_TEST
+
+START_TEST(like_is_set_against_like_unless_told_otherwise)
+{
+    struct row radius = row_of(26, QUANTITY_RADIUS, "slater");
+    ck_assert(radius.like_with_like);
+    struct row chi = row_of(26, QUANTITY_ELECTRONEGATIVITY, "slater");
+    ck_assert_int_eq(chi.state, ROW_OK);
+    ck_assert(chi.like_with_like);
+    struct ask ask = {.z = 26,
+                      .quantity = QUANTITY_ELECTRONEGATIVITY,
+                      .model = model_find("slater")};
+    for (int r = 0; r < study_references(study)->count; r++) {
+        const struct reference *reference = &study_references(study)->items[r];
+        if (strcmp(reference->provenance->definition, "Pauling scale") != 0)
+            continue;
+        ask.reference = reference;
+        struct row other = study_row(study, &ask);
+        ck_assert(other.state == ROW_OTHER_SCALE ||
+                  other.state == ROW_NO_REFERENCE);
+    }
+    ck_assert_ptr_nonnull(ask.reference);
+}
+END_TEST
+
+START_TEST(an_inner_subshell_is_set_against_a_table_of_subshells)
+{
+    struct ask ask = {.z = 25,
+                      .quantity = QUANTITY_ZEFF,
+                      .model = model_find("clementi"),
+                      .n = 3,
+                      .l = 2};
+    struct row row = study_row(study, &ask);
+    ck_assert_int_eq(row.state, ROW_OK);
+    /* 10.528, the printed exponent of Mn 3d times 3: Clementi and Raimondi
+     * 1963, doi 10.1063/1.1733573. */
+    near(row.reference.value.value, 10.528, 0.001, 0, "Mn 3d");
+    ck_assert_int_eq(row.n, 3);
+    ask.n = 4;
+    ask.l = 1;
+    row = study_row(study, &ask);
+    ck_assert_int_eq(row.state, ROW_OUTSIDE_MODEL);
+}
+END_TEST
+
+START_TEST(a_configuration_of_the_user_is_checked_and_marked)
+{
+    struct status st = status_ok();
+    struct configuration excited, ground;
+    struct species species;
+    ck_assert(configuration_parse("[Ar] 3d7 4s1", &excited, &st));
+    ck_assert(configuration_parse("[Ar] 3d6 4s2", &ground, &st));
+    struct ask ask = {.z = 26, .configuration = &excited};
+    ck_assert(study_species(study, &ask, &species, &st));
+    ck_assert_int_eq(species.origin, ORIGIN_USER);
+    ask.configuration = &ground;
+    ck_assert(study_species(study, &ask, &species, &st));
+    ck_assert_int_eq(species.origin, ORIGIN_STORED);
+    ask.charge = 1;
+    ck_assert(!study_species(study, &ask, &species, &st));
+    ck_assert_ptr_nonnull(strstr(st.message, "expected 25"));
+    ask.configuration = NULL;
+    ask.charge = 27;
+    ck_assert(!study_species(study, &ask, &species, &st));
+    ask.charge = CHARGE_LOWEST - 1;
+    ck_assert(!study_species(study, &ask, &species, &st));
+}
+END_TEST
+
+START_TEST(the_ion_of_an_excited_configuration_is_that_configuration_less_one)
+{
+    struct status st = status_ok();
+    struct configuration excited;
+    ck_assert(configuration_parse("[Ne] 4s1", &excited, &st));
+    struct ask ask = {.z = 11,
+                      .quantity = QUANTITY_IONIZATION,
+                      .model = model_find("slater"),
+                      .configuration = &excited};
+    struct row row = study_row(study, &ask);
+    /* Na+ is [Ne] either way; 4s lies higher than 3s. */
+    struct row ground = row_of(11, QUANTITY_IONIZATION, "slater");
+    ck_assert(row.value.value.value < ground.value.value.value);
+}
+END_TEST
+
+START_TEST(a_block_summary_equals_its_rows_and_leaves_one_out)
+{
+    struct ask ask = {.z = 40,
+                      .quantity = QUANTITY_IONIZATION,
+                      .model = model_find("slater")};
+    struct summary all = study_block_summary(study, &ask, 'd', 0);
+    struct summary less = study_block_summary(study, &ask, 'd', 40);
+    struct row zr = study_row(study, &ask);
+    ck_assert_int_eq(all.count, less.count + 1);
+    near(all.sum_absolute, less.sum_absolute + fabs(zr.residual.value), 1e-9, 0,
+         "sum of sizes");
+    int in_block = 0;
+    for (int z = 1; z <= Z_MAX; z++)
+        in_block += element_at(z)->block == 'd';
+    ck_assert_int_eq(all.count + all.gaps, in_block);
+}
+END_TEST
+
+START_TEST(units_are_converted_and_a_scale_keeps_its_own)
+{
+    struct ask ask = {.z = 26,
+                      .quantity = QUANTITY_IONIZATION,
+                      .model = model_find("slater"),
+                      .unit = unit_find("kJ/mol")};
+    struct row row = study_row(study, &ask);
+    /* 762.5 kJ/mol, the first ionization energy of Fe (value from memory). */
+    near(row.reference.value.value, 762.5, 0.1, 0, "Fe in kJ/mol");
+    ask.unit = NULL;
+    ask.quantity = QUANTITY_ELECTRONEGATIVITY;
+    ask.reference = reference_find(study_references(study),
+                                   "electronegativity_mulliken_2016");
+    ck_assert_ptr_nonnull(ask.reference);
+    row = study_row(study, &ask);
+    ck_assert_int_eq(row.state, ROW_OTHER_SCALE);
+}
+END_TEST
+
+int main(void)
+{
+    Suite *suite = suite_create("study");
+    TCase *rows = tcase_create("rows");
+    tcase_add_checked_fixture(rows, open_study, close_study);
+    tcase_add_test(rows, z_eff_of_lithium_from_its_ionization_energy);
+    tcase_add_test(rows, every_row_has_a_residual_or_a_reason);
+    tcase_add_test(rows, every_reference_answers_every_ask);
+    tcase_add_test(rows, like_is_set_against_like_unless_told_otherwise);
+    tcase_add_test(rows, an_inner_subshell_is_set_against_a_table_of_subshells);
+    tcase_add_test(rows, a_configuration_of_the_user_is_checked_and_marked);
+    tcase_add_test(
+        rows,
+        the_ion_of_an_excited_configuration_is_that_configuration_less_one);
+    tcase_add_test(rows, a_block_summary_equals_its_rows_and_leaves_one_out);
+    tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
+    suite_add_tcase(suite, rows);
+    return run_suite(suite);
+}
