@@ -15,8 +15,7 @@ static void write_text(FILE *out, const struct source *s)
     char buffer[FIELD_TEXT_MAX];
     const struct provenance *p = s->provenance;
     fprintf(out, "%s: %s\n", p->id, p->title);
-    fprintf(out, "    %s; %s", p->computed ? "model" : "data set",
-            or_empty(s->quantity));
+    fprintf(out, "    %s; %s", p->computed ? "model" : "data set", s->quantity);
     if (s->count)
         fprintf(out, "; %d values", s->count);
     if (s->unit && s->unit[0])
@@ -55,7 +54,7 @@ static void field_text(const struct source *s, int field, struct text *t)
         p->computed ? "model" : "data set",
         p->id,
         p->title,
-        or_empty(s->quantity),
+        s->quantity,
         or_empty(s->unit),
         NULL,
         or_empty(s->domain),

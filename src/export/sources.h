@@ -5,11 +5,13 @@
 
 #include "export/format.h"
 
+#define SOURCE_QUANTITY_MAX 96
+
 /* One model or data set. Texts are borrowed; "" or NULL where none. */
 struct source {
     const struct provenance *provenance;
-    const char *quantity;     /* ids joined by a space */
-    const char *unit;         /* "" for a model */
+    char quantity[SOURCE_QUANTITY_MAX]; /* ids joined by a space */
+    const char *unit;                   /* "" for a model */
     const char *domain;       /* a model's domain, a data set's licence */
     const char *const *notes; /* notes[note_count] */
     int note_count;

@@ -60,3 +60,9 @@ const struct definition *definition_find(enum quantity_id quantity,
             return &definitions[i];
     return NULL;
 }
+
+enum dimension definition_dimension(enum quantity_id quantity, const char *text)
+{
+    const struct definition *d = text ? definition_find(quantity, text) : NULL;
+    return d ? d->dimension : quantity_at(quantity)->dimension;
+}

@@ -25,4 +25,9 @@ const struct definition *definition_at(enum quantity_id quantity, size_t i);
 const struct definition *definition_find(enum quantity_id quantity,
                                          const char *text);
 
+/* Dimension of numbers under a definition: its own, or the quantity's when the
+ * quantity has none such. text may be NULL. */
+enum dimension definition_dimension(enum quantity_id quantity,
+                                    const char *text);
+
 #endif

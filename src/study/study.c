@@ -188,6 +188,12 @@ static struct reading value_of(const struct study *study, const struct ask *ask,
                        &model->offers[offer].provenance);
 }
 
+struct reading study_reading(const struct study *study, const struct ask *ask,
+                             const struct species *species, int offer)
+{
+    return value_of(study, ask, species, offer);
+}
+
 static bool is_inner(const struct ask *ask, const struct species *species)
 {
     const struct subshell *outer =
@@ -209,10 +215,7 @@ static void set_subshell(struct row *row, const struct ask *ask)
 /* A scale may have a unit of its own: Mulliken's values are energies. */
 static const struct unit *unit_of(const struct ask *ask, const char *definition)
 {
-    const struct definition *d =
-        definition ? definition_find(ask->quantity, definition) : NULL;
-    enum dimension dimension =
-        d ? d->dimension : quantity_at(ask->quantity)->dimension;
+    enum dimension dimension = definition_dimension(ask->quantity, definition);
     if (ask->unit && ask->unit->dimension == dimension)
         return ask->unit;
     return unit_base(dimension);

@@ -51,7 +51,13 @@ MUST_CHECK bool study_species(const struct study *study, const struct ask *ask,
  * and its catalogue. */
 struct row study_row(const struct study *study, const struct ask *ask);
 
-/* The same, but solved here and now to the end. Fails only with
+/* What the ask's model says under one of its offers for the species of that
+ * ask, in base units: for a model that offers a quantity under several
+ * definitions. Not started either. */
+struct reading study_reading(const struct study *study, const struct ask *ask,
+                             const struct species *species, int offer);
+
+/* study_row, but solved here and now to the end. Fails only with
  * STATUS_MEMORY. */
 MUST_CHECK bool study_row_now(struct study *study, const struct ask *ask,
                               struct row *row, struct status *st);
