@@ -16,7 +16,7 @@ struct lane_group {
     _Alignas(LANES_ALIGN) double kappa[LANES_MAX];
     _Alignas(LANES_ALIGN) double centrifugal[LANES_MAX]; /* κ(κ+1) */
     _Alignas(LANES_ALIGN) double energy[LANES_MAX];
-    _Alignas(LANES_ALIGN) double slope[LANES_MAX]; /* χ_t/χ, first point */
+    _Alignas(LANES_ALIGN) double slope[LANES_MAX]; /* χ_t/χ + F, first point */
     _Alignas(LANES_ALIGN) double inner[LANES_MAX]; /* ∫ below / first value */
     /* Results of a step. */
     _Alignas(LANES_ALIGN) double below[LANES_MAX]; /* levels below energy */
@@ -26,22 +26,23 @@ struct lane_group {
 };
 
 /* A potential, as the kernels want it. In all arrays with "hw" the factor is
- * half the element length times the mesh weight. */
+ * half the element length times the mesh weight. Those with V' are used for
+ * a2 > 0 only. */
 struct lane_channel {
-    double *v;     /* V */
-    double *base;  /* hw (schwarz + 2 slope² V) */
-    double *first; /* 2 hw slope² V'/y; a2 > 0 only, as the next two */
-    double *twice; /* hw slope² V'' */
-    double *cube;  /* 3 hw slope² V'² */
-    double *beta;  /* slope V' */
-    double *moved; /* weight_y × change of V since the last potential */
+    double *v;      /* V */
+    double *base;   /* hw (schwarz + 2 slope² V) */
+    double *moved;  /* weight_y × change of V since the last potential */
+    double *radial; /* 2 hw slope² V'/y */
+    double *bent;   /* hw slope bend V' */
+    double *square; /* hw slope² V'² */
+    double *beta;   /* slope V' */
 };
 
 struct lane_work {
     double a2;
     const struct mesh *mesh;
     const double *stiffness;   /* lower triangle, each entry × width */
-    const double *derivative;  /* 2/length × derivative matrix */
+    const double *derivative;  /* d/dx matrix */
     const double *schwarz;     /* hw schwarz */
     const double *mass;        /* hw slope² */
     const double *centrifugal; /* hw slope²/y² */

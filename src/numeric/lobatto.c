@@ -39,6 +39,8 @@ static void make_points(struct lobatto *rule)
         double v[P + 2];
         legendre(rule->x[i], v);
         rule->w[i] = 2.0 / (P * (P + 1) * v[P] * v[P]);
+        rule->legendre[0][i] = v[P];
+        rule->legendre[1][i] = v[P + 1];
     }
 }
 

@@ -18,6 +18,7 @@ struct lobatto {
     double cumulative[LOBATTO_POINTS][LOBATTO_POINTS]; /* integral -1…x_i */
     double stiffness[LOBATTO_POINTS][LOBATTO_POINTS];  /* ∫ l_i' l_j' dx */
     double barycentric[LOBATTO_POINTS];
+    double legendre[2][LOBATTO_POINTS]; /* P_ORDER and P_(ORDER+1) */
 };
 
 /* Fills the rule (Abramowitz, Stegun, Handbook of Mathematical Functions,

@@ -35,7 +35,6 @@ struct search {
 struct radial {
     struct lane_work work;
     struct lane_channel channel[RADIAL_CHANNELS];
-    double *q[RADIAL_CHANNELS];
     const struct lane_kernel *kernel;
     int elements, count, groups;
     struct radial_level level[RADIAL_LEVELS_MAX];
@@ -67,8 +66,8 @@ static void carve(struct radial *r, double *at)
     r->work.right = take(&at, n * width);
     for (int c = 0; c < RADIAL_CHANNELS; c++) {
         struct lane_channel *ch = &r->channel[c];
-        double **array[] = {&ch->v,    &ch->base, &ch->first, &ch->twice,
-                            &ch->cube, &ch->beta, &ch->moved, &r->q[c]};
+        double **array[] = {&ch->v,    &ch->base,   &ch->moved, &ch->radial,
+                            &ch->bent, &ch->square, &ch->beta};
         for (size_t k = 0; k < sizeof array / sizeof *array; k++)
             *array[k] = take(&at, n);
     }
@@ -93,7 +92,7 @@ static void fill_tables(struct radial *r)
                 *stiffness++ = mesh->rule.stiffness[i][j];
     for (int i = 0; i <= P; i++)
         for (int j = 0; j <= P; j++)
-            *derivative++ = 2.0 / mesh->length * mesh->rule.derivative[i][j];
+            *derivative++ = mesh->rule.derivative[i][j];
     for (int i = 0; i < mesh->points; i++) {
         double hw = 0.5 * mesh->length * mesh->weight[i];
         double relative = mesh->slope[i] / mesh->y[i];
@@ -125,7 +124,7 @@ struct radial *radial_new(const struct mesh *mesh, struct status *st)
     r->kernel = choose_kernel();
     size_t n = (size_t)mesh->points + 4, width = LANES_MAX;
     size_t total =
-        n * (3 + RADIAL_CHANNELS * 8) + n * width * (2 + 2 * (size_t)GROUPS) +
+        n * (3 + RADIAL_CHANNELS * 7) + n * width * (2 + 2 * (size_t)GROUPS) +
         (size_t)mesh->elements * LANES_FACTOR * width + LANES_TRIANGLE * width +
         LOBATTO_POINTS * LOBATTO_POINTS + 64;
     total = (total + 3) / 4 * 4;
@@ -198,12 +197,12 @@ void radial_begin(struct radial *radial, double a2, int elements, int count,
     make_groups(radial);
 }
 
-void radial_potential(struct radial *radial, int channel, const double *q)
+void radial_potential(struct radial *radial, int channel, const double *q,
+                      const double *force)
 {
     const struct mesh *mesh = radial->work.mesh;
     struct lane_channel *c = &radial->channel[channel];
     int points = radial->elements * P + 1;
-    memcpy(radial->q[channel], q, (size_t)points * sizeof *q);
     for (int i = 0; i < points; i++) {
         double v = q[i] / mesh->y[i];
         c->moved[i] = mesh->weight_y[i] * (v - c->v[i]);
@@ -212,18 +211,17 @@ void radial_potential(struct radial *radial, int channel, const double *q)
     }
     if (radial->work.a2 <= 0.0)
         return;
-    mesh_derivative(mesh, radial->elements, q, c->first, c->twice);
+    if (!force)
+        mesh_derivative(mesh, radial->elements, q, c->beta, NULL);
     for (int i = 0; i < points; i++) {
         double y = mesh->y[i], slope = mesh->slope[i];
-        double q1 = c->first[i] / slope;
-        double q2 =
-            (c->twice[i] - c->first[i] * mesh->bend[i]) / (slope * slope);
-        double v1 = (q1 - c->v[i]) / y, v2 = (q2 - 2.0 * v1) / y;
+        double v1 =
+            force ? force[i] / (y * y) : (c->beta[i] / slope - c->v[i]) / y;
         double mass = radial->work.mass[i];
         c->beta[i] = slope * v1;
-        c->first[i] = 2.0 * mass * v1 / y;
-        c->twice[i] = mass * v2;
-        c->cube[i] = 3.0 * mass * v1 * v1;
+        c->radial[i] = 2.0 * mass * v1 / y;
+        c->bent[i] = mass / slope * mesh->bend[i] * v1;
+        c->square[i] = mass * v1 * v1;
     }
 }
 
@@ -259,9 +257,8 @@ static void set_boundary(const struct radial *r, struct lane_group *g, int lane)
         dp += (f)*a * power;
     }
     double rise = dp / p; /* y P'/P */
-    double m = 2.0 + a2 * (g->energy[lane] - c->v[0]);
-    double mu = a2 > 0.0 ? -0.5 * a2 * c->beta[0] / m : 0.0;
-    double slope = mesh->slope[0] / y * rise - mu - 0.5 * mesh->bend[0];
+    /* χ_t/χ + F = slope P'/P - bend/2 */
+    double slope = mesh->slope[0] / y * rise - 0.5 * mesh->bend[0];
     g->slope[lane] = 0.5 * mesh->length * slope;
     double s = 2.0 * gamma, more = 2.0 * rise - s;
     g->inner[lane] = y * ((1.0 - more) / (s + 1.0) + more / (s + 2.0));

@@ -48,9 +48,11 @@ void radial_free(struct radial *radial);
 void radial_begin(struct radial *radial, double a2, int elements, int count,
                   const struct radial_level *levels);
 
-/* Potential of a channel as q[points] = y V(y), with q -> -1 at the origin.
- * Copied. */
-void radial_potential(struct radial *radial, int channel, const double *q);
+/* Potential of a channel as q[points] = y V(y), with q -> -1 at the origin,
+ * and its derivative as force[points] = y² dV/dy; where force is NULL, q is
+ * differentiated. */
+void radial_potential(struct radial *radial, int channel, const double *q,
+                      const double *force);
 
 /* Finds every level from nothing. Gives the number not found. */
 int radial_find(struct radial *radial);

@@ -133,9 +133,9 @@ static void check_coulomb(double Z, double c, double first, double length)
     for (int i = 0; i < mesh.points; i++)
         q[i] = -1.0;
     radial_begin(radial, a2, mesh.elements, count, level);
-    radial_potential(radial, 0, q);
+    radial_potential(radial, 0, q, NULL);
     ck_assert_int_eq(radial_find(radial), 0);
-    radial_potential(radial, 0, q);
+    radial_potential(radial, 0, q, NULL);
     ck_assert_int_eq(radial_settle(radial, 1e-13), 0);
     for (int i = 0; i < count; i++) {
         int n = principal[i], kappa = level[i].kappa;

@@ -1,0 +1,63 @@
+/* SPDX-License-Identifier: MIT */
+/* Insides of the atom solver, shared by the files of this folder. */
+#ifndef ATOM_SOLVER_H
+#define ATOM_SOLVER_H
+
+#include "atom/atom.h"
+#include "numeric/mesh.h"
+#include "numeric/mixer.h"
+#include "numeric/radial.h"
+
+enum { ATOM_CHANNELS = 2, ATOM_PROFILES = 5 };
+
+/* A mesh and what is sized by it; one for each equation, made when first
+ * needed. Arrays are mesh.points long. */
+struct atom_space {
+    struct mesh mesh;
+    struct radial *radial;
+    struct mixer *mixer;
+    struct xc *xc;
+    double *q;      /* y V of the trial potential, channel after channel; with
+                       the Dirac equation y² dV/dy in the same way behind it */
+    double *out;    /* the same from the new density */
+    double *weight; /* metric of the mixing */
+    double *D[ATOM_CHANNELS]; /* radial density per y, electrons */
+    double *total;            /* sum of both */
+    double *enclosed;         /* electrons within */
+    double *field;            /* y times their potential */
+    double *rho[ATOM_CHANNELS];
+    double *energy; /* exchange-correlation energy per electron */
+    double *v[ATOM_CHANNELS];
+    double *scratch;
+    double *block;
+};
+
+struct atom_solver {
+    struct atom_space space[2]; /* by enum atom_relativity */
+    struct atom_space *now;
+    int Z;
+    struct configuration configuration;
+    struct atom_options options;
+    double c;     /* speed of light */
+    double a2;    /* (Z/c)², 0 for Schrödinger */
+    double power; /* of the density at the origin */
+    double electrons;
+    int channels, elements, count;
+    struct radial_level level[RADIAL_LEVELS_MAX];
+    struct atom_level label[RADIAL_LEVELS_MAX];
+    enum atom_state state;
+    int cycles, culprit;
+    bool found; /* levels have been found once */
+    double residual, last_total;
+    struct atom_energy result;
+};
+
+/* Puts a starting potential into space->q. */
+void start_potential(struct atom_solver *solver);
+
+/* Integral over y of a density times a potential-like factor, both at the
+ * points, that together go like y^power at the origin. */
+double space_integral(const struct atom_solver *solver, const double *f,
+                      double power);
+
+#endif
