@@ -145,7 +145,6 @@ static struct number in_base(struct number n, double per_base)
     if (!exact)
         return number_scale(n, factor);
     int places = n.decimals > shift ? n.decimals - shift : 0;
-    /* 17 digits: more than a double holds, so that only `places` counts. */
     return number_round(n.value * power, 1, places);
 }
 
@@ -170,8 +169,7 @@ struct reading dataset_entry_reading(const struct dataset *set,
         .reason = "",
         .remark = dataset_text(set, entry->remark),
     };
-    if (set->quantity != QUANTITY_ELECTRONEGATIVITY &&
-        set->unit->per_base != 1.0) {
+    if (set->unit->per_base != 1.0) {
         r.value = in_base(r.value, set->unit->per_base);
         if (r.has_u)
             r.u = in_base(r.u, set->unit->per_base);

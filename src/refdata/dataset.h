@@ -238,10 +238,10 @@ const struct entry *dataset_lookup_site(const struct dataset *set, int z,
                                         enum coordination coordination,
                                         enum spin_state spin);
 
-/* An entry as a reading in the base unit of its quantity's dimension: ok with
- * value, uncertainty and remark, or missing with the reason. entry may be
- * NULL: missing, with the set's `absent` as reason. An electronegativity is
- * never converted: its scale has its own unit. */
+/* An entry as a reading in the base unit of its own unit's dimension (for an
+ * electronegativity that is the unit of its scale: 1, or eV on Mulliken's): ok
+ * with value, uncertainty and remark, or missing with the reason. entry may be
+ * NULL: missing, with the set's `absent` as reason. */
 struct reading dataset_entry_reading(const struct dataset *set,
                                      const struct entry *entry);
 

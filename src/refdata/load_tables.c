@@ -30,6 +30,13 @@ static bool load_configuration(struct load *ld, const cJSON *object, int z,
     const char *text = object_text(object, "configuration");
     const char *term_text = object_text(object, "term");
     struct configuration c;
+    /* The parser of configurations cuts words by bytes. */
+    for (const char *p = text; *p; p++)
+        if ((unsigned char)*p >= 0x80)
+            return status_fail(ld->st, STATUS_DATA,
+                               "configuration '%s': expected one such as "
+                               "'[Ar] 3d6 4s2'",
+                               quoted(text).text);
     if (!configuration_parse(text, &c, ld->st)) {
         ld->st->code = STATUS_DATA;
         return false;
@@ -55,7 +62,30 @@ struct row_kind {
     bool (*read)(struct load *ld, const cJSON *object, void *row);
     int (*compare)(const void *a, const void *b);
     int (*z_of)(const void *row);
+    int (*charge_of)(const void *row); /* NULL: there is one per element */
 };
+
+/* Says which entries stand for the same species. */
+static void fail_twice(struct load *ld, const cJSON *entries, int z, int charge)
+{
+    int first = 0;
+    int place = 0;
+    const cJSON *object;
+    const char *symbol = element_at(z)->symbol;
+    cJSON_ArrayForEach(object, entries)
+    {
+        place++;
+        if (strcmp(object_text(object, "element"), symbol) != 0 ||
+            object_integer(object, "charge", 0) != charge)
+            continue;
+        if (first != 0)
+            (void)status_fail(ld->st, STATUS_DATA,
+                              "entry %d (%s): repeats entry %d", place, symbol,
+                              first);
+        else
+            first = place;
+    }
+}
 
 /* One row per entry, sorted; NULL with a failed status. */
 static void *load_rows(struct load *ld, const cJSON *entries,
@@ -80,9 +110,8 @@ static void *load_rows(struct load *ld, const cJSON *entries,
     for (int i = 1; i < count; i++) {
         const char *row = rows + (size_t)i * kind->size;
         if (kind->compare(row - kind->size, row) == 0) {
-            (void)status_fail(ld->st, STATUS_DATA,
-                              "element %s: two entries for the same species",
-                              element_at(kind->z_of(row))->symbol);
+            int charge = kind->charge_of ? kind->charge_of(row) : 0;
+            fail_twice(ld, entries, kind->z_of(row), charge);
             return NULL;
         }
     }
@@ -153,9 +182,12 @@ static int compare_elements(const void *a, const void *b)
 
 bool load_elements(struct load *ld, const cJSON *entries)
 {
-    static const struct row_kind kind = {sizeof(struct element_facts),
-                                         read_element, compare_elements,
-                                         element_z};
+    static const struct row_kind kind = {
+        .size = sizeof(struct element_facts),
+        .read = read_element,
+        .compare = compare_elements,
+        .z_of = element_z,
+    };
     ld->out->set.elements = load_rows(ld, entries, &kind);
     return ld->out->set.elements != NULL;
 }
@@ -200,6 +232,11 @@ static int configuration_z(const void *row)
     return ((const struct configuration_entry *)row)->z;
 }
 
+static int configuration_charge(const void *row)
+{
+    return ((const struct configuration_entry *)row)->charge;
+}
+
 static int compare_configurations(const void *a, const void *b)
 {
     const struct configuration_entry *x = a;
@@ -210,8 +247,12 @@ static int compare_configurations(const void *a, const void *b)
 bool load_configurations(struct load *ld, const cJSON *entries)
 {
     static const struct row_kind kind = {
-        sizeof(struct configuration_entry), read_configuration,
-        compare_configurations, configuration_z};
+        .size = sizeof(struct configuration_entry),
+        .read = read_configuration,
+        .compare = compare_configurations,
+        .z_of = configuration_z,
+        .charge_of = configuration_charge,
+    };
     ld->out->set.configurations = load_rows(ld, entries, &kind);
     return ld->out->set.configurations != NULL;
 }
@@ -369,9 +410,12 @@ static int compare_availability(const void *a, const void *b)
 
 bool load_availability(struct load *ld, const cJSON *entries)
 {
-    static const struct row_kind kind = {sizeof(struct availability),
-                                         read_availability,
-                                         compare_availability, availability_z};
+    static const struct row_kind kind = {
+        .size = sizeof(struct availability),
+        .read = read_availability,
+        .compare = compare_availability,
+        .z_of = availability_z,
+    };
     ld->out->set.availability = load_rows(ld, entries, &kind);
     return ld->out->set.availability != NULL;
 }

@@ -51,12 +51,12 @@ static bool load_subshell(struct load *ld, const cJSON *object, struct entry *e)
     if (!label)
         return ld->out->set.quantity != QUANTITY_ZEFF ||
                status_fail(ld->st, STATUS_DATA,
-                           "key subshell is missing; a value of zeff needs "
+                           "key 'subshell' is missing; a value of zeff needs "
                            "one such as 3d");
     int n, l;
     if (!quantity->per_subshell)
         return status_fail(ld->st, STATUS_DATA,
-                           "key subshell: %s does not depend on a subshell",
+                           "key 'subshell': %s does not depend on a subshell",
                            quantity->id);
     if (!subshell_parse(label, &n, &l))
         return status_fail(ld->st, STATUS_DATA,
@@ -80,16 +80,16 @@ static bool load_site(struct load *ld, const cJSON *object, struct entry *e)
         return false;
     if (spin != SPIN_NONE && set->quantity != QUANTITY_RADIUS)
         return status_fail(ld->st, STATUS_DATA,
-                           "key spin: only a radius depends on a spin state");
+                           "key 'spin': only a radius depends on a spin state");
     bool site = coordination != COORDINATION_NONE;
     bool wanted = set->default_coordination != COORDINATION_NONE;
     if (site && !wanted)
         return status_fail(ld->st, STATUS_DATA,
-                           "key coordination: the set must name its "
+                           "key 'coordination': the set must name its "
                            "default_coordination");
     if (!site && wanted)
         return status_fail(ld->st, STATUS_DATA,
-                           "key coordination is missing; the set has a "
+                           "key 'coordination' is missing; the set has a "
                            "default_coordination");
     e->coordination = (uint8_t)coordination;
     e->spin = (uint8_t)spin;
@@ -105,16 +105,16 @@ static bool check_range(struct load *ld, const cJSON *object,
     if (!ld->definition->may_be_negative && lowest < 0.0)
         lowest = 0.0;
     double scale = set->unit->per_base;
-    if (set->quantity == QUANTITY_ELECTRONEGATIVITY)
-        scale = 1.0;
     lowest *= scale;
     highest *= scale;
+    bool above_zero = !ld->definition->may_be_negative;
     if (e->value.value < lowest || e->value.value > highest ||
-        (e->value.value == 0.0 && !ld->definition->may_be_negative))
-        return status_fail(ld->st, STATUS_DATA,
-                           "value %s: expected %s from %g to %g %s",
-                           object_text(object, "value"), ld->definition->text,
-                           lowest, highest, set->unit->id);
+        (above_zero && e->value.value == 0.0))
+        return status_fail(
+            ld->st, STATUS_DATA, "value %s: expected %s %s %g %s %g %s",
+            object_text(object, "value"), ld->definition->text,
+            above_zero ? "above" : "from", lowest,
+            above_zero ? "and up to" : "to", highest, set->unit->id);
     if (e->has_u && (e->u.value <= 0.0 || e->u.value > highest - lowest))
         return status_fail(ld->st, STATUS_DATA,
                            "u %s: expected a standard uncertainty above 0 "
@@ -145,7 +145,7 @@ static bool load_value(struct load *ld, const cJSON *object, struct entry *e)
         return status_fail(ld->st, STATUS_DATA, "u: a gap has no uncertainty");
     if (!object_member(object, "note"))
         return status_fail(ld->st, STATUS_DATA,
-                           "key note is missing; a gap needs its reason");
+                           "key 'note' is missing; a gap needs its reason");
     return true;
 }
 

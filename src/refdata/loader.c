@@ -140,7 +140,7 @@ bool load_word(struct load *ld, const cJSON *object, const char *key,
     *found = 0;
     if (!text)
         return true;
-    char known[256];
+    char known[400];
     struct text list = text_over(known, sizeof known);
     for (int i = 0; i < count; i++) {
         if (strcmp(words[i], text) == 0) {
@@ -148,7 +148,7 @@ bool load_word(struct load *ld, const cJSON *object, const char *key,
             return true;
         }
         if (words[i][0])
-            text_addf(&list, "%s%s", list.length ? " " : "", words[i]);
+            text_addf(&list, "%s%s", list.length ? " | " : "", words[i]);
     }
     return status_fail(ld->st, STATUS_DATA, "%s '%s': expected one of: %s", key,
                        quoted(text).text, known);
@@ -169,8 +169,11 @@ int load_element(struct load *ld, const cJSON *object)
                           quoted(symbol).text, meant->symbol);
     else
         (void)status_fail(ld->st, STATUS_DATA,
-                          "element '%s': expected a symbol from H to Og",
-                          quoted(symbol).text);
+                          "element '%s': expected a symbol from H to Og%s",
+                          quoted(symbol).text,
+                          strpbrk(symbol, "+-0123456789")
+                              ? "; a charge goes under the key charge"
+                              : "");
     return 0;
 }
 
@@ -323,7 +326,7 @@ static bool need(struct load *ld, const char *key)
 {
     return object_member(ld->root, key) ||
            status_fail(ld->st, STATUS_DATA,
-                       "key %s is missing; a set of values needs it", key);
+                       "key '%s' is missing; a set of values needs it", key);
 }
 
 /* Quantity, definition and unit, which must belong together. */
@@ -416,7 +419,7 @@ static bool load_head(struct load *ld)
     for (size_t i = VALUES_ONLY_FROM; i < ROOT_FIELD_COUNT; i++)
         if (object_member(ld->root, root_fields[i].key))
             return status_fail(ld->st, STATUS_DATA,
-                               "key %s belongs to sets of kind values only",
+                               "key '%s' belongs to sets of kind values only",
                                root_fields[i].key);
     return true;
 }
@@ -448,17 +451,25 @@ static bool load_entries(struct load *ld)
     return true;
 }
 
+static bool load_checked_root(struct load *ld)
+{
+    return object_check(ld->root, root_fields, ROOT_FIELD_COUNT, ld->st) &&
+           check_id(object_text(ld->root, "id"), "id", ld->st) &&
+           copy_member(ld, ld->root, "id", &ld->out->set.provenance.id) &&
+           load_head(ld) && load_entries(ld);
+}
+
 static bool load_root(struct load *ld)
 {
-    if (!object_check(ld->root, root_fields, ROOT_FIELD_COUNT, ld->st))
-        return false;
-    const char *id = object_text(ld->root, "id");
-    if (!check_id(id, "id", ld->st) ||
-        !copy_member(ld, ld->root, "id", &ld->out->set.provenance.id))
-        return false;
-    if (!load_head(ld) || !load_entries(ld))
-        return status_context(ld->st, "set %s", id);
-    return true;
+    struct status unused;
+    if (load_checked_root(ld))
+        return true;
+    /* Even a wrong file may say which set it wants to be. */
+    const cJSON *id =
+        cJSON_IsObject(ld->root) ? object_member(ld->root, "id") : NULL;
+    if (cJSON_IsString(id) && check_id(id->valuestring, "id", &unused))
+        return status_context(ld->st, "set %s", id->valuestring);
+    return false;
 }
 
 bool dataset_load(const char *text, size_t size, struct loaded **out,

@@ -202,7 +202,7 @@ static bool unknown_key(const char *key, const struct field *fields,
     for (size_t i = 0; i < count; i++) {
         text_addf(&list, "%s%s", i ? " " : "", fields[i].key);
         size_t d = text_edit_distance(key, fields[i].key);
-        if (d < least) {
+        if (d < least && d < strlen(key)) {
             least = d;
             nearest = fields[i].key;
         }
@@ -232,7 +232,7 @@ bool object_check(const cJSON *object, const struct field *fields, size_t count,
         if (i == count)
             return unknown_key(item->string, fields, count, st);
         if (seen >> i & 1)
-            return status_fail(st, STATUS_DATA, "key %s stands there twice",
+            return status_fail(st, STATUS_DATA, "key '%s' stands there twice",
                                fields[i].key);
         seen |= UINT64_C(1) << i;
         if (!check_type(item, fields[i].type, st))
@@ -241,8 +241,8 @@ bool object_check(const cJSON *object, const struct field *fields, size_t count,
     for (size_t i = 0; i < count; i++)
         if (fields[i].required && !(seen >> i & 1))
             return status_fail(st, STATUS_DATA,
-                               "key %s is missing; expected %s", fields[i].key,
-                               type_word(fields[i].type));
+                               "key '%s' is missing; expected %s",
+                               fields[i].key, type_word(fields[i].type));
     return true;
 }
 
