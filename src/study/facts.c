@@ -159,7 +159,9 @@ static struct comparison_line *add_line(struct comparison *c, int *capacity,
     enum dimension d = definition_dimension(quantity, provenance->definition);
     struct comparison_line *line = &c->lines[c->line_count++];
     line->quantity = quantity;
-    line->unit = units && units[d] ? units[d] : unit_base(d);
+    /* A scale in a unit of its own keeps it. */
+    bool plain = d == quantity_at(quantity)->dimension;
+    line->unit = plain && units && units[d] ? units[d] : unit_base(d);
     line->provenance = provenance;
     return line;
 }

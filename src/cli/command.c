@@ -1,0 +1,54 @@
+/* SPDX-License-Identifier: MIT */
+#include "cli/command.h"
+
+#include <assert.h>
+#include <string.h>
+
+#include "cli/commands.h"
+
+#define SELECTION_ABOUT                                                        \
+    "A selection is a symbol, name or atomic number (Fe, iron, 26), an ion "   \
+    "that carries its charge (Fe3+, Cs+, O2-), a run by atomic number "        \
+    "(Sc-Zn), period:4, group:13 or block:d; - reads selections from "         \
+    "standard input, one per line. What is chosen twice counts once."
+
+/* A new command is one row here and one enumerator. */
+static const struct command commands[COMMAND_COUNT] = {
+    {COMMAND_SCREENS, NULL, "", 0, 0, "open the screens",
+     "Without a command, on a terminal, the screens open: everything that a "
+     "command prints, on one sheet to move about in.",
+     "", cli_screens},
+    {COMMAND_LIST, "list", "[SELECTION...]", 0, -1,
+     "print values, references and residuals, one row each",
+     "Prints one row per element, quantity and model that offers the "
+     "quantity: the model's value, the stored reference and the residual "
+     "between them. Without a selection all elements are listed. Runs, "
+     "periods, groups, blocks and the whole table leave out elements that "
+     "have no such charge. " SELECTION_ABOUT,
+     "list Ti-Zn --quantity radius --model slater", cli_list},
+    {COMMAND_COMPARE, "compare", "SELECTION...", 1, -1,
+     "print elements or ions side by side",
+     "Prints two to twelve elements or ions side by side: all quantities, "
+     "each from every model and data set that has a value, with differences "
+     "from the first. " SELECTION_ABOUT,
+     "compare Fe3+ Al3+ Cr3+ --quantity radius", cli_compare},
+    {COMMAND_SOURCES, "sources", "", 0, 0,
+     "print every model and data set with its citation",
+     "Prints what every number rests on: models with their domain, data sets "
+     "with their terms and notes, all with their citations.",
+     "sources --format bibtex --output outershell.bib", cli_sources},
+};
+
+const struct command *command_at(int i)
+{
+    assert(i >= 0 && i < COMMAND_COUNT && commands[i].id == (enum command_id)i);
+    return &commands[i];
+}
+
+const struct command *command_find(const char *name)
+{
+    for (int i = 0; i < COMMAND_COUNT; i++)
+        if (commands[i].name && strcmp(commands[i].name, name) == 0)
+            return &commands[i];
+    return NULL;
+}

@@ -1,0 +1,66 @@
+/* SPDX-License-Identifier: MIT */
+/* `compare`: elements or ions side by side. */
+#include <string.h>
+
+#include "cli/commands.h"
+#include "cli/output.h"
+#include "export/compare.h"
+#include "study/facts.h"
+
+static bool is_wanted(const struct request *r,
+                      const struct comparison_line *line)
+{
+    bool quantity = false;
+    for (int i = 0; i < r->quantity_count; i++)
+        quantity = quantity || r->quantities[i] == line->quantity;
+    if (!quantity || !line->provenance->computed)
+        return quantity;
+    for (int m = 0; m < r->model_count; m++)
+        if (strcmp(r->models[m]->id, line->provenance->id) == 0)
+            return true;
+    return false;
+}
+
+/* Keeps the lines that were asked for, in the order of the quantities asked
+ * for. */
+static void keep_wanted(const struct request *r, struct comparison *c)
+{
+    int kept = 0;
+    for (int i = 0; i < c->line_count; i++)
+        if (is_wanted(r, &c->lines[i]))
+            c->lines[kept++] = c->lines[i];
+    c->line_count = kept;
+}
+
+static bool write(const struct request *r, const struct comparison *c,
+                  struct status *st)
+{
+    struct output out;
+    if (!output_open(&out, r, st))
+        return false;
+    bool ok = compare_write(out.stream, r->format, c, st);
+    return output_close(&out, ok, st);
+}
+
+bool cli_compare(struct request *r, struct status *st)
+{
+    struct ask asks[COMPARISON_MAX];
+    struct comparison comparison;
+    if (r->atom_count < 2)
+        return status_fail(st, STATUS_USAGE,
+                           "compare: only one atom chosen; expected 2 to %d",
+                           COMPARISON_MAX);
+    if (r->atom_count > COMPARISON_MAX)
+        return status_fail(st, STATUS_USAGE,
+                           "compare: %d atoms chosen; expected 2 to %d",
+                           r->atom_count, COMPARISON_MAX);
+    for (int a = 0; a < r->atom_count; a++)
+        asks[a] = request_ask(r, a, r->quantities[0], NULL);
+    if (!output_check(r, st) || !study_compare(r->study, asks, r->atom_count,
+                                               true, r->units, &comparison, st))
+        return false;
+    keep_wanted(r, &comparison);
+    bool ok = write(r, &comparison, st);
+    comparison_clear(&comparison);
+    return ok;
+}

@@ -1,0 +1,76 @@
+/* SPDX-License-Identifier: MIT */
+/* `list`: one row per element, quantity and model. */
+#include <stdlib.h>
+
+#include "cli/commands.h"
+#include "cli/output.h"
+#include "export/rows.h"
+
+/* Rows being gathered, in the order of the output. */
+struct gathered {
+    struct row *rows;
+    size_t count;
+};
+
+static size_t models_for(const struct request *r, enum quantity_id quantity)
+{
+    size_t count = 0;
+    for (int m = 0; m < r->model_count; m++)
+        if (model_offer_for(r->models[m], quantity, NULL) >= 0)
+            count++;
+    return count;
+}
+
+static size_t rows_wanted(const struct request *r)
+{
+    size_t per_atom = 0;
+    for (int q = 0; q < r->quantity_count; q++) {
+        size_t models = models_for(r, r->quantities[q]);
+        per_atom += models ? models : 1;
+    }
+    return per_atom * (size_t)r->atom_count;
+}
+
+/* The rows of one atom and quantity: one per model that offers it, or the
+ * stored value alone where none does. */
+static bool gather(struct request *r, int atom, enum quantity_id quantity,
+                   struct gathered *g, struct status *st)
+{
+    if (models_for(r, quantity) == 0) {
+        struct ask ask = request_ask(r, atom, quantity, NULL);
+        return study_row_now(r->study, &ask, &g->rows[g->count++], st);
+    }
+    for (int m = 0; m < r->model_count; m++) {
+        if (model_offer_for(r->models[m], quantity, NULL) < 0)
+            continue;
+        struct ask ask = request_ask(r, atom, quantity, r->models[m]);
+        if (!study_row_now(r->study, &ask, &g->rows[g->count++], st))
+            return false;
+    }
+    return true;
+}
+
+static bool gather_all(struct request *r, struct gathered *g, struct status *st)
+{
+    for (int a = 0; a < r->atom_count; a++)
+        for (int q = 0; q < r->quantity_count; q++)
+            if (!gather(r, a, r->quantities[q], g, st))
+                return false;
+    return true;
+}
+
+bool cli_list(struct request *r, struct status *st)
+{
+    struct output out;
+    struct gathered g = {calloc(rows_wanted(r), sizeof *g.rows), 0};
+    if (!g.rows)
+        return status_fail(st, STATUS_MEMORY, "out of memory");
+    bool ok = output_check(r, st) && gather_all(r, &g, st) &&
+              output_open(&out, r, st);
+    if (ok) {
+        ok = rows_write(out.stream, r->format, g.rows, g.count, st);
+        ok = output_close(&out, ok, st);
+    }
+    free(g.rows);
+    return ok;
+}

@@ -1,0 +1,96 @@
+/* SPDX-License-Identifier: MIT */
+#include "cli/option.h"
+
+#include <assert.h>
+#include <string.h>
+
+#define ON(command) (1u << (command))
+#define SCREENS ON(COMMAND_SCREENS)
+#define LIST ON(COMMAND_LIST)
+#define COMPARE ON(COMMAND_COMPARE)
+#define SOURCES ON(COMMAND_SOURCES)
+#define ANY_COMMAND (LIST | COMPARE | SOURCES)
+#define EVERYWHERE (ANY_COMMAND | SCREENS)
+
+/* A new option is one row here and one enumerator; a command that takes it
+ * adds its bit. */
+static const struct option options[OPTION_COUNT] = {
+    {OPTION_QUANTITY, "quantity", 'q', "IDS", OPTION_VALUE, WORDS_QUANTITY,
+     true, LIST | COMPARE,
+     "quantities to show, parted by commas (list: zeff,radius,ionization; "
+     "compare: all)"},
+    {OPTION_MODEL, "model", 'm', "IDS", OPTION_VALUE, WORDS_MODEL, true,
+     LIST | COMPARE, "models to ask, parted by commas (default: all)"},
+    {OPTION_CHARGE, "charge", 'c', "N", OPTION_VALUE, WORDS_NONE, false,
+     LIST | COMPARE,
+     "charge of every chosen element that carries none itself, such as 2 or -1 "
+     "(default: 0)"},
+    {OPTION_SUBSHELL, "subshell", 's', "NL", OPTION_VALUE, WORDS_SUBSHELL,
+     false, LIST, "subshell asked about, such as 3d (default: the outermost)"},
+    {OPTION_CONFIGURATION, "configuration", 'C', "TEXT", OPTION_VALUE,
+     WORDS_NONE, false, LIST | COMPARE,
+     "electron configuration in place of the ground state, such as "
+     "'[Ar] 3d6 4s2'"},
+    {OPTION_REFERENCE, "reference", 'r', "SETS", OPTION_VALUE, WORDS_REFERENCE,
+     true, LIST,
+     "stored data sets to compare with, at most one per quantity (default: the "
+     "first with the model's own definition)"},
+    {OPTION_UNIT, "unit", 'u', "UNITS", OPTION_VALUE, WORDS_UNIT, true,
+     LIST | COMPARE,
+     "units to print in, at most one per kind of quantity (default: pm, eV)"},
+    {OPTION_DATA, "data", 'd', "FILE", OPTION_REPEAT, WORDS_FILE, false,
+     EVERYWHERE,
+     "add a data set of your own, in the form of outershell-data(5); may be "
+     "repeated"},
+    {OPTION_FORMAT, "format", 'f', "FORMAT", OPTION_VALUE, WORDS_FORMAT, false,
+     ANY_COMMAND,
+     "text, csv or json; sources also writes bibtex (default: text)"},
+    {OPTION_OUTPUT, "output", 'o', "FILE", OPTION_VALUE, WORDS_FILE, false,
+     ANY_COMMAND,
+     "write to a new file, whole or not at all (default, or with -: standard "
+     "output)"},
+    {OPTION_FORCE, "force", 'F', NULL, OPTION_FLAG, WORDS_NONE, false,
+     ANY_COMMAND, "let --output replace a file that exists"},
+    {OPTION_COLOR, "color", 0, "WHEN", OPTION_VALUE, WORDS_COLOR, false,
+     EVERYWHERE,
+     "auto, always or never (default: auto, on a terminal unless NO_COLOR is "
+     "set)"},
+    {OPTION_ASCII, "ascii", 'a', NULL, OPTION_FLAG, WORDS_NONE, false,
+     EVERYWHERE, "print and draw with ASCII characters alone"},
+    {OPTION_BACKGROUND, "background", 0, "KIND", OPTION_VALUE, WORDS_BACKGROUND,
+     false, EVERYWHERE,
+     "dark or light, what the terminal's background is (default: either will "
+     "do)"},
+    {OPTION_HELP, "help", 'h', NULL, OPTION_FLAG, WORDS_NONE, false, EVERYWHERE,
+     "print help, for a command where one is named, and end"},
+    {OPTION_VERSION, "version", 'V', NULL, OPTION_FLAG, WORDS_NONE, false,
+     EVERYWHERE, "print version, licence and data sets, and end"},
+};
+
+const struct option *option_at(int i)
+{
+    assert(i >= 0 && i < OPTION_COUNT && options[i].id == (enum option_id)i);
+    return &options[i];
+}
+
+const struct option *option_by_name(const char *name, size_t length)
+{
+    for (int i = 0; i < OPTION_COUNT; i++)
+        if (strlen(options[i].name) == length &&
+            memcmp(options[i].name, name, length) == 0)
+            return &options[i];
+    return NULL;
+}
+
+const struct option *option_by_letter(char letter)
+{
+    for (int i = 0; letter && i < OPTION_COUNT; i++)
+        if (options[i].letter == letter)
+            return &options[i];
+    return NULL;
+}
+
+bool option_belongs(const struct option *option, enum command_id command)
+{
+    return option->commands & ON(command);
+}

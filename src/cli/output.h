@@ -1,0 +1,28 @@
+/* SPDX-License-Identifier: MIT */
+/* Where a command writes: standard output, or a new file, whole or not at
+ * all. */
+#ifndef CLI_OUTPUT_H
+#define CLI_OUTPUT_H
+
+#include "base/file.h"
+#include "cli/request.h"
+
+struct output {
+    FILE *stream;
+    struct file_draft draft;
+    bool to_file;
+};
+
+/* Refuses a target that cannot be written before the work is done for it:
+ * exists already, no such folder. Leaves nothing behind. */
+MUST_CHECK bool output_check(const struct request *request, struct status *st);
+
+MUST_CHECK bool output_open(struct output *output,
+                            const struct request *request, struct status *st);
+
+/* Ends the output. With ok the file gets its name, or standard output is
+ * flushed and every write error reported (STATUS_FILE); without, the file is
+ * dropped and st stays as it is. Gives whether all went well. */
+MUST_CHECK bool output_close(struct output *output, bool ok, struct status *st);
+
+#endif

@@ -1,0 +1,366 @@
+/* SPDX-License-Identifier: MIT */
+#include "cli/request.h"
+
+#include <assert.h>
+#include <string.h>
+
+#include "cli/choose.h"
+#include "cli/words.h"
+#include "element/subshell.h"
+
+static const char *given(const struct request *r, enum option_id id)
+{
+    return r->call->value[id];
+}
+
+/* Place of a word among those of the option's kind, -1 with st filled when it
+ * is none of them. */
+static int place_of(const struct request *r, enum option_id id,
+                    const char *word, struct status *st)
+{
+    const struct option *option = option_at((int)id);
+    struct words words;
+    const struct reference_list *references =
+        r->study ? study_references(r->study) : NULL;
+    words_fill(&words, option->words, references);
+    for (int i = 0; i < words.count; i++)
+        if (strcmp(words.items[i], word) == 0)
+            return i;
+    word_refuse(option, word, &words, st);
+    return -1;
+}
+
+static bool too_long(enum option_id id, const char *list, struct status *st)
+{
+    return status_fail(st, STATUS_USAGE, "--%s %.20s...: no such word",
+                       option_at((int)id)->name, list);
+}
+
+static bool twice(enum option_id id, const char *word, struct status *st)
+{
+    return status_fail(st, STATUS_USAGE, "--%s %s: named twice",
+                       option_at((int)id)->name, word);
+}
+
+static bool read_quantities(struct request *r, struct status *st)
+{
+    static const enum quantity_id usual[] = {QUANTITY_ZEFF, QUANTITY_RADIUS,
+                                             QUANTITY_IONIZATION};
+    const char *list = given(r, OPTION_QUANTITY);
+    char word[WORD_TEXT_MAX];
+    r->has_quantities = list != NULL;
+    if (!list && r->call->command->id == COMMAND_LIST) {
+        memcpy(r->quantities, usual, sizeof usual);
+        r->quantity_count = sizeof usual / sizeof usual[0];
+    } else if (!list) {
+        for (int q = 0; q < QUANTITY_COUNT; q++)
+            r->quantities[r->quantity_count++] = (enum quantity_id)q;
+    }
+    while (list) {
+        if (!words_next(&list, word))
+            return too_long(OPTION_QUANTITY, list, st);
+        int q = place_of(r, OPTION_QUANTITY, word, st);
+        if (q < 0)
+            return false;
+        for (int i = 0; i < r->quantity_count; i++)
+            if (r->quantities[i] == (enum quantity_id)q)
+                return twice(OPTION_QUANTITY, word, st);
+        r->quantities[r->quantity_count++] = (enum quantity_id)q;
+    }
+    return true;
+}
+
+static bool offers_any(const struct request *r, const struct model *model)
+{
+    for (int i = 0; i < r->quantity_count; i++)
+        if (model_offer_for(model, r->quantities[i], NULL) >= 0)
+            return true;
+    return false;
+}
+
+static bool offered(const struct request *r, enum quantity_id quantity)
+{
+    for (int i = 0; i < r->model_count; i++)
+        if (model_offer_for(r->models[i], quantity, NULL) >= 0)
+            return true;
+    return false;
+}
+
+/* Models were named: each must give one of the quantities, and each quantity
+ * must be given by one of them. */
+static bool check_models(const struct request *r, struct status *st)
+{
+    char text[WORD_LIST_TEXT_MAX];
+    const char *names[REQUEST_MODEL_MAX];
+    for (int m = 0; m < r->model_count; m++) {
+        int count = 0;
+        if (offers_any(r, r->models[m]))
+            continue;
+        struct text t = text_over(text, sizeof text);
+        for (int q = 0; q < QUANTITY_COUNT; q++)
+            if (model_offer_for(r->models[m], (enum quantity_id)q, NULL) >= 0)
+                names[count++] = quantity_at((enum quantity_id)q)->id;
+        words_join(&t, names, count, "and");
+        return status_fail(st, STATUS_USAGE,
+                           "--model %s: gives none of the quantities asked "
+                           "for; it gives %s",
+                           r->models[m]->id, text);
+    }
+    for (int i = 0; r->has_quantities && i < r->quantity_count; i++) {
+        enum quantity_id q = r->quantities[i];
+        int count = 0;
+        if (offered(r, q))
+            continue;
+        struct text t = text_over(text, sizeof text);
+        for (int m = 0; m < model_count(); m++)
+            if (model_offer_for(model_at(m), q, NULL) >= 0)
+                names[count++] = model_at(m)->id;
+        words_join(&t, names, count, "and");
+        return status_fail(
+            st, STATUS_USAGE,
+            "--quantity %s: given by none of the models named; "
+            "%s%s",
+            quantity_at(q)->id,
+            count ? "models that give it: " : "only stored values exist", text);
+    }
+    return true;
+}
+
+static bool read_models(struct request *r, struct status *st)
+{
+    const char *list = given(r, OPTION_MODEL);
+    char word[WORD_TEXT_MAX];
+    r->has_models = list != NULL;
+    assert(model_count() <= REQUEST_MODEL_MAX);
+    for (int m = 0; !list && m < model_count(); m++)
+        r->models[r->model_count++] = model_at(m);
+    while (list) {
+        if (!words_next(&list, word))
+            return too_long(OPTION_MODEL, list, st);
+        int m = place_of(r, OPTION_MODEL, word, st);
+        if (m < 0)
+            return false;
+        for (int i = 0; i < r->model_count; i++)
+            if (r->models[i] == model_at(m))
+                return twice(OPTION_MODEL, word, st);
+        r->models[r->model_count++] = model_at(m);
+    }
+    return !r->has_models || check_models(r, st);
+}
+
+/* Writes the ids of the chosen quantities. */
+static void quantity_names(const struct request *r, struct text *t)
+{
+    const char *names[QUANTITY_COUNT];
+    for (int i = 0; i < r->quantity_count; i++)
+        names[i] = quantity_at(r->quantities[i])->id;
+    words_join(t, names, r->quantity_count, "and");
+}
+
+static bool is_chosen(const struct request *r, enum quantity_id quantity)
+{
+    for (int i = 0; i < r->quantity_count; i++)
+        if (r->quantities[i] == quantity)
+            return true;
+    return false;
+}
+
+static bool read_references(struct request *r, struct status *st)
+{
+    const char *list = given(r, OPTION_REFERENCE);
+    char word[WORD_TEXT_MAX];
+    char text[WORD_LIST_TEXT_MAX];
+    while (list) {
+        if (!words_next(&list, word))
+            return too_long(OPTION_REFERENCE, list, st);
+        if (place_of(r, OPTION_REFERENCE, word, st) < 0)
+            return false;
+        const struct reference *found =
+            reference_find(study_references(r->study), word);
+        struct text t = text_over(text, sizeof text);
+        quantity_names(r, &t);
+        if (!is_chosen(r, found->quantity))
+            return status_fail(st, STATUS_USAGE,
+                               "--reference %s: holds %s, but the quantities "
+                               "asked for are %s",
+                               word, quantity_at(found->quantity)->id, text);
+        const struct reference **slot = &r->references[found->quantity];
+        if (*slot == found)
+            return twice(OPTION_REFERENCE, word, st);
+        if (*slot)
+            return status_fail(st, STATUS_USAGE,
+                               "--reference %s: contradicts %s; expected one "
+                               "set for %s",
+                               word, (*slot)->provenance->id,
+                               quantity_at(found->quantity)->id);
+        *slot = found;
+    }
+    return true;
+}
+
+static bool fits_any(const struct request *r, enum dimension dimension)
+{
+    for (int i = 0; i < r->quantity_count; i++)
+        if (quantity_at(r->quantities[i])->dimension == dimension)
+            return true;
+    return false;
+}
+
+static bool read_units(struct request *r, struct status *st)
+{
+    const char *list = given(r, OPTION_UNIT);
+    char word[WORD_TEXT_MAX];
+    char text[WORD_LIST_TEXT_MAX];
+    while (list) {
+        if (!words_next(&list, word))
+            return too_long(OPTION_UNIT, list, st);
+        if (place_of(r, OPTION_UNIT, word, st) < 0)
+            return false;
+        const struct unit *unit = unit_find(word);
+        struct text t = text_over(text, sizeof text);
+        quantity_names(r, &t);
+        if (!fits_any(r, unit->dimension))
+            return status_fail(
+                st, STATUS_USAGE,
+                "--unit %s: a unit of %s fits none of the "
+                "quantities asked for, %s",
+                word, unit->dimension == DIMENSION_LENGTH ? "length" : "energy",
+                text);
+        const struct unit **slot = &r->units[unit->dimension];
+        if (*slot == unit)
+            return twice(OPTION_UNIT, word, st);
+        if (*slot)
+            return status_fail(st, STATUS_USAGE,
+                               "--unit %s: contradicts %s; expected one unit "
+                               "of each kind",
+                               word, (*slot)->id);
+        *slot = unit;
+    }
+    return true;
+}
+
+static bool read_subshell(struct request *r, struct status *st)
+{
+    const char *text = given(r, OPTION_SUBSHELL);
+    char names[WORD_LIST_TEXT_MAX];
+    if (!text)
+        return true;
+    if (!subshell_parse(text, &r->n, &r->l))
+        return status_fail(st, STATUS_USAGE,
+                           "--subshell %s: not a subshell; expected one from "
+                           "1s to 8f, such as 3d",
+                           text);
+    for (int i = 0; i < r->quantity_count; i++)
+        if (quantity_at(r->quantities[i])->per_subshell)
+            return true;
+    struct text t = text_over(names, sizeof names);
+    quantity_names(r, &t);
+    return status_fail(st, STATUS_USAGE,
+                       "--subshell %s: %s has no subshells; expected zeff or "
+                       "radius among the quantities",
+                       text, names);
+}
+
+static bool read_configuration(struct request *r, struct status *st)
+{
+    const char *text = given(r, OPTION_CONFIGURATION);
+    if (!text)
+        return true;
+    r->has_configuration = true;
+    if (!configuration_parse(text, &r->configuration, st))
+        return status_context(st, "--configuration");
+    if (r->call->operand_count == 0)
+        return status_fail(st, STATUS_USAGE,
+                           "--configuration %s: expected the element or ion "
+                           "that it belongs to",
+                           text);
+    return true;
+}
+
+/* An option that is one word out of a few: *choice becomes its place, or stays
+ * what it is when the option was not given. */
+static bool read_choice(const struct request *r, enum option_id id, int *choice,
+                        struct status *st)
+{
+    const char *word = given(r, id);
+    if (!word)
+        return true;
+    *choice = place_of(r, id, word, st);
+    return *choice >= 0;
+}
+
+static bool read_output(struct request *r, struct status *st)
+{
+    int format = EXPORT_TEXT;
+    int color = COLOR_AUTO;
+    int background = BACKGROUND_UNKNOWN;
+    if (!read_choice(r, OPTION_FORMAT, &format, st) ||
+        !read_choice(r, OPTION_COLOR, &color, st) ||
+        !read_choice(r, OPTION_BACKGROUND, &background, st))
+        return false;
+    r->background = (enum background)background;
+    r->bibtex = format > EXPORT_JSON;
+    r->format = r->bibtex ? EXPORT_TEXT : (enum export_format)format;
+    if (r->bibtex && r->call->command->id != COMMAND_SOURCES)
+        return status_fail(st, STATUS_USAGE,
+                           "--format bibtex: only sources writes it; expected "
+                           "text, csv or json");
+    r->color = (enum color_choice)color;
+    r->ascii = given(r, OPTION_ASCII) != NULL;
+    r->force = given(r, OPTION_FORCE) != NULL;
+    r->output = given(r, OPTION_OUTPUT);
+    if (r->output && r->output[0] == '\0')
+        return status_fail(st, STATUS_USAGE,
+                           "--output: the file name is empty");
+    if (r->output && strcmp(r->output, "-") == 0)
+        r->output = NULL;
+    if (r->force && !r->output)
+        return status_fail(st, STATUS_USAGE,
+                           "--force: nothing to replace without --output FILE");
+    return true;
+}
+
+static bool read_data(struct request *r, struct status *st)
+{
+    for (int i = 0; i < r->call->repeat_count; i++)
+        if (!catalogue_add_file(&r->catalogue, r->call->repeats[i].value, st))
+            return status_context(st, "--data");
+    r->study = study_new(&r->catalogue, st);
+    return r->study;
+}
+
+bool request_open(struct request *r, const struct call *call, struct status *st)
+{
+    *r = (struct request){.call = call};
+    bool chooses = call->command->id == COMMAND_LIST ||
+                   call->command->id == COMMAND_COMPARE;
+    return read_output(r, st) && read_quantities(r, st) && read_models(r, st) &&
+           read_units(r, st) && read_subshell(r, st) &&
+           read_configuration(r, st) && read_data(r, st) &&
+           read_references(r, st) && (!chooses || choose_atoms(r, st));
+}
+
+void request_close(struct request *r)
+{
+    study_free(r->study);
+    catalogue_clear(&r->catalogue);
+}
+
+struct ask request_ask(const struct request *r, int atom,
+                       enum quantity_id quantity, const struct model *model)
+{
+    const struct quantity *q = quantity_at(quantity);
+    struct ask ask = {.z = r->atoms[atom].z,
+                      .charge = r->atoms[atom].charge,
+                      .quantity = quantity,
+                      .model = model,
+                      .reference = r->references[quantity],
+                      .unit = r->units[q->dimension]};
+    if (r->has_configuration)
+        ask.configuration = &r->configuration;
+    if (q->per_subshell) {
+        ask.n = r->n;
+        ask.l = r->l;
+    }
+    return ask;
+}

@@ -1,0 +1,69 @@
+/* SPDX-License-Identifier: MIT */
+/* A call whose every word has been understood: what a command works from. */
+#ifndef CLI_REQUEST_H
+#define CLI_REQUEST_H
+
+#include "base/status.h"
+#include "base/units.h"
+#include "cli/parse.h"
+#include "element/configuration.h"
+#include "element/selection.h"
+#include "export/format.h"
+#include "model/registry.h"
+#include "study/study.h"
+
+#define REQUEST_MODEL_MAX 16
+#define DIMENSION_COUNT (DIMENSION_VOLUME + 1)
+
+/* In the order of the words in words.c. */
+enum color_choice { COLOR_AUTO, COLOR_ALWAYS, COLOR_NEVER };
+enum background { BACKGROUND_DARK, BACKGROUND_LIGHT, BACKGROUND_UNKNOWN };
+
+/* A chosen atom or ion. named: chosen by itself, not as part of a run, a
+ * period, a group, a block or the whole table. */
+struct request_atom {
+    int z;
+    int charge;
+    bool named;
+};
+
+/* quantities and models: those asked for, or the command's default (then
+ * has_… is false). references[quantity], units[dimension]: NULL where none was
+ * chosen. n = 0: the outermost subshell. output: NULL for standard output. */
+struct request {
+    const struct call *call;
+    struct catalogue catalogue;
+    struct study *study;
+    bool has_quantities, has_models, has_configuration;
+    int quantity_count;
+    enum quantity_id quantities[QUANTITY_COUNT];
+    int model_count;
+    const struct model *models[REQUEST_MODEL_MAX];
+    const struct reference *references[QUANTITY_COUNT];
+    const struct unit *units[DIMENSION_COUNT];
+    struct configuration configuration;
+    int n, l;
+    int atom_count;
+    struct request_atom atoms[SELECTION_MAX];
+    enum export_format format;
+    bool bibtex;
+    const char *output;
+    bool force;
+    enum color_choice color;
+    bool ascii;
+    enum background background;
+};
+
+/* Understands a call: loads the user's data sets, opens the study, reads every
+ * option and operand. Fails with STATUS_USAGE naming option and word, with
+ * what would be accepted; STATUS_FILE or STATUS_DATA for a data set;
+ * STATUS_MEMORY. request_close is due either way. */
+MUST_CHECK bool request_open(struct request *request, const struct call *call,
+                             struct status *st);
+void request_close(struct request *request);
+
+/* The question about one chosen atom: quantity and model are left to set. */
+struct ask request_ask(const struct request *request, int atom,
+                       enum quantity_id quantity, const struct model *model);
+
+#endif

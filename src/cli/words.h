@@ -1,0 +1,43 @@
+/* SPDX-License-Identifier: MIT */
+/* The words that options accept, for checks, hints, help and completions. */
+#ifndef CLI_WORDS_H
+#define CLI_WORDS_H
+
+#include "base/status.h"
+#include "base/text.h"
+#include "cli/option.h"
+#include "study/reference.h"
+
+#define WORD_MAX 192           /* words of one kind */
+#define WORD_TEXT_MAX 64       /* one word of a list, terminator included */
+#define WORD_LIST_TEXT_MAX 400 /* what fits into a message */
+
+/* Words of a kind in their order of display; borrowed. */
+struct words {
+    int count;
+    const char *items[WORD_MAX];
+};
+
+/* All words of a kind; none for WORDS_NONE and WORDS_FILE. references may be
+ * NULL for kinds other than WORDS_REFERENCE. */
+void words_fill(struct words *words, enum word_kind kind,
+                const struct reference_list *references);
+
+/* The one of items[count] that a misspelt word may have meant: it starts with
+ * it or differs in at most a third of its letters. NULL when none is near. */
+const char *word_nearest(const char *word, const char *const *items, int count);
+
+/* Writes "a, b or c" with the given last conjunction. */
+void words_join(struct text *t, const char *const *items, int count,
+                const char *conjunction);
+
+/* The next word of a comma list into out; *list moves behind it, to NULL at
+ * the end. False when the word is longer than out. */
+bool words_next(const char **list, char out[WORD_TEXT_MAX]);
+
+/* Refuses a word that is none of its kind, naming option, word, the nearest
+ * word, and all that are accepted as far as they fit. Returns false. */
+bool word_refuse(const struct option *option, const char *word,
+                 const struct words *words, struct status *st);
+
+#endif

@@ -1,0 +1,7 @@
+/* SPDX-License-Identifier: MIT */
+#include "cli/run.h"
+
+int main(int argc, char **argv)
+{
+    return cli_run(argc, argv);
+}
