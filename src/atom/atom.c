@@ -7,6 +7,7 @@
 #include <string.h>
 
 #include "atom/solver.h"
+#include "atom/uniform.h"
 #include "base/units.h"
 #include "numeric/poisson.h"
 
@@ -16,7 +17,8 @@ enum { P = LOBATTO_ORDER, CYCLES_MAX = 200 };
 static const struct {
     double first[2];    /* y of the first point, by equation: the Dirac
                            density has a weak singularity at the origin */
-    double length;      /* of an element */
+    double length[2];   /* of an element; shorter for the derivatives of a
+                           gradient functional */
     double last;        /* y where the mesh ends */
     double reach;       /* bohr, for a start */
     double mixing;      /* of Anderson's extrapolation */
@@ -26,7 +28,7 @@ static const struct {
     double tail;        /* density near the end of the mesh / its maximum */
 } CHOICE = {
     .first = {1e-3, 1e-5},
-    .length = 1.0,
+    .length = {1.0, 0.8},
     .last = 118.0 * 100.0,
     .reach = 45.0,
     .mixing = 0.6,
@@ -50,6 +52,7 @@ static void space_clear(struct atom_space *space)
 {
     radial_free(space->radial);
     mixer_free(space->mixer);
+    gradient_free(space->gradient);
     free(space->block);
     mesh_clear(&space->mesh);
     memset(space, 0, sizeof *space);
@@ -85,6 +88,13 @@ static bool space_make(struct atom_space *space, double first, double length,
     return true;
 }
 
+bool space_gradient(struct atom_space *space, struct status *st)
+{
+    if (!space->gradient)
+        space->gradient = gradient_new(&space->mesh, st);
+    return space->gradient != NULL;
+}
+
 struct atom_solver *atom_solver_new(struct status *st)
 {
     struct atom_solver *solver = calloc(1, sizeof *solver);
@@ -97,8 +107,8 @@ void atom_solver_free(struct atom_solver *solver)
 {
     if (!solver)
         return;
-    space_clear(&solver->space[0]);
-    space_clear(&solver->space[1]);
+    for (int i = 0; i < ATOM_SPACES; i++)
+        space_clear(&solver->space[i]);
     free(solver);
 }
 
@@ -150,15 +160,26 @@ static bool check(const struct configuration *configuration, int Z,
     return true;
 }
 
+static bool has_electrons(const struct atom_solver *s, int channel)
+{
+    for (int i = 0; i < s->count; i++)
+        if (s->level[i].channel == channel)
+            return true;
+    return false;
+}
+
 /* Starts self-consistency over `elements` of the mesh. */
 static void start(struct atom_solver *s, int elements)
 {
     struct atom_space *space = s->now;
     s->elements = elements;
     int points = elements * P + 1;
-    for (int c = 0; c < s->channels; c++)
+    for (int c = 0; c < s->channels; c++) {
+        /* the potential of a channel without electrons has no say */
+        double share = has_electrons(s, c) ? 1.0 / s->channels : 0.0;
         for (int i = 0; i < points; i++)
-            space->weight[c * points + i] = space->mesh.weight[i] / s->channels;
+            space->weight[c * points + i] = share * space->mesh.weight[i];
+    }
     radial_begin(space->radial, s->a2, elements, s->count, s->level);
     int n = s->channels * points;
     mixer_reset(space->mixer, s->a2 > 0.0 ? 2 * n : n, n);
@@ -178,17 +199,21 @@ bool atom_begin(struct atom_solver *solver, int Z,
     s->configuration = *configuration;
     s->options = *options;
     bool dirac = options->relativity == ATOM_DIRAC;
-    s->now = &s->space[dirac];
-    double length =
-        options->element_length > 0.0 ? options->element_length : CHOICE.length;
+    bool gradient =
+        options->functional == ATOM_PBE || options->functional == ATOM_PBE_VWN;
+    s->now = &s->space[2 * gradient + dirac];
+    double length = options->element_length > 0.0 ? options->element_length
+                                                  : CHOICE.length[gradient];
     if (!space_make(s->now, CHOICE.first[dirac], length, st))
+        return false;
+    if (gradient && !space_gradient(s->now, st))
         return false;
     s->c = options->speed_of_light > 0.0 ? options->speed_of_light
                                          : SPEED_OF_LIGHT_AU;
     s->a2 = dirac ? Z / s->c * (Z / s->c) : 0.0;
     s->power = 2.0 * sqrt(1.0 - s->a2);
     s->electrons = configuration_electrons(configuration);
-    s->channels = xc_channels(options->functional);
+    s->channels = options->functional == ATOM_LDA ? 1 : 2;
     s->count = 0;
     for (int spin = 0; spin < s->channels; spin++)
         for (int i = 0; i < configuration->count; i++) {
@@ -221,23 +246,34 @@ double space_integral(const struct atom_solver *solver, const double *f,
 }
 
 /* Exchange and correlation of the density in D, into energy and v. */
-static bool exchange_correlation(struct atom_solver *s)
+static void exchange_correlation(struct atom_solver *s)
 {
     struct atom_space *space = s->now;
     int points = s->elements * P + 1;
     double Z = s->Z, c = s->options.relativity == ATOM_DIRAC ? s->c : 0.0;
+    const double scale = Z * Z * Z / (4.0 * 3.14159265358979323846);
     for (int k = 0; k < s->channels; k++)
         for (int i = 0; i < points; i++) {
             double y = space->mesh.y[i];
-            space->rho[k][i] = Z * Z * Z * space->D[k][i] /
-                               (4.0 * 3.14159265358979323846 * y * y);
+            space->rho[k][i] = scale * space->D[k][i] / (y * y);
         }
-    if (s->channels == 1)
-        xc_lda(points, space->rho[0], c, space->energy, space->v[0]);
-    else
-        xc_lsd(points, space->rho[0], space->rho[1], c, space->energy,
-               space->v[0], space->v[1]);
-    return true;
+    switch (s->options.functional) {
+    case ATOM_LDA:
+        uniform_lda(points, space->rho[0], c, space->energy, space->v[0]);
+        break;
+    case ATOM_LSD:
+        uniform_lsd(points, space->rho[0], space->rho[1], c, space->energy,
+                    space->v[0], space->v[1]);
+        break;
+    case ATOM_PBE:
+    case ATOM_PBE_VWN:
+        gradient_density(space->gradient, Z, s->elements, space->rho[0],
+                         space->rho[1]);
+        gradient_potential(space->gradient,
+                           s->options.functional == ATOM_PBE_VWN, space->energy,
+                           space->v[0], space->v[1]);
+        break;
+    }
 }
 
 /* Total energy of the new density: E = Σ f ε - ∫ D V_in + its own potential

@@ -8,11 +8,15 @@
 
 #include <stdbool.h>
 
-#include "atom/xc.h"
 #include "base/status.h"
 #include "element/configuration.h"
 
 enum { ATOM_LEVELS_MAX = 88 }; /* 26 subshells, by j and by spin */
+
+/* LDA, LSD: uniform gas, Vosko–Wilk–Nusair correlation. PBE: Perdew, Burke,
+ * Ernzerhof, Phys. Rev. Lett. 77, 3865 (1996), spin-polarised. PBE_VWN: the
+ * same with the Vosko–Wilk–Nusair fit as its local correlation. */
+enum atom_functional { ATOM_LDA, ATOM_LSD, ATOM_PBE, ATOM_PBE_VWN };
 
 enum atom_relativity { ATOM_SCHROEDINGER, ATOM_DIRAC };
 

@@ -4,19 +4,20 @@
 #define ATOM_SOLVER_H
 
 #include "atom/atom.h"
+#include "atom/gradient.h"
 #include "numeric/mesh.h"
 #include "numeric/mixer.h"
 #include "numeric/radial.h"
 
-enum { ATOM_CHANNELS = 2, ATOM_PROFILES = 5 };
+enum { ATOM_CHANNELS = 2, ATOM_SPACES = 4 };
 
-/* A mesh and what is sized by it; one for each equation, made when first
- * needed. Arrays are mesh.points long. */
+/* A mesh and what is sized by it; one for each equation and kind of
+ * functional, made when first needed. Arrays are mesh.points long. */
 struct atom_space {
     struct mesh mesh;
     struct radial *radial;
     struct mixer *mixer;
-    struct xc *xc;
+    struct gradient *gradient; /* made when first needed */
     double *q;      /* y V of the trial potential, channel after channel; with
                        the Dirac equation y² dV/dy in the same way behind it */
     double *out;    /* the same from the new density */
@@ -33,7 +34,7 @@ struct atom_space {
 };
 
 struct atom_solver {
-    struct atom_space space[2]; /* by enum atom_relativity */
+    struct atom_space space[ATOM_SPACES]; /* by equation and functional */
     struct atom_space *now;
     int Z;
     struct configuration configuration;
@@ -54,6 +55,9 @@ struct atom_solver {
 
 /* Puts a starting potential into space->q. */
 void start_potential(struct atom_solver *solver);
+
+/* Makes space->gradient if it is not there; STATUS_MEMORY, STATUS_DATA. */
+MUST_CHECK bool space_gradient(struct atom_space *space, struct status *st);
 
 /* Integral over y of a density times a potential-like factor, both at the
  * points, that together go like y^power at the origin. */

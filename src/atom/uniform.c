@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-#include "atom/xc.h"
+#include "atom/uniform.h"
 
 #include <math.h>
 #include <stddef.h>
@@ -7,11 +7,6 @@
 static const double PI = 3.14159265358979323846;
 /* Below this density (electrons/bohr³) nothing is evaluated. */
 static const double RHO_MIN = 1e-30;
-
-int xc_channels(enum atom_functional functional)
-{
-    return functional == ATOM_LDA ? 1 : 2;
-}
 
 /* One of the three fits of Vosko, Wilk, Nusair, equation 4.4, x = √r_s. */
 struct fit {
@@ -68,7 +63,7 @@ static double root_rs(double rho)
     return sqrt(cbrt(3.0 / (4.0 * PI * rho)));
 }
 
-void xc_lda(int n, const double *rho, double c, double *energy, double *v)
+void uniform_lda(int n, const double *rho, double c, double *energy, double *v)
 {
     for (int i = 0; i < n; i++) {
         if (!(rho[i] > RHO_MIN)) {
@@ -109,8 +104,8 @@ static double correlation(double x, double zeta, double *by_x, double *by_zeta)
     return p + stiff * gs + (ferro - p) * gf;
 }
 
-void xc_lsd(int n, const double *up, const double *down, double c,
-            double *energy, double *v_up, double *v_down)
+void uniform_lsd(int n, const double *up, const double *down, double c,
+                 double *energy, double *v_up, double *v_down)
 {
     for (int i = 0; i < n; i++) {
         double rho = up[i] + down[i];

@@ -1,0 +1,277 @@
+/* SPDX-License-Identifier: MIT */
+#include "atom/hybrid.h"
+
+#include <assert.h>
+#include <math.h>
+#include <stdint.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "atom/solver.h"
+#include "atom/term.h"
+
+enum { P = LOBATTO_ORDER, K_MAX = 2 * L_MAX, SHELLS = 2 * SUBSHELL_MAX };
+
+/* Part of exact exchange. */
+static const double QUARTER = 0.25;
+
+/* A subshell in one spin channel: its electrons and large component, averaged
+ * over j by 2j+1 and normalised. */
+struct shell {
+    int n, l, spin;
+    double f;
+    double *p;
+};
+
+struct hybrid {
+    const struct atom_solver *solver;
+    int points, capacity, count;
+    struct shell shell[SHELLS];
+    double *p;               /* functions of the shells */
+    double *up[K_MAX + 1];   /* y^k, slope and length included */
+    double *down[K_MAX + 1]; /* y^(-k-1), weight included */
+    double *tau[2], *one, *two, *three;
+    double *block;
+};
+
+struct hybrid *hybrid_new(struct status *st)
+{
+    struct hybrid *h = calloc(1, sizeof *h);
+    if (!h)
+        status_fail(st, STATUS_MEMORY, "hybrid energy");
+    return h;
+}
+
+void hybrid_free(struct hybrid *hybrid)
+{
+    if (!hybrid)
+        return;
+    free(hybrid->block);
+    free(hybrid);
+}
+
+/* Work space for the mesh of a solver, with its tables. */
+static bool prepare(struct hybrid *h, const struct atom_solver *solver,
+                    struct status *st)
+{
+    const struct mesh *mesh = &solver->now->mesh;
+    h->solver = solver;
+    h->points = solver->elements * P + 1;
+    if (h->capacity == mesh->points)
+        return true;
+    size_t n = (size_t)mesh->points;
+    free(h->block);
+    h->capacity = 0;
+    h->block = calloc(n * (SHELLS + 2 * (K_MAX + 1) + 5), sizeof *h->block);
+    if (!h->block)
+        return status_fail(st, STATUS_MEMORY, "hybrid energy on %zu points", n);
+    h->capacity = mesh->points;
+    double *at = h->block;
+    h->p = at;
+    at += n * SHELLS;
+    for (int k = 0; k <= K_MAX; k++, at += 2 * n) {
+        h->up[k] = at;
+        h->down[k] = at + n;
+        for (int i = 0; i < mesh->points; i++) {
+            h->up[k][i] =
+                0.5 * mesh->length * mesh->slope[i] * pow(mesh->y[i], k);
+            h->down[k][i] = mesh->weight_y[i] * pow(mesh->y[i], -k - 1);
+        }
+    }
+    h->tau[0] = at;
+    h->tau[1] = at + n;
+    h->one = at + 2 * n;
+    h->two = at + 3 * n;
+    h->three = at + 4 * n;
+    return true;
+}
+
+/* Adds f/(8π) [ (d(P/y)/dy)² + l(l+1) P²/y⁴ ] to tau, in units of Z⁵. */
+static void add_kinetic(struct hybrid *h, double f, int l, const double *p,
+                        double *tau)
+{
+    const struct mesh *mesh = &h->solver->now->mesh;
+    double *slope = h->two, factor = f / (8.0 * 3.14159265358979323846);
+    mesh_derivative(mesh, h->solver->elements, p, slope, NULL);
+    for (int i = 0; i < h->points; i++) {
+        double y = mesh->y[i];
+        double d = (slope[i] / mesh->slope[i] - p[i] / y) / y;
+        double a = p[i] / (y * y);
+        tau[i] += factor * (d * d + l * (l + 1.0) * a * a);
+    }
+}
+
+/* Fills the shells and the kinetic energy densities. */
+static void take_shells(struct hybrid *h)
+{
+    const struct atom_solver *s = h->solver;
+    const struct mesh *mesh = &s->now->mesh;
+    h->count = 0;
+    memset(h->tau[0], 0, (size_t)h->points * sizeof(double));
+    memset(h->tau[1], 0, (size_t)h->points * sizeof(double));
+    for (int i = 0; i < s->count; i++) {
+        const struct atom_level *level = &s->label[i];
+        struct shell *a = h->count > 0 ? &h->shell[h->count - 1] : NULL;
+        if (!a || a->n != level->n || a->l != level->l ||
+            a->spin != level->spin) {
+            a = &h->shell[h->count];
+            *a = (struct shell){level->n, level->l, level->spin, 0.0,
+                                h->p + (size_t)h->count * (size_t)h->capacity};
+            h->count++;
+            memset(a->p, 0, (size_t)h->points * sizeof *a->p);
+        }
+        radial_functions(s->now->radial, i, h->one, NULL);
+        add_kinetic(h, level->occ, level->l, h->one,
+                    h->tau[level->spin > 0 ? 0 : 1]);
+        double sign = h->one[P] < 0.0 ? -1.0 : 1.0;
+        for (int k = 0; k < h->points; k++)
+            a->p[k] += sign * level->occ * h->one[k];
+        a->f += level->occ;
+    }
+    for (int c = 0; c < h->count; c++) {
+        double norm = 0.0, *p = h->shell[c].p;
+        for (int k = 0; k < h->points; k++)
+            norm += mesh->weight_y[k] * p[k] * p[k];
+        norm = 1.0 / sqrt(norm);
+        for (int k = 0; k < h->points; k++)
+            p[k] *= norm;
+    }
+}
+
+/* ∫∫ ρ(s) ρ(y) s_<^k / s_>^(k+1), ρ = a b, by half of the double integral. */
+static double repulsion(struct hybrid *h, const double *a, const double *b,
+                        int k)
+{
+    const struct mesh *mesh = &h->solver->now->mesh;
+    const double *up = h->up[k], *down = h->down[k];
+    double total = 0.0, sum = 0.0;
+    for (int e = 0; e < h->solver->elements; e++) {
+        double f[LOBATTO_POINTS], g[LOBATTO_POINTS];
+        for (int j = 0; j <= P; j++) {
+            int at = e * P + j;
+            f[j] = a[at] * b[at];
+            g[j] = f[j] * up[at];
+        }
+        for (int i = 1; i <= P; i++) {
+            double part = 0.0;
+            for (int j = 0; j <= P; j++)
+                part += mesh->rule.cumulative[i][j] * g[j];
+            sum += f[i] * down[e * P + i] * (total + part);
+            if (i == P)
+                total += part;
+        }
+    }
+    return 2.0 * sum;
+}
+
+static double exact_exchange(struct hybrid *h)
+{
+    double sum = 0.0;
+    for (int i = 0; i < h->count; i++) {
+        const struct shell *a = &h->shell[i];
+        int l = a->l;
+        sum += 0.5 * a->f * repulsion(h, a->p, a->p, 0);
+        double pairs = 0.5 * a->f * (a->f - 1.0);
+        if (a->f < 1.0)
+            pairs = 0.0;
+        for (int k = 2; k <= 2 * l && pairs > 0.0; k += 2)
+            sum += pairs * (2 * l + 1) / (2.0 * l) * term_three_j(l, k, l) *
+                   repulsion(h, a->p, a->p, k);
+        for (int j = 0; j < i; j++) {
+            const struct shell *b = &h->shell[j];
+            if (b->spin != a->spin)
+                continue;
+            for (int k = abs(l - b->l); k <= l + b->l; k += 2)
+                sum += a->f * b->f * term_three_j(l, k, b->l) *
+                       repulsion(h, a->p, b->p, k);
+        }
+    }
+    return -sum * h->solver->Z;
+}
+
+double hybrid_slater(const struct hybrid *hybrid, int n, int l, int k)
+{
+    double sum = 0.0, f = 0.0;
+    struct hybrid *h = (struct hybrid *)(uintptr_t)hybrid;
+    for (int i = 0; i < h->count; i++)
+        if (h->shell[i].n == n && h->shell[i].l == l) {
+            const double *p = h->shell[i].p;
+            sum += h->shell[i].f * repulsion(h, p, p, k);
+            f += h->shell[i].f;
+        }
+    return f > 0.0 ? h->solver->Z * sum / f : 0.0;
+}
+
+double atom_zeta(const struct atom_solver *solver, int n, int l)
+{
+    double sum = 0.0, occ = 0.0;
+    for (int i = 0; i < solver->count; i++) {
+        const struct atom_level *level = &solver->label[i];
+        if (level->n != n || level->l != l || l == 0)
+            continue;
+        double sign = level->twice_j > 2 * l ? 1.0 : -1.0;
+        /* both levels of a spin have occupations in the ratio of 2j+1 */
+        double f = level->occ * (2 * l + 1) / (0.5 * (level->twice_j + 1));
+        sum += sign * f * level->energy / (l + 0.5);
+        occ += 0.5 * f;
+    }
+    return occ > 0.0 ? sum / occ : 0.0;
+}
+
+/* ΔLS of all open d and f subshells. */
+static double term_shift(struct hybrid *h)
+{
+    double sum = 0.0;
+    const struct configuration *c = &h->solver->configuration;
+    for (int i = 0; i < c->count; i++) {
+        const struct subshell *s = &c->shells[i];
+        if (s->l < 2 || s->occ > 4 * s->l + 1.5)
+            continue;
+        double f2 = hybrid_slater(h, s->n, s->l, 2);
+        double f4 = hybrid_slater(h, s->n, s->l, 4);
+        double f6 = s->l > 2 ? hybrid_slater(h, s->n, s->l, 6) : 0.0;
+        sum += term_hund_shift(s->l, (int)lround(s->occ), f2, f4, f6);
+    }
+    return sum;
+}
+
+static double weigh(const struct hybrid *h, const double *energy)
+{
+    const struct atom_space *space = h->solver->now;
+    double sum = 0.0;
+    for (int i = 0; i < h->points; i++)
+        sum += space->mesh.weight_y[i] * space->total[i] * energy[i];
+    return sum;
+}
+
+bool hybrid_evaluate(struct hybrid *hybrid, struct atom_solver *solver,
+                     struct hybrid_energy *energy, struct status *st)
+{
+    struct hybrid *h = hybrid;
+    struct atom_space *space = solver->now;
+    assert(solver->state == ATOM_CONVERGED && solver->channels == 2);
+    if (!prepare(h, solver, st) || !space_gradient(space, st))
+        return false;
+    take_shells(h);
+    double Z = solver->Z, z5 = Z * Z * Z * Z * Z;
+    for (int c = 0; c < 2; c++)
+        for (int i = 0; i < h->points; i++)
+            h->tau[c][i] *= z5;
+    gradient_density(space->gradient, Z, solver->elements, space->rho[0],
+                     space->rho[1]);
+    gradient_exchange(space->gradient, h->one);
+    energy->exchange_pbe = weigh(h, h->one);
+    gradient_correlation(space->gradient, false, h->one);
+    energy->correlation_pbe = weigh(h, h->one);
+    gradient_meta_correlation(space->gradient, h->tau[0], h->tau[1], h->one);
+    energy->correlation = weigh(h, h->one);
+    energy->exchange_exact = exact_exchange(h);
+    energy->term = term_shift(h);
+    double rest = solver->result.total - solver->result.xc;
+    energy->lsd = solver->result.total;
+    energy->pbe = rest + energy->exchange_pbe + energy->correlation_pbe;
+    energy->total = rest + (1.0 - QUARTER) * energy->exchange_pbe +
+                    QUARTER * (energy->exchange_exact + energy->term) +
+                    energy->correlation;
+    return true;
+}

@@ -1,0 +1,45 @@
+/* SPDX-License-Identifier: MIT */
+/* A better total energy for a self-consistent spin-polarised atom, evaluated
+ * once on its density and orbitals, with no constant fitted to atoms:
+ *   E = E_kin + E_nuc + E_coul + ¾ E_x[PBE] + ¼ (E_x[exact] + ΔLS)
+ *       + E_c[revTPSS].
+ * The quarter is that of J. P. Perdew, M. Ernzerhof, K. Burke, J. Chem. Phys.
+ * 105, 9982 (1996), doi 10.1063/1.472933. Hartree. */
+#ifndef ATOM_HYBRID_H
+#define ATOM_HYBRID_H
+
+#include "atom/atom.h"
+
+struct hybrid_energy {
+    double total;
+    double lsd, pbe;        /* totals on the same density */
+    double exchange_pbe;    /* E_x[PBE] */
+    double exchange_exact;  /* E_x of spherically averaged shells */
+    double correlation;     /* E_c[revTPSS] */
+    double correlation_pbe; /* E_c[PBE] */
+    double term;            /* ΔLS */
+};
+
+/* Work space, made for the first solver it is used with and grown when
+ * needed. NULL with STATUS_MEMORY. */
+struct hybrid;
+MUST_CHECK struct hybrid *hybrid_new(struct status *st);
+void hybrid_free(struct hybrid *hybrid);
+
+/* Evaluates the energies of a solver that is in ATOM_CONVERGED with two spin
+ * channels. Fails with STATUS_MEMORY, STATUS_DATA (no functional). */
+MUST_CHECK bool hybrid_evaluate(struct hybrid *hybrid,
+                                struct atom_solver *solver,
+                                struct hybrid_energy *energy,
+                                struct status *st);
+
+/* Slater integral F^k of one subshell of the atom evaluated last, for the
+ * average of its spins by occupation; hartree. 0 when it is not occupied. */
+double hybrid_slater(const struct hybrid *hybrid, int n, int l, int k);
+
+/* Spin–orbit parameter ζ = (ε(l+½) - ε(l-½))/(l+½) of a subshell of an atom
+ * solved with the Dirac equation, averaged over spins by occupation;
+ * hartree. 0 for l = 0 and empty subshells. */
+double atom_zeta(const struct atom_solver *solver, int n, int l);
+
+#endif
