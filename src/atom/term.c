@@ -107,18 +107,43 @@ static int hund_l(int l, int electrons)
     return n * (2 * l + 1 - n) / 2;
 }
 
+/* L, S and J of the ground level, from the term as far as it is known; what is
+ * missing by Hund's rules where one subshell with l > 0 is open. */
+static bool quantum_numbers(const struct open_subshell *open, int count,
+                            const struct term *term, double *l, double *s,
+                            double *j)
+{
+    int orbital = -1, spins = 0;
+    bool several = false;
+    for (int i = 0; i < count; i++) {
+        int half = 2 * open[i].l + 1, n = open[i].electrons;
+        spins += n > half ? 2 * half - n : n;
+        several |= open[i].l > 0 && orbital >= 0;
+        orbital = open[i].l > 0 ? i : orbital;
+    }
+    bool known = term->multiplicity > 0 && term->big_l >= 0;
+    if (orbital < 0 || (several && !known))
+        return false;
+    int n = open[orbital].electrons, half = 2 * open[orbital].l + 1;
+    *l = known ? term->big_l : hund_l(open[orbital].l, n);
+    *s = 0.5 * (known ? term->multiplicity - 1 : spins);
+    if (term->twice_j >= 0) {
+        *j = 0.5 * term->twice_j;
+        return true;
+    }
+    *j = n > half ? *l + *s : fabs(*l - *s);
+    return count == 1;
+}
+
 double term_spin_orbit(const struct open_subshell *open, int count,
                        const struct term *term)
 {
-    bool alone = count == 1;
-    if (alone && open[0].l == 1)
+    double l, s, j, lambda = 0.0;
+    if (count == 1 && open[0].l == 1)
         return p_shift(open[0].electrons, open[0].zeta, open[0].f2);
-    if (term->multiplicity < 2 || term->big_l < 1 || term->twice_j < 0)
+    if (!quantum_numbers(open, count, term, &l, &s, &j) || l < 0.5 || s < 0.25)
         return 0.0;
-    double s = 0.5 * (term->multiplicity - 1), l = term->big_l;
-    double j = 0.5 * term->twice_j;
-    double product = 0.5 * (j * (j + 1.0) - l * (l + 1.0) - s * (s + 1.0)),
-           lambda = 0.0;
+    double product = 0.5 * (j * (j + 1.0) - l * (l + 1.0) - s * (s + 1.0));
     /* Each open subshell in Hund's term, its spin parallel to the others': its
      * part is projected on L, as vectors are. */
     for (int i = 0; i < count; i++) {

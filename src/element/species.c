@@ -43,6 +43,12 @@ bool term_parse(const char *text, struct term *term)
         term->twice_j = parse_j(text + 2);
         return term->twice_j >= 0;
     }
+    /* "(15/2,1/2)*8": the core's J with another's, coupled; only J is kept */
+    const char *end = text[0] == '(' ? strchr(text, ')') : NULL;
+    if (end) {
+        term->twice_j = parse_j(end[1] == '*' ? end + 2 : end + 1);
+        return term->twice_j >= 0;
+    }
     size_t digits = strspn(text, "0123456789");
     const char *letter = text[digits] ? strchr(letters, text[digits]) : NULL;
     if (digits == 0 || digits > 2 || !letter)
