@@ -7,7 +7,7 @@
 
 #include "element/element.h"
 
-#define NEEDED_ROWS 6     /* below this only a sentence fits */
+#define NEEDED_ROWS 6 /* below this only a sentence fits */
 #define NEEDED_COLUMNS 24
 
 struct area {

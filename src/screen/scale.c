@@ -46,16 +46,16 @@ struct scale scale_fit(double *values, int count, bool balance)
     double high = quantile(values, count, 0.95);
     if (balance) {
         double size = fmax(fabs(low), fabs(high));
-        double step = round_up(size > 0.0 ? size / (INNER - 1) * 2.0 : 1.0,
-                               &s.places);
+        double step =
+            round_up(size > 0.0 ? size / (INNER - 1) * 2.0 : 1.0, &s.places);
         for (int i = 0; i < INNER; i++)
             s.inner[i] = (i - (INNER - 1) / 2.0) * step;
         return s;
     }
     double span = high - low;
-    double step = round_up(
-        span > 0.0 ? span / (INNER - 1) : fmax(fabs(high), 1.0) / 10.0,
-        &s.places);
+    double step =
+        round_up(span > 0.0 ? span / (INNER - 1) : fmax(fabs(high), 1.0) / 10.0,
+                 &s.places);
     double start = ceil(low / step) * step;
     for (int i = 0; i < INNER; i++)
         s.inner[i] = start + i * step;

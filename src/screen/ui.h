@@ -11,6 +11,7 @@
 #include "element/element.h"
 #include "screen/canvas.h"
 #include "screen/event.h"
+#include "element/selection.h"
 #include "screen/scale.h"
 #include "study/study.h"
 
@@ -38,12 +39,7 @@ enum effect {
 enum export_scope { SCOPE_ROW, SCOPE_PINS, SCOPE_SHEET, SCOPE_COMPARE };
 
 /* A line being typed. */
-enum prompt_kind {
-    PROMPT_NONE,
-    PROMPT_JUMP,
-    PROMPT_FILE,
-    PROMPT_OVERWRITE
-};
+enum prompt_kind { PROMPT_NONE, PROMPT_JUMP, PROMPT_FILE, PROMPT_OVERWRITE };
 struct prompt {
     enum prompt_kind kind;
     char text[UI_TEXT_MAX]; /* UTF-8 */
@@ -80,7 +76,7 @@ struct choice {
     const struct model *model;         /* NULL: no model offers the quantity */
     const struct reference *reference; /* NULL: the default one */
     enum shown shown;
-    int n, l; /* n = 0: outermost */
+    int n, l;                                       /* n = 0: outermost */
     const struct unit *units[DIMENSION_VOLUME + 1]; /* NULL: base unit */
     enum grid_width grid;
     enum grid_group3 group3;
@@ -94,6 +90,8 @@ struct map_cell {
     bool has_value;
     double value;
     int class_index;
+    bool has_percent; /* of the residual */
+    double percent;
 };
 
 struct ui {
@@ -103,6 +101,9 @@ struct ui {
     enum screen_id before_keys; /* where the key help was opened */
     bool detail;                /* FORM_SINGLE: pane instead of grid */
     bool mouse;
+    bool forgotten; /* keep no view at the end */
+    bool wanting;   /* what is shown has changed: look what is to be solved */
+    bool stopped;   /* the user stopped the solving; not taken up unasked */
     int scroll[SCREEN_KEYS + 1];
     int column_scroll; /* first pinned column shown in Compare */
     struct prompt prompt;
@@ -116,15 +117,19 @@ struct ui {
 
     /* Derived from the choice; rebuilt when stale. */
     bool stale;
+    bool comparison_stale;
+    struct comparison comparison; /* of the pins, or of the selection */
     struct map_cell cells[Z_MAX + 1];
     struct scale scale;
-    int solved, gaps;
     struct summary block_summary[4]; /* s p d f, the whole block */
 };
 
 /* A ui over a study, with the first view: Z_eff by Slater's rules. The study
  * must outlive it. */
 void ui_init(struct ui *ui, struct study *study);
+
+/* Releases what the ui holds; not the study. */
+void ui_clear(struct ui *ui);
 
 /* Takes one event and says what is to be done. */
 enum effect ui_update(struct ui *ui, const struct event *event);

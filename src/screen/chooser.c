@@ -1,0 +1,264 @@
+/* SPDX-License-Identifier: MIT */
+/* A list to choose from, laid over the screen. */
+#include <stdarg.h>
+#include <stdio.h>
+#include <string.h>
+
+#include "base/text.h"
+#include "screen/parts.h"
+
+static void add(struct chooser *c, int value, bool current, const char *format,
+                ...) PRINTF_LIKE(4, 5);
+
+static void add(struct chooser *c, int value, bool current, const char *format,
+                ...)
+{
+    if (c->count == CHOOSER_MAX)
+        return;
+    va_list args;
+    va_start(args, format);
+    vsnprintf(c->labels[c->count], sizeof c->labels[0], format, args);
+    va_end(args);
+    c->values[c->count] = value;
+    if (current)
+        c->at = c->count;
+    c->count++;
+}
+
+static void fill_quantities(struct ui *ui, struct chooser *c)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        const struct quantity *row = quantity_at((enum quantity_id)q);
+        add(c, q, ui->choice.quantity == (enum quantity_id)q, "%s: %s%s",
+            row->id, row->title, row->modelled ? "" : " (stored only)");
+    }
+}
+
+static void fill_models(struct ui *ui, struct chooser *c)
+{
+    for (int m = 0; m < model_count(); m++) {
+        const struct model *model = model_at(m);
+        if (model_offer_for(model, ui->choice.quantity, NULL) >= 0)
+            add(c, m, ui->choice.model == model, "%s: %s; %s", model->id,
+                model->title, model->domain);
+    }
+}
+
+static void fill_references(struct ui *ui, struct chooser *c)
+{
+    const struct reference_list *list = study_references(ui->study);
+    add(c, -1, ui->choice.reference == NULL,
+        "default: the set with the model's own definition");
+    for (int r = 0; r < list->count; r++) {
+        const struct reference *ref = &list->items[r];
+        if (ref->quantity == ui->choice.quantity)
+            add(c, r, ui->choice.reference == ref, "%s: %s",
+                ref->provenance->id, ref->provenance->definition);
+    }
+}
+
+static void fill_subshells(struct ui *ui, struct chooser *c)
+{
+    struct ask ask;
+    struct species species;
+    struct status st = status_ok();
+    char label[SUBSHELL_TEXT_MAX];
+    add(c, 0, ui->choice.n == 0, "outermost");
+    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask) ||
+        !study_species(ui->study, &ask, &species, &st))
+        return;
+    for (int i = 0; i < species.configuration.count; i++) {
+        const struct subshell *s = &species.configuration.shells[i];
+        add(c, s->n * 8 + s->l, ui->choice.n == s->n && ui->choice.l == s->l,
+            "%s  %.10g electrons", subshell_print(s->n, s->l, label), s->occ);
+    }
+}
+
+static void fill_units(struct ui *ui, struct chooser *c)
+{
+    const struct unit *now = ui_unit(ui, ui->choice.quantity);
+    for (size_t u = 0; u < unit_count(); u++)
+        if (unit_at(u)->dimension == now->dimension)
+            add(c, (int)u, unit_at(u) == now, "%s: %s", unit_at(u)->id,
+                unit_at(u)->title);
+}
+
+static void fill_exports(struct ui *ui, struct chooser *c)
+{
+    add(c, SCOPE_ROW, true, "the selected species, all models");
+    if (ui->choice.pin_count > 0)
+        add(c, SCOPE_PINS, false, "the pinned species, all models");
+    add(c, SCOPE_SHEET, false, "the sheet: all elements, the chosen model");
+}
+
+void chooser_open(struct ui *ui, enum chooser_kind kind)
+{
+    static void (*const fill[])(struct ui *, struct chooser *) = {
+        [CHOOSER_QUANTITY] = fill_quantities,
+        [CHOOSER_MODEL] = fill_models,
+        [CHOOSER_REFERENCE] = fill_references,
+        [CHOOSER_SUBSHELL] = fill_subshells,
+        [CHOOSER_UNIT] = fill_units,
+        [CHOOSER_EXPORT] = fill_exports,
+    };
+    ui->chooser = (struct chooser){.kind = kind};
+    ui->message[0] = '\0';
+    fill[kind](ui, &ui->chooser);
+    if (ui->chooser.count == 0) {
+        ui->chooser.kind = CHOOSER_NONE;
+        ui_report(ui, false, "nothing to choose from: no model computes %s",
+                  quantity_at(ui->choice.quantity)->id);
+    }
+}
+
+static void take_quantity(struct ui *ui, enum quantity_id quantity)
+{
+    struct choice *c = &ui->choice;
+    c->quantity = quantity;
+    c->reference = NULL;
+    if (!quantity_at(quantity)->per_subshell)
+        c->n = c->l = 0;
+    if (c->model && model_offer_for(c->model, quantity, NULL) >= 0)
+        return;
+    c->model = NULL;
+    for (int m = 0; m < model_count() && !c->model; m++)
+        if (model_offer_for(model_at(m), quantity, NULL) >= 0)
+            c->model = model_at(m);
+    if (!c->model)
+        c->shown = SHOWN_REFERENCE;
+}
+
+static enum effect take(struct ui *ui)
+{
+    struct chooser *c = &ui->chooser;
+    int value = c->values[c->at];
+    enum chooser_kind kind = c->kind;
+    c->kind = CHOOSER_NONE;
+    ui->stale = true;
+    if (kind == CHOOSER_QUANTITY) {
+        take_quantity(ui, (enum quantity_id)value);
+    } else if (kind == CHOOSER_MODEL) {
+        ui->choice.model = model_at(value);
+        if (ui->choice.shown == SHOWN_REFERENCE)
+            ui->choice.shown = SHOWN_VALUE;
+    } else if (kind == CHOOSER_REFERENCE) {
+        ui->choice.reference =
+            value < 0 ? NULL : &study_references(ui->study)->items[value];
+    } else if (kind == CHOOSER_SUBSHELL) {
+        ui->choice.n = value / 8;
+        ui->choice.l = value % 8;
+    } else if (kind == CHOOSER_UNIT) {
+        const struct unit *unit = unit_at((size_t)value);
+        ui->choice.units[unit->dimension] = unit;
+    } else {
+        export_prompt(ui, (enum export_scope)value);
+    }
+    return EFFECT_REDRAW;
+}
+
+static void move(struct chooser *c, int by)
+{
+    c->at += by;
+    if (c->at < 0)
+        c->at = 0;
+    if (c->at >= c->count)
+        c->at = c->count - 1;
+}
+
+/* A letter goes to the next entry that starts with it. */
+static void seek(struct chooser *c, uint32_t letter)
+{
+    for (int i = 1; i <= c->count; i++) {
+        int at = (c->at + i) % c->count;
+        if ((unsigned char)c->labels[at][0] == letter) {
+            c->at = at;
+            return;
+        }
+    }
+}
+
+enum effect chooser_update(struct ui *ui, const struct event *event)
+{
+    struct chooser *c = &ui->chooser;
+    if (event->kind == EVENT_CHARACTER) {
+        if (event->character == 'j' || event->character == 'k')
+            move(c, event->character == 'j' ? 1 : -1);
+        else if (event->character == 'q')
+            c->kind = CHOOSER_NONE;
+        else
+            seek(c, event->character);
+        return EFFECT_REDRAW;
+    }
+    if (event->kind != EVENT_KEY)
+        return EFFECT_NONE;
+    if (event->key == KEY_CODE_ENTER || event->key == KEY_CODE_RIGHT)
+        return take(ui);
+    if (event->key == KEY_CODE_ESCAPE || event->key == KEY_CODE_LEFT)
+        c->kind = CHOOSER_NONE;
+    else if (event->key == KEY_CODE_UP)
+        move(c, -1);
+    else if (event->key == KEY_CODE_DOWN)
+        move(c, 1);
+    else if (event->key == KEY_CODE_HOME || event->key == KEY_CODE_PAGE_UP)
+        c->at = 0;
+    else if (event->key == KEY_CODE_END || event->key == KEY_CODE_PAGE_DOWN)
+        c->at = c->count - 1;
+    return EFFECT_REDRAW;
+}
+
+static void draw_frame(struct canvas *canvas, struct area a, const char *title)
+{
+    int right = a.column + a.columns - 1;
+    int bottom = a.row + a.rows - 1;
+    canvas_fill(canvas, a.row, a.column, a.rows, a.columns, ROLE_TEXT, ' ');
+    canvas_fill(canvas, a.row, a.column, 1, a.columns, ROLE_QUIET, 0x2500);
+    canvas_fill(canvas, bottom, a.column, 1, a.columns, ROLE_QUIET, 0x2500);
+    canvas_fill(canvas, a.row, a.column, a.rows, 1, ROLE_QUIET, 0x2502);
+    canvas_fill(canvas, a.row, right, a.rows, 1, ROLE_QUIET, 0x2502);
+    canvas_put(canvas, a.row, a.column, ROLE_QUIET, 0x250C);
+    canvas_put(canvas, a.row, right, ROLE_QUIET, 0x2510);
+    canvas_put(canvas, bottom, a.column, ROLE_QUIET, 0x2514);
+    canvas_put(canvas, bottom, right, ROLE_QUIET, 0x2518);
+    canvas_textf(canvas, a.row, a.column + 2, a.columns - 4, ROLE_HEADING,
+                 " %s ", title);
+}
+
+void chooser_draw(const struct ui *ui, struct canvas *canvas)
+{
+    static const char *const titles[] = {
+        [CHOOSER_NONE] = "",
+        [CHOOSER_QUANTITY] = "Quantity",
+        [CHOOSER_MODEL] = "Model",
+        [CHOOSER_REFERENCE] = "Reference",
+        [CHOOSER_SUBSHELL] = "Subshell",
+        [CHOOSER_UNIT] = "Unit",
+        [CHOOSER_EXPORT] = "Export",
+    };
+    const struct chooser *c = &ui->chooser;
+    int width = 24;
+    for (int i = 0; i < c->count; i++) {
+        int need = (int)utf8_length(c->labels[i]) + 6;
+        width = need > width ? need : width;
+    }
+    width = width < canvas->columns ? width : canvas->columns;
+    int room = canvas->rows - 2;
+    int rows = c->count + 2 < room ? c->count + 2 : room;
+    if (rows < 3)
+        return;
+    int top = c->at - (rows - 3) > 0 ? c->at - (rows - 3) : 0;
+    struct area a = {(canvas->rows - rows) / 2, (canvas->columns - width) / 2,
+                     rows, width};
+    draw_frame(canvas, a, titles[c->kind]);
+    for (int i = 0; i < rows - 2; i++) {
+        int item = top + i;
+        bool at = item == c->at;
+        int row = a.row + 1 + i;
+        canvas_textf(canvas, row, a.column + 1, a.columns - 2,
+                     at ? ROLE_CHOSEN : ROLE_TEXT, "%s %-*s", at ? ">" : " ",
+                     a.columns - 4, c->labels[item]);
+        if (at) {
+            canvas->cursor_row = row;
+            canvas->cursor_column = a.column + 1;
+        }
+    }
+}

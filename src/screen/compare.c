@@ -1,0 +1,184 @@
+/* SPDX-License-Identifier: MIT */
+/* Pinned species as columns, everything known as rows, differences against
+ * the first. */
+#include <stdio.h>
+#include <string.h>
+
+#include "base/text.h"
+#include "export/format.h"
+#include "screen/parts.h"
+#include "study/facts.h"
+
+#define LABEL_COLUMNS 30
+#define ATOM_COLUMNS 24
+#define VALUE_COLUMNS 15
+
+/* The pins, or the selection alone. */
+static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
+{
+    const struct choice *c = &ui->choice;
+    int count = 0;
+    for (int i = 0; i < c->pin_count; i++)
+        asks[count++] =
+            (struct ask){.z = c->pins[i].z, .charge = c->pins[i].charge};
+    if (count == 0)
+        asks[count++] = (struct ask){.z = c->z, .charge = c->charge};
+    return count;
+}
+
+static bool refresh(struct ui *ui)
+{
+    struct ask asks[COMPARISON_MAX];
+    struct status st = status_ok();
+    if (!ui->comparison_stale)
+        return ui->comparison.count > 0;
+    comparison_clear(&ui->comparison);
+    int count = compared(ui, asks);
+    if (!study_compare(ui->study, asks, count, false, ui->choice.units,
+                       &ui->comparison, &st)) {
+        ui_report(ui, true, "%s", st.message);
+        return false;
+    }
+    ui->comparison_stale = false;
+    return true;
+}
+
+static int atoms_in(int columns)
+{
+    int n = (columns - LABEL_COLUMNS) / ATOM_COLUMNS;
+    return n > 0 ? n : 1;
+}
+
+/* Column of the i-th shown atom; the first atom always is the first column.
+ */
+static int atom_at(const struct ui *ui, int i)
+{
+    return i == 0 ? 0 : i + ui->column_scroll;
+}
+
+static void draw_value(struct canvas *canvas, int row, int column,
+                       const struct comparison_line *line, int which)
+{
+    char buffer[UI_TEXT_MAX];
+    char out[NUMBER_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    const struct reading *r = &line->readings[which];
+    struct difference d;
+    if (r->state != READING_OK) {
+        canvas_right(canvas, row, column, VALUE_COLUMNS, ROLE_GAP, "-");
+        return;
+    }
+    if (!line->provenance->computed)
+        reading_text(&t, r);
+    if (t.length == 0 || t.length > VALUE_COLUMNS)
+        snprintf(buffer, sizeof buffer, "%s",
+                 number_fit(r->value.value, line->unit->decimals, VALUE_COLUMNS,
+                            out));
+    canvas_right(canvas, row, column, VALUE_COLUMNS, ROLE_TEXT, buffer);
+    if (!comparison_difference(line, which, &d))
+        return;
+    if (d.has_percent)
+        snprintf(buffer, sizeof buffer, "%+.1f%%", d.percent.value);
+    else
+        snprintf(buffer, sizeof buffer, "%+.*f", line->unit->decimals,
+                 d.value.value);
+    canvas_right(canvas, row, column + VALUE_COLUMNS,
+                 ATOM_COLUMNS - VALUE_COLUMNS,
+                 d.value.value < 0 ? ROLE_BELOW : ROLE_ABOVE, buffer);
+}
+
+static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
+                      const struct comparison_line *line, bool first, int atoms)
+{
+    if (first)
+        canvas_textf(canvas, row, 0, 9, ROLE_HEADING, "%s %s",
+                     quantity_at(line->quantity)->symbol, line->unit->id);
+    canvas_text(canvas, row, 10, LABEL_COLUMNS - 11, ROLE_TEXT,
+                line->provenance->id);
+    for (int i = 0; i < atoms; i++) {
+        int which = atom_at(ui, i);
+        if (which < ui->comparison.count)
+            draw_value(canvas, row, LABEL_COLUMNS + i * ATOM_COLUMNS, line,
+                       which);
+    }
+}
+
+/* Facts, one row each per atom column, cut to the column. */
+static void draw_fact_row(const struct ui *ui, struct canvas *canvas, int row,
+                          const struct comparison_fact *fact, int atoms)
+{
+    canvas_text(canvas, row, 0, LABEL_COLUMNS - 1, ROLE_HEADING, fact->label);
+    bool caution = strcmp(fact->label, fact_label(FACT_CAUTION)) == 0;
+    for (int i = 0; i < atoms; i++) {
+        int which = atom_at(ui, i);
+        if (which < ui->comparison.count)
+            canvas_text(canvas, row, LABEL_COLUMNS + i * ATOM_COLUMNS + 1,
+                        ATOM_COLUMNS - 2, caution ? ROLE_CAUTION : ROLE_TEXT,
+                        fact->text[which]);
+    }
+}
+
+static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
+{
+    char ion[ION_TEXT_MAX];
+    const struct comparison *c = &ui->comparison;
+    for (int i = 0; i < atoms; i++) {
+        int which = atom_at(ui, i);
+        int column = LABEL_COLUMNS + i * ATOM_COLUMNS;
+        if (which >= c->count)
+            continue;
+        ion_print(c->species[which].z, c->species[which].charge, ion);
+        canvas_right(canvas, 1, column, VALUE_COLUMNS, ROLE_PIN, ion);
+        if (which > 0)
+            canvas_right(canvas, 1, column + VALUE_COLUMNS,
+                         ATOM_COLUMNS - VALUE_COLUMNS, ROLE_HEADING,
+                         "to first");
+    }
+    if (c->count > atoms)
+        canvas_textf(canvas, 1, 0, LABEL_COLUMNS, ROLE_LABEL,
+                     "%d of %d; arrows show others", atoms, c->count);
+    else if (ui->choice.pin_count == 0)
+        canvas_text(canvas, 1, 0, LABEL_COLUMNS, ROLE_LABEL,
+                    "pin species on the map with p");
+}
+
+static void draw(struct ui *ui, struct canvas *canvas)
+{
+    if (!refresh(ui))
+        return;
+    const struct comparison *c = &ui->comparison;
+    int room = canvas->rows - 4;
+    int total = c->fact_count + c->line_count;
+    int atoms = atoms_in(canvas->columns);
+    int *skip = &ui->scroll[SCREEN_COMPARE];
+    if (*skip > total - room)
+        *skip = total > room ? total - room : 0;
+    if (ui->column_scroll > c->count - atoms)
+        ui->column_scroll = c->count > atoms ? c->count - atoms : 0;
+    draw_atoms(ui, canvas, atoms);
+    for (int i = 0; i < room && *skip + i < total; i++) {
+        int item = *skip + i - c->fact_count;
+        if (item < 0) {
+            draw_fact_row(ui, canvas, 2 + i, &c->facts[*skip + i], atoms);
+            continue;
+        }
+        bool first = i == 0 || item == 0 ||
+                     c->lines[item].quantity != c->lines[item - 1].quantity;
+        draw_line(ui, canvas, 2 + i, &c->lines[item], first, atoms);
+    }
+    canvas->cursor_row = 2;
+    canvas->cursor_column = 0;
+}
+
+static enum effect update(struct ui *ui, enum action action)
+{
+    if (action == ACTION_LEFT && ui->column_scroll > 0)
+        ui->column_scroll--;
+    else if (action == ACTION_RIGHT)
+        ui->column_scroll++;
+    else
+        return EFFECT_NONE;
+    return EFFECT_REDRAW;
+}
+
+const struct screen_ops screen_compare = {"Compare", update, draw};

@@ -1,0 +1,129 @@
+/* SPDX-License-Identifier: MIT */
+/* What the user takes away: the same rows as the commands print, and the
+ * command that prints them. */
+#include <stdlib.h>
+
+#include "base/text.h"
+#include "export/compare.h"
+#include "export/rows.h"
+#include "screen/parts.h"
+#include "study/facts.h"
+
+/* Rows of some species under all models, or under the chosen one. */
+struct rows {
+    struct row *items;
+    size_t count, capacity;
+};
+
+static bool add_row(const struct ui *ui, struct rows *rows,
+                    const struct ask *ask, struct status *st)
+{
+    if (rows->count == rows->capacity) {
+        size_t capacity = rows->capacity ? 2 * rows->capacity : 128;
+        struct row *more = realloc(rows->items, capacity * sizeof *more);
+        if (!more)
+            return status_fail(st, STATUS_MEMORY, "out of memory");
+        rows->items = more;
+        rows->capacity = capacity;
+    }
+    rows->items[rows->count++] = study_row(ui->study, ask);
+    return true;
+}
+
+static bool add_all_models(const struct ui *ui, struct rows *rows, int z,
+                           int charge, struct status *st)
+{
+    struct ask ask;
+    bool any = false;
+    if (!ui_ask(ui, z, charge, &ask))
+        return true;
+    for (int m = 0; m < model_count(); m++) {
+        ask.model = model_at(m);
+        if (model_offer_for(ask.model, ask.quantity, NULL) < 0)
+            continue;
+        any = true;
+        if (!add_row(ui, rows, &ask, st))
+            return false;
+    }
+    ask.model = NULL;
+    return any || add_row(ui, rows, &ask, st);
+}
+
+static bool collect(const struct ui *ui, struct rows *rows, struct status *st)
+{
+    const struct choice *c = &ui->choice;
+    struct ask ask;
+    if (ui->scope == SCOPE_ROW)
+        return add_all_models(ui, rows, c->z, c->charge, st);
+    if (ui->scope == SCOPE_PINS) {
+        for (int i = 0; i < c->pin_count; i++)
+            if (!add_all_models(ui, rows, c->pins[i].z, c->pins[i].charge, st))
+                return false;
+        return true;
+    }
+    for (int z = 1; z <= Z_MAX; z++)
+        if (ui_ask(ui, z, c->charge, &ask) && !add_row(ui, rows, &ask, st))
+            return false;
+    return true;
+}
+
+static bool export_comparison(const struct ui *ui, FILE *out, struct status *st)
+{
+    /* The comparison on screen is up to date: it was drawn before. */
+    return compare_write(out, EXPORT_CSV, &ui->comparison, st);
+}
+
+bool ui_export(const struct ui *ui, FILE *out, struct status *st)
+{
+    struct rows rows = {0};
+    if (ui->scope == SCOPE_COMPARE)
+        return export_comparison(ui, out, st);
+    bool ok = collect(ui, &rows, st) &&
+              rows_write(out, EXPORT_CSV, rows.items, rows.count, st);
+    free(rows.items);
+    return ok;
+}
+
+static void add_species(struct text *t, int z, int charge)
+{
+    char ion[ION_TEXT_MAX];
+    text_addf(t, " %s", ion_print(z, charge, ion));
+}
+
+static void add_units(const struct ui *ui, struct text *t)
+{
+    bool begun = false;
+    for (int d = 0; d <= DIMENSION_VOLUME; d++) {
+        const struct unit *unit = ui->choice.units[d];
+        if (!unit || unit == unit_base((enum dimension)d))
+            continue;
+        text_addf(t, "%s%s", begun ? "," : " --unit ", unit->id);
+        begun = true;
+    }
+}
+
+void ui_export_command(const struct ui *ui, struct text *t)
+{
+    const struct choice *c = &ui->choice;
+    char label[SUBSHELL_TEXT_MAX];
+    bool compare = ui->scope == SCOPE_COMPARE;
+    text_add(t, compare ? "outershell compare" : "outershell list");
+    if (ui->scope == SCOPE_ROW || (compare && c->pin_count == 0))
+        add_species(t, c->z, c->charge);
+    for (int i = 0; i < c->pin_count && (compare || ui->scope == SCOPE_PINS);
+         i++)
+        add_species(t, c->pins[i].z, c->pins[i].charge);
+    if (!compare) {
+        text_addf(t, " --quantity %s", quantity_at(c->quantity)->id);
+        if (ui->scope == SCOPE_SHEET && c->model)
+            text_addf(t, " --model %s", c->model->id);
+        if (ui->scope == SCOPE_SHEET && c->charge)
+            text_addf(t, " --charge %d", c->charge);
+        if (c->n)
+            text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
+        if (c->reference)
+            text_addf(t, " --reference %s", c->reference->provenance->id);
+    }
+    add_units(ui, t);
+    text_add(t, " --format csv");
+}

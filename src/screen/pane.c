@@ -1,0 +1,348 @@
+/* SPDX-License-Identifier: MIT */
+/* The pane of the selected element: each model's value, the reference, the
+ * residual, and how large residuals usually are there; and its facts. */
+#include <math.h>
+#include <stdio.h>
+#include <string.h>
+
+#include "base/text.h"
+#include "export/format.h"
+#include "screen/parts.h"
+#include "study/facts.h"
+
+#define BAR_FULL 0x2588
+#define BAR_LEFT_HALF 0x258C
+#define BAR_RIGHT_HALF 0x2590
+#define AXIS 0x2502
+#define UNEQUAL 0x2260
+#define MODELS_MAX 16
+
+/* Columns of the pane from the left; the bar takes what is left. */
+enum {
+    NAME = 1,
+    NAME_WIDTH = 12,
+    VALUE = 13,
+    VALUE_WIDTH = 10,
+    REFERENCE = 24,
+    REFERENCE_WIDTH = 18,
+    RESIDUAL = 43,
+    RESIDUAL_WIDTH = 10,
+    PERCENT = 54,
+    PERCENT_WIDTH = 8,
+    MARK = 63,
+    BAR = 65
+};
+
+/* Residual in per cent, drawn from a middle axis: a full half is `full` per
+ * cent. */
+static void draw_bar(struct canvas *canvas, int row, int column, int columns,
+                     double percent, double full)
+{
+    int half = (columns - 1) / 2;
+    int axis = column + half;
+    int steps = (int)(fmin(fabs(percent) / full, 1.0) * half * 2 + 0.5);
+    enum role role = percent < 0 ? ROLE_BELOW : ROLE_ABOVE;
+    int direction = percent < 0 ? -1 : 1;
+    if (half < 2)
+        return;
+    canvas_put(canvas, row, axis, ROLE_QUIET, AXIS);
+    for (int i = 1; i <= steps / 2; i++)
+        canvas_put(canvas, row, axis + direction * i, role, BAR_FULL);
+    if (steps % 2)
+        canvas_put(canvas, row, axis + direction * (steps / 2 + 1), role,
+                   percent < 0 ? BAR_RIGHT_HALF : BAR_LEFT_HALF);
+}
+
+static void draw_signed(struct canvas *canvas, int row, int column, int width,
+                        double value, int places)
+{
+    char out[NUMBER_TEXT_MAX];
+    char text[NUMBER_TEXT_MAX + 1];
+    number_fit(value, places, width - 1, out);
+    bool plus = value > 0 && out[strspn(out, "0.")] != '\0';
+    snprintf(text, sizeof text, "%s%s", plus ? "+" : "", out);
+    canvas_right(canvas, row, column, width,
+                 value < 0 ? ROLE_BELOW : ROLE_ABOVE, text);
+}
+
+static void draw_reading(struct canvas *canvas, int row, int column, int width,
+                         const struct reading *reading)
+{
+    char buffer[UI_TEXT_MAX];
+    char out[NUMBER_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    if (reading->state != READING_OK) {
+        canvas_right(canvas, row, column, width, ROLE_GAP, "-");
+        return;
+    }
+    reading_text(&t, reading);
+    if ((int)t.length > width) /* uncertainty and last digits stay in exports */
+        number_fit(reading->value.value, reading->value.decimals, width, out);
+    canvas_right(canvas, row, column, width, ROLE_TEXT,
+                 (int)t.length > width ? out : buffer);
+}
+
+static void draw_heading(const struct ui *ui, struct canvas *canvas,
+                         struct area a, const struct row *row)
+{
+    char buffer[UI_TEXT_MAX];
+    char label[SUBSHELL_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    (void)ui;
+    text_add(&t, quantity_at(row->quantity)->symbol);
+    if (row->n)
+        text_addf(&t, " %s", subshell_print(row->n, row->l, label));
+    text_addf(&t, ", %s", row->unit->id);
+    canvas_fill(canvas, a.row, 0, 1, a.columns, ROLE_QUIET, 0x2500);
+    canvas_textf(canvas, a.row, NAME, VALUE - NAME + 4, ROLE_HEADING, "%s ",
+                 buffer);
+    static const struct {
+        int column, width;
+        const char *text;
+    } heads[] = {
+        {VALUE, VALUE_WIDTH, " value"},
+        {REFERENCE, REFERENCE_WIDTH, " reference"},
+        {RESIDUAL, RESIDUAL_WIDTH, " residual"},
+        {PERCENT, PERCENT_WIDTH, " %"},
+    };
+    for (size_t i = 0; i < sizeof heads / sizeof heads[0]; i++)
+        if (heads[i].column + heads[i].width <= a.columns)
+            canvas_right(canvas, a.row, heads[i].column, heads[i].width,
+                         ROLE_HEADING, heads[i].text);
+    if (a.columns >= BAR + 11)
+        canvas_text(canvas, a.row, BAR, a.columns - BAR, ROLE_HEADING,
+                    "below | above");
+}
+
+/* Why there is no residual, from the first column that is then empty. */
+static void draw_reason(struct canvas *canvas, struct area a, int row,
+                        const struct row *r)
+{
+    int from = r->value.state != READING_OK && r->value.provenance ? VALUE
+               : r->reference.state != READING_OK                  ? REFERENCE
+                                                                   : RESIDUAL;
+    canvas_textf(canvas, row, from + 1, a.columns - from - 1, ROLE_GAP, "%s",
+                 r->reason);
+}
+
+static void draw_row(struct canvas *canvas, struct area a, int row,
+                     const struct row *r, bool chosen, double full)
+{
+    char out[NUMBER_TEXT_MAX];
+    const char *name = r->value.provenance ? r->value.provenance->id : "stored";
+    canvas_textf(canvas, row, 0, NAME_WIDTH + 1,
+                 chosen ? ROLE_TITLE : ROLE_TEXT, "%s%s", chosen ? ">" : " ",
+                 name);
+    if (r->value.state == READING_OK)
+        canvas_right(canvas, row, VALUE, VALUE_WIDTH, ROLE_TEXT,
+                     number_fit(r->value.value.value, r->unit->decimals,
+                                VALUE_WIDTH, out));
+    if (r->reference.state == READING_OK && r->value.state == READING_OK)
+        draw_reading(canvas, row, REFERENCE, REFERENCE_WIDTH, &r->reference);
+    if (r->state == ROW_REFERENCE_ONLY) {
+        draw_reading(canvas, row, REFERENCE, REFERENCE_WIDTH, &r->reference);
+        return;
+    }
+    if (r->state != ROW_OK) {
+        draw_reason(canvas, a, row, r);
+        return;
+    }
+    draw_signed(canvas, row, RESIDUAL, RESIDUAL_WIDTH, r->residual.value,
+                r->unit->decimals);
+    if (r->has_percent)
+        draw_signed(canvas, row, PERCENT, PERCENT_WIDTH, r->percent.value, 1);
+    if (!r->like_with_like)
+        canvas_put(canvas, row, MARK, ROLE_CAUTION, UNEQUAL);
+    if (r->has_percent)
+        draw_bar(canvas, row, BAR, a.columns - BAR - 1, r->percent.value, full);
+}
+
+/* Rows of all models that offer a quantity (or the reference alone). */
+static int pane_rows(const struct ui *ui, enum quantity_id quantity,
+                     struct row rows[MODELS_MAX])
+{
+    struct ask ask;
+    int count = 0;
+    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        return 0;
+    if (quantity != ask.quantity) {
+        ask.quantity = quantity;
+        ask.reference = NULL;
+        ask.n = quantity_at(quantity)->per_subshell ? ask.n : 0;
+        ask.unit = ui_unit(ui, quantity);
+    }
+    for (int m = 0; m < model_count() && count < MODELS_MAX; m++) {
+        ask.model = model_at(m);
+        if (model_offer_for(ask.model, quantity, NULL) >= 0)
+            rows[count++] = study_row(ui->study, &ask);
+    }
+    if (count == 0) {
+        ask.model = NULL;
+        rows[count++] = study_row(ui->study, &ask);
+    }
+    return count;
+}
+
+/* What the bars of a group are drawn against: the largest residual, but
+ * neither less than 10 nor more than 100 per cent. */
+static double bar_full(const struct row *rows, int count)
+{
+    double full = 10.0;
+    for (int i = 0; i < count; i++)
+        if (rows[i].state == ROW_OK && rows[i].has_percent)
+            full = fmax(full, fabs(rows[i].percent.value));
+    return fmin(full, 100.0);
+}
+
+static int draw_group(const struct ui *ui, struct canvas *canvas, struct area a,
+                      enum quantity_id quantity)
+{
+    struct row rows[MODELS_MAX];
+    int count = pane_rows(ui, quantity, rows);
+    if (count == 0 || a.rows < 2)
+        return 0;
+    double full = bar_full(rows, count);
+    draw_heading(ui, canvas, a, &rows[0]);
+    for (int i = 0; i < count && i + 1 < a.rows; i++) {
+        const struct model *model = ui->choice.model;
+        bool chosen = quantity == ui->choice.quantity && model &&
+                      rows[i].value.provenance &&
+                      strcmp(model->id, rows[i].value.provenance->id) == 0;
+        draw_row(canvas, a, a.row + 1 + i, &rows[i], chosen, full);
+    }
+    return count + 1 < a.rows ? count + 1 : a.rows;
+}
+
+/* The set, what it holds, and what its source says of this value. */
+static int draw_source(const struct ui *ui, struct canvas *canvas,
+                       struct area a)
+{
+    char buffer[1024];
+    struct ask ask;
+    struct text t = text_over(buffer, sizeof buffer);
+    if (a.rows < 1 || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        return 0;
+    struct row row = study_row(ui->study, &ask);
+    const struct provenance *p = row.reference.provenance;
+    if (!p)
+        return 0;
+    text_addf(&t, "reference %s: %s", p->id, p->definition);
+    if (row.reference.remark[0] != '\0')
+        text_addf(&t, "; %s", row.reference.remark);
+    if (row.value.state == READING_OK && row.value.remark[0] != '\0')
+        text_addf(&t, "; model: %s", row.value.remark);
+    canvas_text(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT, buffer);
+    if (a.rows < 2 || row.like_with_like || !row.value.provenance)
+        return 1;
+    canvas_put(canvas, a.row + 1, NAME, ROLE_CAUTION, UNEQUAL);
+    canvas_textf(canvas, a.row + 1, NAME + 2, a.columns - NAME - 2, ROLE_TEXT,
+                 "the model gives another thing: %s",
+                 row.value.provenance->definition);
+    return 2;
+}
+
+/* How large residuals usually are in the block, this element left out. */
+static int draw_usual(const struct ui *ui, struct canvas *canvas, struct area a)
+{
+    struct ask ask;
+    char block = element_at(ui->choice.z)->block;
+    char ion[ION_TEXT_MAX];
+    char mean[NUMBER_TEXT_MAX];
+    char largest[NUMBER_TEXT_MAX];
+    if (a.rows < 1 || !ui->choice.model ||
+        !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        return 0;
+    struct summary s =
+        study_block_summary(ui->study, &ask, block, ui->choice.z);
+    if (s.count == 0) {
+        canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
+                     "%s in the other %c elements: no residual, %d gaps",
+                     ask.model->id, block, s.gaps);
+        return 1;
+    }
+    int places = ask.unit->decimals;
+    number_print_places(summary_mean_absolute(&s), places, mean);
+    number_print_places(s.largest, places, largest);
+    canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
+                 "%s in the other %c elements: off by %s %s on average "
+                 "(%.0f %%), %s%s at most (%s); %d values, %d gaps",
+                 ask.model->id, block, mean, ask.unit->id,
+                 s.percent_count ? summary_mean_absolute_percent(&s) : 0.0,
+                 s.largest > 0 ? "+" : "", largest,
+                 ion_print(s.largest_z, ask.charge, ion), s.count, s.gaps);
+    return 1;
+}
+
+void draw_pane(const struct ui *ui, struct canvas *canvas, struct area area)
+{
+    struct area left = area;
+    enum quantity_id chosen = ui->choice.quantity;
+    int used = draw_group(ui, canvas, left, chosen);
+    left.row += used;
+    left.rows -= used;
+    used = draw_source(ui, canvas, left);
+    left.row += used;
+    left.rows -= used;
+    used = draw_usual(ui, canvas, left);
+    left.row += used;
+    left.rows -= used;
+    /* Other quantities while there is room for a heading and a row. */
+    for (int q = 0; q < QUANTITY_COUNT && left.rows >= 2; q++) {
+        if ((enum quantity_id)q == chosen)
+            continue;
+        used = draw_group(ui, canvas, left, (enum quantity_id)q);
+        left.row += used;
+        left.rows -= used;
+    }
+}
+
+/* One fact: labelled where there is room, one line of it where there is not.
+ */
+static void draw_fact(const struct ui *ui, struct flow *flow,
+                      const struct species *species, enum fact_id id,
+                      bool narrow)
+{
+    char line[1024];
+    struct text t = text_over(line, sizeof line);
+    bool caution = id == FACT_CAUTION;
+    if (!narrow && id != FACT_CONFIGURATION)
+        text_addf(&t, "%s: ", fact_label(id));
+    size_t labelled = t.length;
+    study_fact(ui->study, species, id, &t);
+    enum role role = caution ? ROLE_CAUTION : ROLE_TEXT;
+    if (t.length == labelled)
+        return;
+    if (!narrow) {
+        flow_text(flow, role, 0, line);
+        return;
+    }
+    if (flow->used < flow->area.rows)
+        canvas_text(flow->canvas, flow->area.row + flow->used,
+                    flow->area.column, flow->area.columns, role, line);
+    flow->used++;
+}
+
+void draw_facts(const struct ui *ui, struct canvas *canvas, struct area area)
+{
+    /* What someone must see comes first: the rest may be cut off. */
+    static const enum fact_id order[] = {
+        FACT_CONFIGURATION, FACT_CAUTION,   FACT_CATEGORY, FACT_PLACE,
+        FACT_WEIGHT,        FACT_OXIDATION, FACT_SUPPLY};
+    const struct element *e = element_at(ui->choice.z);
+    struct flow flow = {canvas, area, 0, 0};
+    char line[UI_TEXT_MAX];
+    char ion[ION_TEXT_MAX];
+    struct ask ask;
+    struct species species;
+    struct status st = status_ok();
+    snprintf(line, sizeof line, "%s  %d  %s",
+             ion_print(e->z, ui->choice.charge, ion), e->z, e->name);
+    flow_text(&flow, ROLE_TITLE, 0, line);
+    if (!ui_ask(ui, e->z, ui->choice.charge, &ask) ||
+        !study_species(ui->study, &ask, &species, &st)) {
+        flow_text(&flow, ROLE_GAP, 0, "no such ion");
+        return;
+    }
+    for (size_t i = 0; i < sizeof order / sizeof order[0]; i++)
+        draw_fact(ui, &flow, &species, order[i], area.rows < 8);
+}

@@ -1,0 +1,171 @@
+/* SPDX-License-Identifier: MIT */
+/* A line being typed: where to jump, which file to write. */
+#include <stdio.h>
+#include <string.h>
+
+#include "base/text.h"
+#include "element/selection.h"
+#include "screen/parts.h"
+
+void prompt_open(struct ui *ui, enum prompt_kind kind, const char *text)
+{
+    ui->prompt.kind = kind;
+    snprintf(ui->prompt.text, sizeof ui->prompt.text, "%s", text);
+    ui->prompt.length = (int)strlen(ui->prompt.text);
+    ui->message[0] = '\0';
+}
+
+static void close_prompt(struct ui *ui)
+{
+    ui->prompt = (struct prompt){.kind = PROMPT_NONE};
+}
+
+static void type(struct prompt *p, uint32_t character)
+{
+    char bytes[4];
+    if (utf8_is_control(character))
+        return;
+    size_t n = utf8_encode(character, bytes);
+    if ((size_t)p->length + n >= sizeof p->text)
+        return;
+    memcpy(p->text + p->length, bytes, n);
+    p->length += (int)n;
+    p->text[p->length] = '\0';
+}
+
+static void erase(struct prompt *p)
+{
+    while (p->length > 0 &&
+           ((unsigned char)p->text[p->length - 1] & 0xC0) == 0x80)
+        p->length--;
+    if (p->length > 0)
+        p->length--;
+    p->text[p->length] = '\0';
+}
+
+static enum effect accept_jump(struct ui *ui)
+{
+    const struct element *e = element_jump(ui->prompt.text);
+    if (e)
+        ui_select(ui, e->z);
+    else if (ui->prompt.length > 0)
+        ui_report(ui, true, "%s: no element has this symbol, name or number",
+                  ui->prompt.text);
+    close_prompt(ui);
+    return EFFECT_REDRAW;
+}
+
+static enum effect accept_file(struct ui *ui)
+{
+    if (ui->prompt.length == 0) {
+        close_prompt(ui);
+        ui_report(ui, false, "nothing exported");
+        return EFFECT_REDRAW;
+    }
+    snprintf(ui->path, sizeof ui->path, "%s", ui->prompt.text);
+    ui->replace = false;
+    close_prompt(ui);
+    return EFFECT_WRITE;
+}
+
+static enum effect answer_overwrite(struct ui *ui, const struct event *event)
+{
+    bool yes = event->kind == EVENT_CHARACTER && event->character == 'y';
+    if (event->kind != EVENT_CHARACTER && event->kind != EVENT_KEY)
+        return EFFECT_NONE;
+    close_prompt(ui);
+    ui->replace = yes;
+    if (yes)
+        return EFFECT_WRITE;
+    ui_report(ui, false, "%s left as it was", ui->path);
+    return EFFECT_REDRAW;
+}
+
+/* While a place is typed the selection goes along, so that Enter holds no
+ * surprise. */
+static void follow(struct ui *ui)
+{
+    const struct element *e = element_jump(ui->prompt.text);
+    if (ui->prompt.kind == PROMPT_JUMP && e)
+        ui_select(ui, e->z);
+}
+
+enum effect prompt_update(struct ui *ui, const struct event *event)
+{
+    struct prompt *p = &ui->prompt;
+    if (p->kind == PROMPT_OVERWRITE)
+        return answer_overwrite(ui, event);
+    if (event->kind == EVENT_CHARACTER || event->kind == EVENT_PASTE) {
+        type(p, event->character);
+        follow(ui);
+        return EFFECT_REDRAW;
+    }
+    if (event->kind != EVENT_KEY)
+        return EFFECT_NONE;
+    if (event->key == KEY_CODE_ERASE || event->key == KEY_CODE_DELETE) {
+        erase(p);
+        follow(ui);
+    } else if (event->key == KEY_CODE_ESCAPE) {
+        close_prompt(ui);
+    } else if (event->key == KEY_CODE_ENTER) {
+        return p->kind == PROMPT_JUMP ? accept_jump(ui) : accept_file(ui);
+    } else if (p->kind == PROMPT_JUMP) {
+        /* An arrow ends the jump and moves on from there. */
+        close_prompt(ui);
+        return ui_update(ui, event);
+    }
+    return EFFECT_REDRAW;
+}
+
+void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
+{
+    static const char *const asks[] = {
+        [PROMPT_NONE] = "",
+        [PROMPT_JUMP] = "element: ",
+        [PROMPT_FILE] = "write CSV to: ",
+        [PROMPT_OVERWRITE] = "",
+    };
+    int width = canvas->columns;
+    if (ui->prompt.kind == PROMPT_OVERWRITE) {
+        canvas_textf(canvas, row, 0, width, ROLE_CAUTION,
+                     "%s exists; overwrite it? y/n", ui->path);
+        return;
+    }
+    int column =
+        canvas_text(canvas, row, 0, width, ROLE_LABEL, asks[ui->prompt.kind]);
+    /* The end of a long line is what is being typed. */
+    const char *text = ui->prompt.text;
+    while ((int)utf8_length(text) > width - column - 1 && *text) {
+        uint32_t code;
+        text += utf8_decode(text, strlen(text), &code);
+    }
+    column = canvas_text(canvas, row, column, width - column, ROLE_FIELD, text);
+    canvas->cursor_row = row;
+    canvas->cursor_column = column < width ? column : width - 1;
+    canvas->cursor_visible = true;
+    const struct element *e = element_jump(ui->prompt.text);
+    if (ui->prompt.kind == PROMPT_JUMP && e)
+        canvas_textf(canvas, row, column + 2, width - column - 2, ROLE_QUIET,
+                     "%s %d %s", e->symbol, e->z, e->name);
+}
+
+void export_prompt(struct ui *ui, enum export_scope scope)
+{
+    char name[UI_TEXT_MAX];
+    char ion[ION_TEXT_MAX];
+    struct text t = text_over(name, sizeof name);
+    const char *quantity = quantity_at(ui->choice.quantity)->id;
+    ui->scope = scope;
+    if (scope == SCOPE_ROW)
+        text_addf(&t, "%s-%s.csv",
+                  ion_print(ui->choice.z, ui->choice.charge, ion), quantity);
+    else if (scope == SCOPE_PINS)
+        text_addf(&t, "pinned-%s.csv", quantity);
+    else if (scope == SCOPE_SHEET)
+        text_addf(&t, "%s-%s.csv",
+                  ui->choice.model ? ui->choice.model->id : "reference",
+                  quantity);
+    else
+        text_add(&t, "compare.csv");
+    prompt_open(ui, PROMPT_FILE, name);
+}

@@ -1,0 +1,50 @@
+/* SPDX-License-Identifier: MIT */
+/* What the screens ask the models that iterate to solve, in the order in which
+ * someone looks: the selected species first, then the map. */
+#include "screen/parts.h"
+
+static void want(struct ui *ui, int z, int charge, const struct model *model,
+                 bool first)
+{
+    struct ask ask;
+    struct status st = status_ok();
+    if (model->closed || !ui_ask(ui, z, charge, &ask))
+        return;
+    ask.model = model;
+    if (model_offer_for(model, ask.quantity, NULL) >= 0 &&
+        !study_want(ui->study, &ask, first, &st))
+        ui_report(ui, true, "%s", st.message);
+}
+
+/* Queues what is shown and not solved yet. */
+static void want_shown(struct ui *ui)
+{
+    const struct choice *c = &ui->choice;
+    if (c->model && !c->model->closed && ui->screen == SCREEN_MAP)
+        for (int z = 1; z <= Z_MAX; z++)
+            want(ui, z, c->charge, c->model, false);
+    for (int p = 0; ui->screen == SCREEN_COMPARE && p < c->pin_count; p++)
+        for (int m = 0; m < model_count(); m++)
+            want(ui, c->pins[p].z, c->pins[p].charge, model_at(m), true);
+    for (int m = model_count() - 1; m >= 0; m--)
+        want(ui, c->z, c->charge, model_at(m), true);
+}
+
+bool ui_has_work(const struct ui *ui)
+{
+    return study_progress(ui->study).total > 0 || ui->wanting;
+}
+
+bool ui_step(struct ui *ui, bool *changed)
+{
+    struct study_progress before = study_progress(ui->study);
+    if (ui->wanting && !ui->stopped)
+        want_shown(ui);
+    ui->wanting = false;
+    bool more = study_step(ui->study);
+    struct study_progress after = study_progress(ui->study);
+    *changed = after.done != before.done || (before.total > 0 && !more);
+    if (*changed)
+        ui->stale = ui->comparison_stale = true;
+    return more;
+}
