@@ -59,8 +59,8 @@ static const struct option options[OPTION_COUNT] = {
      EVERYWHERE, "print and draw with ASCII characters alone"},
     {OPTION_BACKGROUND, "background", 0, "KIND", OPTION_VALUE, WORDS_BACKGROUND,
      false, EVERYWHERE,
-     "dark or light, what the terminal's background is (default: either will "
-     "do)"},
+     "terminal (default): colours on the terminal's own background; light, "
+     "dark, contrast: every colour set"},
     {OPTION_HELP, "help", 'h', NULL, OPTION_FLAG, WORDS_NONE, false, EVERYWHERE,
      "print help, for a command where one is named, and end"},
     {OPTION_VERSION, "version", 'V', NULL, OPTION_FLAG, WORDS_NONE, false,

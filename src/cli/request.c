@@ -293,19 +293,19 @@ static bool read_output(struct request *r, struct status *st)
 {
     int format = EXPORT_TEXT;
     int color = COLOR_AUTO;
-    int background = BACKGROUND_UNKNOWN;
+    int scheme = SCHEME_TERMINAL;
     if (!read_choice(r, OPTION_FORMAT, &format, st) ||
         !read_choice(r, OPTION_COLOR, &color, st) ||
-        !read_choice(r, OPTION_BACKGROUND, &background, st))
+        !read_choice(r, OPTION_BACKGROUND, &scheme, st))
         return false;
-    r->background = (enum background)background;
+    r->scheme = (enum scheme)scheme;
     r->bibtex = format > EXPORT_JSON;
     r->format = r->bibtex ? EXPORT_TEXT : (enum export_format)format;
     if (r->bibtex && r->call->command->id != COMMAND_SOURCES)
         return status_fail(st, STATUS_USAGE,
                            "--format bibtex: only sources writes it; expected "
                            "text, csv or json");
-    r->color = (enum color_choice)color;
+    r->color = (enum color_option)color;
     r->ascii = given(r, OPTION_ASCII) != NULL;
     r->force = given(r, OPTION_FORCE) != NULL;
     r->output = given(r, OPTION_OUTPUT);

@@ -11,13 +11,10 @@
 #include "export/format.h"
 #include "model/registry.h"
 #include "study/study.h"
+#include "terminal/palette.h"
 
 #define REQUEST_MODEL_MAX 16
 #define DIMENSION_COUNT (DIMENSION_VOLUME + 1)
-
-/* In the order of the words in words.c. */
-enum color_choice { COLOR_AUTO, COLOR_ALWAYS, COLOR_NEVER };
-enum background { BACKGROUND_DARK, BACKGROUND_LIGHT, BACKGROUND_UNKNOWN };
 
 /* A chosen atom or ion. named: chosen by itself, not as part of a run, a
  * period, a group, a block or the whole table. */
@@ -49,9 +46,9 @@ struct request {
     bool bibtex;
     const char *output;
     bool force;
-    enum color_choice color;
+    enum color_option color; /* words in the order of the enumerators */
     bool ascii;
-    enum background background;
+    enum scheme scheme;
 };
 
 /* Understands a call: loads the user's data sets, opens the study, reads every

@@ -11,7 +11,8 @@
 
 static const char *const formats[] = {"text", "csv", "json", "bibtex"};
 static const char *const colors[] = {"auto", "always", "never"};
-static const char *const backgrounds[] = {"dark", "light"};
+static const char *const backgrounds[] = {"terminal", "light", "dark",
+                                          "contrast"};
 /* Every subshell that an atom up to Z = 118 may hold. */
 static const char *const subshells[] = {
     "1s", "2s", "2p", "3s", "3p", "3d", "4s", "4p", "4d",

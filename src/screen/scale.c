@@ -14,19 +14,27 @@ static int by_value(const void *a, const void *b)
     return (x > y) - (x < y);
 }
 
-/* The smallest of 1, 2, 2.5, 5 times a power of ten that is not below x. */
-static double round_up(double x, int *places)
+/* Decimal places that show a step whole. */
+static int places_of(double step)
 {
-    static const double steps[] = {1.0, 2.0, 2.5, 5.0, 10.0};
+    int places = 0;
+    while (places < 12 && fabs(step - floor(step + 0.5)) > 1e-6 * step) {
+        step *= 10.0;
+        places++;
+    }
+    return places;
+}
+
+/* The smallest round number of two digits at most that is not below x > 0. */
+static double round_up(double x)
+{
+    static const double steps[] = {1.0, 1.2, 1.5, 2.0, 2.5, 3.0,
+                                   4.0, 5.0, 6.0, 8.0, 10.0};
     double power = pow(10.0, floor(log10(x)));
     int i = 0;
     while (steps[i] * power < x * (1.0 - 1e-12))
         i++;
-    double step = steps[i] * power;
-    /* 2.5, and half steps of 1 and 5 on a balance, need one place more. */
-    int need = -(int)floor(log10(step) + 1e-9) + 1;
-    *places = need > 0 ? need : 0;
-    return step;
+    return steps[i] * power;
 }
 
 static double quantile(const double *sorted, int count, double q)
@@ -44,21 +52,17 @@ struct scale scale_fit(double *values, int count, bool balance)
     s.highest = values[count - 1];
     double low = quantile(values, count, 0.05);
     double high = quantile(values, count, 0.95);
-    if (balance) {
-        double size = fmax(fabs(low), fabs(high));
-        double step =
-            round_up(size > 0.0 ? size / (INNER - 1) * 2.0 : 1.0, &s.places);
-        for (int i = 0; i < INNER; i++)
-            s.inner[i] = (i - (INNER - 1) / 2.0) * step;
-        return s;
-    }
-    double span = high - low;
+    double size = fmax(fabs(low), fabs(high));
+    double span = balance ? 2.0 * size : high - low;
     double step =
-        round_up(span > 0.0 ? span / (INNER - 1) : fmax(fabs(high), 1.0) / 10.0,
-                 &s.places);
-    double start = ceil(low / step) * step;
+        round_up(span > 0.0 ? span / (INNER - 1) : fmax(size, 1.0) / 10.0);
+    double start =
+        balance ? -(INNER - 1) / 2.0 * step : ceil(low / step) * step;
     for (int i = 0; i < INNER; i++)
         s.inner[i] = start + i * step;
+    s.places = places_of(step);
+    if (places_of(fabs(s.inner[0])) > s.places)
+        s.places = places_of(fabs(s.inner[0]));
     return s;
 }
 

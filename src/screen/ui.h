@@ -8,6 +8,7 @@
 #include <stdio.h>
 
 #include "analysis/comparison.h"
+#include "base/text.h"
 #include "element/element.h"
 #include "screen/canvas.h"
 #include "screen/event.h"

@@ -28,10 +28,11 @@ const char *fact_label(enum fact_id id)
 static void put_configuration(const struct species *species, struct text *t)
 {
     char out[CONFIGURATION_TEXT_MAX];
-    text_addf(t, "%s, %s", configuration_print(&species->configuration, out),
-              configuration_origin_text(species->origin));
+    text_add(t, configuration_print(&species->configuration, out));
     if (species->term.text[0])
-        text_addf(t, ", %s", species->term.text);
+        text_addf(t, "  %s", species->term.text);
+    if (species->origin != ORIGIN_STORED)
+        text_addf(t, " (%s)", configuration_origin_text(species->origin));
 }
 
 static void put_place(const struct element *e, struct text *t)
