@@ -297,7 +297,7 @@ int main(int argc, char **argv)
         return 2;
     }
     size_t count = (size_t)argc - 2;
-    struct loaded **sets = calloc(count, sizeof *sets);
+    struct loaded **sets = calloc(count, sizeof(void *));
     struct status st = status_ok();
     if (!sets)
         (void)status_fail(&st, STATUS_MEMORY, "out of memory");

@@ -55,14 +55,14 @@ static bool hex4(struct scan *s, unsigned *code)
 {
     *code = 0;
     for (int i = 0; i < 4; i++, s->at++) {
-        static const char digits[] = "0123456789abcdef";
-        char c = s->at < s->end ? *s->at : '\0';
-        if (c >= 'A' && c <= 'F')
-            c = (char)(c - 'A' + 'a');
-        const char *digit = c ? strchr(digits, c) : NULL;
+        /* Both cases, so that the place modulo 16 is the digit. */
+        static const char digits[] = "0123456789abcdef0123456789ABCDEF";
+        const char *digit = NULL;
+        if (s->at < s->end && *s->at != '\0')
+            digit = strchr(digits, *s->at);
         if (!digit)
             return fail_here(s, "expected four hexadecimal digits after \\u");
-        *code = *code << 4 | (unsigned)(digit - digits);
+        *code = *code << 4 | (unsigned)(digit - digits) % 16;
     }
     return true;
 }

@@ -178,7 +178,8 @@ static bool load_source(struct load *ld, const cJSON *object, struct entry *e)
     const struct provenance *p = &ld->out->set.provenance;
     const char *key = object_text(object, "source");
     int i = 0;
-    while (key && i < p->citation_count && strcmp(p->citations[i].key, key))
+    while (key && i < p->citation_count &&
+           strcmp(p->citations[i].key, key) != 0)
         i++;
     if (i == p->citation_count)
         return status_fail(ld->st, STATUS_DATA,
@@ -318,27 +319,34 @@ static int entry_z(const void *row)
     return ((const struct entry *)row)->z;
 }
 
+/* The entries into all[count], sorted and checked against one another. */
+static bool place_values(struct load *ld, const cJSON *entries,
+                         struct placed *all, int count)
+{
+    int place = 0;
+    const cJSON *object;
+    cJSON_ArrayForEach(object, entries)
+    {
+        struct placed *p = &all[place];
+        p->place = ++place;
+        if (!load_value_entry(ld, object, &p->e))
+            return load_entry_context(ld, object, place);
+    }
+    qsort(all, (size_t)count, sizeof *all, compare_placed);
+    return check_groups(ld, all, count);
+}
+
 bool load_values(struct load *ld, const cJSON *entries)
 {
     int count = cJSON_GetArraySize(entries);
-    int place = 0;
-    struct placed *all = calloc((size_t)count, sizeof *all);
     struct entry *values =
         arena_array(&ld->out->arena, (size_t)count, sizeof *values, ld->st);
-    bool ok = values != NULL;
+    if (!values)
+        return false;
+    struct placed *all = calloc((size_t)count, sizeof *all);
     if (!all)
-        ok = status_fail(ld->st, STATUS_MEMORY, "out of memory");
-    const cJSON *object = entries->child;
-    for (; ok && object; object = object->next) {
-        struct placed *p = &all[place];
-        p->place = ++place;
-        ok = load_value_entry(ld, object, &p->e) ||
-             load_entry_context(ld, object, place);
-    }
-    if (ok) {
-        qsort(all, (size_t)count, sizeof *all, compare_placed);
-        ok = check_groups(ld, all, count);
-    }
+        return status_fail(ld->st, STATUS_MEMORY, "out of memory");
+    bool ok = place_values(ld, entries, all, count);
     for (int i = 0; ok && i < count; i++)
         values[i] = all[i].e;
     free(all);

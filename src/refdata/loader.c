@@ -181,7 +181,8 @@ bool load_entry_context(struct load *ld, const cJSON *object, int place)
 {
     const cJSON *symbol =
         cJSON_IsObject(object) ? object_member(object, "element") : NULL;
-    if (cJSON_IsString(symbol) && element_by_symbol(symbol->valuestring))
+    if (symbol && cJSON_IsString(symbol) &&
+        element_by_symbol(symbol->valuestring))
         return status_context(ld->st, "entry %d (%s)", place,
                               symbol->valuestring);
     return status_context(ld->st, "entry %d", place);
@@ -467,7 +468,7 @@ static bool load_root(struct load *ld)
     /* Even a wrong file may say which set it wants to be. */
     const cJSON *id =
         cJSON_IsObject(ld->root) ? object_member(ld->root, "id") : NULL;
-    if (cJSON_IsString(id) && check_id(id->valuestring, "id", &unused))
+    if (id && cJSON_IsString(id) && check_id(id->valuestring, "id", &unused))
         return status_context(ld->st, "set %s", id->valuestring);
     return false;
 }

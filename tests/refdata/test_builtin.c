@@ -143,6 +143,35 @@ START_TEST(test_every_set_says_where_it_comes_from)
 }
 END_TEST
 
+/* One paper has one key, so that a bibliography holds it once. */
+static void same_paper(const struct citation *a, const struct citation *b)
+{
+    bool same_key = strcmp(a->key, b->key) == 0;
+    bool same_doi = a->doi && b->doi && strcmp(a->doi, b->doi) == 0;
+    ck_assert_msg(!same_doi || same_key, "%s and %s: one doi", a->key, b->key);
+    if (!same_key)
+        return;
+    ck_assert_msg((!a->doi && !b->doi) || same_doi, "%s: two dois", a->key);
+    ck_assert_int_eq(a->year, b->year);
+    ck_assert_msg(a->title == b->title || strcmp(a->title, b->title) == 0,
+                  "%s: two titles", a->key);
+}
+
+START_TEST(test_one_paper_has_one_key)
+{
+    const struct catalogue *all = catalogue_builtin();
+    for (size_t i = 0; i < catalogue_count(all); i++) {
+        const struct provenance *a = &catalogue_at(all, i)->provenance;
+        for (size_t j = 0; j <= i; j++) {
+            const struct provenance *b = &catalogue_at(all, j)->provenance;
+            for (int m = 0; m < a->citation_count; m++)
+                for (int n = 0; n < b->citation_count; n++)
+                    same_paper(&a->citations[m], &b->citations[n]);
+        }
+    }
+}
+END_TEST
+
 START_TEST(test_ionization_energies_are_the_source_digit_for_digit)
 {
     static const struct {
@@ -592,6 +621,7 @@ TCase *builtin_case(void)
     TCase *tc = tcase_create("builtin");
     tcase_add_test(tc, test_every_set_holds_all_its_values);
     tcase_add_test(tc, test_every_set_says_where_it_comes_from);
+    tcase_add_test(tc, test_one_paper_has_one_key);
     tcase_add_test(tc, test_ionization_energies_are_the_source_digit_for_digit);
     tcase_add_test(tc, test_ionization_energies_rise_with_the_stage);
     tcase_add_test(tc, test_radii_are_the_source_digit_for_digit);
