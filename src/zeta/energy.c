@@ -323,7 +323,7 @@ static void block_scale(const struct energy_block *b,
 }
 
 /* out = L^-1 in L^-T for a symmetric matrix, by the lower triangle linv. */
-static void to_orthonormal(int count, const double linv[][BLOCK_MAX],
+static void to_orthonormal(int count, double linv[][BLOCK_MAX],
                            double in[][BLOCK_MAX], double out[][BLOCK_MAX])
 {
     double half[BLOCK_MAX][BLOCK_MAX];
@@ -393,7 +393,7 @@ static void block_overlap(struct energy *e, int l, const double x[],
                           double gradient[], double y[][BLOCK_MAX])
 {
     const struct energy_block *b = &e->atom.block[l];
-    const struct energy_matrices *mat = &e->matrices[l];
+    struct energy_matrices *mat = &e->matrices[l];
     double inside[BLOCK_MAX][BLOCK_MAX], pull[BLOCK_MAX];
     int count = b->count;
     to_orthonormal(count, mat->linv, mat->fock, inside);

@@ -25,10 +25,11 @@ static void block_basis(const struct energy_block *b,
                           (b->open > 0 ? 2.0 * v[i] * v[j] / norm : 0.0);
 }
 
-/* Fock matrix of a block over the columns of basis. */
-static void block_fock(const struct energy_block *b,
-                       const struct energy_matrices *mat,
-                       double basis[][BLOCK_MAX], double out[][BLOCK_MAX])
+/* Fock matrix of a block over the columns of basis; returns its last element,
+ * that of the open orbital. */
+static double block_fock(const struct energy_block *b,
+                         const struct energy_matrices *mat,
+                         double basis[][BLOCK_MAX], double out[][BLOCK_MAX])
 {
     int count = b->count;
     double functions[BLOCK_MAX][BLOCK_MAX], half[BLOCK_MAX][BLOCK_MAX];
@@ -53,6 +54,7 @@ static void block_fock(const struct energy_block *b,
                 out[i][j] += functions[k][i] * half[k][j];
         }
     }
+    return out[count - 1][count - 1];
 }
 
 /* Coefficients over the functions of the orbital basis times vector. */
@@ -85,8 +87,7 @@ static void block_orbitals(const struct energy *e, int l,
     double vectors[BLOCK_MAX][BLOCK_MAX];
     int closed = b->open > 0 ? b->count - 1 : b->count;
     block_basis(b, mat, basis);
-    block_fock(b, mat, basis, fock);
-    double open_energy = fock[b->count - 1][b->count - 1];
+    double open_energy = block_fock(b, mat, basis, fock);
     jacobi(closed, BLOCK_MAX, &fock[0][0], &vectors[0][0]);
     bool used[BLOCK_MAX] = {false};
     for (int i = 0; i < closed; i++) {

@@ -5,7 +5,8 @@
 
 #include "element/subshell.h"
 
-#define SLATER_POWER_MAX (2 * N_MAX) /* largest power of r in a pair density   \
+#define SLATER_POWER_MAX                                                       \
+    (2 * N_MAX)                      /* largest power of r in a pair density   \
                                       */
 #define SLATER_ORDER_MAX (2 * L_MAX) /* largest k */
 #define SLATER_CHAIN_MAX (SLATER_POWER_MAX - 1)
