@@ -74,15 +74,17 @@ void reading_text(struct text *t, const struct reading *reading)
 {
     char value[NUMBER_TEXT_MAX];
     char u[NUMBER_TEXT_MAX];
-    text_add(t, number_print(reading->value, value));
-    if (!reading->has_u)
-        return;
-    if (reading->u.decimals > reading->value.decimals) {
-        text_addf(t, " +- %s", number_print(reading->u, u));
+    if (!reading->has_u || reading->u.decimals > reading->value.decimals) {
+        text_add(t, number_print(reading->value, value));
+        if (reading->has_u)
+            text_addf(t, " +- %s", number_print(reading->u, u));
         return;
     }
-    double last = reading->u.value * pow(10, reading->value.decimals);
-    text_addf(t, "(%.0f)", last);
+    /* A derived value may have more places than its uncertainty. */
+    int places = reading->u.decimals;
+    double last = reading->u.value * pow(10, places);
+    text_addf(t, "%s(%.0f)",
+              number_print_places(reading->value.value, places, value), last);
 }
 
 void species_configuration_text(struct text *t, const struct species *species)

@@ -9,7 +9,6 @@
 #include "screen/parts.h"
 #include "study/facts.h"
 
-#define LABEL_COLUMNS 30
 #define ATOM_COLUMNS 24
 #define VALUE_COLUMNS 15
 
@@ -43,9 +42,15 @@ static bool refresh(struct ui *ui)
     return true;
 }
 
-static int atoms_in(int columns)
+/* Columns of the labels: enough for the longest id where there is room. */
+static int label_columns(const struct ui *ui)
 {
-    int n = (columns - LABEL_COLUMNS) / ATOM_COLUMNS;
+    return ui->columns >= 130 ? 48 : 30;
+}
+
+static int atoms_in(const struct ui *ui)
+{
+    int n = (ui->columns - label_columns(ui)) / ATOM_COLUMNS;
     return n > 0 ? n : 1;
 }
 
@@ -93,12 +98,12 @@ static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
     if (first)
         canvas_textf(canvas, row, 0, 9, ROLE_HEADING, "%s %s",
                      quantity_at(line->quantity)->symbol, line->unit->id);
-    canvas_text(canvas, row, 10, LABEL_COLUMNS - 11, ROLE_TEXT,
+    canvas_text(canvas, row, 10, label_columns(ui) - 11, ROLE_TEXT,
                 line->provenance->id);
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
         if (which < ui->comparison.count)
-            draw_value(canvas, row, LABEL_COLUMNS + i * ATOM_COLUMNS, line,
+            draw_value(canvas, row, label_columns(ui) + i * ATOM_COLUMNS, line,
                        which);
     }
 }
@@ -107,12 +112,13 @@ static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
 static void draw_fact_row(const struct ui *ui, struct canvas *canvas, int row,
                           const struct comparison_fact *fact, int atoms)
 {
-    canvas_text(canvas, row, 0, LABEL_COLUMNS - 1, ROLE_HEADING, fact->label);
+    canvas_text(canvas, row, 0, label_columns(ui) - 1, ROLE_HEADING,
+                fact->label);
     bool caution = strcmp(fact->label, fact_label(FACT_CAUTION)) == 0;
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
         if (which < ui->comparison.count)
-            canvas_text(canvas, row, LABEL_COLUMNS + i * ATOM_COLUMNS + 1,
+            canvas_text(canvas, row, label_columns(ui) + i * ATOM_COLUMNS + 1,
                         ATOM_COLUMNS - 2, caution ? ROLE_CAUTION : ROLE_TEXT,
                         fact->text[which]);
     }
@@ -124,7 +130,7 @@ static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
     const struct comparison *c = &ui->comparison;
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
-        int column = LABEL_COLUMNS + i * ATOM_COLUMNS;
+        int column = label_columns(ui) + i * ATOM_COLUMNS;
         if (which >= c->count)
             continue;
         ion_print(c->species[which].z, c->species[which].charge, ion);
@@ -135,10 +141,10 @@ static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
                          "to first");
     }
     if (c->count > atoms)
-        canvas_textf(canvas, 1, 0, LABEL_COLUMNS, ROLE_LABEL,
+        canvas_textf(canvas, 1, 0, label_columns(ui), ROLE_LABEL,
                      "%d of %d; arrows show others", atoms, c->count);
     else if (ui->choice.pin_count == 0)
-        canvas_text(canvas, 1, 0, LABEL_COLUMNS, ROLE_LABEL,
+        canvas_text(canvas, 1, 0, label_columns(ui), ROLE_LABEL,
                     "pin species on the map with p");
 }
 
@@ -149,7 +155,7 @@ static void draw(struct ui *ui, struct canvas *canvas)
     const struct comparison *c = &ui->comparison;
     int room = canvas->rows - 4;
     int total = c->fact_count + c->line_count;
-    int atoms = atoms_in(canvas->columns);
+    int atoms = atoms_in(ui);
     int *skip = &ui->scroll[SCREEN_COMPARE];
     if (*skip > total - room)
         *skip = total > room ? total - room : 0;

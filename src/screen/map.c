@@ -44,7 +44,8 @@ static void charge_text(int charge, struct text *t)
                   charge > 0 ? '+' : '-');
 }
 
-void draw_title(const struct ui *ui, struct canvas *canvas)
+/* What the map shows, in one line, and how many elements have a number. */
+static void draw_map_title(const struct ui *ui, struct canvas *canvas)
 {
     char buffer[UI_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
@@ -55,19 +56,14 @@ void draw_title(const struct ui *ui, struct canvas *canvas)
     for (int z = 1; z <= Z_MAX; z++)
         with += ui->cells[z].has_value;
     int right = canvas->columns - 8;
-    if (ui->screen != SCREEN_MAP)
-        text_addf(&t, "%s   ", ui_screen_name(ui->screen));
     text_addf(&t, "%s, %s   ", q->title, ui_unit(ui, c->quantity)->id);
-    if (ui->screen == SCREEN_MAP)
-        shown_text(ui, &t);
+    shown_text(ui, &t);
     text_add(&t, "   ");
     charge_text(c->charge, &t);
     if (q->per_subshell)
         text_addf(&t, ", %s",
                   c->n ? subshell_print(c->n, c->l, label) : "outermost");
     canvas_text(canvas, 0, 0, right, ROLE_TITLE, buffer);
-    if (ui->screen != SCREEN_MAP)
-        return;
     snprintf(buffer, sizeof buffer, "%d/%d", with, Z_MAX);
     canvas_right(canvas, 0, right, 8, ROLE_QUIET, buffer);
 }
@@ -161,8 +157,49 @@ static void draw_headings(const struct ui *ui, struct canvas *canvas,
     }
 }
 
-/* Numbers between the classes; where they do not all fit, every second or
- * fourth one. */
+/* The widest number between two classes. */
+static int widest_bound(const struct scale *s)
+{
+    char out[NUMBER_TEXT_MAX];
+    int widest = 1;
+    for (int i = 0; i + 1 < SCALE_CLASSES; i++) {
+        number_print_places(s->inner[i], s->places, out);
+        int width = (int)strlen(out);
+        widest = width > widest ? width : widest;
+    }
+    return widest;
+}
+
+/* Every bound is written, or every second, fourth … where they do not fit. */
+static int bounds_every(const struct scale *s, int box, int columns)
+{
+    int every = 1;
+    int width = widest_bound(s) + 2;
+    while (every < SCALE_CLASSES &&
+           (2 + (SCALE_CLASSES - 1) / every) * width + SCALE_CLASSES * box >
+               columns)
+        every *= 2;
+    return every;
+}
+
+/* The box of one class; brackets where the selected element belongs. */
+static void draw_class(const struct ui *ui, struct canvas *canvas, int row,
+                       int column, int box, int class_index)
+{
+    const struct map_cell *chosen = &ui->cells[ui->choice.z];
+    enum role role = scale_role(&ui->scale, class_index);
+    bool here = chosen->has_value && chosen->class_index == class_index;
+    canvas_put(canvas, row, column + box / 2, role,
+               (uint32_t)scale_glyph(&ui->scale, class_index));
+    if (box == 3) {
+        canvas_put(canvas, row, column, role, here ? '[' : ' ');
+        canvas_put(canvas, row, column + 2, role, here ? ']' : ' ');
+    }
+    if (here)
+        canvas_reverse(canvas, row, column, 1, box);
+}
+
+/* The scale: boxes of the classes with the numbers that part them. */
 static void draw_scale(const struct ui *ui, struct canvas *canvas,
                        struct area a)
 {
@@ -176,50 +213,26 @@ static void draw_scale(const struct ui *ui, struct canvas *canvas,
                     "no element has a number here");
         return;
     }
-    int widest = 1;
-    for (int i = 0; i + 1 < SCALE_CLASSES; i++) {
-        int width =
-            (int)strlen(number_print_places(s->inner[i], s->places, out));
-        widest = width > widest ? width : widest;
-    }
     int box = a.columns >= 75 ? 3 : 1;
-    int every = 1;
-    while (every < SCALE_CLASSES &&
-           (2 + (SCALE_CLASSES - 1) / every) * (widest + 1) +
-                   SCALE_CLASSES * box >
-               a.columns - 3)
-        every *= 2;
-    const struct map_cell *chosen = &ui->cells[ui->choice.z];
-    int column = 0;
-    column = canvas_text(canvas, a.row, column, a.columns, ROLE_TEXT,
-                         number_print_places(s->lowest, s->places, out));
+    int every = bounds_every(s, box, a.columns);
+    int column = canvas_text(canvas, a.row, 0, a.columns, ROLE_TEXT,
+                             number_print_places(s->lowest, s->places, out)) +
+                 1;
     for (int c = 0; c < SCALE_CLASSES; c++) {
-        bool here = chosen->has_value && chosen->class_index == c;
-        enum role role = scale_role(s, c);
-        column++;
-        if (box == 3) {
-            canvas_put(canvas, a.row, column, role, here ? '[' : ' ');
-            canvas_put(canvas, a.row, column + 2, role, here ? ']' : ' ');
-        }
-        canvas_put(canvas, a.row, column + box / 2, role,
-                   (uint32_t)scale_glyph(s, c));
-        if (here)
-            canvas_reverse(canvas, a.row, column, 1, box);
-        column += box;
         bool last = c + 1 == SCALE_CLASSES;
-        if (last || (c + 1) % every == 0)
-            column =
-                canvas_text(canvas, a.row, column + (box == 3),
-                            a.columns - column, ROLE_TEXT,
-                            number_print_places(last ? s->highest : s->inner[c],
-                                                s->places, out));
-        else
-            column--;
+        draw_class(ui, canvas, a.row, column, box, c);
+        column += box;
+        if (!last && (c + 1) % every != 0)
+            continue;
+        number_print_places(last ? s->highest : s->inner[c], s->places, out);
+        column = canvas_text(canvas, a.row, column + 1, a.columns - column - 1,
+                             ROLE_TEXT, out) +
+                 1;
     }
-    if (column + 14 <= a.columns) {
-        canvas_put(canvas, a.row, column + 2, ROLE_GAP, GLYPH_GAP);
-        canvas_text(canvas, a.row, column + 4, 9, ROLE_TEXT, "no number");
-    }
+    if (column + 13 > a.columns)
+        return;
+    canvas_put(canvas, a.row, column + 1, ROLE_GAP, GLYPH_GAP);
+    canvas_text(canvas, a.row, column + 3, 9, ROLE_TEXT, "no number");
 }
 
 /* Where there is no side area the facts stand in the gap of the grid between
@@ -284,7 +297,7 @@ static void draw(struct ui *ui, struct canvas *canvas)
         draw_list(ui, canvas, l.pane);
     else
         draw_grid(ui, canvas, &l);
-    draw_title(ui, canvas);
+    draw_map_title(ui, canvas);
     if (l.form == FORM_WHOLE) {
         draw_facts(ui, canvas, l.side.rows ? l.side : gap_area(&l));
         draw_pane(ui, canvas, l.pane);

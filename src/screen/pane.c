@@ -15,6 +15,7 @@
 #define BAR_RIGHT_HALF 0x2590
 #define AXIS 0x2502
 #define UNEQUAL 0x2260
+#define BAR_HALF_MAX 24
 #define MODELS_MAX 16
 
 /* Columns of the pane from the left; the bar takes what is left. */
@@ -35,22 +36,26 @@ enum {
 
 /* Residual in per cent, drawn from a middle axis: a full half is `full` per
  * cent. */
-static void draw_bar(struct canvas *canvas, int row, int column, int columns,
-                     double percent, double full)
+static void draw_bar(struct canvas *canvas, int row, int half, double percent,
+                     double full)
 {
-    int half = (columns - 1) / 2;
-    int axis = column + half;
+    int axis = BAR + half;
     int steps = (int)(fmin(fabs(percent) / full, 1.0) * half * 2 + 0.5);
     enum role role = percent < 0 ? ROLE_BELOW : ROLE_ABOVE;
     int direction = percent < 0 ? -1 : 1;
-    if (half < 2)
-        return;
     canvas_put(canvas, row, axis, ROLE_QUIET, AXIS);
     for (int i = 1; i <= steps / 2; i++)
         canvas_put(canvas, row, axis + direction * i, role, BAR_FULL);
     if (steps % 2)
         canvas_put(canvas, row, axis + direction * (steps / 2 + 1), role,
                    percent < 0 ? BAR_RIGHT_HALF : BAR_LEFT_HALF);
+}
+
+/* Columns of the bars on each side of their axis; 0 where there is no room. */
+static int bar_half(struct area a)
+{
+    int half = (a.columns - BAR - 2) / 2;
+    return half < 2 ? 0 : half > BAR_HALF_MAX ? BAR_HALF_MAX : half;
 }
 
 static void draw_signed(struct canvas *canvas, int row, int column, int width,
@@ -94,24 +99,24 @@ static void draw_heading(const struct ui *ui, struct canvas *canvas,
         text_addf(&t, " %s", subshell_print(row->n, row->l, label));
     text_addf(&t, ", %s", row->unit->id);
     canvas_fill(canvas, a.row, 0, 1, a.columns, ROLE_QUIET, 0x2500);
-    canvas_textf(canvas, a.row, NAME, VALUE - NAME + 4, ROLE_HEADING, "%s ",
+    canvas_textf(canvas, a.row, NAME, VALUE - NAME + 4, ROLE_HEADING, " %s ",
                  buffer);
     static const struct {
         int column, width;
         const char *text;
     } heads[] = {
-        {VALUE, VALUE_WIDTH, " value"},
-        {REFERENCE, REFERENCE_WIDTH, " reference"},
-        {RESIDUAL, RESIDUAL_WIDTH, " residual"},
-        {PERCENT, PERCENT_WIDTH, " %"},
+        {VALUE, VALUE_WIDTH, " value "},
+        {REFERENCE, REFERENCE_WIDTH, " reference "},
+        {RESIDUAL, RESIDUAL_WIDTH, " residual "},
+        {PERCENT, PERCENT_WIDTH, " % "},
     };
     for (size_t i = 0; i < sizeof heads / sizeof heads[0]; i++)
         if (heads[i].column + heads[i].width <= a.columns)
-            canvas_right(canvas, a.row, heads[i].column, heads[i].width,
+            canvas_right(canvas, a.row, heads[i].column, heads[i].width + 1,
                          ROLE_HEADING, heads[i].text);
-    if (a.columns >= BAR + 11)
-        canvas_text(canvas, a.row, BAR, a.columns - BAR, ROLE_HEADING,
-                    "below | above");
+    if (bar_half(a) >= 7)
+        canvas_text(canvas, a.row, BAR + bar_half(a) - 7, 15, ROLE_HEADING,
+                    " below | above ");
 }
 
 /* Why there is no residual, from the first column that is then empty. */
@@ -153,8 +158,8 @@ static void draw_row(struct canvas *canvas, struct area a, int row,
         draw_signed(canvas, row, PERCENT, PERCENT_WIDTH, r->percent.value, 1);
     if (!r->like_with_like)
         canvas_put(canvas, row, MARK, ROLE_CAUTION, UNEQUAL);
-    if (r->has_percent)
-        draw_bar(canvas, row, BAR, a.columns - BAR - 1, r->percent.value, full);
+    if (r->has_percent && bar_half(a) > 0)
+        draw_bar(canvas, row, bar_half(a), r->percent.value, full);
 }
 
 /* Rows of all models that offer a quantity (or the reference alone). */

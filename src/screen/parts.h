@@ -99,9 +99,6 @@ void ui_select(struct ui *ui, int z);
 /* Place of a pin, or -1. */
 int ui_pin_place(const struct ui *ui, int z, int charge);
 
-/* Title line: the screen, what is shown, how much of it is there. */
-void draw_title(const struct ui *ui, struct canvas *canvas);
-
 /* Message (or the line being typed) and keys, on the given rows. */
 void draw_message(const struct ui *ui, struct canvas *canvas, int row);
 void draw_keys(const struct ui *ui, struct canvas *canvas, int row);

@@ -408,7 +408,8 @@ void ui_draw(struct ui *ui, struct canvas *canvas)
     ui_refresh(ui);
     screens[ui->screen]->draw(ui, canvas);
     if (ui->screen != SCREEN_MAP) {
-        draw_title(ui, canvas);
+        canvas_text(canvas, 0, 0, canvas->columns, ROLE_TITLE,
+                    ui_screen_name(ui->screen));
         draw_message(ui, canvas, canvas->rows - 2);
         draw_keys(ui, canvas, canvas->rows - 1);
     }

@@ -57,6 +57,7 @@ static void put_weight(const struct element_facts *facts, struct text *t)
 static void put_oxidation(int z, struct text *t)
 {
     const struct dataset *set = catalogue_oxidation_states();
+    bool any = false;
     for (int pass = 0; pass < 2; pass++) {
         bool begun = false;
         for (int i = set->first[z]; i < set->first[z + 1]; i++) {
@@ -64,37 +65,40 @@ static void put_oxidation(int z, struct text *t)
             if (o->main != (pass == 0))
                 continue;
             if (!begun && pass == 1)
-                text_add(t, t->length ? "; also " : "seldom ");
+                text_add(t, any ? "; also " : "seldom ");
             text_addf(t, begun ? ", %+d" : "%+d", o->state);
-            begun = true;
+            begun = any = true;
         }
     }
 }
 
-static void add_clause(struct text *t, const char *clause)
+/* `begun` says whether this fact has a clause already. */
+static void add_clause(struct text *t, bool *begun, const char *clause)
 {
     if (clause[0] == '\0')
         return;
-    if (t->length)
+    if (*begun)
         text_add(t, "; ");
     text_add(t, clause);
+    *begun = true;
 }
 
 static void put_caution(int z, struct text *t)
 {
     const struct dataset *set = catalogue_availability();
     const struct availability *a = dataset_availability(set, z);
+    bool begun = false;
     if (!a)
         return;
-    const char *hazards = dataset_text(set, a->hazards);
     if (a->radioactive != RADIOACTIVE_NO)
-        add_clause(t, radioactive_word((enum radioactive)a->radioactive));
-    add_clause(t, hazards);
-    if (t->length)
-        add_clause(t, DEFER);
+        add_clause(t, &begun,
+                   radioactive_word((enum radioactive)a->radioactive));
+    add_clause(t, &begun, dataset_text(set, a->hazards));
+    if (begun)
+        add_clause(t, &begun, DEFER);
     const char *basis = dataset_text(set, a->hazard_basis);
     if (basis[0]) {
-        add_clause(t, "tagged by ");
+        add_clause(t, &begun, "tagged by ");
         text_add(t, basis);
     }
 }
