@@ -426,8 +426,8 @@ END_TEST
 /* Overlap of two orbitals and the mean radius by Simpson's rule in ln r. */
 static double integral(const struct zeta_result *r, int i, int j, int power)
 {
-    enum { POINTS = 12001 };
-    const double low = -10.0, step = 15.0 / (POINTS - 1);
+    enum { POINTS = 6001 };
+    const double low = -13.0, step = 18.0 / (POINTS - 1);
     double sum = 0.0;
     for (int k = 0; k < POINTS; k++) {
         double x = exp(low + k * step);
