@@ -6,9 +6,11 @@
 #include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
+#include <unistd.h>
 
 #include "base/file.h"
 #include "refdata/catalogue.h"
+#include "refdata/definition.h"
 #include "refdata/loader.h"
 #include "refdata/suites.h"
 #include "support/near.h"
@@ -337,6 +339,36 @@ START_TEST(test_a_user_adds_a_set)
 }
 END_TEST
 
+START_TEST(test_a_full_catalogue_refuses_more)
+{
+    char path[512], copy[] = "/tmp/outershell-test-XXXXXX";
+    size_t size;
+    struct catalogue catalogue = {0};
+    struct status st = status_ok();
+    snprintf(path, sizeof path, "%s/good/smallest.json", CASES_DIR);
+    char *text = read_text(path, &size);
+    char *number = strstr(text, "own_2026\"");
+    ck_assert_ptr_nonnull(number);
+    close(mkstemp(copy));
+    for (int i = 0; i <= CATALOGUE_ADDED_MAX; i++) {
+        FILE *f = fopen(copy, "wb");
+        ck_assert_ptr_nonnull(f);
+        number[6] = (char)('0' + i / 10);
+        number[7] = (char)('0' + i % 10);
+        fwrite(text, 1, size, f);
+        fclose(f);
+        bool added = catalogue_add_file(&catalogue, copy, &st);
+        ck_assert_int_eq(added, i < CATALOGUE_ADDED_MAX);
+    }
+    ck_assert_ptr_nonnull(strstr(st.message, "more than 32 added data sets"));
+    ck_assert_int_eq(catalogue.added_count, CATALOGUE_ADDED_MAX);
+    ck_assert_ptr_nonnull(catalogue_find(&catalogue, "own_2031"));
+    catalogue_clear(&catalogue);
+    remove(copy);
+    free(text);
+}
+END_TEST
+
 START_TEST(test_a_built_in_id_is_taken)
 {
     char path[512];
@@ -467,6 +499,70 @@ START_TEST(test_the_man_page_names_every_key_and_word)
 }
 END_TEST
 
+/* Ids are what a file says and what CSV shows: none empty but the first where
+ * it means none, none twice. */
+static void distinct(const char *(*word)(int), int count)
+{
+    for (int i = 0; i < count; i++)
+        for (int j = 0; j < i; j++)
+            ck_assert_str_ne(word(i), word(j));
+    for (int i = 1; i < count; i++)
+        ck_assert_str_ne(word(i), "");
+}
+
+#define WORD_OF(name, type)                                                    \
+    static const char *name##_of(int i)                                        \
+    {                                                                          \
+        return name((enum type)i);                                             \
+    }
+WORD_OF(dataset_kind_id, dataset_kind)
+WORD_OF(evidence_id, evidence)
+WORD_OF(evidence_word, evidence)
+WORD_OF(gap_id, gap)
+WORD_OF(gap_word, gap)
+WORD_OF(spin_id, spin_state)
+WORD_OF(spin_word, spin_state)
+WORD_OF(coordination_id, coordination)
+WORD_OF(configuration_status_id, configuration_status)
+WORD_OF(radioactive_id, radioactive)
+WORD_OF(radioactive_word, radioactive)
+
+START_TEST(test_words_are_distinct)
+{
+    distinct(dataset_kind_id_of, DATASET_KIND_COUNT);
+    distinct(evidence_id_of, EVIDENCE_COUNT);
+    distinct(evidence_word_of, EVIDENCE_COUNT);
+    distinct(gap_id_of, GAP_COUNT);
+    distinct(gap_word_of, GAP_COUNT);
+    distinct(spin_id_of, SPIN_COUNT);
+    distinct(spin_word_of, SPIN_COUNT);
+    distinct(coordination_id_of, COORDINATION_COUNT);
+    distinct(configuration_status_id_of, CONFIGURATION_STATUS_COUNT);
+    distinct(radioactive_id_of, RADIOACTIVE_COUNT);
+    distinct(radioactive_word_of, RADIOACTIVE_COUNT);
+}
+END_TEST
+
+START_TEST(test_definitions_are_found_by_their_text)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        enum quantity_id id = (enum quantity_id)q;
+        ck_assert_uint_ge(definition_count(id), 1);
+        for (size_t i = 0; i < definition_count(id); i++) {
+            const struct definition *d = definition_at(id, i);
+            ck_assert_ptr_eq(definition_find(id, d->text), d);
+            ck_assert_int_eq(definition_dimension(id, d->text), d->dimension);
+        }
+        ck_assert_ptr_null(definition_find(id, "size"));
+        ck_assert_int_eq(definition_dimension(id, NULL),
+                         quantity_at(id)->dimension);
+    }
+    ck_assert_int_eq(
+        definition_dimension(QUANTITY_ELECTRONEGATIVITY, "Mulliken scale, eV"),
+        DIMENSION_ENERGY);
+}
+END_TEST
+
 TCase *loader_case(void)
 {
     TCase *tc = tcase_create("loader");
@@ -481,7 +577,10 @@ TCase *loader_case(void)
     tcase_add_test(tc, test_too_many_entries_are_refused);
     tcase_add_test(tc, test_files_that_cannot_be_read_are_named);
     tcase_add_test(tc, test_a_user_adds_a_set);
+    tcase_add_test(tc, test_a_full_catalogue_refuses_more);
     tcase_add_test(tc, test_a_built_in_id_is_taken);
+    tcase_add_test(tc, test_words_are_distinct);
+    tcase_add_test(tc, test_definitions_are_found_by_their_text);
     tcase_add_test(tc, test_the_tables_are_the_files);
     tcase_add_test(tc, test_the_example_of_the_man_page_loads);
     tcase_add_test(tc, test_the_man_page_names_every_key_and_word);
