@@ -6,7 +6,7 @@
 #include "analysis/row.h"
 
 #define COMPARISON_MAX 12 /* atoms side by side */
-#define FACT_TEXT_MAX 200
+#define FACT_TEXT_MAX 320
 
 /* One quantity from one source for all atoms, in one unit. */
 struct comparison_line {

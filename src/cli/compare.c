@@ -38,7 +38,9 @@ static bool write(const struct request *r, const struct comparison *c,
     struct output out;
     if (!output_open(&out, r, st))
         return false;
-    bool ok = compare_write(out.stream, r->format, c, st);
+    bool ok = r->format == EXPORT_TEXT
+                  ? compare_write_text(out.stream, c, &out.style, st)
+                  : compare_write(out.stream, r->format, c, st);
     return output_close(&out, ok, st);
 }
 

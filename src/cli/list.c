@@ -5,6 +5,7 @@
 #include "cli/commands.h"
 #include "cli/output.h"
 #include "export/rows.h"
+#include "export/rows_text.h"
 
 /* Rows being gathered, in the order of the output. */
 struct gathered {
@@ -68,7 +69,9 @@ bool cli_list(struct request *r, struct status *st)
     bool ok = output_check(r, st) && gather_all(r, &g, st) &&
               output_open(&out, r, st);
     if (ok) {
-        ok = rows_write(out.stream, r->format, g.rows, g.count, st);
+        ok = r->format == EXPORT_TEXT
+                 ? rows_write_text(out.stream, g.rows, g.count, &out.style, st)
+                 : rows_write(out.stream, r->format, g.rows, g.count, st);
         ok = output_close(&out, ok, st);
     }
     free(g.rows);

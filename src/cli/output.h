@@ -6,17 +6,29 @@
 
 #include "base/file.h"
 #include "cli/request.h"
+#include "export/table.h"
 
+#define OUTPUT_MARK_MAX 32
+
+/* stream: write here. With --ascii it is memory[size] first, and goes to
+ * `target` when it is complete. */
 struct output {
     FILE *stream;
+    FILE *target;
     struct file_draft draft;
     bool to_file;
+    char *memory;
+    size_t size;
+    struct table_style style;
+    char marks[4][OUTPUT_MARK_MAX];
 };
 
 /* Refuses a target that cannot be written before the work is done for it:
  * exists already, no such folder. Leaves nothing behind. */
 MUST_CHECK bool output_check(const struct request *request, struct status *st);
 
+/* Opens the output; style holds the marks that suit it: none in a file or a
+ * pipe unless --color always asks for them. */
 MUST_CHECK bool output_open(struct output *output,
                             const struct request *request, struct status *st);
 

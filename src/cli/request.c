@@ -307,6 +307,11 @@ static bool read_output(struct request *r, struct status *st)
                            "text, csv or json");
     r->color = (enum color_option)color;
     r->ascii = given(r, OPTION_ASCII) != NULL;
+    if (r->ascii && r->format != EXPORT_TEXT)
+        return status_fail(st, STATUS_USAGE,
+                           "--ascii: %s is always UTF-8; expected it with "
+                           "--format text or bibtex",
+                           given(r, OPTION_FORMAT));
     r->force = given(r, OPTION_FORCE) != NULL;
     r->output = given(r, OPTION_OUTPUT);
     if (r->output && r->output[0] == '\0')

@@ -11,6 +11,7 @@
 
 static const char *const formats[] = {"text", "csv", "json", "bibtex"};
 static const char *const colors[] = {"auto", "always", "never"};
+/* In the order of enum scheme; colors in that of enum color_option. */
 static const char *const backgrounds[] = {"terminal", "light", "dark",
                                           "contrast"};
 /* Every subshell that an atom up to Z = 118 may hold. */

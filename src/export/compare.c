@@ -1,9 +1,6 @@
 /* SPDX-License-Identifier: MIT */
 #include "export/compare.h"
 
-#include "element/selection.h"
-#include "export/table.h"
-
 #define FIELD_TEXT_MAX 1024
 
 static void put_number(bool there, struct number n, struct text *t)
@@ -214,94 +211,11 @@ static void write_records(FILE *out, enum export_format format,
         fputs("\n]}\n", out);
 }
 
-static void add_value_cells(struct table *table,
-                            const struct comparison_line *line, int which)
-{
-    char buffer[FIELD_TEXT_MAX];
-    char out[NUMBER_TEXT_MAX];
-    const struct reading *r = &line->readings[which];
-    struct text t = text_over(buffer, sizeof buffer);
-    struct difference d;
-    if (r->state != READING_OK)
-        text_add(&t, "-");
-    else if (line->provenance->computed)
-        text_add(
-            &t, number_print_places(r->value.value, line->unit->decimals, out));
-    else
-        reading_text(&t, r);
-    table_cell(table, buffer);
-    if (which == 0)
-        return;
-    bool differs = comparison_difference(line, which, &d);
-    table_cellf(
-        table, "%s%s", differs && d.value.value > 0 ? "+" : "",
-        differs ? number_print_places(d.value.value, line->unit->decimals, out)
-                : "-");
-    if (differs && d.has_percent)
-        table_cellf(table, "%+.1f", d.percent.value);
-    else
-        table_cell(table, "-");
-}
-
-static bool write_numbers(FILE *out, const struct comparison *c,
-                          struct status *st)
-{
-    char alignment[TABLE_COLUMNS_MAX + 1];
-    char ion[ION_TEXT_MAX];
-    char first[ION_TEXT_MAX];
-    struct text shape = text_over(alignment, sizeof alignment);
-    text_add(&shape, "lllr");
-    for (int w = 1; w < c->count && shape.length + 3 < sizeof alignment; w++)
-        text_add(&shape, "rrr");
-    int shown = ((int)shape.length - 4) / 3 + 1;
-    struct table table = table_new(alignment);
-    table_cell(&table, "quantity");
-    table_cell(&table, "source");
-    table_cell(&table, "unit");
-    table_cell(&table, ion_print(c->species[0].z, c->species[0].charge, first));
-    for (int w = 1; w < shown; w++) {
-        table_cell(&table,
-                   ion_print(c->species[w].z, c->species[w].charge, ion));
-        table_cellf(&table, "-%s", first);
-        table_cell(&table, "%");
-    }
-    for (int i = 0; i < c->line_count; i++) {
-        const struct comparison_line *line = &c->lines[i];
-        table_cell(&table, quantity_at(line->quantity)->id);
-        table_cell(&table, line->provenance->id);
-        table_cell(&table, line->unit->id);
-        for (int w = 0; w < shown; w++)
-            add_value_cells(&table, line, w);
-    }
-    return table_write(&table, out, st);
-}
-
-static bool write_facts(FILE *out, const struct comparison *c,
-                        struct status *st)
-{
-    char ion[ION_TEXT_MAX];
-    struct table table = table_new("lll");
-    for (int f = 0; f < c->fact_count; f++)
-        for (int w = 0; w < c->count; w++) {
-            if (c->facts[f].text[w][0] == '\0')
-                continue;
-            table_cell(&table,
-                       ion_print(c->species[w].z, c->species[w].charge, ion));
-            table_cell(&table, c->facts[f].label);
-            table_cell(&table, c->facts[f].text[w]);
-        }
-    return table_write(&table, out, st);
-}
-
 bool compare_write(FILE *out, enum export_format format,
                    const struct comparison *comparison, struct status *st)
 {
-    if (format != EXPORT_TEXT) {
-        write_records(out, format, comparison);
-        return true;
-    }
-    if (!write_facts(out, comparison, st))
-        return false;
-    putc('\n', out);
-    return write_numbers(out, comparison, st);
+    if (format == EXPORT_TEXT)
+        return compare_write_text(out, comparison, &table_plain, st);
+    write_records(out, format, comparison);
+    return true;
 }

@@ -3,8 +3,7 @@
 
 #include <string.h>
 
-#include "element/selection.h"
-#include "export/table.h"
+#include "export/rows_text.h"
 
 #define FIELD_TEXT_MAX 1024
 
@@ -222,69 +221,11 @@ static void write_json(FILE *out, const struct row *rows, size_t count)
     fputs("\n]}\n", out);
 }
 
-/* What stands at the end of a text line: why there is no residual, else
- * whether like is compared with like, else what to know of the value. */
-static const char *comment_of(const struct row *row)
-{
-    if (row->state != ROW_OK)
-        return row->reason;
-    if (row->value.remark[0] != '\0')
-        return row->value.remark;
-    return row->like_with_like ? "" : row->reference.provenance->definition;
-}
-
-static void text_number(struct table *table, bool there, double value,
-                        int places)
-{
-    char out[NUMBER_TEXT_MAX];
-    table_cell(table, there ? number_print_places(value, places, out) : "-");
-}
-
-static void add_text_row(struct table *table, const struct row *row)
-{
-    char buffer[FIELD_TEXT_MAX];
-    char ion[ION_TEXT_MAX];
-    struct text t = text_over(buffer, sizeof buffer);
-    int places = row->unit->decimals;
-    table_cell(table, ion_print(row->species.z, row->species.charge, ion));
-    table_cell(table, quantity_at(row->quantity)->id);
-    put_subshell(row, &t);
-    table_cell(table, buffer);
-    table_cell(table, row->value.provenance ? row->value.provenance->id : "-");
-    text_number(table, row->value.state == READING_OK, row->value.value.value,
-                places);
-    t = text_over(buffer, sizeof buffer);
-    if (row->reference.state == READING_OK)
-        reading_text(&t, &row->reference);
-    table_cell(table, t.length ? buffer : "-");
-    text_number(table, row->state == ROW_OK, row->residual.value, places);
-    text_number(table, row->state == ROW_OK && row->has_percent,
-                row->percent.value, 1);
-    table_cell(table, row->unit->id);
-    table_cell(table,
-               row->reference.provenance ? row->reference.provenance->id : "-");
-    table_cell(table, comment_of(row));
-}
-
-static bool write_text(FILE *out, const struct row *rows, size_t count,
-                       struct status *st)
-{
-    static const char *const heading[] = {
-        "species",  "quantity", "shell", "model",         "value", "reference",
-        "residual", "%",        "unit",  "reference set", "remark"};
-    struct table table = table_new("llllrrrrlll");
-    for (size_t i = 0; i < sizeof heading / sizeof heading[0]; i++)
-        table_cell(&table, heading[i]);
-    for (size_t i = 0; i < count; i++)
-        add_text_row(&table, &rows[i]);
-    return table_write(&table, out, st);
-}
-
 bool rows_write(FILE *out, enum export_format format, const struct row *rows,
                 size_t count, struct status *st)
 {
     if (format == EXPORT_TEXT)
-        return write_text(out, rows, count, st);
+        return rows_write_text(out, rows, count, &table_plain, st);
     if (format == EXPORT_CSV)
         write_csv(out, rows, count);
     else

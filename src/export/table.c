@@ -8,12 +8,16 @@
 
 #include "base/text.h"
 
+const struct table_style table_plain = {"", "", "", ""};
+
 struct table table_new(const char *alignment)
 {
     struct table t = {.columns = (int)strlen(alignment)};
     assert(t.columns > 0 && t.columns <= TABLE_COLUMNS_MAX);
-    for (int c = 0; c < t.columns; c++)
-        t.right[c] = alignment[c] == 'r';
+    for (int c = 0; c < t.columns; c++) {
+        t.signs[c] = alignment[c] == 's';
+        t.right[c] = t.signs[c] || alignment[c] == 'r';
+    }
     return t;
 }
 
@@ -55,8 +59,20 @@ static void spaces(FILE *out, int count)
         putc(' ', out);
 }
 
+static const char *mark_of(const struct table *table, size_t row, int column,
+                           const char *cell, const struct table_style *style)
+{
+    if (row == 0)
+        return style->heading;
+    if (!table->signs[column])
+        return "";
+    return cell[0] == '+'                      ? style->plus
+           : cell[0] == '-' && cell[1] != '\0' ? style->minus
+                                               : "";
+}
+
 static void write_row(const struct table *table, size_t row, const int *widths,
-                      FILE *out)
+                      const struct table_style *style, FILE *out)
 {
     int pending = 0;
     for (int c = 0; c < table->columns; c++) {
@@ -69,7 +85,11 @@ static void write_row(const struct table *table, size_t row, const int *widths,
         if (length > 0) {
             spaces(out, pending);
             pending = 0;
+            const char *mark = mark_of(table, row, c, cell, style);
+            fputs(mark, out);
             fputs(cell, out);
+            if (mark[0])
+                fputs(style->end, out);
         }
         if (!table->right[c])
             pending += pad;
@@ -79,6 +99,12 @@ static void write_row(const struct table *table, size_t row, const int *widths,
 }
 
 bool table_write(struct table *table, FILE *out, struct status *st)
+{
+    return table_write_styled(table, out, &table_plain, st);
+}
+
+bool table_write_styled(struct table *table, FILE *out,
+                        const struct table_style *style, struct status *st)
 {
     int widths[TABLE_COLUMNS_MAX] = {0};
     size_t columns = (size_t)table->columns;
@@ -90,7 +116,7 @@ bool table_write(struct table *table, FILE *out, struct status *st)
             widths[i % columns] = length;
     }
     for (size_t row = 0; ok && row < table->count / columns; row++)
-        write_row(table, row, widths, out);
+        write_row(table, row, widths, style, out);
     for (size_t i = 0; i < table->count; i++)
         free(table->cells[i]);
     free(table->cells);

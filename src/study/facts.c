@@ -319,8 +319,8 @@ static int model_sources(const struct model *model, struct source *sources,
                                  .unit = "",
                                  .domain = model->domain};
         }
-        struct text t = text_over(s->quantity, sizeof s->quantity);
-        t.length = strlen(s->quantity);
+        struct text t = {s->quantity, sizeof s->quantity, strlen(s->quantity),
+                         false};
         if (!strstr(s->quantity, id))
             text_addf(&t, t.length ? " %s" : "%s", id);
     }

@@ -10,6 +10,9 @@
 /* The stored set that Z_eff from an energy follows from. */
 #define IONIZATION_RANK 1
 
+/* Significant digits of it at least; more where the energy is that sharp. */
+#define ZEFF_DIGITS 7
+
 static const struct citation ionization_citation[] = {
     {"ionization_zeff", "misc", "common practice, no source",
      "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)", NULL,
@@ -131,8 +134,10 @@ static struct reading zeff_from_ionization(const struct reference *reference,
     r.l = outer->l;
     r.remark = energy.remark;
     r.has_u = energy.has_u;
-    if (r.has_u)
+    if (r.has_u) {
         r.u = number_round(0.5 * z_eff * energy.u.value / ev, 2, 0);
+        r.value = number_round(z_eff, ZEFF_DIGITS, r.u.decimals);
+    }
     return r;
 }
 
