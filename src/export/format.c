@@ -49,6 +49,10 @@ void json_string(FILE *out, const char *text)
 void citation_text(struct text *t, const struct citation *c)
 {
     text_add(t, c->authors ? c->authors : c->title);
+    /* An article is found by its journal; anything else by its title. */
+    if (c->authors && c->title && c->container &&
+        strcmp(c->kind, "article") != 0)
+        text_addf(t, ", %s", c->title);
     if (c->container)
         text_addf(t, ", %s", c->container);
     if (c->volume)

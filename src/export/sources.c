@@ -149,13 +149,29 @@ static bool seen_before(const struct source *sources, int i, int c)
     return false;
 }
 
+/* What BibTeX calls the container of a kind of entry. */
+static const char *container_field(const char *kind)
+{
+    static const struct {
+        const char *kind, *field;
+    } fields[] = {
+        {"article", "journal"},
+        {"book", "publisher"},
+        {"incollection", "booktitle"},
+        {"techreport", "institution"},
+    };
+    for (size_t i = 0; i < sizeof fields / sizeof *fields; i++)
+        if (strcmp(kind, fields[i].kind) == 0)
+            return fields[i].field;
+    return "howpublished";
+}
+
 static void write_entry(FILE *out, const struct citation *c)
 {
-    bool article = strcmp(c->kind, "article") == 0;
     fprintf(out, "@%s{%s", c->kind, c->key);
     bibtex_field(out, "author", c->authors);
     bibtex_field(out, "title", c->title);
-    bibtex_field(out, article ? "journal" : "publisher", c->container);
+    bibtex_field(out, container_field(c->kind), c->container);
     bibtex_field(out, "volume", c->volume);
     bibtex_field(out, "pages", c->pages);
     if (c->year)

@@ -85,6 +85,14 @@ const char *dataset_text(const struct dataset *set, text_offset offset)
     return set->strings + offset;
 }
 
+int dataset_value_count(const struct dataset *set)
+{
+    int count = set->count;
+    for (int i = 0; set->values && i < set->count; i++)
+        count -= set->values[i].gap != GAP_NONE;
+    return count;
+}
+
 const struct entry *dataset_lookup_site(const struct dataset *set, int z,
                                         int charge,
                                         enum coordination coordination,

@@ -225,6 +225,9 @@ struct dataset {
 /* The text at an offset. */
 const char *dataset_text(const struct dataset *set, text_offset offset);
 
+/* Entries that hold something: all but the gaps. */
+int dataset_value_count(const struct dataset *set);
+
 /* The preferred entry (value or gap) of a species, n = l = 0 for none; where
  * the set has coordinations, the one at its default coordination. NULL when
  * there is no entry. set is of kind DATASET_VALUES; 1 <= z <= Z_MAX. */

@@ -221,10 +221,14 @@ static bool load_citation(struct load *ld, const cJSON *object, bool first,
         return status_fail(ld->st, STATUS_DATA,
                            "year %d: expected one from %d to %d", c->year,
                            YEAR_MIN, YEAR_MAX);
-    if (first && (!object_member(object, "authors") ||
-                  !object_member(object, "title") || c->year == 0))
+    /* A table that goes from hand to hand can be without a year. */
+    bool needs_year = strcmp(c->kind, "misc") != 0;
+    if (first &&
+        (!object_member(object, "authors") || !object_member(object, "title") ||
+         (needs_year && c->year == 0)))
         return status_fail(ld->st, STATUS_DATA,
-                           "the first citation needs authors, title and year");
+                           "the first citation needs authors, title and, "
+                           "unless it is misc, year");
     if (!object_member(object, "title") && !object_member(object, "container"))
         return status_fail(ld->st, STATUS_DATA,
                            "a title or a container is needed");

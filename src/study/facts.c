@@ -334,7 +334,7 @@ static struct source set_source(const struct dataset *set)
                        .domain = set->licence,
                        .notes = set->notes,
                        .note_count = set->note_count,
-                       .count = set->count};
+                       .count = dataset_value_count(set)};
     if (set->kind == DATASET_VALUES) {
         struct text t = text_over(s.quantity, sizeof s.quantity);
         text_add(&t, quantity_at(set->quantity)->id);

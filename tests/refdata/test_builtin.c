@@ -64,14 +64,6 @@ static void same_entry(const struct dataset *set, const struct entry *e, int z,
         same_digits(e->u, u, id, z);
 }
 
-static int count_values(const struct dataset *set)
-{
-    int count = 0;
-    for (int i = 0; i < set->count; i++)
-        count += set->values[i].gap == GAP_NONE;
-    return count;
-}
-
 /* Numbers of values as counted in the source tables. */
 START_TEST(test_every_set_holds_all_its_values)
 {
@@ -109,13 +101,13 @@ START_TEST(test_every_set_holds_all_its_values)
     int of_values = 0;
     const struct catalogue *all = catalogue_builtin();
     for (size_t i = 0; i < sizeof sets / sizeof *sets; i++)
-        ck_assert_msg(count_values(need(sets[i].id)) == sets[i].values,
+        ck_assert_msg(dataset_value_count(need(sets[i].id)) == sets[i].values,
                       "%s: %d values, source has %d", sets[i].id,
-                      count_values(need(sets[i].id)), sets[i].values);
+                      dataset_value_count(need(sets[i].id)), sets[i].values);
     for (size_t i = 0; i < catalogue_count(all); i++)
         of_values += catalogue_at(all, i)->kind == DATASET_VALUES;
     ck_assert_int_eq(of_values, (int)(sizeof sets / sizeof *sets));
-    ck_assert_int_eq(catalogue_elements()->count, 118);
+    ck_assert_int_eq(dataset_value_count(catalogue_elements()), 118);
     ck_assert_int_eq(need("cations_nist_asd_2024")->count, 828);
     ck_assert_int_eq(need("anions_ning_lu_2022")->count, 78);
     ck_assert_int_eq(catalogue_oxidation_states()->count, 373);
@@ -131,7 +123,9 @@ START_TEST(test_every_set_says_where_it_comes_from)
         const struct dataset *set = catalogue_at(all, i);
         const struct provenance *p = &set->provenance;
         ck_assert_msg(p->citation_count > 0 && p->citations[0].authors &&
-                          p->citations[0].title && p->citations[0].year > 0,
+                          p->citations[0].title &&
+                          (p->citations[0].year > 0 ||
+                           strcmp(p->citations[0].kind, "misc") == 0),
                       "%s: citation", p->id);
         ck_assert_msg(set->note_count > 0, "%s: notes", p->id);
         ck_assert_str_eq(set->licence, "facts; cited");
