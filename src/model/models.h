@@ -8,5 +8,6 @@
 extern const struct model model_shells;
 extern const struct model model_slater;
 extern const struct model model_clementi;
+extern const struct model model_single_zeta;
 
 #endif

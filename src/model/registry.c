@@ -10,6 +10,7 @@ static const struct model *const models[] = {
     &model_shells,
     &model_slater,
     &model_clementi,
+    &model_single_zeta,
 };
 
 int model_count(void)

@@ -1,0 +1,196 @@
+/* SPDX-License-Identifier: MIT */
+/* The calculation behind the 1963 exponents, solved live (zeta/zeta.h). */
+#include "base/units.h"
+#include "model/models.h"
+#include "model/rule.h"
+#include "zeta/zeta.h"
+
+/* Non-relativistic exponents lose their meaning with growing Z; the published
+ * tables end with Rn, the stored ground configurations that are measured with
+ * Lr. */
+#define Z_LAST 103
+
+static const struct citation citations[] = {
+    {"clementi1963", "article", "E. Clementi and D. L. Raimondi",
+     "Atomic Screening Constants from SCF Functions", "J. Chem. Phys.", 1963,
+     "38", "2686", "10.1063/1.1733573"},
+    {"koopmans1934", "article", "T. Koopmans",
+     "Über die Zuordnung von Wellenfunktionen und Eigenwerten zu den einzelnen "
+     "Elektronen eines Atoms",
+     "Physica", 1934, "1", "104", "10.1016/S0031-8914(34)90011-2"},
+};
+
+#define PROVENANCE(what, count)                                                \
+    {                                                                          \
+        true, "single-zeta", "single-zeta Hartree-Fock", what, citations,      \
+            count                                                              \
+    }
+
+enum { OFFER_ZEFF, OFFER_RADIUS, OFFER_IONIZATION, OFFER_COUNT };
+
+static const struct model_offer offers[OFFER_COUNT] = {
+    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_EXPONENT, 1)},
+    [OFFER_RADIUS] = {QUANTITY_RADIUS,
+                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, 1)},
+    [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
+                          PROVENANCE(DEFINITION_IONIZATION, 2)},
+};
+
+struct work {
+    struct zeta *zeta;
+    struct species species;
+    bool average;
+    struct zeta_result result;
+};
+
+static bool open_work(void *work, struct status *st)
+{
+    struct work *w = work;
+    w->zeta = zeta_new(st);
+    return w->zeta != NULL;
+}
+
+static void close_work(void *work)
+{
+    struct work *w = work;
+    zeta_free(w->zeta);
+    w->zeta = NULL;
+}
+
+static bool covered(const struct species *species)
+{
+    return species->z <= Z_LAST;
+}
+
+static void begin(void *work, const struct question *question,
+                  const struct model_options *options)
+{
+    struct work *w = work;
+    w->species = question->species;
+    w->average = options && options->average_term;
+    w->result = (struct zeta_result){.state = ZETA_RUNNING};
+    struct zeta_problem problem = {
+        .z = w->species.z,
+        .configuration = &w->species.configuration,
+        .coupling = w->average ? ZETA_AVERAGE : ZETA_HUND,
+    };
+    if (!covered(&w->species) || !zeta_begin(w->zeta, &problem))
+        w->result.state = ZETA_REFUSED;
+}
+
+/* A whole atom takes less than a millisecond: one step. */
+static enum model_progress step(void *work)
+{
+    struct work *w = work;
+    if (w->result.state != ZETA_RUNNING)
+        return MODEL_DONE;
+    while (zeta_step(w->zeta))
+        ;
+    zeta_read(w->zeta, &w->result);
+    return MODEL_DONE;
+}
+
+/* Why there is no number at all; NULL when there is one. */
+static const char *gap_reason(const struct work *w, enum reading_state *state)
+{
+    *state = READING_OUTSIDE;
+    if (!covered(&w->species))
+        return "the calculation is not relativistic and ends with Lr";
+    switch (w->result.state) {
+    case ZETA_SOLVED:
+    case ZETA_UNBOUND:
+        return NULL;
+    case ZETA_REFUSED:
+        return "this basis holds no core holes, no electrons excited within "
+               "one l and no fractions of electrons";
+    case ZETA_ESCAPED:
+    case ZETA_DISORDERED:
+        return zeta_state_text(w->result.state);
+    case ZETA_RUNNING:
+    case ZETA_UNCONVERGED:
+    case ZETA_STATE_COUNT:
+        break;
+    }
+    *state = READING_NOT_CONVERGED;
+    return "the exponents did not converge";
+}
+
+static const struct zeta_subshell *result_subshell(const struct zeta_result *r,
+                                                   int n, int l)
+{
+    for (int i = 0; i < r->count; i++)
+        if (r->shells[i].n == n && r->shells[i].l == l)
+            return &r->shells[i];
+    return NULL;
+}
+
+static const char *remark(const struct work *w, const struct zeta_subshell *s)
+{
+    if (s->energy >= 0.0)
+        return "not bound in this minimal basis: its orbital energy is "
+               "positive";
+    if (w->result.anion)
+        return "an anion: a minimum in this basis does not prove that it is "
+               "bound";
+    return w->average ? "average of configuration" : "";
+}
+
+static struct reading gap(const struct model_offer *offer,
+                          enum reading_state state, const char *reason)
+{
+    return reading_gap(offer->quantity, state, reason, &offer->provenance);
+}
+
+static struct reading read_ionization(const struct model_offer *offer,
+                                      const struct zeta_subshell *s)
+{
+    if (s->energy >= 0.0)
+        return gap(offer, READING_OUTSIDE,
+                   "the outermost subshell is not bound in this minimal basis");
+    struct reading r = reading_computed(
+        offer->quantity, -s->energy * HARTREE_EV, &offer->provenance);
+    r.remark = "one-electron estimate (Koopmans): off by some eV";
+    return r;
+}
+
+static struct reading read(const void *work, int offer, int n, int l)
+{
+    const struct work *w = work;
+    const struct model_offer *o = &offers[offer];
+    const char *reason;
+    bool outermost = n == 0 || offer == OFFER_IONIZATION;
+    const struct subshell *asked = rule_subshell(&w->species, outermost ? 0 : n,
+                                                 outermost ? 0 : l, &reason);
+    if (!asked)
+        return gap(o, READING_OUTSIDE, reason);
+    enum reading_state state;
+    reason = gap_reason(w, &state);
+    if (reason)
+        return gap(o, state, reason);
+    const struct zeta_subshell *s =
+        result_subshell(&w->result, asked->n, asked->l);
+    if (offer == OFFER_IONIZATION)
+        return read_ionization(o, s);
+    struct reading r = reading_computed(
+        o->quantity, offer == OFFER_ZEFF ? s->z_eff : s->peak_radius * BOHR_PM,
+        &o->provenance);
+    r.n = s->n;
+    r.l = s->l;
+    r.remark = remark(w, s);
+    return r;
+}
+
+const struct model model_single_zeta = {
+    .id = "single-zeta",
+    .title = "single-zeta Hartree-Fock, solved live",
+    .domain = "H to Lr, any valence configuration",
+    .closed = false,
+    .offers = offers,
+    .offer_count = OFFER_COUNT,
+    .work_size = sizeof(struct work),
+    .open = open_work,
+    .close = close_work,
+    .begin = begin,
+    .step = step,
+    .read = read,
+};
