@@ -31,6 +31,11 @@ static const struct option options[OPTION_COUNT] = {
      WORDS_NONE, false, LIST | COMPARE,
      "electron configuration in place of the ground state, such as "
      "'[Ar] 3d6 4s2'"},
+    {OPTION_TERM, "term", 't', "TERM", OPTION_VALUE, WORDS_TERM, false,
+     LIST | COMPARE,
+     "for single-zeta: hund, the term of highest S, then highest L, or "
+     "average, "
+     "the average of the configuration (default: hund)"},
     {OPTION_REFERENCE, "reference", 'r', "SETS", OPTION_VALUE, WORDS_REFERENCE,
      true, LIST,
      "stored data sets to compare with, at most one per quantity (default: the "

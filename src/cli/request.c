@@ -334,6 +334,26 @@ static bool read_data(struct request *r, struct status *st)
     return r->study;
 }
 
+/* The term to solve for: one of the chosen models must know the choice. */
+static bool read_term(struct request *r, struct status *st)
+{
+    int average = 0;
+    bool taken = false;
+    if (!read_choice(r, OPTION_TERM, &average, st))
+        return false;
+    for (int i = 0; i < r->model_count; i++)
+        taken =
+            taken || (r->models[i]->takes_term && offers_any(r, r->models[i]));
+    if (given(r, OPTION_TERM) && !taken)
+        return status_fail(st, STATUS_USAGE,
+                           "--term %s: none of the models asked takes it; "
+                           "expected single-zeta among them",
+                           given(r, OPTION_TERM));
+    struct model_options options = {.average_term = average != 0};
+    study_set_options(r->study, &options);
+    return true;
+}
+
 bool request_open(struct request *r, const struct call *call, struct status *st)
 {
     *r = (struct request){.call = call};
@@ -342,7 +362,8 @@ bool request_open(struct request *r, const struct call *call, struct status *st)
     return read_output(r, st) && read_quantities(r, st) && read_models(r, st) &&
            read_units(r, st) && read_subshell(r, st) &&
            read_configuration(r, st) && read_data(r, st) &&
-           read_references(r, st) && (!chooses || choose_atoms(r, st));
+           read_references(r, st) && read_term(r, st) &&
+           (!chooses || choose_atoms(r, st));
 }
 
 void request_close(struct request *r)

@@ -9,6 +9,8 @@
 #include "element/subshell.h"
 #include "model/registry.h"
 
+/* In the order of model_options.average_term: false, true. */
+static const char *const terms[] = {"hund", "average"};
 static const char *const formats[] = {"text", "csv", "json", "bibtex"};
 static const char *const colors[] = {"auto", "always", "never"};
 /* In the order of enum scheme; colors in that of enum color_option. */
@@ -71,6 +73,9 @@ void words_fill(struct words *words, enum word_kind kind,
         break;
     case WORDS_SUBSHELL:
         ADD_ARRAY(words, subshells);
+        break;
+    case WORDS_TERM:
+        ADD_ARRAY(words, terms);
         break;
     case WORDS_FORMAT:
         ADD_ARRAY(words, formats);

@@ -61,6 +61,7 @@ struct model {
     const char *title;
     const char *domain;
     bool closed;
+    bool takes_term; /* model_options.average_term matters */
     const struct model_offer *offers;
     int offer_count;
     size_t work_size;

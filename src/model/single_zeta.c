@@ -185,6 +185,7 @@ const struct model model_single_zeta = {
     .title = "single-zeta Hartree-Fock, solved live",
     .domain = "H to Lr, any valence configuration",
     .closed = false,
+    .takes_term = true,
     .offers = offers,
     .offer_count = OFFER_COUNT,
     .work_size = sizeof(struct work),
