@@ -68,9 +68,10 @@ static void lose_one(struct configuration *c)
  * and then n. */
 static void gain_one(struct configuration *c)
 {
-    for (int sum = 1; sum <= N_MAX; sum++)
+    for (int sum = 1; sum <= N_MAX + L_MAX; sum++)
         for (int l = (sum - 1) / 2; l >= 0; l--)
-            if (l <= L_MAX && configuration_change(c, sum - l, l, 1.0))
+            if (l <= L_MAX && sum - l <= N_MAX &&
+                configuration_change(c, sum - l, l, 1.0))
                 return;
     assert(!"no room in any subshell");
 }
@@ -91,8 +92,8 @@ bool ground_state(int z, int charge, struct species *species, struct status *st)
     struct species s = {.z = z};
     if (charge > z)
         return status_fail(st, STATUS_USAGE,
-                           "charge %d: %s has only %d electron%s to lose",
-                           charge, element_at(z)->symbol, z, z == 1 ? "" : "s");
+                           "charge %d: %s has only %d electrons to lose",
+                           charge, element_at(z)->symbol, z);
     if (charge < CHARGE_LOWEST)
         return status_fail(st, STATUS_USAGE,
                            "charge %d: no such anion of %s; expected %d or "

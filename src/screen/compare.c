@@ -92,6 +92,15 @@ static void draw_value(struct canvas *canvas, int row, int column,
                  d.value.value < 0 ? ROLE_BELOW : ROLE_ABOVE, buffer);
 }
 
+/* An id without the quantity that heads its group. */
+static const char *short_id(const struct comparison_line *line)
+{
+    const char *id = line->provenance->id;
+    const char *quantity = quantity_at(line->quantity)->id;
+    size_t n = strlen(quantity);
+    return strncmp(id, quantity, n) == 0 && id[n] == '_' ? id + n + 1 : id;
+}
+
 static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
                       const struct comparison_line *line, bool first, int atoms)
 {
@@ -99,7 +108,7 @@ static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
         canvas_textf(canvas, row, 0, 9, ROLE_HEADING, "%s %s",
                      quantity_at(line->quantity)->symbol, line->unit->id);
     canvas_text(canvas, row, 10, label_columns(ui) - 11, ROLE_TEXT,
-                line->provenance->id);
+                short_id(line));
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
         if (which < ui->comparison.count)

@@ -171,12 +171,12 @@ static int widest_bound(const struct scale *s)
 }
 
 /* Every bound is written, or every second, fourth … where they do not fit. */
-static int bounds_every(const struct scale *s, int box, int columns)
+static int bounds_every(const struct scale *s, int box, int ends, int columns)
 {
     int every = 1;
     int width = widest_bound(s) + 2;
     while (every < SCALE_CLASSES &&
-           (2 + (SCALE_CLASSES - 1) / every) * width + SCALE_CLASSES * box >
+           (ends + (SCALE_CLASSES - 1) / every) * width + SCALE_CLASSES * box >
                columns)
         every *= 2;
     return every;
@@ -214,15 +214,21 @@ static void draw_scale(const struct ui *ui, struct canvas *canvas,
         return;
     }
     int box = a.columns >= 75 ? 3 : 1;
-    int every = bounds_every(s, box, a.columns);
-    int column = canvas_text(canvas, a.row, 0, a.columns, ROLE_TEXT,
+    int ends = s->balance ? 0 : 2;
+    int every = bounds_every(s, box, ends, a.columns);
+    int column = 0;
+    if (!s->balance)
+        column = canvas_text(canvas, a.row, 0, a.columns, ROLE_TEXT,
                              number_print_places(s->lowest, s->places, out)) +
                  1;
     for (int c = 0; c < SCALE_CLASSES; c++) {
         bool last = c + 1 == SCALE_CLASSES;
         draw_class(ui, canvas, a.row, column, box, c);
         column += box;
-        if (!last && (c + 1) % every != 0)
+        /* A balance is open at both ends; so is a ramp whose last class is
+         * empty. */
+        if (last ? s->balance || s->highest <= s->inner[c - 1]
+                 : (c + 1) % every != 0)
             continue;
         number_print_places(last ? s->highest : s->inner[c], s->places, out);
         column = canvas_text(canvas, a.row, column + 1, a.columns - column - 1,

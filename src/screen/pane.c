@@ -18,21 +18,28 @@
 #define BAR_HALF_MAX 24
 #define MODELS_MAX 16
 
-/* Columns of the pane from the left; the bar takes what is left. */
-enum {
-    NAME = 1,
-    NAME_WIDTH = 12,
-    VALUE = 13,
-    VALUE_WIDTH = 10,
-    REFERENCE = 24,
-    REFERENCE_WIDTH = 18,
-    RESIDUAL = 43,
-    RESIDUAL_WIDTH = 10,
-    PERCENT = 54,
-    PERCENT_WIDTH = 8,
-    MARK = 63,
-    BAR = 65
+/* Columns of the pane from the left; a width of 0 leaves one out. The bar takes
+ * what is left. */
+struct columns {
+    int columns; /* needed for all but the bar */
+    int name_width;
+    int value, value_width;
+    int reference, reference_width;
+    int residual, residual_width;
+    int percent, percent_width;
+    int mark;
 };
+#define NAME 1
+#define BAR 65
+
+static const struct columns *columns_for(struct area a)
+{
+    static const struct columns wide = {64, 12, 13, 10, 24, 18,
+                                        43, 10, 54, 8,  63};
+    static const struct columns narrow = {40, 12, 13, 7, 21, 9,
+                                          0,  0,  31, 7, 39};
+    return a.columns >= wide.columns ? &wide : &narrow;
+}
 
 /* Residual in per cent, drawn from a middle axis: a full half is `full` per
  * cent. */
@@ -93,25 +100,26 @@ static void draw_heading(const struct ui *ui, struct canvas *canvas,
     char buffer[UI_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
+    const struct columns *c = columns_for(a);
     (void)ui;
     text_add(&t, quantity_at(row->quantity)->symbol);
     if (row->n)
         text_addf(&t, " %s", subshell_print(row->n, row->l, label));
     text_addf(&t, ", %s", row->unit->id);
     canvas_fill(canvas, a.row, 0, 1, a.columns, ROLE_QUIET, 0x2500);
-    canvas_textf(canvas, a.row, NAME, VALUE - NAME + 4, ROLE_HEADING, " %s ",
+    canvas_textf(canvas, a.row, NAME, c->value + 3, ROLE_HEADING, " %s ",
                  buffer);
-    static const struct {
+    const struct {
         int column, width;
         const char *text;
     } heads[] = {
-        {VALUE, VALUE_WIDTH, " value "},
-        {REFERENCE, REFERENCE_WIDTH, " reference "},
-        {RESIDUAL, RESIDUAL_WIDTH, " residual "},
-        {PERCENT, PERCENT_WIDTH, " % "},
+        {c->value, c->value_width, " value "},
+        {c->reference, c->reference_width, " reference "},
+        {c->residual, c->residual_width, " residual "},
+        {c->percent, c->percent_width, " % "},
     };
     for (size_t i = 0; i < sizeof heads / sizeof heads[0]; i++)
-        if (heads[i].column + heads[i].width <= a.columns)
+        if (heads[i].width > 0)
             canvas_right(canvas, a.row, heads[i].column, heads[i].width + 1,
                          ROLE_HEADING, heads[i].text);
     if (bar_half(a) >= 7)
@@ -123,9 +131,11 @@ static void draw_heading(const struct ui *ui, struct canvas *canvas,
 static void draw_reason(struct canvas *canvas, struct area a, int row,
                         const struct row *r)
 {
-    int from = r->value.state != READING_OK && r->value.provenance ? VALUE
-               : r->reference.state != READING_OK                  ? REFERENCE
-                                                                   : RESIDUAL;
+    const struct columns *c = columns_for(a);
+    bool no_value = r->value.state != READING_OK && r->value.provenance;
+    int from = no_value                           ? c->value
+               : r->reference.state != READING_OK ? c->reference
+                                                  : c->percent - 11;
     canvas_textf(canvas, row, from + 1, a.columns - from - 1, ROLE_GAP, "%s",
                  r->reason);
 }
@@ -133,31 +143,36 @@ static void draw_reason(struct canvas *canvas, struct area a, int row,
 static void draw_row(struct canvas *canvas, struct area a, int row,
                      const struct row *r, bool chosen, double full)
 {
+    const struct columns *c = columns_for(a);
     char out[NUMBER_TEXT_MAX];
     const char *name = r->value.provenance ? r->value.provenance->id : "stored";
-    canvas_textf(canvas, row, 0, NAME_WIDTH + 1,
+    canvas_textf(canvas, row, 0, c->name_width + 1,
                  chosen ? ROLE_TITLE : ROLE_TEXT, "%s%s", chosen ? ">" : " ",
                  name);
     if (r->value.state == READING_OK)
-        canvas_right(canvas, row, VALUE, VALUE_WIDTH, ROLE_TEXT,
+        canvas_right(canvas, row, c->value, c->value_width, ROLE_TEXT,
                      number_fit(r->value.value.value, r->unit->decimals,
-                                VALUE_WIDTH, out));
+                                c->value_width, out));
     if (r->reference.state == READING_OK && r->value.state == READING_OK)
-        draw_reading(canvas, row, REFERENCE, REFERENCE_WIDTH, &r->reference);
+        draw_reading(canvas, row, c->reference, c->reference_width,
+                     &r->reference);
     if (r->state == ROW_REFERENCE_ONLY) {
-        draw_reading(canvas, row, REFERENCE, REFERENCE_WIDTH, &r->reference);
+        draw_reading(canvas, row, c->reference, c->reference_width,
+                     &r->reference);
         return;
     }
     if (r->state != ROW_OK) {
         draw_reason(canvas, a, row, r);
         return;
     }
-    draw_signed(canvas, row, RESIDUAL, RESIDUAL_WIDTH, r->residual.value,
-                r->unit->decimals);
+    if (c->residual_width > 0)
+        draw_signed(canvas, row, c->residual, c->residual_width,
+                    r->residual.value, r->unit->decimals);
     if (r->has_percent)
-        draw_signed(canvas, row, PERCENT, PERCENT_WIDTH, r->percent.value, 1);
+        draw_signed(canvas, row, c->percent, c->percent_width, r->percent.value,
+                    1);
     if (!r->like_with_like)
-        canvas_put(canvas, row, MARK, ROLE_CAUTION, UNEQUAL);
+        canvas_put(canvas, row, c->mark, ROLE_CAUTION, UNEQUAL);
     if (r->has_percent && bar_half(a) > 0)
         draw_bar(canvas, row, bar_half(a), r->percent.value, full);
 }

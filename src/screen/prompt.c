@@ -10,6 +10,7 @@
 void prompt_open(struct ui *ui, enum prompt_kind kind, const char *text)
 {
     ui->prompt.kind = kind;
+    ui->prompt.from = ui->choice.z;
     snprintf(ui->prompt.text, sizeof ui->prompt.text, "%s", text);
     ui->prompt.length = (int)strlen(ui->prompt.text);
     ui->message[0] = '\0';
@@ -45,10 +46,8 @@ static void erase(struct prompt *p)
 
 static enum effect accept_jump(struct ui *ui)
 {
-    const struct element *e = element_jump(ui->prompt.text);
-    if (e)
-        ui_select(ui, e->z);
-    else if (ui->prompt.length > 0)
+    bool found = element_jump(ui->prompt.text) != NULL;
+    if (!found && ui->prompt.length > 0)
         ui_report(ui, true, "%s: no element has this symbol, name or number",
                   ui->prompt.text);
     close_prompt(ui);
@@ -82,12 +81,12 @@ static enum effect answer_overwrite(struct ui *ui, const struct event *event)
 }
 
 /* While a place is typed the selection goes along, so that Enter holds no
- * surprise. */
+ * surprise; where the text fits none it is back where it came from. */
 static void follow(struct ui *ui)
 {
     const struct element *e = element_jump(ui->prompt.text);
-    if (ui->prompt.kind == PROMPT_JUMP && e)
-        ui_select(ui, e->z);
+    if (ui->prompt.kind == PROMPT_JUMP)
+        ui_select(ui, e ? e->z : ui->prompt.from);
 }
 
 enum effect prompt_update(struct ui *ui, const struct event *event)
@@ -106,6 +105,7 @@ enum effect prompt_update(struct ui *ui, const struct event *event)
         erase(p);
         follow(ui);
     } else if (event->key == KEY_CODE_ESCAPE) {
+        ui_select(ui, p->from);
         close_prompt(ui);
     } else if (event->key == KEY_CODE_ENTER) {
         return p->kind == PROMPT_JUMP ? accept_jump(ui) : accept_file(ui);

@@ -45,6 +45,7 @@ struct prompt {
     enum prompt_kind kind;
     char text[UI_TEXT_MAX]; /* UTF-8 */
     int length;             /* bytes */
+    int from;               /* the element selected when it was opened */
 };
 
 /* A list to choose from. */

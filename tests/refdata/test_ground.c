@@ -128,6 +128,14 @@ END_TEST
 
 START_TEST(test_anions_fill_the_first_room_by_rule)
 {
+    for (int z = 1; z <= Z_MAX; z++)
+        for (int charge = CHARGE_LOWEST; charge < 0; charge++) {
+            struct species s;
+            struct status st = status_ok();
+            ck_assert(ground_state(z, charge, &s, &st));
+            ck_assert(configuration_electrons(&s.configuration) ==
+                      z - charge);
+        }
     /* Common practice, no source: the closed shells of oxide, nitride and
      * hydride. */
     static const struct {
