@@ -4,7 +4,13 @@
 
 #include <check.h>
 
+#include "refdata/dataset.h"
+
+/* A built-in set that must be there. */
+const struct dataset *need(const char *id);
+
 TCase *builtin_case(void);
+TCase *lookup_case(void);
 TCase *ground_case(void);
 TCase *loader_case(void);
 

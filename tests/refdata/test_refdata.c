@@ -6,6 +6,7 @@ int main(void)
 {
     Suite *suite = suite_create("refdata");
     suite_add_tcase(suite, builtin_case());
+    suite_add_tcase(suite, lookup_case());
     suite_add_tcase(suite, ground_case());
     suite_add_tcase(suite, loader_case());
     return run_suite(suite);

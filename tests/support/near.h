@@ -5,6 +5,7 @@
 
 #include <check.h>
 #include <math.h>
+#include <stdio.h>
 
 /* |got - want| <= absolute + relative*|want|; the context is a format string
  * with its arguments naming Z, subshell, model … */
