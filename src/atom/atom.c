@@ -11,7 +11,12 @@
 #include "base/units.h"
 #include "numeric/poisson.h"
 
-enum { P = LOBATTO_ORDER, CYCLES_MAX = 200 };
+/* CYCLES_MAX: after them an atom is given up; those that converge take a
+ * quarter of it. PATIENCE, ABOVE: an atom that has not converged by then and
+ * in which the same occupied level lay at or above zero so many times since
+ * half of it has no solution with that level bound: with it bound the field
+ * does not hold it, without it the field does. */
+enum { P = LOBATTO_ORDER, CYCLES_MAX = 150, PATIENCE = 80, ABOVE = 10 };
 
 /* Everything that decides accuracy and convergence. */
 static const struct {
@@ -229,6 +234,7 @@ bool atom_begin(struct atom_solver *solver, int Z,
     s->culprit = -1;
     s->cycles = 0;
     memset(&s->result, 0, sizeof s->result);
+    memset(s->above, 0, sizeof s->above);
     start(s, mesh_elements_to(&s->now->mesh, CHOICE.reach * Z));
     return true;
 }
@@ -372,34 +378,61 @@ static enum atom_state judge(struct atom_solver *s)
     return ATOM_CONVERGED;
 }
 
+/* Takes over the energies of the levels; gives one that keeps rising above
+ * zero, or -1. */
+static int take_levels(struct atom_solver *s)
+{
+    int free = -1;
+    for (int i = 0; i < s->count; i++) {
+        double energy = (double)s->Z * s->Z * radial_energy(s->now->radial, i);
+        s->label[i].energy = energy;
+        s->above[i] += energy >= 0.0 && s->cycles > PATIENCE / 2;
+        if (energy >= 0.0 && s->above[i] >= ABOVE && s->cycles >= PATIENCE)
+            free = i;
+    }
+    return free;
+}
+
+/* The state of an atom that has not converged yet. */
+static enum atom_state judge_waiting(struct atom_solver *s, int missing,
+                                     int free)
+{
+    int limit = s->options.cycles_max > 0 ? s->options.cycles_max : CYCLES_MAX;
+    if (free >= 0) {
+        s->culprit = free;
+        return ATOM_UNBOUND;
+    }
+    if (s->cycles < limit)
+        return ATOM_RUNNING;
+    for (int i = 0; i < s->count && missing; i++)
+        if (radial_level_state(s->now->radial, i) != RADIAL_FOUND)
+            s->culprit = i;
+    return missing ? ATOM_LOST : ATOM_UNSETTLED;
+}
+
 enum atom_state atom_step(struct atom_solver *solver)
 {
     struct atom_solver *s = solver;
     if (s->state != ATOM_RUNNING)
         return s->state;
-    int limit = s->options.cycles_max > 0 ? s->options.cycles_max : CYCLES_MAX;
     int missing = cycle(s);
     s->cycles++;
-    for (int i = 0; i < s->count; i++)
-        s->label[i].energy =
-            (double)s->Z * s->Z * radial_energy(s->now->radial, i);
+    int free = take_levels(s);
     s->residual = s->Z * mixer_next(s->now->mixer, s->now->weight,
                                     CHOICE.mixing, s->now->q, s->now->out);
     double change = fabs(s->result.total - s->last_total);
     s->last_total = s->result.total;
-    if (missing == 0 && s->residual < CHOICE.residual &&
-        change < CHOICE.energy + CHOICE.energy_part * fabs(s->result.total)) {
-        s->state = judge(s);
-        if (s->state == ATOM_OUT_OF_REACH && s->culprit < 0) {
-            /* the same again on a longer mesh */
-            s->state = ATOM_RUNNING;
-            start(s, s->now->mesh.elements);
-        }
-    } else if (s->cycles >= limit) {
-        s->state = missing ? ATOM_LOST : ATOM_UNSETTLED;
-        for (int i = 0; i < s->count && missing; i++)
-            if (radial_level_state(s->now->radial, i) != RADIAL_FOUND)
-                s->culprit = i;
+    if (missing > 0 || !(s->residual < CHOICE.residual) ||
+        !(change <
+          CHOICE.energy + CHOICE.energy_part * fabs(s->result.total))) {
+        s->state = judge_waiting(s, missing, free);
+        return s->state;
+    }
+    s->state = judge(s);
+    if (s->state == ATOM_OUT_OF_REACH && s->culprit < 0) {
+        /* the same again on a longer mesh */
+        s->state = ATOM_RUNNING;
+        start(s, s->now->mesh.elements);
     }
     return s->state;
 }

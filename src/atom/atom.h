@@ -33,7 +33,7 @@ struct atom_options {
     /* For tests of the mesh: element length in t, 0 for the default, and no
      * other part of the solver's tolerance changes. */
     double element_length;
-    int cycles_max; /* 0 for the default, 200 */
+    int cycles_max; /* 0 for the default, 150 */
 };
 
 /* What has become of a solution. */

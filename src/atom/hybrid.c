@@ -3,14 +3,14 @@
 
 #include <assert.h>
 #include <math.h>
-#include <stdint.h>
 #include <stdlib.h>
 #include <string.h>
 
 #include "atom/solver.h"
 #include "atom/term.h"
+#include "numeric/repulsion.h"
 
-enum { P = LOBATTO_ORDER, K_MAX = 2 * L_MAX, SHELLS = 2 * SUBSHELL_MAX };
+enum { P = LOBATTO_ORDER, SHELLS = 2 * SUBSHELL_MAX };
 
 /* Part of exact exchange. */
 static const double QUARTER = 0.25;
@@ -27,9 +27,8 @@ struct hybrid {
     const struct atom_solver *solver;
     int points, capacity, count;
     struct shell shell[SHELLS];
-    double *p;               /* functions of the shells */
-    double *up[K_MAX + 1];   /* y^k, slope and length included */
-    double *down[K_MAX + 1]; /* y^(-k-1), weight included */
+    struct repulsion repulsion;
+    double *p; /* functions of the shells */
     double *tau[2], *one, *two, *three;
     double *block;
 };
@@ -46,6 +45,7 @@ void hybrid_free(struct hybrid *hybrid)
 {
     if (!hybrid)
         return;
+    repulsion_clear(&hybrid->repulsion);
     free(hybrid->block);
     free(hybrid);
 }
@@ -61,23 +61,18 @@ static bool prepare(struct hybrid *h, const struct atom_solver *solver,
         return true;
     size_t n = (size_t)mesh->points;
     free(h->block);
+    h->block = NULL;
+    repulsion_clear(&h->repulsion);
     h->capacity = 0;
-    h->block = calloc(n * (SHELLS + 2 * (K_MAX + 1) + 5), sizeof *h->block);
+    if (!repulsion_init(&h->repulsion, mesh, st))
+        return false;
+    h->block = calloc(n * (SHELLS + 5), sizeof *h->block);
     if (!h->block)
         return status_fail(st, STATUS_MEMORY, "hybrid energy on %zu points", n);
     h->capacity = mesh->points;
     double *at = h->block;
     h->p = at;
     at += n * SHELLS;
-    for (int k = 0; k <= K_MAX; k++, at += 2 * n) {
-        h->up[k] = at;
-        h->down[k] = at + n;
-        for (int i = 0; i < mesh->points; i++) {
-            h->up[k][i] =
-                0.5 * mesh->length * mesh->slope[i] * pow(mesh->y[i], k);
-            h->down[k][i] = mesh->weight_y[i] * pow(mesh->y[i], -k - 1);
-        }
-    }
     h->tau[0] = at;
     h->tau[1] = at + n;
     h->one = at + 2 * n;
@@ -138,30 +133,11 @@ static void take_shells(struct hybrid *h)
     }
 }
 
-/* ∫∫ ρ(s) ρ(y) s_<^k / s_>^(k+1), ρ = a b, by half of the double integral. */
-static double repulsion(struct hybrid *h, const double *a, const double *b,
-                        int k)
+/* R^k of two shells, in units of Z. */
+static double repulsion(const struct hybrid *h, const double *a,
+                        const double *b, int k)
 {
-    const struct mesh *mesh = &h->solver->now->mesh;
-    const double *up = h->up[k], *down = h->down[k];
-    double total = 0.0, sum = 0.0;
-    for (int e = 0; e < h->solver->elements; e++) {
-        double f[LOBATTO_POINTS], g[LOBATTO_POINTS];
-        for (int j = 0; j <= P; j++) {
-            int at = e * P + j;
-            f[j] = a[at] * b[at];
-            g[j] = f[j] * up[at];
-        }
-        for (int i = 1; i <= P; i++) {
-            double part = 0.0;
-            for (int j = 0; j <= P; j++)
-                part += mesh->rule.cumulative[i][j] * g[j];
-            sum += f[i] * down[e * P + i] * (total + part);
-            if (i == P)
-                total += part;
-        }
-    }
-    return 2.0 * sum;
+    return repulsion_integral(&h->repulsion, h->solver->elements, a, b, k);
 }
 
 static double exact_exchange(struct hybrid *h)
@@ -192,7 +168,7 @@ static double exact_exchange(struct hybrid *h)
 double hybrid_slater(const struct hybrid *hybrid, int n, int l, int k)
 {
     double sum = 0.0, f = 0.0;
-    struct hybrid *h = (struct hybrid *)(uintptr_t)hybrid;
+    const struct hybrid *h = hybrid;
     for (int i = 0; i < h->count; i++)
         if (h->shell[i].n == n && h->shell[i].l == l) {
             const double *p = h->shell[i].p;
@@ -216,6 +192,22 @@ double atom_zeta(const struct atom_solver *solver, int n, int l)
         occ += 0.5 * f;
     }
     return occ > 0.0 ? sum / occ : 0.0;
+}
+
+double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term)
+{
+    const struct configuration *c = &hybrid->solver->configuration;
+    struct open_subshell open[SUBSHELL_MAX];
+    int count = 0;
+    for (int i = 0; i < c->count; i++) {
+        const struct subshell *s = &c->shells[i];
+        if (s->occ > 4 * s->l + 1.5 || s->occ < 0.5)
+            continue;
+        open[count++] = (struct open_subshell){
+            s->l, (int)lround(s->occ), atom_zeta(hybrid->solver, s->n, s->l),
+            s->l == 1 ? hybrid_slater(hybrid, s->n, s->l, 2) : 0.0};
+    }
+    return term_spin_orbit(open, count, term);
 }
 
 /* ΔLS of all open d and f subshells. */

@@ -9,6 +9,7 @@
 #define ATOM_HYBRID_H
 
 #include "atom/atom.h"
+#include "element/species.h"
 
 struct hybrid_energy {
     double total;
@@ -36,6 +37,11 @@ MUST_CHECK bool hybrid_evaluate(struct hybrid *hybrid,
 /* Slater integral F^k of one subshell of the atom evaluated last, for the
  * average of its spins by occupation; hartree. 0 when it is not occupied. */
 double hybrid_slater(const struct hybrid *hybrid, int n, int l, int k);
+
+/* Spin–orbit energy of the ground level of the atom evaluated last, solved
+ * with the Dirac equation, from the average that its levels filled by 2j+1
+ * have; hartree. Its term tells L, S and J (term_spin_orbit). */
+double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term);
 
 /* Spin–orbit parameter ζ = (ε(l+½) - ε(l-½))/(l+½) of a subshell of an atom
  * solved with the Dirac equation, averaged over spins by occupation;

@@ -48,7 +48,8 @@ struct atom_solver {
     struct atom_level label[RADIAL_LEVELS_MAX];
     enum atom_state state;
     int cycles, culprit;
-    bool found; /* levels have been found once */
+    int above[RADIAL_LEVELS_MAX]; /* cycles that ended with energy >= 0 */
+    bool found;                   /* levels have been found once */
     double residual, last_total;
     struct atom_energy result;
 };

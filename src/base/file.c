@@ -71,6 +71,11 @@ static bool target_free(const struct file_draft *draft, struct status *st)
     if (S_ISDIR(info.st_mode))
         return status_fail(st, STATUS_FILE, "%s: is a folder, not a file",
                            draft->target);
+    /* A draft that takes the name of a device would do away with it. */
+    if (!S_ISREG(info.st_mode))
+        return status_fail(st, STATUS_FILE,
+                           "%s: is no regular file; not overwritten",
+                           draft->target);
     if (!draft->replace)
         return status_fail(st, STATUS_FILE,
                            "%s: exists already; not overwritten",

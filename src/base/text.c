@@ -135,6 +135,11 @@ bool text_same_ignoring_case(const char *a, const char *b)
     return strlen(a) == strlen(b) && text_starts_ignoring_case(a, b);
 }
 
+static bool same_letter(char a, char b)
+{
+    return ascii_lower(a) == ascii_lower(b);
+}
+
 size_t text_edit_distance(const char *a, const char *b)
 {
     enum { LONGEST = 32 };
@@ -142,24 +147,28 @@ size_t text_edit_distance(const char *a, const char *b)
     size_t lb = strlen(b);
     if (la > LONGEST || lb > LONGEST)
         return SIZE_MAX;
-    size_t row[LONGEST + 1];
+    size_t rows[3][LONGEST + 1]; /* row i in rows[i % 3] */
     for (size_t j = 0; j <= lb; j++)
-        row[j] = j;
+        rows[0][j] = j;
     for (size_t i = 1; i <= la; i++) {
-        size_t diagonal = row[0];
+        size_t *row = rows[i % 3];
+        const size_t *above = rows[(i + 2) % 3];
         row[0] = i;
         for (size_t j = 1; j <= lb; j++) {
-            bool same = ascii_lower(a[i - 1]) == ascii_lower(b[j - 1]);
-            size_t best = diagonal + (same ? 0 : 1);
-            diagonal = row[j];
-            if (row[j] + 1 < best)
-                best = row[j] + 1;
+            size_t best =
+                above[j - 1] + (same_letter(a[i - 1], b[j - 1]) ? 0 : 1);
+            if (above[j] + 1 < best)
+                best = above[j] + 1;
             if (row[j - 1] + 1 < best)
                 best = row[j - 1] + 1;
+            bool swapped = i > 1 && j > 1 && same_letter(a[i - 1], b[j - 2]) &&
+                           same_letter(a[i - 2], b[j - 1]);
+            if (swapped && rows[(i + 1) % 3][j - 2] + 1 < best)
+                best = rows[(i + 1) % 3][j - 2] + 1;
             row[j] = best;
         }
     }
-    return row[lb];
+    return rows[la % 3][lb];
 }
 
 bool text_to_int(const char *s, int *value)

@@ -55,8 +55,9 @@ bool text_same_ignoring_case(const char *a, const char *b);
 /* True when s starts with prefix, ignoring ASCII case. */
 bool text_starts_ignoring_case(const char *s, const char *prefix);
 
-/* Smallest number of single-character edits (insert, delete, replace, ASCII
- * case ignored) that turn a into b; strings over 32 bytes give SIZE_MAX. */
+/* Smallest number of single-character edits (insert, delete, replace, swap
+ * with the next, each letter edited at most once, ASCII case ignored) that turn
+ * a into b; strings over 32 bytes give SIZE_MAX. */
 size_t text_edit_distance(const char *a, const char *b);
 
 /* A whole decimal integer, optional sign, nothing else; false otherwise or

@@ -3,6 +3,7 @@
 
 #include <stdlib.h>
 #include <string.h>
+#include <sys/stat.h>
 #include <unistd.h>
 
 #include "screen/glyph.h"
@@ -10,8 +11,14 @@
 bool output_check(const struct request *request, struct status *st)
 {
     struct file_draft draft;
+    struct stat info;
     if (!request->output)
         return true;
+    if (!request->force && stat(request->output, &info) == 0 &&
+        S_ISREG(info.st_mode))
+        return status_fail(st, STATUS_FILE,
+                           "%s: exists already; --force would replace it",
+                           request->output);
     if (!file_draft_open(&draft, request->output, request->force, st))
         return false;
     file_draft_discard(&draft);

@@ -5,6 +5,11 @@
 
 #include "base/text.h"
 #include "cli/words.h"
+#include "element/selection.h"
+
+/* More than any word or list that is accepted. */
+#define ARGUMENT_MAX 300
+#define OPERAND_MAX 60
 
 static bool is_long(const char *word)
 {
@@ -52,6 +57,14 @@ static bool unknown_option(const char *word, size_t length, struct status *st)
 static bool take(struct call *call, const struct option *option,
                  const char *value, struct status *st)
 {
+    if (option->argument && value[0] == '\0')
+        return status_fail(st, STATUS_USAGE, "--%s '': expected %s",
+                           option->name, option->argument);
+    if (option->argument && option->words != WORDS_FILE &&
+        strlen(value) > ARGUMENT_MAX)
+        return status_fail(st, STATUS_USAGE,
+                           "--%s %.40s...: longer than %d bytes; expected %s",
+                           option->name, value, ARGUMENT_MAX, option->argument);
     if (option->kind == OPTION_REPEAT) {
         if (call->repeat_count == CALL_REPEATS_MAX)
             return status_fail(st, STATUS_USAGE,
@@ -145,11 +158,23 @@ static bool unknown_command(const char *word, struct status *st)
         names[i - 1] = command_at(i)->name;
     const char *near = word_nearest(word, names, COMMAND_COUNT - 1);
     words_join(&t, names, COMMAND_COUNT - 1, "or");
+    struct selection selection = {0};
+    struct status ignored;
     if (near)
         return status_fail(st, STATUS_USAGE,
                            "%s: no such command; did you mean %s?", word, near);
-    return status_fail(st, STATUS_USAGE, "%s: no such command; expected %s",
-                       word, all);
+    if (selection_add(&selection, word, &ignored))
+        return status_fail(st, STATUS_USAGE,
+                           "%s: no such command; did you mean list %s?", word,
+                           word);
+    return status_fail(st, STATUS_USAGE, "%.40s: no such command; expected %s",
+                       word[0] ? word : "''", all);
+}
+
+/* What a command takes, for a message. */
+static const char *operands_of(const struct command *command)
+{
+    return command->operands[0] ? "an element, an ion or a run" : "no operand";
 }
 
 static bool add_operand(struct call *call, const char *word, bool *has_command,
@@ -160,6 +185,15 @@ static bool add_operand(struct call *call, const char *word, bool *has_command,
         call->command = command_find(word);
         return call->command || unknown_command(word, st);
     }
+    if (strlen(word) > OPERAND_MAX)
+        return status_fail(st, STATUS_USAGE,
+                           "%.40s...: longer than %d bytes; expected %s", word,
+                           OPERAND_MAX, operands_of(call->command));
+    if (word[0] == '\0')
+        return status_fail(st, STATUS_USAGE,
+                           "'': an empty operand; expected "
+                           "%s",
+                           operands_of(call->command));
     if (call->operand_count == CALL_OPERANDS_MAX)
         return status_fail(st, STATUS_USAGE, "%s: more than %d operands", word,
                            CALL_OPERANDS_MAX);
@@ -201,8 +235,8 @@ static bool check_operands(const struct call *call, struct status *st)
         return status_fail(st, STATUS_USAGE, "%s: %s takes no operand",
                            call->operands[c->most], name_of(c));
     if (call->operand_count < c->least)
-        return status_fail(st, STATUS_USAGE, "%s: expected %s", name_of(c),
-                           c->operands);
+        return status_fail(st, STATUS_USAGE, "%s: names nothing; expected %s",
+                           name_of(c), c->operands);
     return true;
 }
 

@@ -268,7 +268,7 @@ static bool read_configuration(struct request *r, struct status *st)
         return true;
     r->has_configuration = true;
     if (!configuration_parse(text, &r->configuration, st))
-        return status_context(st, "--configuration");
+        return false;
     if (r->call->operand_count == 0)
         return status_fail(st, STATUS_USAGE,
                            "--configuration %s: expected the element or ion "
@@ -314,9 +314,6 @@ static bool read_output(struct request *r, struct status *st)
                            given(r, OPTION_FORMAT));
     r->force = given(r, OPTION_FORCE) != NULL;
     r->output = given(r, OPTION_OUTPUT);
-    if (r->output && r->output[0] == '\0')
-        return status_fail(st, STATUS_USAGE,
-                           "--output: the file name is empty");
     if (r->output && strcmp(r->output, "-") == 0)
         r->output = NULL;
     if (r->force && !r->output)

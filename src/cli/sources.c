@@ -13,7 +13,7 @@ bool cli_sources(struct request *r, struct status *st)
     if (!sources)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     int count = study_sources(r->study, sources, SOURCES_MAX);
-    bool ok = output_open(&out, r, st);
+    bool ok = output_check(r, st) && output_open(&out, r, st);
     if (ok && r->bibtex)
         sources_write_bibtex(out.stream, sources, count);
     else if (ok)

@@ -11,6 +11,9 @@
 
 /* In the order of model_options.average_term: false, true. */
 static const char *const terms[] = {"hund", "average"};
+/* Bytes of a refused word that a message shows. */
+#define WORD_SHOWN_MAX 41
+
 static const char *const formats[] = {"text", "csv", "json", "bibtex"};
 static const char *const colors[] = {"auto", "always", "never"};
 /* In the order of enum scheme; colors in that of enum color_option. */
@@ -140,16 +143,20 @@ bool word_refuse(const struct option *option, const char *word,
     struct text t = text_over(all, sizeof all);
     const char *near = word_nearest(word, words->items, words->count);
     words_join(&t, words->items, words->count, "or");
-    const char *shown = word[0] ? word : "an empty word";
+    char shown[WORD_SHOWN_MAX];
+    struct text w = text_over(shown, sizeof shown);
+    text_add(&w, word[0] ? word : "an empty word");
+    const char *rest = w.cut ? "..." : "";
     if (near && t.cut)
         return status_fail(st, STATUS_USAGE,
-                           "--%s %s: not accepted; did you mean %s?",
-                           option->name, shown, near);
+                           "--%s %s%s: not accepted; did you mean %s?",
+                           option->name, shown, rest, near);
     if (near)
         return status_fail(st, STATUS_USAGE,
-                           "--%s %s: not accepted; did you mean %s? "
+                           "--%s %s%s: not accepted; did you mean %s? "
                            "(expected %s)",
-                           option->name, shown, near, all);
-    return status_fail(st, STATUS_USAGE, "--%s %s: not accepted; expected %s%s",
-                       option->name, shown, all, t.cut ? "..." : "");
+                           option->name, shown, rest, near, all);
+    return status_fail(st, STATUS_USAGE,
+                       "--%s %s%s: not accepted; expected %s%s", option->name,
+                       shown, rest, all, t.cut ? "..." : "");
 }

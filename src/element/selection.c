@@ -9,7 +9,7 @@
 
 #define ACCEPTED                                                               \
     "expected a symbol, name or number, an ion such as Fe3+, a run such as "   \
-    "Sc-Zn, period:1…7, group:1…18 or block:s|p|d|f"
+    "Sc-Zn, period:4, group:13 or block:d"
 
 static void add(struct selection *s, struct chosen item)
 {
@@ -87,7 +87,10 @@ static bool parse_keyed(struct selection *s, const char *word,
               (block && strlen(value) == 1 && strchr("spdf", value[0]));
     if (!ok)
         return status_fail(st, STATUS_USAGE,
-                           "%s: no such part of the table; %s", word, ACCEPTED);
+                           "%s: no such part of the table; expected period:1 "
+                           "to period:7, group:1 to group:18, or block:s, p, "
+                           "d or f",
+                           word);
     for (int z = 1; z <= Z_MAX; z++) {
         const struct element *e = element_at(z);
         if ((period && e->period == number) || (group && e->group == number) ||

@@ -6,7 +6,10 @@
 
 #include "numeric/lobatto.h"
 #include "numeric/mesh.h"
+#include "numeric/mixer.h"
+#include "numeric/poisson.h"
 #include "numeric/radial.h"
+#include "numeric/repulsion.h"
 #include "support/near.h"
 #include "support/run.h"
 
@@ -167,6 +170,83 @@ START_TEST(coulomb_levels_are_exact_for_dirac)
 }
 END_TEST
 
+/* Hydrogen-like functions: F⁰(1s,1s) = 5/8, F⁰(2p,2p) = 93/512, F²(2p,2p) =
+ * 45/512 in units of Z hartree (Condon, Shortley, The Theory of Atomic Spectra
+ * (1935), table 2⁶ as worked from its formulas). */
+START_TEST(slater_integrals_have_their_closed_values)
+{
+    struct status st = status_ok();
+    struct mesh mesh;
+    struct repulsion slater;
+    ck_assert(mesh_init(&mesh, 1e-5, 80.0, 1.0, &st));
+    ck_assert(repulsion_init(&slater, &mesh, &st));
+    double *s = malloc((size_t)mesh.points * sizeof *s);
+    double *p = malloc((size_t)mesh.points * sizeof *p);
+    for (int i = 0; i < mesh.points; i++) {
+        double y = mesh.y[i];
+        s[i] = 2.0 * y * exp(-y);
+        p[i] = y * y * exp(-0.5 * y) / sqrt(24.0);
+    }
+    int n = mesh.elements;
+    near(repulsion_integral(&slater, n, s, s, 0), 0.625, 1e-8, 0.0, "1s1s");
+    near(repulsion_integral(&slater, n, p, p, 0), 93.0 / 512.0, 1e-8, 0.0, "0");
+    near(repulsion_integral(&slater, n, p, p, 2), 45.0 / 512.0, 1e-8, 0.0, "2");
+    free(s);
+    free(p);
+    repulsion_clear(&slater);
+    mesh_clear(&mesh);
+}
+END_TEST
+
+/* 1s² density 4y²exp(-2y): y V = 1 - (1 + y) exp(-2y). */
+START_TEST(poisson_gives_the_field_of_a_known_charge)
+{
+    struct status st = status_ok();
+    struct mesh mesh;
+    ck_assert(mesh_init(&mesh, 1e-3, 60.0, 1.0, &st));
+    size_t n = (size_t)mesh.points;
+    double *d = calloc(4 * n, sizeof *d);
+    for (size_t i = 0; i < n; i++)
+        d[i] = 4.0 * mesh.y[i] * mesh.y[i] * exp(-2.0 * mesh.y[i]);
+    double whole = poisson_solve(&mesh, mesh.elements, d, 2.0, d + n, d + 2 * n,
+                                 d + 3 * n);
+    near(whole, 1.0, 1e-9, 0.0, "charge");
+    for (size_t i = 0; i < n; i++) {
+        double y = mesh.y[i];
+        near(d[2 * n + i], 1.0 - (1.0 + y) * exp(-2.0 * y), 5e-8, 0.0,
+             "field at %g", y);
+        near(d[n + i], 1.0 - (1.0 + 2.0 * y + 2.0 * y * y) * exp(-2.0 * y),
+             1e-7, 0.0, "charge within %g", y);
+    }
+    free(d);
+    mesh_clear(&mesh);
+}
+END_TEST
+
+/* x -> A x + b with |A| < 1 in ten dimensions: Anderson's method needs about
+ * as many steps as there are distinct eigenvalues (here 4). */
+START_TEST(mixing_solves_a_linear_problem_in_few_steps)
+{
+    struct status st = status_ok();
+    struct mixer *mixer = mixer_new(10, &st);
+    ck_assert_ptr_nonnull(mixer);
+    double x[10] = {0}, g[10], weight[10], norm = 1.0;
+    mixer_reset(mixer, 10, 8);
+    for (int i = 0; i < 10; i++)
+        weight[i] = 1.0 + 0.1 * i;
+    int steps = 0;
+    for (; steps < 50 && norm > 1e-12; steps++) {
+        for (int i = 0; i < 10; i++)
+            g[i] = (0.9 - 0.6 * (i % 4)) * x[i] + 1.385 + i;
+        norm = mixer_next(mixer, weight, 0.6, x, g);
+    }
+    ck_assert_int_le(steps, 12);
+    for (int i = 0; i < 8; i++)
+        near(x[i], (1.385 + i) / (0.1 + 0.6 * (i % 4)), 0.0, 1e-10, "x%d", i);
+    mixer_free(mixer);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("numeric");
@@ -177,5 +257,8 @@ int main(void)
     tcase_add_test(c, mesh_integrates_interpolates_and_cumulates);
     tcase_add_test(c, coulomb_levels_are_exact_without_light_speed);
     tcase_add_test(c, coulomb_levels_are_exact_for_dirac);
+    tcase_add_test(c, slater_integrals_have_their_closed_values);
+    tcase_add_test(c, poisson_gives_the_field_of_a_known_charge);
+    tcase_add_test(c, mixing_solves_a_linear_problem_in_few_steps);
     return run_suite(suite);
 }

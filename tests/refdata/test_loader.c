@@ -163,7 +163,7 @@ START_TEST(test_one_wrong_byte_is_survived)
 }
 END_TEST
 
-START_TEST(test_units_are_converted_with_their_digits)
+START_TEST(test_numbers_and_units_keep_their_digits)
 {
     static const struct {
         const char *name;
@@ -180,6 +180,11 @@ START_TEST(test_units_are_converted_with_their_digits)
         {"kj_per_mol", 1, 0, "13.5979", ""},
         {"kj_per_mol", 26, 1, "16.19915", ""},
         {"smallest", 26, 0, "132", ""},
+        /* As many digits as a number may have. */
+        {"many_digits", 1, 0, "0.123456789012345", "0.000000000000012"},
+        {"many_digits", 3, 0, "-1.23456789012345", ""},
+        {"many_digits", 9, 0, "3.40", ""},
+        {"many_digits", 17, 0, "0.000", ""},
     };
     for (size_t i = 0; i < sizeof rows / sizeof *rows; i++) {
         char text[NUMBER_TEXT_MAX];
@@ -570,7 +575,7 @@ TCase *loader_case(void)
     tcase_add_test(tc, test_every_good_file_loads);
     tcase_add_test(tc, test_every_cut_of_a_file_is_refused);
     tcase_add_test(tc, test_one_wrong_byte_is_survived);
-    tcase_add_test(tc, test_units_are_converted_with_their_digits);
+    tcase_add_test(tc, test_numbers_and_units_keep_their_digits);
     tcase_add_test(tc, test_a_file_keeps_everything_it_says);
     tcase_add_test(tc, test_variants_and_gaps_of_a_file);
     tcase_add_test(tc, test_a_file_too_large_is_refused);
