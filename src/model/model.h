@@ -19,6 +19,8 @@
 #define DEFINITION_ZEFF_RULE "screening rule, Z - S"
 #define DEFINITION_ZEFF_EXPONENT "orbital exponent, n zeta"
 #define DEFINITION_ZEFF_ENERGY "from the energy, n sqrt(E/Ry)"
+#define DEFINITION_ZEFF_SIZE "from the size, mean radius"
+#define DEFINITION_ZEFF_ENCLOSED "Gauss's law at the radial maximum"
 #define DEFINITION_ALLRED_ROCHOW "Allred-Rochow scale"
 #define DEFINITION_MULLIKEN "Mulliken scale, eV"
 #define DEFINITION_ALLEN "Allen scale"

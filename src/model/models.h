@@ -9,5 +9,6 @@ extern const struct model model_shells;
 extern const struct model model_slater;
 extern const struct model model_clementi;
 extern const struct model model_single_zeta;
+extern const struct model model_scf;
 
 #endif

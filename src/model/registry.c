@@ -7,10 +7,8 @@
 #include "model/models.h"
 
 static const struct model *const models[] = {
-    &model_shells,
-    &model_slater,
-    &model_clementi,
-    &model_single_zeta,
+    &model_shells,      &model_slater, &model_clementi,
+    &model_single_zeta, &model_scf,
 };
 
 int model_count(void)

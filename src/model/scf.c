@@ -1,0 +1,403 @@
+/* SPDX-License-Identifier: MIT */
+/* The self-consistent atom as a model: Dirac equation, spin-polarised local
+ * density, one hybrid energy on that density, the shift of the ground level by
+ * spin-orbit coupling (atom/hybrid.h). Solved for the atom and for the ion
+ * that it leaves behind. */
+#include <math.h>
+
+#include "atom/hybrid.h"
+#include "atom/result.h"
+#include "base/units.h"
+#include "model/models.h"
+#include "model/rule.h"
+
+#define ISODENSITY 0.001 /* electrons/bohr^3, as the reference sets */
+/* Allen's scale: 2.30016 per rydberg of configuration energy (L. C. Allen,
+ * J. Am. Chem. Soc. 111, 9003 (1989); J. B. Mann, T. L. Meek, L. C. Allen, J.
+ * Am. Chem. Soc. 122, 2780 (2000), doi 10.1021/ja992866e). */
+#define ALLEN_PER_RYDBERG 2.30016
+
+static const struct citation citations[] = {
+    {"kohn1965", "article", "W. Kohn and L. J. Sham",
+     "Self-consistent equations including exchange and correlation effects",
+     "Phys. Rev.", 1965, "140", "A1133", "10.1103/PhysRev.140.A1133"},
+    {"macdonald1979", "article", "A. H. MacDonald and S. H. Vosko",
+     "A relativistic density functional formalism", "J. Phys. C", 1979, "12",
+     "2977", "10.1088/0022-3719/12/15/007"},
+    {"vosko1980", "article", "S. H. Vosko, L. Wilk and M. Nusair",
+     "Accurate spin-dependent electron liquid correlation energies for local "
+     "spin density calculations: a critical analysis",
+     "Can. J. Phys.", 1980, "58", "1200", "10.1139/p80-159"},
+    {"perdew1996", "article", "J. P. Perdew, K. Burke and M. Ernzerhof",
+     "Generalized gradient approximation made simple", "Phys. Rev. Lett.", 1996,
+     "77", "3865", "10.1103/PhysRevLett.77.3865"},
+    {"perdew1996b", "article", "J. P. Perdew, M. Ernzerhof and K. Burke",
+     "Rationale for mixing exact exchange with density functional "
+     "approximations",
+     "J. Chem. Phys.", 1996, "105", "9982", "10.1063/1.472933"},
+    {"perdew2009", "article",
+     "J. P. Perdew, A. Ruzsinszky, G. I. Csonka, L. A. Constantin and J. Sun",
+     "Workhorse semilocal density functional for condensed matter physics and "
+     "quantum chemistry",
+     "Phys. Rev. Lett.", 2009, "103", "026403",
+     "10.1103/PhysRevLett.103.026403"},
+    {"mann2000", "article", "J. B. Mann, T. L. Meek and L. C. Allen",
+     "Configuration energies of the main group elements", "J. Am. Chem. Soc.",
+     2000, "122", "2780", "10.1021/ja992866e"},
+};
+
+#define PROVENANCE(what, count)                                                \
+    {                                                                          \
+        true, "scf", "self-consistent Kohn-Sham atom", what, citations, count  \
+    }
+enum { SOURCES_DENSITY = 3, SOURCES_ENERGY = 6, SOURCES_ALLEN = 7 };
+
+enum {
+    OFFER_ZEFF,
+    OFFER_ZEFF_SIZE,
+    OFFER_ZEFF_ENCLOSED,
+    OFFER_RADIUS,
+    OFFER_ISODENSITY,
+    OFFER_IONIZATION,
+    OFFER_ALLEN,
+    OFFER_COUNT
+};
+
+static const struct model_offer offers[OFFER_COUNT] = {
+    [OFFER_ZEFF] = {QUANTITY_ZEFF,
+                    PROVENANCE(DEFINITION_ZEFF_ENERGY, SOURCES_ENERGY)},
+    [OFFER_ZEFF_SIZE] = {QUANTITY_ZEFF,
+                         PROVENANCE(DEFINITION_ZEFF_SIZE, SOURCES_DENSITY)},
+    [OFFER_ZEFF_ENCLOSED] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_ENCLOSED,
+                                                       SOURCES_DENSITY)},
+    [OFFER_RADIUS] = {QUANTITY_RADIUS,
+                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, SOURCES_DENSITY)},
+    [OFFER_ISODENSITY] = {QUANTITY_ISODENSITY,
+                          PROVENANCE(DEFINITION_ISODENSITY, SOURCES_DENSITY)},
+    [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
+                          PROVENANCE(DEFINITION_IONIZATION, SOURCES_ENERGY)},
+    [OFFER_ALLEN] = {QUANTITY_ELECTRONEGATIVITY,
+                     PROVENANCE(DEFINITION_ALLEN, SOURCES_ALLEN)},
+};
+
+/* One of the two solutions. */
+struct half {
+    enum atom_state state;
+    bool evaluated; /* energy holds the hybrid energy with its shift */
+    double energy;  /* hartree */
+};
+
+enum phase { PHASE_ATOM, PHASE_ATOM_ENERGY, PHASE_ION, PHASE_ION_ENERGY, DONE };
+
+struct work {
+    struct atom_solver *solver;
+    struct hybrid *hybrid;
+    struct question question;
+    enum phase phase;
+    struct half atom, ion;
+    int count;
+    struct atom_orbital orbital[SUBSHELL_MAX];
+    double isodensity; /* bohr */
+};
+
+static bool open_work(void *work, struct status *st)
+{
+    struct work *w = work;
+    w->solver = atom_solver_new(st);
+    w->hybrid = w->solver ? hybrid_new(st) : NULL;
+    if (!w->hybrid)
+        atom_solver_free(w->solver);
+    return w->hybrid != NULL;
+}
+
+static void close_work(void *work)
+{
+    struct work *w = work;
+    hybrid_free(w->hybrid);
+    atom_solver_free(w->solver);
+    w->hybrid = NULL;
+    w->solver = NULL;
+}
+
+/* Starts the self-consistent solution of one species; where there is nothing
+ * to solve (a bare nucleus) its energy is zero. */
+static enum phase start(struct work *w, const struct species *species,
+                        struct half *half, enum phase solve, enum phase next)
+{
+    static const struct atom_options options = {.functional = ATOM_LSD,
+                                                .relativity = ATOM_DIRAC};
+    struct status st = status_ok();
+    *half = (struct half){.state = ATOM_CONVERGED, .evaluated = true};
+    if (species->configuration.count == 0)
+        return next;
+    *half = (struct half){.state = ATOM_RUNNING};
+    if (atom_begin(w->solver, species->z, &species->configuration, &options,
+                   &st))
+        return solve;
+    half->state = ATOM_LOST;
+    return next;
+}
+
+static void begin(void *work, const struct question *question,
+                  const struct model_options *options)
+{
+    (void)options;
+    struct work *w = work;
+    w->question = *question;
+    w->count = 0;
+    w->ion = (struct half){.state = ATOM_RUNNING};
+    w->phase = start(w, &w->question.species, &w->atom, PHASE_ATOM, DONE);
+}
+
+static void evaluate(struct work *w, const struct species *species,
+                     struct half *half)
+{
+    struct status st = status_ok();
+    struct hybrid_energy energy;
+    half->evaluated = hybrid_evaluate(w->hybrid, w->solver, &energy, &st);
+    if (half->evaluated)
+        half->energy =
+            energy.total + hybrid_spin_orbit(w->hybrid, &species->term);
+}
+
+/* Keeps what is read off the density of the atom. */
+static void keep(struct work *w)
+{
+    w->count = atom_subshell_count(w->solver);
+    for (int i = 0; i < w->count; i++)
+        w->orbital[i] = atom_subshell_at(w->solver, i);
+    w->isodensity = atom_isodensity_radius(w->solver, ISODENSITY);
+}
+
+/* One cycle, or one evaluation. */
+static enum model_progress step(void *work)
+{
+    struct work *w = work;
+    struct question *q = &w->question;
+    switch (w->phase) {
+    case PHASE_ATOM:
+        w->atom.state = atom_step(w->solver);
+        if (w->atom.state != ATOM_RUNNING)
+            w->phase =
+                w->atom.state == ATOM_CONVERGED ? PHASE_ATOM_ENERGY : DONE;
+        break;
+    case PHASE_ATOM_ENERGY:
+        keep(w);
+        evaluate(w, &q->species, &w->atom);
+        w->phase = q->has_cation
+                       ? start(w, &q->cation, &w->ion, PHASE_ION, DONE)
+                       : DONE;
+        break;
+    case PHASE_ION:
+        w->ion.state = atom_step(w->solver);
+        if (w->ion.state != ATOM_RUNNING)
+            w->phase = w->ion.state == ATOM_CONVERGED ? PHASE_ION_ENERGY : DONE;
+        break;
+    case PHASE_ION_ENERGY:
+        evaluate(w, &q->cation, &w->ion);
+        w->phase = DONE;
+        break;
+    case DONE:
+        break;
+    }
+    return w->phase == DONE ? MODEL_DONE : MODEL_RUNNING;
+}
+
+static struct reading gap(int offer, enum reading_state state,
+                          const char *reason)
+{
+    return reading_gap(offers[offer].quantity, state, reason,
+                       &offers[offer].provenance);
+}
+
+/* The gap that an atom leaves which did not converge. */
+static struct reading gap_of(int offer, enum atom_state state)
+{
+    switch (state) {
+    case ATOM_UNBOUND:
+        return gap(offer, READING_OUTSIDE,
+                   "not all electrons are bound in this approximation");
+    case ATOM_OUT_OF_REACH:
+        return gap(offer, READING_OUTSIDE,
+                   "a subshell reaches beyond the radial mesh");
+    case ATOM_LOST:
+        return gap(offer, READING_NOT_CONVERGED,
+                   "the level of a subshell could not be found");
+    case ATOM_RUNNING:
+    case ATOM_UNSETTLED:
+    case ATOM_CONVERGED:
+        break;
+    }
+    return gap(offer, READING_NOT_CONVERGED,
+               "no self-consistency within the allowed cycles");
+}
+
+/* Ionization energy in hartree; false, with the gap, when there is none. */
+static bool ionization(const struct work *w, int offer, double *energy,
+                       struct reading *none)
+{
+    if (!w->question.has_cation)
+        *none = gap(offer, READING_OUTSIDE, "no ion to compare with");
+    else if (w->ion.state != ATOM_CONVERGED)
+        *none = gap_of(offer, w->ion.state);
+    else if (!w->atom.evaluated || !w->ion.evaluated)
+        *none = gap(offer, READING_NOT_CONVERGED,
+                    "the hybrid energy could not be evaluated");
+    else
+        *energy = w->ion.energy - w->atom.energy;
+    return w->question.has_cation && w->ion.state == ATOM_CONVERGED &&
+           w->atom.evaluated && w->ion.evaluated;
+}
+
+static struct reading read_ionization(const struct work *w)
+{
+    double energy;
+    struct reading none;
+    if (!ionization(w, OFFER_IONIZATION, &energy, &none))
+        return none;
+    struct reading r =
+        reading_computed(QUANTITY_IONIZATION, energy * HARTREE_EV,
+                         &offers[OFFER_IONIZATION].provenance);
+    if (energy < 0.0)
+        r.remark = "negative: the ion lies lower in this model";
+    return r;
+}
+
+static const struct atom_orbital *find(const struct work *w, int n, int l)
+{
+    for (int i = 0; i < w->count; i++)
+        if (w->orbital[i].n == n && w->orbital[i].l == l)
+            return &w->orbital[i];
+    return NULL;
+}
+
+/* From the energy: the outermost subshell by the energy that it takes to
+ * remove an electron, as the measured reference is made; an inner one by its
+ * orbital energy. */
+static struct reading read_zeff(const struct work *w,
+                                const struct atom_orbital *o)
+{
+    const struct provenance *provenance = &offers[OFFER_ZEFF].provenance;
+    const struct subshell *outer =
+        configuration_outermost(&w->question.species.configuration);
+    double value = o->zeff_energy, energy;
+    struct reading none;
+    const char *remark = "from the orbital energy";
+    if (o->n == outer->n && o->l == outer->l) {
+        if (!ionization(w, OFFER_ZEFF, &energy, &none))
+            return none;
+        if (energy <= 0.0)
+            return gap(OFFER_ZEFF, READING_OUTSIDE,
+                       "the ion lies lower in this model");
+        value = o->n * sqrt(2.0 * energy);
+        remark = "from the computed ionization energy";
+    }
+    struct reading r = reading_computed(QUANTITY_ZEFF, value, provenance);
+    r.remark = remark;
+    return r;
+}
+
+static struct reading read_subshell(const struct work *w, int offer, int n,
+                                    int l)
+{
+    const char *reason;
+    const struct subshell *asked =
+        rule_subshell(&w->question.species, n, l, &reason);
+    if (!asked)
+        return gap(offer, READING_OUTSIDE, reason);
+    const struct atom_orbital *o = find(w, asked->n, asked->l);
+    struct reading r;
+    if (offer == OFFER_ZEFF)
+        r = read_zeff(w, o);
+    else
+        r = reading_computed(offers[offer].quantity,
+                             offer == OFFER_RADIUS ? o->peak_radius * BOHR_PM
+                             : offer == OFFER_ZEFF_SIZE ? o->zeff_size
+                                                        : o->zeff_enclosed,
+                             &offers[offer].provenance);
+    r.n = asked->n;
+    r.l = asked->l;
+    return r;
+}
+
+/* Whether Allen's scale counts a subshell: s and p of the last shell, and in
+ * groups 3 to 11 the d subshell below it. */
+static bool is_valence(const struct element *element, int last,
+                       const struct atom_orbital *o)
+{
+    if (o->l == 2)
+        return o->n == last - 1 && element->group >= 3 && element->group <= 11;
+    return o->n == last && o->l < 2;
+}
+
+/* Configuration energy, the mean energy to remove a valence electron. The
+ * orbital energies of a local potential lie too high by about the same amount
+ * for all valence electrons; all are shifted so that the highest one is the
+ * computed ionization energy. */
+static struct reading read_allen(const struct work *w)
+{
+    const struct element *element = element_at(w->question.species.z);
+    double energy, sum = 0.0, electrons = 0.0, highest = -1e9;
+    struct reading none;
+    if (w->question.species.charge != 0)
+        return gap(OFFER_ALLEN, READING_OUTSIDE,
+                   "the scale is defined for the neutral atom");
+    if (element->block == 'f')
+        return gap(OFFER_ALLEN, READING_OUTSIDE,
+                   "the scale has no rule for the valence electrons of the f "
+                   "block");
+    if (!ionization(w, OFFER_ALLEN, &energy, &none))
+        return none;
+    int last = element->period;
+    for (int i = 0; i < w->count; i++) {
+        if (!is_valence(element, last, &w->orbital[i]))
+            continue;
+        electrons += w->orbital[i].occ;
+        sum -= w->orbital[i].occ * w->orbital[i].energy;
+        highest = fmax(highest, w->orbital[i].energy);
+    }
+    if (electrons <= 0.0)
+        return gap(OFFER_ALLEN, READING_OUTSIDE, "no valence electron");
+    double mean = sum / electrons + (energy + highest);
+    return reading_computed(QUANTITY_ELECTRONEGATIVITY,
+                            ALLEN_PER_RYDBERG * mean * HARTREE_EV / RYDBERG_EV,
+                            &offers[OFFER_ALLEN].provenance);
+}
+
+static struct reading read(const void *work, int offer, int n, int l)
+{
+    const struct work *w = work;
+    if (w->question.species.configuration.count == 0)
+        return gap(offer, READING_OUTSIDE, "no electron left");
+    if (w->atom.state != ATOM_CONVERGED)
+        return gap_of(offer, w->atom.state);
+    switch (offer) {
+    case OFFER_IONIZATION:
+        return read_ionization(w);
+    case OFFER_ALLEN:
+        return read_allen(w);
+    case OFFER_ISODENSITY:
+        if (w->isodensity <= 0.0)
+            return gap(offer, READING_OUTSIDE,
+                       "the density is nowhere so high");
+        return reading_computed(QUANTITY_ISODENSITY, w->isodensity * BOHR_PM,
+                                &offers[offer].provenance);
+    default:
+        return read_subshell(w, offer, n, l);
+    }
+}
+
+const struct model model_scf = {
+    .id = "scf",
+    .title = "self-consistent Kohn-Sham atom, solved live",
+    .domain = "every element, charge >= 0, any configuration",
+    .closed = false,
+    .offers = offers,
+    .offer_count = OFFER_COUNT,
+    .work_size = sizeof(struct work),
+    .open = open_work,
+    .close = close_work,
+    .begin = begin,
+    .step = step,
+    .read = read,
+};
