@@ -32,6 +32,19 @@ static const struct command commands[COMMAND_COUNT] = {
      "each from every model and data set that has a value, with differences "
      "from the first. " SELECTION_ABOUT,
      "compare Fe3+ Al3+ Cr3+ --quantity radius", cli_compare},
+    {COMMAND_ATOM, "atom", "ELEMENT", 1, 1,
+     "solve one atom or ion and print what it is made of",
+     "Solves the Kohn-Sham equations of one atom or ion, spherical and with a "
+     "point nucleus, until they are self-consistent. Prints the total energy "
+     "and its parts, then for each subshell its electrons, orbital energy, "
+     "mean "
+     "radius, radius of the outermost maximum of the radial density D(r) and "
+     "effective nuclear charge by each definition. The density that the model "
+     "scf rests on is the default, LSD with the Dirac equation. An atom that "
+     "does not converge or does not bind is a failure and gives no number. "
+     "ELEMENT is a symbol, name or atomic number, or an ion that carries its "
+     "charge (Fe3+).",
+     "atom Fe3+ --functional pbe --format csv", cli_atom},
     {COMMAND_SOURCES, "sources", "", 0, 0,
      "print every model and data set with its citation",
      "Prints what every number rests on: models with their domain, data sets "

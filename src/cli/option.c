@@ -8,8 +8,9 @@
 #define SCREENS ON(COMMAND_SCREENS)
 #define LIST ON(COMMAND_LIST)
 #define COMPARE ON(COMMAND_COMPARE)
+#define ATOM ON(COMMAND_ATOM)
 #define SOURCES ON(COMMAND_SOURCES)
-#define ANY_COMMAND (LIST | COMPARE | SOURCES)
+#define ANY_COMMAND (LIST | COMPARE | ATOM | SOURCES)
 #define EVERYWHERE (ANY_COMMAND | SCREENS)
 
 /* A new option is one row here and one enumerator; a command that takes it
@@ -22,17 +23,17 @@ static const struct option options[OPTION_COUNT] = {
     {OPTION_MODEL, "model", 'm', "IDS", OPTION_VALUE, WORDS_MODEL, true,
      LIST | COMPARE, "models to ask, parted by commas (default: all)"},
     {OPTION_CHARGE, "charge", 'c', "N", OPTION_VALUE, WORDS_NONE, false,
-     LIST | COMPARE,
+     LIST | COMPARE | ATOM,
      "charge of every chosen element that carries none itself, such as 2 or -1 "
      "(default: 0)"},
     {OPTION_SUBSHELL, "subshell", 's', "NL", OPTION_VALUE, WORDS_SUBSHELL,
      false, LIST, "subshell asked about, such as 3d (default: the outermost)"},
     {OPTION_CONFIGURATION, "configuration", 'C', "TEXT", OPTION_VALUE,
-     WORDS_NONE, false, LIST | COMPARE,
+     WORDS_NONE, false, LIST | COMPARE | ATOM,
      "electron configuration in place of the ground state, such as "
      "'[Ar] 3d6 4s2'"},
     {OPTION_TERM, "term", 't', "TERM", OPTION_VALUE, WORDS_TERM, false,
-     LIST | COMPARE,
+     LIST | COMPARE | ATOM,
      "for single-zeta: hund, the term of highest S, then highest L, or "
      "average, "
      "the average of the configuration (default: hund)"},
@@ -41,8 +42,21 @@ static const struct option options[OPTION_COUNT] = {
      "stored data sets to compare with, at most one per quantity (default: the "
      "first with the model's own definition)"},
     {OPTION_UNIT, "unit", 'u', "UNITS", OPTION_VALUE, WORDS_UNIT, true,
-     LIST | COMPARE,
-     "units to print in, at most one per kind of quantity (default: pm, eV)"},
+     LIST | COMPARE | ATOM,
+     "units to print in, at most one per kind of quantity (default: pm, eV; "
+     "atom: pm, hartree)"},
+    {OPTION_FUNCTIONAL, "functional", 0, "NAME", OPTION_VALUE, WORDS_FUNCTIONAL,
+     false, ATOM,
+     "exchange and correlation: lda (spins alike), lsd or pbe (spin-polarised; "
+     "default: lsd)"},
+    {OPTION_RELATIVITY, "relativity", 0, "NAME", OPTION_VALUE, WORDS_RELATIVITY,
+     false, ATOM,
+     "none for the Schrödinger equation, dirac for the Dirac equation "
+     "(default: dirac)"},
+    {OPTION_SPEED_OF_LIGHT, "speed-of-light", 0, "C", OPTION_VALUE, WORDS_NONE,
+     false, ATOM,
+     "in atomic units, for the Dirac equation (default: 137.035999177, CODATA "
+     "2022)"},
     {OPTION_DATA, "data", 'd', "FILE", OPTION_REPEAT, WORDS_FILE, false,
      EVERYWHERE,
      "add a data set of your own, in the form of outershell-data(5); may be "

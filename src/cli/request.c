@@ -8,6 +8,10 @@
 #include "cli/words.h"
 #include "element/subshell.h"
 
+/* Wider than anything of use; the atom itself asks for more than its Z. */
+#define SPEED_OF_LIGHT_MIN 1.0
+#define SPEED_OF_LIGHT_MAX 1e6
+
 static const char *given(const struct request *r, enum option_id id)
 {
     return r->call->value[id];
@@ -351,15 +355,37 @@ static bool read_term(struct request *r, struct status *st)
     return true;
 }
 
+/* How `atom` solves. */
+static bool read_method(struct request *r, struct status *st)
+{
+    int functional = (int)atom_method_default.functional;
+    int relativity = (int)atom_method_default.relativity;
+    const char *c = given(r, OPTION_SPEED_OF_LIGHT);
+    if (!read_choice(r, OPTION_FUNCTIONAL, &functional, st) ||
+        !read_choice(r, OPTION_RELATIVITY, &relativity, st))
+        return false;
+    r->method.functional = (enum functional)functional;
+    r->method.relativity = (enum relativity)relativity;
+    double *speed = &r->method.speed_of_light;
+    if (c && (!text_to_double(c, speed) || *speed < SPEED_OF_LIGHT_MIN ||
+              *speed > SPEED_OF_LIGHT_MAX))
+        return status_fail(st, STATUS_USAGE,
+                           "--speed-of-light %s: expected a number of atomic "
+                           "units from %g to %g, such as 137.035999177",
+                           c, SPEED_OF_LIGHT_MIN, SPEED_OF_LIGHT_MAX);
+    return true;
+}
+
 bool request_open(struct request *r, const struct call *call, struct status *st)
 {
     *r = (struct request){.call = call};
     bool chooses = call->command->id == COMMAND_LIST ||
-                   call->command->id == COMMAND_COMPARE;
+                   call->command->id == COMMAND_COMPARE ||
+                   call->command->id == COMMAND_ATOM;
     return read_output(r, st) && read_quantities(r, st) && read_models(r, st) &&
            read_units(r, st) && read_subshell(r, st) &&
            read_configuration(r, st) && read_data(r, st) &&
-           read_references(r, st) && read_term(r, st) &&
+           read_references(r, st) && read_term(r, st) && read_method(r, st) &&
            (!chooses || choose_atoms(r, st));
 }
 

@@ -3,6 +3,7 @@
 #ifndef CLI_REQUEST_H
 #define CLI_REQUEST_H
 
+#include "analysis/atom_report.h"
 #include "base/status.h"
 #include "base/units.h"
 #include "cli/parse.h"
@@ -40,6 +41,7 @@ struct request {
     const struct unit *units[DIMENSION_COUNT];
     struct configuration configuration;
     int n, l;
+    struct atom_method method;
     int atom_count;
     struct request_atom atoms[SELECTION_MAX];
     enum export_format format;

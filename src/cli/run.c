@@ -44,9 +44,10 @@ static bool check_has_screen(const struct call *call, struct status *st)
 {
     if (call->command->id != COMMAND_SCREENS || isatty(STDOUT_FILENO))
         return true;
-    return status_fail(st, STATUS_USAGE,
-                       "no command: expected list, compare or sources; the "
-                       "screens need a terminal on standard output");
+    return status_fail(
+        st, STATUS_USAGE,
+        "no command: expected list, compare, atom or sources; the "
+        "screens need a terminal on standard output");
 }
 
 static bool carry_out(const struct call *call, struct status *st)

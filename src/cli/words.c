@@ -4,6 +4,7 @@
 #include <stdint.h>
 #include <string.h>
 
+#include "analysis/atom_report.h"
 #include "base/units.h"
 #include "element/quantity.h"
 #include "element/subshell.h"
@@ -79,6 +80,14 @@ void words_fill(struct words *words, enum word_kind kind,
         break;
     case WORDS_TERM:
         ADD_ARRAY(words, terms);
+        break;
+    case WORDS_FUNCTIONAL:
+        for (int f = 0; f < FUNCTIONAL_COUNT; f++)
+            add(words, functional_id((enum functional)f));
+        break;
+    case WORDS_RELATIVITY:
+        for (int i = 0; i < RELATIVITY_COUNT; i++)
+            add(words, relativity_id((enum relativity)i));
         break;
     case WORDS_FORMAT:
         ADD_ARRAY(words, formats);

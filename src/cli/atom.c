@@ -1,0 +1,71 @@
+/* SPDX-License-Identifier: MIT */
+/* `atom`: one self-consistent atom. */
+#include "cli/commands.h"
+#include "cli/output.h"
+#include "element/selection.h"
+#include "export/atom.h"
+#include "study/atom_run.h"
+
+static const struct unit *unit_for(const struct request *r,
+                                   enum dimension dimension, const char *usual)
+{
+    const struct unit *unit = r->units[dimension];
+    return unit ? unit : unit_find(usual);
+}
+
+static bool write(const struct request *r, const struct atom_report *report,
+                  struct status *st)
+{
+    struct output out;
+    const struct unit *energy = unit_for(r, DIMENSION_ENERGY, "hartree");
+    const struct unit *length = unit_for(r, DIMENSION_LENGTH, "pm");
+    bool ok = output_open(&out, r, st);
+    if (!ok)
+        return false;
+    if (r->format == EXPORT_TEXT)
+        ok =
+            atom_write_text(out.stream, report, energy, length, &out.style, st);
+    else
+        atom_write(out.stream, r->format, report, energy, length);
+    return output_close(&out, ok, st);
+}
+
+/* Solves to the end; an atom that has no result is a failure with its reason.
+ */
+static bool solve(struct atom_run *run, const struct request *r,
+                  const struct species *species, struct status *st)
+{
+    char ion[ION_TEXT_MAX];
+    ion_print(species->z, species->charge, ion);
+    if (!atom_run_begin(run, species, &r->method, st))
+        return status_context(st, "atom: %s", ion);
+    while (atom_run_step(run))
+        ;
+    const struct atom_report *report = atom_run_report(run);
+    return report->state == REPORT_SOLVED ||
+           status_fail(st, STATUS_CONVERGENCE,
+                       "atom: %s, %s, %s: %s (cycle %d); no number "
+                       "is given",
+                       ion, functional_title(r->method.functional),
+                       relativity_title(r->method.relativity), report->reason,
+                       report->cycles);
+}
+
+bool cli_atom(struct request *r, struct status *st)
+{
+    struct species species;
+    struct ask ask;
+    if (r->atom_count != 1)
+        return status_fail(st, STATUS_USAGE,
+                           "atom: %d atoms chosen; expected one element or ion",
+                           r->atom_count);
+    ask = request_ask(r, 0, QUANTITY_ZEFF, NULL);
+    if (!output_check(r, st) || !study_species(r->study, &ask, &species, st))
+        return false;
+    struct atom_run *run = atom_run_new(st);
+    if (!run)
+        return false;
+    bool ok = solve(run, r, &species, st) && write(r, atom_run_report(run), st);
+    atom_run_free(run);
+    return ok;
+}
