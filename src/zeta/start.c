@@ -49,7 +49,7 @@ void start_charges(const struct energy_atom *atom, double z_eff[])
             for (int j = 0; j < atom->shells; j++) {
                 int other = fitted_place(atom->n[j], atom->l[j]);
                 if (other >= 0)
-                    z += row->by_electrons[other] * atom->occ[j];
+                    z += (double)row->by_electrons[other] * atom->occ[j];
             }
         }
         z_eff[i] = z > least_charge ? z : least_charge;
@@ -59,7 +59,7 @@ void start_charges(const struct energy_atom *atom, double z_eff[])
 /* Scales and table places of the variables; at[place] is the variable there,
  * or -1. */
 static void variables_scale(const struct energy *e, double scale[], int place[],
-                            signed char at[])
+                            int at[])
 {
     const struct energy_atom *atom = &e->atom;
     for (int i = 0; i < START_VARIABLES; i++)
@@ -67,7 +67,7 @@ static void variables_scale(const struct energy *e, double scale[], int place[],
     for (int i = 0; i < atom->shells; i++) {
         scale[i] = sqrt(atom->occ[i]) * e->zeta[i];
         place[i] = l_first[atom->l[i]] + atom->n[i] - atom->l[i] - 1;
-        at[place[i]] = (signed char)i;
+        at[place[i]] = i;
     }
     for (int l = 0; l < BLOCK_COUNT; l++) {
         const struct energy_block *b = &atom->block[l];
@@ -75,7 +75,7 @@ static void variables_scale(const struct energy *e, double scale[], int place[],
             int variable = b->kappa + i;
             scale[variable] = sqrt(b->full - b->open) * e->zeta[b->first + i];
             place[variable] = START_SUBSHELLS + l_first[l] + i;
-            at[place[variable]] = (signed char)variable;
+            at[place[variable]] = variable;
         }
     }
 }
@@ -85,7 +85,7 @@ void start_hessian(const struct energy *e,
 {
     double scale[ENERGY_VARIABLE_MAX];
     int place[ENERGY_VARIABLE_MAX];
-    signed char at[START_VARIABLES];
+    int at[START_VARIABLES];
     variables_scale(e, scale, place, at);
     double electrons = 0.0;
     for (int i = 0; i < e->atom.shells; i++)

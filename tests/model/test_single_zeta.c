@@ -90,17 +90,17 @@ END_TEST
 START_TEST(what_has_no_number_says_why)
 {
     static const struct {
-        int z, n, l;
         const char *configuration, *words;
+        int z, n, l;
         enum reading_state state;
     } cases[] = {
-        {104, 0, 0, "[Rn] 5f14 6d2 7s2", "ends with Lr", READING_OUTSIDE},
-        {11, 0, 0, "1s1 2s2 2p6 3s1", "core holes", READING_OUTSIDE},
-        {11, 0, 0, "[Ne] 4s1", "excited", READING_OUTSIDE},
-        {3, 0, 0, "1s2 2s0.5", "fractions", READING_OUTSIDE},
-        {18, 0, 0, "[Ar] 4s1", "escapes", READING_OUTSIDE},
-        {26, 4, 1, "[Ar] 3d6 4s2", "no electron", READING_OUTSIDE},
-        {1, 0, 0, "1s2 2s2 2p6", "did not converge", READING_NOT_CONVERGED},
+        {"[Rn] 5f14 6d2 7s2", "ends with Lr", 104, 0, 0, READING_OUTSIDE},
+        {"1s1 2s2 2p6 3s1", "core holes", 11, 0, 0, READING_OUTSIDE},
+        {"[Ne] 4s1", "excited", 11, 0, 0, READING_OUTSIDE},
+        {"1s2 2s0.5", "fractions", 3, 0, 0, READING_OUTSIDE},
+        {"[Ar] 4s1", "escapes", 18, 0, 0, READING_OUTSIDE},
+        {"[Ar] 3d6 4s2", "no electron", 26, 4, 1, READING_OUTSIDE},
+        {"1s2 2s2 2p6", "did not converge", 1, 0, 0, READING_NOT_CONVERGED},
     };
     for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
         for (int q = 0; q < 2; q++) {

@@ -461,11 +461,11 @@ START_TEST(orbitals_are_orthonormal_and_have_the_stated_radii)
                  "Z=%d mean radius %d", atoms[a].z, i);
             /* no larger P^2 anywhere */
             double top = fabs(zeta_orbital(&r, i, s->peak_radius));
-            for (double x = -9.0; x < 4.0; x += 0.001)
-                ck_assert_msg(fabs(zeta_orbital(&r, i, exp(x))) <
+            for (int k = -9000; k < 4000; k++)
+                ck_assert_msg(fabs(zeta_orbital(&r, i, exp(0.001 * k))) <
                                   top * (1 + 1e-12),
                               "Z=%d orbital %d is larger at %g than at %g",
-                              atoms[a].z, i, exp(x), s->peak_radius);
+                              atoms[a].z, i, exp(0.001 * k), s->peak_radius);
             ck_assert(zeta_orbital(&r, i, 3 * s->peak_radius) > 0 || i > 0);
         }
     }
@@ -491,7 +491,24 @@ START_TEST(koopmans_is_above_the_relaxed_difference_for_neon)
 }
 END_TEST
 
-/* Asking for the Hessian changes no digit of what is read. */
+static void same_result(const struct zeta_result *a,
+                        const struct zeta_result *b)
+{
+    ck_assert_int_eq(a->state, b->state);
+    ck_assert_int_eq(a->count, b->count);
+    ck_assert_int_eq(a->evaluations, b->evaluations);
+    near(a->total, b->total, 0, 0, "total");
+    near(a->gradient_norm, b->gradient_norm, 0, 0, "gradient");
+    for (int i = 0; i < a->count; i++) {
+        near(a->shells[i].zeta, b->shells[i].zeta, 0, 0, "zeta %d", i);
+        near(a->shells[i].energy, b->shells[i].energy, 0, 0, "energy %d", i);
+        near(a->shells[i].peak_radius, b->shells[i].peak_radius, 0, 0,
+             "peak %d", i);
+    }
+}
+
+/* Asking for the Hessian changes no digit of what is read, and one work space
+ * serves the next atom as a new one would. */
 START_TEST(a_result_survives_the_question_for_the_hessian)
 {
     struct zeta *work = work_space();
@@ -501,10 +518,10 @@ START_TEST(a_result_survives_the_question_for_the_hessian)
     double lowest;
     ck_assert(zeta_is_minimum(work, &lowest));
     zeta_read(work, &after);
-    ck_assert_int_eq(memcmp(&before, &after, sizeof before), 0);
-    /* and one work space serves the next atom as a new one would */
-    struct zeta_result again = solve(work, 26, "[Ar] 3d6 4s2", ZETA_HUND, NULL);
-    ck_assert_int_eq(memcmp(&before, &again, sizeof before), 0);
+    same_result(&before, &after);
+    solve(work, 92, "[Rn] 5f3 6d1 7s2", ZETA_HUND, NULL);
+    after = solve(work, 26, "[Ar] 3d6 4s2", ZETA_HUND, NULL);
+    same_result(&before, &after);
     zeta_free(work);
 }
 END_TEST
