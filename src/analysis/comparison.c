@@ -3,6 +3,7 @@
 
 #include <math.h>
 #include <stdlib.h>
+#include <string.h>
 
 #define PERCENT_DIGITS 7
 
@@ -27,4 +28,20 @@ bool comparison_difference(const struct comparison_line *line, int which,
         difference->percent = number_round(
             100.0 * difference->value.value / size, PERCENT_DIGITS, 0);
     return true;
+}
+
+void comparison_label(const struct comparison *comparison, int line,
+                      struct text *t)
+{
+    const struct comparison_line *self = &comparison->lines[line];
+    bool shared = false;
+    for (int i = 0; i < comparison->line_count; i++) {
+        const struct comparison_line *other = &comparison->lines[i];
+        if (i != line && other->quantity == self->quantity &&
+            strcmp(other->provenance->id, self->provenance->id) == 0)
+            shared = true;
+    }
+    text_add(t, self->provenance->id);
+    if (shared)
+        text_addf(t, ": %s", self->provenance->definition);
 }

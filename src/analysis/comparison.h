@@ -4,6 +4,7 @@
 #define ANALYSIS_COMPARISON_H
 
 #include "analysis/row.h"
+#include "base/text.h"
 
 #define COMPARISON_MAX 12 /* atoms side by side */
 #define FACT_TEXT_MAX 320
@@ -34,6 +35,11 @@ struct comparison {
 };
 
 void comparison_clear(struct comparison *comparison);
+
+/* What a line is called: the id of its source, with the definition where the
+ * source gives several numbers for the quantity. */
+void comparison_label(const struct comparison *comparison, int line,
+                      struct text *t);
 
 /* Difference of atom `which` from atom 0 in a line: false when either has no
  * number or which is 0. percent is of the size of the first; has_percent only

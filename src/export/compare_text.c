@@ -148,7 +148,10 @@ static bool write_numbers(FILE *out, const struct comparison *c, int from,
         if (i == 0 || line->quantity != line[-1].quantity ||
             line->unit != line[-1].unit)
             add_quantity(&table, line);
-        table_cellf(&table, "  %s", line->provenance->id);
+        text_add(&t, "  ");
+        comparison_label(c, i, &t);
+        table_cell(&table, buffer);
+        t = text_over(buffer, sizeof buffer);
         if (!line->provenance->computed)
             legend_set(legend, line->provenance, &t);
         table_cell(&table, buffer);

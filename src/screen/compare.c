@@ -92,23 +92,27 @@ static void draw_value(struct canvas *canvas, int row, int column,
                  d.value.value < 0 ? ROLE_BELOW : ROLE_ABOVE, buffer);
 }
 
-/* An id without the quantity that heads its group. */
-static const char *short_id(const struct comparison_line *line)
+/* The label of a line, without the quantity that heads its group. */
+static const char *short_label(const struct ui *ui, int line,
+                               char out[UI_TEXT_MAX])
 {
-    const char *id = line->provenance->id;
-    const char *quantity = quantity_at(line->quantity)->id;
+    struct text t = text_over(out, UI_TEXT_MAX);
+    const char *quantity = quantity_at(ui->comparison.lines[line].quantity)->id;
     size_t n = strlen(quantity);
-    return strncmp(id, quantity, n) == 0 && id[n] == '_' ? id + n + 1 : id;
+    comparison_label(&ui->comparison, line, &t);
+    return strncmp(out, quantity, n) == 0 && out[n] == '_' ? out + n + 1 : out;
 }
 
 static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
-                      const struct comparison_line *line, bool first, int atoms)
+                      int item, bool first, int atoms)
 {
+    char label[UI_TEXT_MAX];
+    const struct comparison_line *line = &ui->comparison.lines[item];
     if (first)
         canvas_textf(canvas, row, 0, 9, ROLE_HEADING, "%s %s",
                      quantity_at(line->quantity)->symbol, line->unit->id);
     canvas_text(canvas, row, 10, label_columns(ui) - 11, ROLE_TEXT,
-                short_id(line));
+                short_label(ui, item, label));
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
         if (which < ui->comparison.count)
@@ -178,8 +182,9 @@ static void draw(struct ui *ui, struct canvas *canvas)
             continue;
         }
         bool first = i == 0 || item == 0 ||
-                     c->lines[item].quantity != c->lines[item - 1].quantity;
-        draw_line(ui, canvas, 2 + i, &c->lines[item], first, atoms);
+                     c->lines[item].quantity != c->lines[item - 1].quantity ||
+                     c->lines[item].unit != c->lines[item - 1].unit;
+        draw_line(ui, canvas, 2 + i, item, first, atoms);
     }
     canvas->cursor_row = 2;
     canvas->cursor_column = 0;
