@@ -1,0 +1,15 @@
+/* SPDX-License-Identifier: MIT */
+/* The parts of the suite for cli/. */
+#ifndef TESTS_CLI_SUITES_H
+#define TESTS_CLI_SUITES_H
+
+#include <check.h>
+
+TCase *parse_cases(void);
+TCase *made_cases(void);
+TCase *call_cases(void);
+TCase *output_cases(void);
+TCase *residual_cases(void);
+TCase *stream_cases(void);
+
+#endif

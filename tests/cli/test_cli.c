@@ -1,0 +1,15 @@
+/* SPDX-License-Identifier: MIT */
+#include "suites.h"
+#include "support/run.h"
+
+int main(void)
+{
+    Suite *suite = suite_create("cli");
+    suite_add_tcase(suite, parse_cases());
+    suite_add_tcase(suite, made_cases());
+    suite_add_tcase(suite, call_cases());
+    suite_add_tcase(suite, output_cases());
+    suite_add_tcase(suite, residual_cases());
+    suite_add_tcase(suite, stream_cases());
+    return run_suite(suite);
+}

@@ -1,0 +1,260 @@
+/* SPDX-License-Identifier: MIT */
+/* What is made from the tables says what the tables say: manual, help and
+ * completions. */
+#include <dirent.h>
+#include <stdbool.h>
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+#include <unistd.h>
+
+#include "base/file.h"
+#include "base/text.h"
+#include "cli/command.h"
+#include "cli/sha256.h"
+#include "cli/words.h"
+#include "suites.h"
+#include "support/program.h"
+
+static char *read_whole(const char *path)
+{
+    char *text;
+    size_t size;
+    struct status st;
+    ck_assert_msg(file_read(path, 1 << 22, &text, &size, &st), "%s",
+                  st.message);
+    return text;
+}
+
+static int count_of(const char *text, const char *part)
+{
+    int count = 0;
+    for (const char *p = text; (p = strstr(p, part)) != NULL; p++)
+        count++;
+    return count;
+}
+
+START_TEST(the_manual_lists_every_option_and_command_and_no_other)
+{
+    char *text = read_whole(MANUAL);
+    char *options = strstr(text, ".Ss Options");
+    ck_assert_ptr_nonnull(options);
+    *options++ = '\0';
+    char *end = strstr(options, "\n.El");
+    ck_assert_ptr_nonnull(end);
+    *end = '\0';
+    ck_assert_int_eq(count_of(options, "\n.It "), OPTION_COUNT);
+    for (int i = 0; i < OPTION_COUNT; i++) {
+        const struct option *o = option_at(i);
+        char line[128];
+        char argument[32] = "";
+        for (size_t k = 0; o->argument && o->argument[k]; k++)
+            argument[k] = (char)(o->argument[k] | 0x20);
+        char letter[16] = "";
+        if (o->letter)
+            snprintf(letter, sizeof letter, "Fl %c , ", o->letter);
+        snprintf(line, sizeof line, "\n.It %sFl Fl %s%s%s\n", letter, o->name,
+                 o->argument ? " Ar " : "", argument);
+        ck_assert_msg(strstr(options, line), "manual: no %s", line);
+    }
+    ck_assert_int_eq(count_of(text, "\n.It Cm "), COMMAND_COUNT - 1);
+    for (int c = 1; c < COMMAND_COUNT; c++) {
+        char line[64];
+        snprintf(line, sizeof line, "\n.It Cm %s\n", command_at(c)->name);
+        char *part = strstr(text, line);
+        ck_assert_msg(part, "manual: no %s", line);
+        char *next = strstr(part + 1, "\n.It ");
+        for (int i = 0; i < OPTION_COUNT; i++) {
+            snprintf(line, sizeof line, "\n.Fl Fl %s ", option_at(i)->name);
+            const char *found = strstr(part, line);
+            bool here = found && (!next || found < next);
+            ck_assert_msg(here ==
+                              option_belongs(option_at(i), (enum command_id)c),
+                          "manual: %s in %s", line, command_at(c)->name);
+        }
+    }
+    ck_assert_ptr_null(strchr(text, '@'));
+    free(text);
+}
+END_TEST
+
+START_TEST(help_lists_the_options_of_a_command_and_no_other)
+{
+    for (int c = 0; c < COMMAND_COUNT; c++) {
+        const char *name = command_at(c)->name;
+        char line[64];
+        snprintf(line, sizeof line, "%s --help", name ? name : "");
+        struct program_result r = program_call(OUTERSHELL, line);
+        ck_assert_int_eq(r.status, 0);
+        ck_assert_uint_eq(r.err_size, 0);
+        for (int i = 0; i < OPTION_COUNT; i++) {
+            const struct option *o = option_at(i);
+            snprintf(line, sizeof line, "--%s%s%s\n", o->name,
+                     o->argument ? " " : "", o->argument ? o->argument : "");
+            ck_assert_msg((strstr(r.out, line) != NULL) ==
+                              option_belongs(o, (enum command_id)c),
+                          "help of %s: %s", name ? name : "the screens", line);
+        }
+        for (const char *l = r.out; *l; l = strchr(l, '\n') + 1)
+            ck_assert_uint_le(strcspn(l, "\n"), 79);
+        program_free(&r);
+    }
+}
+END_TEST
+
+/* Runs the completion in a shell of its own: what it offers for words. */
+static struct program_result complete_in_bash(const char *words)
+{
+    char script[1024];
+    snprintf(script, sizeof script,
+             "source '%s'; COMP_WORDS=(outershell %s); "
+             "COMP_CWORD=$((${#COMP_WORDS[@]}-1)); _outershell; "
+             "printf '%%s\\n' \"${COMPREPLY[@]}\"",
+             BASH_COMPLETION, words);
+    struct program p = {
+        .path = BASH, .count = 3, .arguments = {"--norc", "-c", script}};
+    struct program_result r = program_run(&p);
+    ck_assert_msg(r.status == 0 && r.err_size == 0, "%s: %s", words, r.err);
+    return r;
+}
+
+static bool has_line(const char *text, const char *line)
+{
+    size_t length = strlen(line);
+    for (const char *p = text; (p = strstr(p, line)) != NULL; p++)
+        if ((p == text || p[-1] == '\n') && p[length] == '\n')
+            return true;
+    return false;
+}
+
+START_TEST(bash_offers_the_options_of_a_command_and_no_other)
+{
+    for (int c = 0; c < COMMAND_COUNT; c++) {
+        const char *name = command_at(c)->name;
+        char line[64];
+        snprintf(line, sizeof line, "%s --", name ? name : "");
+        struct program_result r = complete_in_bash(line);
+        for (int i = 0; i < OPTION_COUNT; i++) {
+            snprintf(line, sizeof line, "--%s", option_at(i)->name);
+            ck_assert_msg(has_line(r.out, line) ==
+                              option_belongs(option_at(i), (enum command_id)c),
+                          "bash: %s with %s", line, name ? name : "none");
+        }
+        program_free(&r);
+    }
+}
+END_TEST
+
+START_TEST(bash_completes_words_lists_and_elements)
+{
+    static const struct {
+        const char *words, *offered;
+    } cases[] = {
+        {"l", "list"},
+        {"list --quantity ze", "zeff"},
+        {"list --quantity zeff,ra", "zeff,radius"},
+        {"list --model = slat", "slater"},
+        {"list -f j", "json"},
+        {"list --subshell 3", "3d"},
+        {"list --reference covalent_cor", "covalent_cordero_2008"},
+        {"compare Fe C", "Cr"},
+        {"--color al", "always"},
+    };
+    for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
+        struct program_result r = complete_in_bash(cases[i].words);
+        ck_assert_msg(has_line(r.out, cases[i].offered), "%s: %s",
+                      cases[i].words, r.out);
+        program_free(&r);
+    }
+}
+END_TEST
+
+START_TEST(zsh_and_fish_know_every_option_where_it_belongs)
+{
+    char *zsh = read_whole(ZSH_COMPLETION);
+    char *fish = read_whole(FISH_COMPLETION);
+    for (int i = 0; i < OPTION_COUNT; i++) {
+        const struct option *o = option_at(i);
+        char part[64];
+        int commands = 0;
+        for (int c = 0; c < COMMAND_COUNT; c++)
+            commands += option_belongs(o, (enum command_id)c);
+        snprintf(part, sizeof part, "--%s%s", o->name,
+                 o->argument ? "="
+                 : o->letter ? "}"
+                             : "'");
+        ck_assert_msg(count_of(zsh, part) == commands, "zsh: %s", part);
+        snprintf(part, sizeof part, " -l %s ", o->name);
+        ck_assert_msg(count_of(fish, part) == 1, "fish: %s", part);
+        char *line = strstr(fish, part);
+        while (line > fish && line[-1] != '\n')
+            line--;
+        *strchr(line, '\n') = '\0';
+        for (int c = 1; c < COMMAND_COUNT; c++)
+            ck_assert_msg(option_belongs(o, COMMAND_SCREENS) ||
+                              (strstr(line, command_at(c)->name) != NULL) ==
+                                  option_belongs(o, (enum command_id)c) ||
+                              strstr(o->help, command_at(c)->name) != NULL,
+                          "fish: %s", line);
+        line[strlen(line)] = '\n';
+    }
+    free(zsh);
+    free(fish);
+}
+END_TEST
+
+static int by_name(const void *a, const void *b)
+{
+    return strcmp(*(char *const *)a, *(char *const *)b);
+}
+
+/* The sum that anyone gets by: cat data/(files by name).json | sha256sum */
+START_TEST(version_names_licence_and_data_with_their_sum)
+{
+    char *names[256];
+    size_t count = 0;
+    DIR *folder = opendir(DATA_DIR);
+    ck_assert_ptr_nonnull(folder);
+    for (struct dirent *d; (d = readdir(folder)) != NULL;) {
+        size_t length = strlen(d->d_name);
+        if (length > 5 && strcmp(d->d_name + length - 5, ".json") == 0)
+            names[count++] = strdup(d->d_name);
+    }
+    closedir(folder);
+    qsort(names, count, sizeof *names, by_name);
+    struct sha256 s;
+    char sum[SHA256_TEXT_MAX];
+    char want[256];
+    sha256_begin(&s);
+    for (size_t i = 0; i < count; i++) {
+        char path[1024];
+        snprintf(path, sizeof path, "%s/%s", DATA_DIR, names[i]);
+        char *text = read_whole(path);
+        sha256_add(&s, text, strlen(text));
+        free(text);
+        free(names[i]);
+    }
+    sha256_end(&s, sum);
+    struct program_result r = program_call(OUTERSHELL, "--version");
+    ck_assert_int_eq(r.status, 0);
+    snprintf(want, sizeof want, "outershell %s\n", OUTERSHELL_VERSION);
+    ck_assert_int_eq(strncmp(r.out, want, strlen(want)), 0);
+    ck_assert_ptr_nonnull(strstr(r.out, "Licence: MIT"));
+    snprintf(want, sizeof want, "Data sets: %zu\nData SHA-256: %s\n", count,
+             sum);
+    ck_assert_msg(strstr(r.out, want), "%s\nwant %s", r.out, want);
+    program_free(&r);
+}
+END_TEST
+
+TCase *made_cases(void)
+{
+    TCase *c = tcase_create("made");
+    tcase_add_test(c, the_manual_lists_every_option_and_command_and_no_other);
+    tcase_add_test(c, help_lists_the_options_of_a_command_and_no_other);
+    tcase_add_test(c, bash_offers_the_options_of_a_command_and_no_other);
+    tcase_add_test(c, bash_completes_words_lists_and_elements);
+    tcase_add_test(c, zsh_and_fish_know_every_option_where_it_belongs);
+    tcase_add_test(c, version_names_licence_and_data_with_their_sum);
+    return c;
+}

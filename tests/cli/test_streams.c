@@ -1,0 +1,278 @@
+/* SPDX-License-Identifier: MIT */
+/* Full disks, closed pipes, files that are there or cannot be: nothing is
+ * lost and nothing is said twice. Runs as root too, so that "cannot be written"
+ * never rests on permissions alone. */
+#include <fcntl.h>
+#include <signal.h>
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+#include <sys/resource.h>
+#include <sys/stat.h>
+#include <unistd.h>
+
+#include "base/file.h"
+#include "suites.h"
+#include "support/program.h"
+
+static const char *const calls[] = {
+    "list --model shells",
+    "list Fe --model shells --format csv",
+    "list --model shells -f json",
+    "compare Fe Cr --model shells",
+    "sources",
+    "sources --format bibtex",
+    "--help",
+    "list --help",
+    "--version",
+};
+#define CALL_COUNT (sizeof calls / sizeof calls[0])
+
+static struct program_result run_to(enum program_output output,
+                                    const char *call)
+{
+    static char store[1024];
+    struct program p = {.path = OUTERSHELL, .output = output};
+    program_split(&p, call, store, sizeof store);
+    return program_run(&p);
+}
+
+static void check_failed(struct program_result *r, const char *call,
+                         const char *why)
+{
+    char want[128];
+    snprintf(want, sizeof want,
+             "outershell: standard output: cannot write: %s\n", why);
+    ck_assert_msg(r->status == 1, "%s: status %d, signal %d", call, r->status,
+                  r->signal);
+    ck_assert_str_eq(r->err, want);
+    program_free(r);
+}
+
+START_TEST(a_full_device_is_reported_once)
+{
+    for (size_t i = 0; i < CALL_COUNT; i++) {
+        struct program_result r = run_to(PROGRAM_FULL, calls[i]);
+        check_failed(&r, calls[i], "No space left on device");
+    }
+}
+END_TEST
+
+START_TEST(a_closed_standard_output_is_reported_once)
+{
+    for (size_t i = 0; i < CALL_COUNT; i++) {
+        struct program_result r = run_to(PROGRAM_CLOSED, calls[i]);
+        check_failed(&r, calls[i], "Bad file descriptor");
+    }
+}
+END_TEST
+
+START_TEST(a_pipe_without_a_reader_ends_it_by_its_signal_and_in_silence)
+{
+    for (size_t i = 0; i < CALL_COUNT; i++) {
+        struct program_result r = run_to(PROGRAM_BROKEN, calls[i]);
+        ck_assert_msg(r.signal == SIGPIPE, "%s: status %d", calls[i], r.status);
+        ck_assert_uint_eq(r.err_size, 0);
+        program_free(&r);
+        r = run_to(PROGRAM_BROKEN_MUTE, calls[i]);
+        check_failed(&r, calls[i], "Broken pipe");
+    }
+}
+END_TEST
+
+/* A folder for one test; everything in it is removed by scratch_end, which
+ * counts it. */
+static void scratch_begin(char *folder)
+{
+    ck_assert_ptr_nonnull(mkdtemp(folder));
+}
+
+static void put_file(const char *folder, const char *name, const char *text,
+                     mode_t mode)
+{
+    char path[256];
+    snprintf(path, sizeof path, "%s/%s", folder, name);
+    FILE *f = fopen(path, "wb");
+    ck_assert_ptr_nonnull(f);
+    fputs(text, f);
+    ck_assert_int_eq(fclose(f), 0);
+    ck_assert_int_eq(chmod(path, mode), 0);
+}
+
+/* The file's text, NULL when there is none; the caller frees it. */
+static char *text_of(const char *folder, const char *name)
+{
+    char path[256];
+    char *text;
+    size_t size;
+    struct status st;
+    snprintf(path, sizeof path, "%s/%s", folder, name);
+    return file_read(path, 1 << 22, &text, &size, &st) ? text : NULL;
+}
+
+static void scratch_end(const char *folder, const char *const *names)
+{
+    for (; *names; names++) {
+        char path[256];
+        snprintf(path, sizeof path, "%s/%s", folder, *names);
+        ck_assert_msg(unlink(path) == 0, "no %s", path);
+    }
+    ck_assert_msg(rmdir(folder) == 0, "something else was left in %s", folder);
+}
+
+static struct program_result run_in(const char *folder, const char *call)
+{
+    static char store[1024];
+    struct program p = {.path = OUTERSHELL, .folder = folder};
+    program_split(&p, call, store, sizeof store);
+    return program_run(&p);
+}
+
+START_TEST(a_file_holds_what_standard_output_would_have_shown)
+{
+    static const char *const names[] = {"a", NULL};
+    for (size_t i = 0; i < 6; i++) {
+        char folder[] = "/tmp/outershell-streams-XXXXXX";
+        char call[256];
+        scratch_begin(folder);
+        snprintf(call, sizeof call, "%s --output a", calls[i]);
+        struct program_result r = run_in(folder, call);
+        struct program_result plain = run_in(folder, calls[i]);
+        ck_assert_int_eq(r.status, 0);
+        ck_assert_uint_eq(r.out_size + r.err_size, 0);
+        char *text = text_of(folder, "a");
+        ck_assert_ptr_nonnull(text);
+        ck_assert_str_eq(text, plain.out);
+        free(text);
+        program_free(&r);
+        program_free(&plain);
+        scratch_end(folder, names);
+    }
+}
+END_TEST
+
+START_TEST(force_replaces_a_file_and_keeps_its_mode)
+{
+    static const char *const names[] = {"a", NULL};
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    char path[256];
+    struct stat info;
+    scratch_begin(folder);
+    put_file(folder, "a", "old", 0640);
+    struct program_result r =
+        run_in(folder, "list Fe -m shells --output a --force");
+    ck_assert_int_eq(r.status, 0);
+    program_free(&r);
+    char *text = text_of(folder, "a");
+    ck_assert_int_eq(strncmp(text, "species", 7), 0);
+    free(text);
+    snprintf(path, sizeof path, "%s/a", folder);
+    ck_assert_int_eq(stat(path, &info), 0);
+    ck_assert_uint_eq(info.st_mode & 07777, 0640);
+    scratch_end(folder, names);
+}
+END_TEST
+
+/* A limit on file size stands for a disk that fills up half-way; SIGXFSZ is
+ * ignored, so that the write fails as it does on a full disk. */
+START_TEST(a_disk_that_fills_up_leaves_the_old_file_and_no_other)
+{
+    static const char *const names[] = {"old", NULL};
+    static const char *const tries[] = {
+        "list --model shells --output new",
+        "list --model shells --output old --force",
+        "sources --format json --output new"};
+    struct rlimit before;
+    struct rlimit small;
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    scratch_begin(folder);
+    put_file(folder, "old", "old", 0644);
+    ck_assert_int_eq(getrlimit(RLIMIT_FSIZE, &before), 0);
+    signal(SIGXFSZ, SIG_IGN);
+    for (size_t i = 0; i < sizeof tries / sizeof tries[0]; i++) {
+        small = before;
+        small.rlim_cur = 5000;
+        ck_assert_int_eq(setrlimit(RLIMIT_FSIZE, &small), 0);
+        struct program_result r = run_in(folder, tries[i]);
+        ck_assert_int_eq(setrlimit(RLIMIT_FSIZE, &before), 0);
+        ck_assert_msg(r.status == 1, "%s: status %d, signal %d", tries[i],
+                      r.status, r.signal);
+        ck_assert_ptr_nonnull(strstr(r.err, "cannot write: File too large\n"));
+        ck_assert_uint_eq(r.out_size, 0);
+        program_free(&r);
+    }
+    char *text = text_of(folder, "old");
+    ck_assert_str_eq(text, "old");
+    free(text);
+    scratch_end(folder, names);
+}
+END_TEST
+
+START_TEST(a_target_that_is_no_regular_file_is_never_replaced)
+{
+    static const char *const names[] = {"pipe", "dangling", NULL};
+    static const char *const tries[] = {"list Fe -m shells -o pipe",
+                                        "list Fe -m shells -o pipe --force",
+                                        "list Fe -m shells -o dangling"};
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    char path[256];
+    struct stat info;
+    scratch_begin(folder);
+    snprintf(path, sizeof path, "%s/dangling", folder);
+    ck_assert_int_eq(symlink("nowhere", path), 0);
+    snprintf(path, sizeof path, "%s/pipe", folder);
+    ck_assert_int_eq(mkfifo(path, 0644), 0);
+    for (size_t i = 0; i < sizeof tries / sizeof tries[0]; i++) {
+        struct program_result r = run_in(folder, tries[i]);
+        ck_assert_msg(r.status == 1 && r.out_size == 0, "%s: status %d",
+                      tries[i], r.status);
+        program_free(&r);
+    }
+    ck_assert_int_eq(stat(path, &info), 0);
+    ck_assert(S_ISFIFO(info.st_mode));
+    scratch_end(folder, names);
+}
+END_TEST
+
+/* With standard error closed no file may take its number and receive the
+ * complaint. */
+START_TEST(closed_standard_streams_harm_no_file)
+{
+    static const char *const names[] = {"a", NULL};
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    char script[512];
+    scratch_begin(folder);
+    snprintf(script, sizeof script,
+             "'%s' list Fe -m shells --output a <&- >&- 2>&-; "
+             "'%s' list Xx --output b <&- >&- 2>&-; echo $?",
+             OUTERSHELL, OUTERSHELL);
+    struct program p = {.path = "/bin/sh",
+                        .count = 2,
+                        .arguments = {"-c", script},
+                        .folder = folder};
+    struct program_result r = program_run(&p);
+    ck_assert_str_eq(r.out, "2\n");
+    program_free(&r);
+    char *text = text_of(folder, "a");
+    ck_assert_ptr_nonnull(text);
+    ck_assert_int_eq(strncmp(text, "species", 7), 0);
+    ck_assert_ptr_null(strstr(text, "outershell:"));
+    free(text);
+    scratch_end(folder, names);
+}
+END_TEST
+
+TCase *stream_cases(void)
+{
+    TCase *c = tcase_create("streams");
+    tcase_add_test(c, a_full_device_is_reported_once);
+    tcase_add_test(c, a_closed_standard_output_is_reported_once);
+    tcase_add_test(
+        c, a_pipe_without_a_reader_ends_it_by_its_signal_and_in_silence);
+    tcase_add_test(c, a_file_holds_what_standard_output_would_have_shown);
+    tcase_add_test(c, force_replaces_a_file_and_keeps_its_mode);
+    tcase_add_test(c, a_disk_that_fills_up_leaves_the_old_file_and_no_other);
+    tcase_add_test(c, a_target_that_is_no_regular_file_is_never_replaced);
+    tcase_add_test(c, closed_standard_streams_harm_no_file);
+    return c;
+}
