@@ -9,6 +9,7 @@
 #include "cli/command.h"
 #include "element/quantity.h"
 #include "model/registry.h"
+#include "screen/parts.h"
 
 #define WIDTH 78 /* bytes of a line: the lint's limit is 80 */
 #define TEMPLATE_BYTES_MAX ((size_t)1 << 20)
@@ -126,13 +127,35 @@ static void put_models(FILE *out)
     }
 }
 
+/* Letters and signs that the manual's language takes for its own. */
+static void put_key(FILE *out, const char *name)
+{
+    fputs(".It Sy ", out);
+    if (strchr("+-=/?", name[0]) && name[1] == '\0')
+        fprintf(out, "\\&%s", name[0] == '-' ? "\\-" : name);
+    else
+        fputs(name, out);
+    putc('\n', out);
+}
+
+static void put_keys(FILE *out)
+{
+    for (int i = 0; i < key_row_count(); i++) {
+        const struct key_row *r = key_row_at(i);
+        if (r->name[0] == '\0' || r->help[0] == '\0')
+            continue;
+        put_key(out, r->name);
+        put_text(out, r->help);
+    }
+}
+
 static const struct {
     const char *mark;
     void (*put)(FILE *out);
 } parts[] = {
     {"@SYNOPSIS@", put_synopsis}, {"@COMMANDS@", put_commands},
     {"@OPTIONS@", put_options},   {"@QUANTITIES@", put_quantities},
-    {"@MODELS@", put_models},
+    {"@MODELS@", put_models},     {"@KEYS@", put_keys},
 };
 
 static void put_line(FILE *out, const char *line, size_t length)

@@ -13,7 +13,7 @@
 
 /* Capital letters and digits are missing on purpose: they start a jump. */
 static const struct key_row rows[] = {
-    {ACTION_KEYS, '?', 0, "?", "keys", "this page", true, ON_ALL},
+    {ACTION_KEYS, '?', 0, "?", "keys", "what every key does", true, ON_ALL},
     {ACTION_QUIT, 'q', 0, "q", "quit", "leave the program", true, ON_ALL},
     {ACTION_QUANTITY, 'w', 0, "w", "quantity", "choose what is shown", true,
      ON_MAP},
