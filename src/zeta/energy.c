@@ -46,6 +46,8 @@ static void pairs_add(const struct energy *e, struct energy_pairs *list, int i,
     list->N[p] = ni + nj;
     list->i[p] = i;
     list->j[p] = j;
+    list->b[p] = i - e->atom.block[e->atom.l[i]].first;
+    list->d[p] = j - e->atom.block[e->atom.l[j]].first;
     list->m[p] = m;
     list->at[p] =
         m > 0.0 && e->atom.l[i] == e->atom.l[j] ? e->charge_at[i][j] : 0;

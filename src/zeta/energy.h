@@ -53,6 +53,7 @@ struct energy_pairs {
     int count;
     int N[CHARGE_MAX];
     int i[CHARGE_MAX], j[CHARGE_MAX]; /* subshells in energy_atom.n */
+    int b[CHARGE_MAX], d[CHARGE_MAX]; /* the same, counted in their blocks */
     int at[CHARGE_MAX];               /* the same pair in `charges` */
     double m[CHARGE_MAX];             /* 1 for i = j, 2 otherwise, 0 empty */
     double norm[CHARGE_MAX];          /* s in units of the powers below */

@@ -12,9 +12,26 @@ struct weights {
     double closed[COUPLING_ORDERS], extra[COUPLING_ORDERS];
 };
 
-/* Fills e->sum and e->sum_a for row p, columns 0 … p. */
-static void sum_row(struct energy *e, const struct energy_pairs *list, int p,
-                    const struct weights *k)
+/* Row p, columns 0 … p, of e->sum[0] and e->sum_a[0] for one order alone. */
+static void sum_single(struct energy *e, const struct energy_pairs *list, int p,
+                       const struct weights *k)
+{
+    slater_lanes a = {list->a[p], list->a[p]};
+    int N = list->N[p], order = k->high;
+    double weight = k->closed[0];
+    double outer = weight * (order + 1), inner = weight * order;
+    for (int q = 0; q <= p; q += 2) {
+        struct slater_halves h;
+        slater_top(&e->tables, a, N, *(const slater_lanes *)&list->a[q],
+                   list->N[q], order, &h);
+        *(slater_lanes *)&e->sum[0][p][q] = (h.inner + h.outer) * weight;
+        *(slater_lanes *)&e->sum_a[0][p][q] = h.outer * outer - h.inner * inner;
+    }
+}
+
+/* The same for several orders, and with the extra weights in e->sum[1]. */
+static void sum_several(struct energy *e, const struct energy_pairs *list,
+                        int p, const struct weights *k)
 {
     slater_lanes a = {list->a[p], list->a[p]};
     int N = list->N[p];
@@ -40,116 +57,159 @@ static void sum_row(struct energy *e, const struct energy_pairs *list, int p,
         }
         *(slater_lanes *)&e->sum[0][p][q] = sum;
         *(slater_lanes *)&e->sum_a[0][p][q] = sum_a;
-        *(slater_lanes *)&e->sum[1][p][q] = extra;
-        *(slater_lanes *)&e->sum_a[1][p][q] = extra_a;
+        if (k->open) {
+            *(slater_lanes *)&e->sum[1][p][q] = extra;
+            *(slater_lanes *)&e->sum_a[1][p][q] = extra_a;
+        }
     }
 }
 
 static void sum_all(struct energy *e, const struct energy_pairs *list,
                     const struct weights *k)
 {
-    for (int p = 0; p < list->count; p++)
-        if (list->m[p] > 0.0)
-            sum_row(e, list, p, k);
-}
-
-/* k = 0 of one l comes from the Coulomb integrals. */
-static void sum_monopole(struct energy *e, const struct energy_pairs *list,
-                         double closed, double extra, bool add)
-{
     for (int p = 0; p < list->count; p++) {
         if (list->m[p] <= 0.0)
             continue;
+        if (k->low == k->high && !k->open)
+            sum_single(e, list, p, k);
+        else
+            sum_several(e, list, p, k);
+    }
+}
+
+/* k = 0 of one l comes from the Coulomb integrals: added to the higher orders
+ * where there are any, with the weights closed and extra. */
+static void sum_monopole(struct energy *e, const struct energy_pairs *list,
+                         double closed, double extra, const struct weights *k)
+{
+    bool add = k->high > 0;
+    for (int p = 0; p < list->count; p++) {
         const double *R = e->coulomb[list->at[p]];
         const double *R_a = e->coulomb_a[list->at[p]];
-        for (int q = 0; q <= p; q++) {
-            int at = list->at[q];
-            if (list->m[q] <= 0.0)
-                continue;
-            e->sum[0][p][q] = closed * R[at] + (add ? e->sum[0][p][q] : 0.0);
-            e->sum_a[0][p][q] =
-                closed * R_a[at] + (add ? e->sum_a[0][p][q] : 0.0);
-            e->sum[1][p][q] = extra * R[at] + (add ? e->sum[1][p][q] : 0.0);
-            e->sum_a[1][p][q] =
-                extra * R_a[at] + (add ? e->sum_a[1][p][q] : 0.0);
+        double *sum = e->sum[0][p], *sum_a = e->sum_a[0][p];
+        for (int q = 0; q <= p && list->m[p] > 0.0; q++) {
+            sum[q] = closed * R[list->at[q]] + (add ? sum[q] : 0.0);
+            sum_a[q] = closed * R_a[list->at[q]] + (add ? sum_a[q] : 0.0);
+        }
+        sum = e->sum[1][p];
+        sum_a = e->sum_a[1][p];
+        for (int q = 0; q <= p && list->m[p] > 0.0 && k->open; q++) {
+            sum[q] = extra * R[list->at[q]] + (add ? sum[q] : 0.0);
+            sum_a[q] = extra * R_a[list->at[q]] + (add ? sum_a[q] : 0.0);
         }
     }
 }
 
-/* Exchange among the subshells of one l. A pair of pairs (ac), (bd) stands for
- * the two products P_ab P_cd and P_ad P_cb. */
-static void contract_same(struct energy *e, int l)
+static inline slater_lanes gather(const double v[], const int at[])
 {
-    struct energy_pairs *list = &e->pairs[l][l], *c = &e->charges;
-    struct energy_matrices *mat = &e->matrices[l];
-    int first = e->atom.block[l].first;
-    for (int p = 0; p < list->count; p++) {
-        if (list->m[p] <= 0.0)
-            continue;
-        int at = list->at[p];
-        const double *pa = mat->density[list->i[p] - first];
-        const double *pc = mat->density[list->j[p] - first];
-        double *fa = mat->fock[list->i[p] - first];
-        double *fc = mat->fock[list->j[p] - first];
-        double row = -0.25 * list->m[p] * c->s[at], w = 0.0, v = 0.0;
-        for (int q = 0; q <= p; q++) {
-            if (list->m[q] <= 0.0)
-                continue;
-            int b = list->i[q] - first, d = list->j[q] - first;
-            double factor = row * list->m[q] * c->s[list->at[q]];
-            if (q == p)
-                factor *= 0.5;
-            double R = factor * e->sum[0][p][q];
-            double R_a = factor * e->sum_a[0][p][q];
-            double product = pa[b] * pc[d] + pa[d] * pc[b];
-            fa[b] += pc[d] * R;
-            fc[d] += pa[b] * R;
-            fa[d] += pc[b] * R;
-            fc[b] += pa[d] * R;
-            w += product * R;
-            v += product * R_a;
-            c->w[list->at[q]] += product * R;
-            c->v[list->at[q]] += product * (R - R_a);
+    return (slater_lanes){v[at[0]], v[at[1]]};
+}
+
+static inline void scatter(double v[], const int at[], slater_lanes x)
+{
+    v[at[0]] += x[0];
+    v[at[1]] += x[1];
+}
+
+/* Rows of the densities and Fock matrices that a pair (ac) works with, and
+ * what it gathers. */
+struct row {
+    const double *pa, *pc;
+    double *fa, *fc;
+    slater_lanes w, v;
+};
+
+/* Two products (ac), (bd) of one l: P_ab P_cd and P_ad P_cb. R and R_a carry
+ * all factors; w and v those of the other pair. */
+static inline void products_same(struct row *row, const int b[], const int d[],
+                                 slater_lanes R, slater_lanes R_a, double *w,
+                                 double *v)
+{
+    slater_lanes ab = gather(row->pa, b), cd = gather(row->pc, d);
+    slater_lanes ad = gather(row->pa, d), cb = gather(row->pc, b);
+    slater_lanes both = ab * cd + ad * cb;
+    scatter(row->fa, b, cd * R);
+    scatter(row->fc, d, ab * R);
+    scatter(row->fa, d, cb * R);
+    scatter(row->fc, b, ad * R);
+    slater_lanes e = both * R, e_a = both * R_a;
+    row->w += e;
+    row->v += e_a;
+    *(slater_lanes *)w += e;
+    *(slater_lanes *)v += e - e_a;
+}
+
+/* The same for a, b of one l and c, d of another: P_ab P_cd alone. */
+static inline void products_cross(struct row *row, const int b[], const int d[],
+                                  slater_lanes R, slater_lanes R_a, double *w,
+                                  double *v)
+{
+    slater_lanes ab = gather(row->pa, b), cd = gather(row->pc, d);
+    slater_lanes both = ab * cd;
+    scatter(row->fa, b, cd * R);
+    scatter(row->fc, d, ab * R);
+    slater_lanes e = both * R, e_a = both * R_a;
+    row->w += e;
+    row->v += e_a;
+    *(slater_lanes *)w += e;
+    *(slater_lanes *)v += e - e_a;
+}
+
+/* Columns 0 … p of row p with e->sum[0]; the diagonal counts half, and what
+ * lies beyond it not at all. weight[q]: factor of pair q, 0 when empty. */
+static void contract_row(struct energy *e, const struct energy_pairs *list,
+                         bool same, int p, double factor, const double weight[],
+                         struct row *row, double w[], double v[])
+{
+    const double *sum = e->sum[0][p], *sum_a = e->sum_a[0][p];
+    for (int q = 0; q <= p; q += 2) {
+        slater_lanes f = *(const slater_lanes *)&weight[q] * factor;
+        slater_lanes R = *(const slater_lanes *)&sum[q];
+        slater_lanes R_a = *(const slater_lanes *)&sum_a[q];
+        if (q == p) {
+            f[0] *= 0.5;
+            R[1] = 0.0;
+            R_a[1] = 0.0;
+        } else if (q + 1 == p) {
+            f[1] *= 0.5;
         }
-        c->w[at] += w;
-        c->v[at] += v;
+        R *= f;
+        R_a *= f;
+        if (same)
+            products_same(row, &list->b[q], &list->d[q], R, R_a, &w[q], &v[q]);
+        else
+            products_cross(row, &list->b[q], &list->d[q], R, R_a, &w[q], &v[q]);
     }
 }
 
-/* Exchange between the subshells of two l: (ac), (bd) with a, b of the first
- * and c, d of the second, the product P_ab P_cd. */
-static void contract_cross(struct energy *e, int l1, int l2)
+/* Exchange energy between two l, or within one. */
+static void contract(struct energy *e, int l1, int l2)
 {
     struct energy_pairs *list = &e->pairs[l1][l2];
     struct energy_matrices *m1 = &e->matrices[l1], *m2 = &e->matrices[l2];
-    int first1 = e->atom.block[l1].first, first2 = e->atom.block[l2].first;
+    _Alignas(16) double weight[PAIR_MAX], w[PAIR_MAX], v[PAIR_MAX];
+    bool same = l1 == l2;
+    struct energy_pairs *store = same ? &e->charges : list;
+    for (int p = 0; p < list->count; p++) {
+        weight[p] = list->m[p] * store->s[same ? list->at[p] : p];
+        w[p] = 0.0;
+        v[p] = 0.0;
+    }
     for (int p = 0; p < list->count; p++) {
         if (list->m[p] <= 0.0)
             continue;
-        const double *pa = m1->density[list->i[p] - first1];
-        const double *pc = m2->density[list->j[p] - first2];
-        double *fa = m1->fock[list->i[p] - first1];
-        double *fc = m2->fock[list->j[p] - first2];
-        double w = 0.0, v = 0.0;
-        for (int q = 0; q <= p; q++) {
-            if (list->m[q] <= 0.0)
-                continue;
-            int b = list->i[q] - first1, d = list->j[q] - first2;
-            double factor = -list->s[p] * list->s[q];
-            if (q == p)
-                factor *= 0.5;
-            double R = factor * e->sum[0][p][q];
-            double R_a = factor * e->sum_a[0][p][q];
-            double product = pa[b] * pc[d];
-            fa[b] += pc[d] * R;
-            fc[d] += pa[b] * R;
-            w += product * R;
-            v += product * R_a;
-            list->w[q] += product * R;
-            list->v[q] += product * (R - R_a);
-        }
-        list->w[p] += w;
-        list->v[p] += v;
+        int a = list->b[p], c = list->d[p];
+        struct row row = {m1->density[a], m2->density[c], m1->fock[a],
+                          m2->fock[c],    {0.0, 0.0},     {0.0, 0.0}};
+        contract_row(e, list, same, p, (same ? -0.25 : -1.0) * weight[p],
+                     weight, &row, w, v);
+        w[p] += row.w[0] + row.w[1];
+        v[p] += row.v[0] + row.v[1];
+    }
+    for (int p = 0; p < list->count; p++) {
+        int at = same ? list->at[p] : p;
+        store->w[at] += w[p];
+        store->v[at] += v[p];
     }
 }
 
@@ -245,9 +305,8 @@ static void exchange_same(struct energy *e, int l)
     }
     if (l > 0)
         sum_all(e, &e->pairs[l][l], &k);
-    sum_monopole(e, &e->pairs[l][l], coupling_zero(l, 0, l), b->within[0],
-                 l > 0);
-    contract_same(e, l);
+    sum_monopole(e, &e->pairs[l][l], coupling_zero(l, 0, l), b->within[0], &k);
+    contract(e, l, l);
     if (k.open)
         contract_open(e, l, l);
 }
@@ -262,7 +321,7 @@ static void exchange_cross(struct energy *e, int l1, int l2)
         k.extra[i] = between->exchange[i];
     }
     sum_all(e, &e->pairs[l1][l2], &k);
-    contract_cross(e, l1, l2);
+    contract(e, l1, l2);
     if (k.open)
         contract_open(e, l1, l2);
     if (between->direct_any)
