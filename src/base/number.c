@@ -3,15 +3,42 @@
 
 #include <assert.h>
 #include <math.h>
+#include <stdbool.h>
+#include <stdint.h>
 #include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
 
-/* The double nearest to value's decimal form with so many places. Going
- * through the printed form is the only rounding that equals what is printed. */
+/* Powers of ten that a double holds exactly. */
+static const double power_of_ten[NUMBER_DECIMALS_MAX + 1] = {
+    1e0, 1e1, 1e2,  1e3,  1e4,  1e5,  1e6,  1e7,
+    1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15};
+
+/* Up to here an integer and the products below are sure of their units: the
+ * rounding error of a product is under 1e15 2^-53 < 0.12. */
+#define SURE_INTEGER 1e15
+
+/* value in units of its last decimal place, when that is surely the integer
+ * that printf would print; false when only printf can tell. */
+static bool to_units(double value, int decimals, double *units)
+{
+    double scaled = value * power_of_ten[decimals];
+    if (!(fabs(scaled) < SURE_INTEGER))
+        return false;
+    *units = nearbyint(scaled);
+    return fabs(scaled - *units) < 0.5 - 0.125;
+}
+
+/* The double nearest to value's decimal form with so many places. A quotient
+ * of two exact integers is rounded once, so it is that double. Where the
+ * product leaves the last digit open, going through the printed form is the
+ * only rounding that equals what is printed. */
 static double snap(double value, int decimals)
 {
     char s[400];
+    double units;
+    if (to_units(value, decimals, &units))
+        return units == 0.0 ? 0.0 : units / power_of_ten[decimals];
     snprintf(s, sizeof s, "%.*f", decimals, value);
     double v = strtod(s, NULL);
     return v == 0.0 ? 0.0 : v;
@@ -60,7 +87,25 @@ struct number number_scale(struct number a, double factor)
 
 const char *number_print(struct number n, char out[NUMBER_TEXT_MAX])
 {
-    snprintf(out, NUMBER_TEXT_MAX, "%.*f", n.decimals, n.value);
+    double units;
+    if (!to_units(n.value, n.decimals, &units) || units == 0.0) {
+        snprintf(out, NUMBER_TEXT_MAX, "%.*f", n.decimals, n.value);
+        return out;
+    }
+    char digits[NUMBER_TEXT_MAX];
+    int count = 0;
+    char *p = out;
+    for (uint64_t rest = (uint64_t)fabs(units); rest > 0 || count <= n.decimals;
+         rest /= 10)
+        digits[count++] = (char)('0' + rest % 10);
+    if (units < 0.0)
+        *p++ = '-';
+    while (count > 0) {
+        *p++ = digits[--count];
+        if (count == n.decimals && count > 0)
+            *p++ = '.';
+    }
+    *p = '\0';
     return out;
 }
 

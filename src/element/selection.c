@@ -68,8 +68,8 @@ static bool parse_ion(const char *word, struct chosen *item, bool *is_ion,
         charge = -charge;
     if (charge > e->z)
         return status_fail(st, STATUS_USAGE,
-                           "%s: %s has only %d electrons to lose", word,
-                           e->name, e->z);
+                           "%s: %s has only %d electron%s to lose", word,
+                           e->name, e->z, e->z == 1 ? "" : "s");
     *item = (struct chosen){e->z, charge, true};
     return true;
 }

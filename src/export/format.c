@@ -4,6 +4,25 @@
 #include <math.h>
 #include <string.h>
 
+void csv_text(struct text *t, const char *field)
+{
+    if (field[strcspn(field, ",\"\r\n")] == '\0') {
+        text_add(t, field);
+        return;
+    }
+    text_add_bytes(t, "\"", 1);
+    while (*field) {
+        size_t plain = strcspn(field, "\"");
+        text_add_bytes(t, field, plain);
+        field += plain;
+        if (*field == '"') {
+            text_add_bytes(t, "\"\"", 2);
+            field++;
+        }
+    }
+    text_add_bytes(t, "\"", 1);
+}
+
 void csv_field(FILE *out, const char *text, bool first)
 {
     if (!first)

@@ -12,8 +12,11 @@
 
 enum export_format { EXPORT_TEXT, EXPORT_CSV, EXPORT_JSON };
 
-/* One CSV field (RFC 4180): quoted when it holds a comma, a quote or a line
- * break; `first` leaves out the comma before it. */
+/* Appends one CSV field (RFC 4180), quoted where it has to be. */
+void csv_text(struct text *t, const char *field);
+
+/* Writes one CSV field (RFC 4180): quoted when it holds a comma, a quote or a
+ * line break; `first` leaves out the comma before it. */
 void csv_field(FILE *out, const char *text, bool first);
 
 /* Ends a CSV record (CRLF). */

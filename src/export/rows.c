@@ -1,11 +1,16 @@
 /* SPDX-License-Identifier: MIT */
 #include "export/rows.h"
 
+#include <stdlib.h>
 #include <string.h>
 
 #include "export/rows_text.h"
 
 #define FIELD_TEXT_MAX 1024
+/* A field whose every byte is a quote, and all fields of a row. */
+#define CITATION_TEXT_MAX (2 * FIELD_TEXT_MAX + 2)
+#define LINE_TEXT_MAX (8 * CITATION_TEXT_MAX)
+#define CITATIONS_MAX 16
 
 static void put_z(const struct row *row, struct text *t)
 {
@@ -127,32 +132,45 @@ static void put_version(const struct row *row, struct text *t)
     text_add(t, OUTERSHELL_VERSION);
 }
 
-/* Numbers stand bare in JSON; an empty field is null there. */
+static const struct provenance *model_source(const struct row *row)
+{
+    return row->value.provenance;
+}
+
+static const struct provenance *reference_source(const struct row *row)
+{
+    return row->reference.provenance;
+}
+
+/* Numbers stand bare in JSON; an empty field is null there. A field of the
+ * species is the same in all rows of it; source: whose citations it is. */
 static const struct {
     const char *name;
     void (*put)(const struct row *row, struct text *t);
     bool number;
+    bool of_species;
+    const struct provenance *(*source)(const struct row *row);
 } fields[] = {
-    {"z", put_z, true},
-    {"symbol", put_symbol, false},
-    {"name", put_name, false},
-    {"charge", put_charge, true},
-    {"configuration", put_configuration, false},
-    {"subshell", put_subshell, false},
-    {"quantity", put_quantity, false},
-    {"unit", put_unit, false},
-    {"model", put_model, false},
-    {"value", put_value, true},
-    {"uncertainty", put_uncertainty, true},
-    {"reference_set", put_reference_set, false},
-    {"reference_value", put_reference, true},
-    {"reference_uncertainty", put_reference_u, true},
-    {"residual", put_residual, true},
-    {"residual_percent", put_percent, true},
-    {"state", put_state, false},
-    {"model_source", put_model_source, false},
-    {"reference_source", put_reference_source, false},
-    {"version", put_version, false},
+    {"z", put_z, true, true, NULL},
+    {"symbol", put_symbol, false, true, NULL},
+    {"name", put_name, false, true, NULL},
+    {"charge", put_charge, true, true, NULL},
+    {"configuration", put_configuration, false, true, NULL},
+    {"subshell", put_subshell, false, false, NULL},
+    {"quantity", put_quantity, false, false, NULL},
+    {"unit", put_unit, false, false, NULL},
+    {"model", put_model, false, false, NULL},
+    {"value", put_value, true, false, NULL},
+    {"uncertainty", put_uncertainty, true, false, NULL},
+    {"reference_set", put_reference_set, false, false, NULL},
+    {"reference_value", put_reference, true, false, NULL},
+    {"reference_uncertainty", put_reference_u, true, false, NULL},
+    {"residual", put_residual, true, false, NULL},
+    {"residual_percent", put_percent, true, false, NULL},
+    {"state", put_state, false, false, NULL},
+    {"model_source", put_model_source, false, false, model_source},
+    {"reference_source", put_reference_source, false, false, reference_source},
+    {"version", put_version, false, false, NULL},
 };
 #define FIELD_COUNT ((int)(sizeof fields / sizeof fields[0]))
 
@@ -171,20 +189,83 @@ void row_field_text(const struct row *row, int field, struct text *t)
     fields[field].put(row, t);
 }
 
-static void write_csv(FILE *out, const struct row *rows, size_t count)
+/* Citations as CSV fields, made once each: a sheet has few sources and many
+ * rows. The oldest goes first. */
+struct citations {
+    int count, next;
+    struct {
+        const struct provenance *source;
+        char field[CITATION_TEXT_MAX];
+    } items[CITATIONS_MAX];
+};
+
+static const char *citation_field(struct citations *c,
+                                  const struct provenance *source)
 {
+    char buffer[FIELD_TEXT_MAX];
+    if (!source)
+        return "";
+    for (int i = 0; i < c->count; i++)
+        if (c->items[i].source == source)
+            return c->items[i].field;
+    int at = c->next++ % CITATIONS_MAX;
+    if (c->count < CITATIONS_MAX)
+        c->count++;
+    struct text t = text_over(buffer, sizeof buffer);
+    struct text field = text_over(c->items[at].field, CITATION_TEXT_MAX);
+    provenance_text(&t, source);
+    csv_text(&field, buffer);
+    c->items[at].source = source;
+    return c->items[at].field;
+}
+
+/* The fields of one row that are of its species, or the others. */
+static void put_fields(struct text *line, const struct row *row,
+                       bool of_species, struct citations *citations)
+{
+    for (int f = 0; f < FIELD_COUNT; f++) {
+        char buffer[FIELD_TEXT_MAX];
+        struct text t = text_over(buffer, sizeof buffer);
+        if (fields[f].of_species != of_species)
+            continue;
+        if (f > 0)
+            text_add_bytes(line, ",", 1);
+        if (fields[f].source) {
+            text_add(line, citation_field(citations, fields[f].source(row)));
+            continue;
+        }
+        fields[f].put(row, &t);
+        csv_text(line, buffer);
+    }
+}
+
+static bool write_csv(FILE *out, const struct row *rows, size_t count,
+                      struct status *st)
+{
+    char head[LINE_TEXT_MAX];
+    char tail[LINE_TEXT_MAX];
+    struct text species = text_over(head, sizeof head);
+    struct citations *citations = calloc(1, sizeof *citations);
+    if (!citations)
+        return status_fail(st, STATUS_MEMORY, "out of memory");
     for (int f = 0; f < FIELD_COUNT; f++)
         csv_field(out, fields[f].name, f == 0);
     csv_end(out);
     for (size_t i = 0; i < count; i++) {
-        for (int f = 0; f < FIELD_COUNT; f++) {
-            char buffer[FIELD_TEXT_MAX];
-            struct text t = text_over(buffer, sizeof buffer);
-            fields[f].put(&rows[i], &t);
-            csv_field(out, buffer, f == 0);
+        struct text line = text_over(tail, sizeof tail);
+        /* Padding may differ where nothing else does: no harm. */
+        if (i == 0 || memcmp(&rows[i].species, &rows[i - 1].species,
+                             sizeof rows[i].species) != 0) {
+            species = text_over(head, sizeof head);
+            put_fields(&species, &rows[i], true, citations);
         }
-        csv_end(out);
+        put_fields(&line, &rows[i], false, citations);
+        text_add_bytes(&line, "\r\n", 2);
+        fwrite(head, 1, species.length, out);
+        fwrite(tail, 1, line.length, out);
     }
+    free(citations);
+    return true;
 }
 
 static void write_json_field(FILE *out, int f, const struct row *row)
@@ -227,8 +308,7 @@ bool rows_write(FILE *out, enum export_format format, const struct row *rows,
     if (format == EXPORT_TEXT)
         return rows_write_text(out, rows, count, &table_plain, st);
     if (format == EXPORT_CSV)
-        write_csv(out, rows, count);
-    else
-        write_json(out, rows, count);
+        return write_csv(out, rows, count, st);
+    write_json(out, rows, count);
     return true;
 }

@@ -92,8 +92,8 @@ bool ground_state(int z, int charge, struct species *species, struct status *st)
     struct species s = {.z = z};
     if (charge > z)
         return status_fail(st, STATUS_USAGE,
-                           "charge %d: %s has only %d electrons to lose",
-                           charge, element_at(z)->symbol, z);
+                           "charge %d: %s has only %d electron%s to lose",
+                           charge, element_at(z)->symbol, z, z == 1 ? "" : "s");
     if (charge < CHARGE_LOWEST)
         return status_fail(st, STATUS_USAGE,
                            "charge %d: no such anion of %s; expected %d or "

@@ -22,8 +22,16 @@ struct task {
     struct question question;
 };
 
+/* What was last asked of an element in its ground state: rows of one element
+ * share it, and a screen asks for the same rows again and again. */
+struct ground {
+    bool known;
+    struct question question;
+};
+
 struct study {
     const struct catalogue *catalogue;
+    struct ground *grounds; /* grounds[Z_MAX + 1] */
     struct reference_list references;
     struct model_options options;
     void *works[WORK_MAX]; /* by place in the registry; made when needed */
@@ -39,6 +47,12 @@ struct study *study_new(const struct catalogue *catalogue, struct status *st)
 {
     struct study *study = calloc(1, sizeof *study);
     if (!study) {
+        status_fail(st, STATUS_MEMORY, "out of memory");
+        return NULL;
+    }
+    study->grounds = calloc(Z_MAX + 1, sizeof *study->grounds);
+    if (!study->grounds) {
+        free(study);
         status_fail(st, STATUS_MEMORY, "out of memory");
         return NULL;
     }
@@ -60,6 +74,7 @@ void study_free(struct study *study)
     }
     solution_clear(&study->solutions);
     free(study->queue);
+    free(study->grounds);
     free(study);
 }
 
@@ -78,32 +93,6 @@ void study_set_options(struct study *study, const struct model_options *options)
     study_stop(study);
     solution_clear(&study->solutions);
     study->options = *options;
-}
-
-bool study_species(const struct study *study, const struct ask *ask,
-                   struct species *species, struct status *st)
-{
-    (void)study; /* the ground states are those built in */
-    if (!ground_state(ask->z, ask->charge, species, st))
-        return false;
-    if (!ask->configuration ||
-        configuration_same(ask->configuration, &species->configuration))
-        return true;
-    double held = configuration_electrons(ask->configuration);
-    if (fabs(held - (ask->z - ask->charge)) > 1e-9)
-        return status_fail(st, STATUS_USAGE,
-                           "%s, charge %d: the configuration holds %.10g "
-                           "electrons; expected %d",
-                           element_at(ask->z)->symbol, ask->charge, held,
-                           ask->z - ask->charge);
-    *species = (struct species){
-        .z = ask->z,
-        .charge = ask->charge,
-        .configuration = *ask->configuration,
-        .origin = ORIGIN_USER,
-        .term = {"", -1, -1, -1},
-    };
-    return true;
 }
 
 /* One electron less: the stored ion where the atom is the stored one, else
@@ -140,6 +129,49 @@ static struct question question_of(const struct study *study,
     return q;
 }
 
+/* The question about a ground state; NULL as ground_state fails. Good until
+ * the next one about the same element. */
+static const struct question *ground_question(const struct study *study, int z,
+                                              int charge, struct status *st)
+{
+    struct ground *g = &study->grounds[z];
+    struct species species;
+    if (g->known && g->question.species.charge == charge)
+        return &g->question;
+    if (!ground_state(z, charge, &species, st))
+        return NULL;
+    *g = (struct ground){true, question_of(study, &species)};
+    return &g->question;
+}
+
+bool study_species(const struct study *study, const struct ask *ask,
+                   struct species *species, struct status *st)
+{
+    const struct question *ground =
+        ground_question(study, ask->z, ask->charge, st);
+    if (!ground)
+        return false;
+    *species = ground->species;
+    if (!ask->configuration ||
+        configuration_same(ask->configuration, &species->configuration))
+        return true;
+    double held = configuration_electrons(ask->configuration);
+    if (fabs(held - (ask->z - ask->charge)) > 1e-9)
+        return status_fail(st, STATUS_USAGE,
+                           "%s, charge %d: the configuration holds %.10g "
+                           "electrons; expected %d",
+                           element_at(ask->z)->symbol, ask->charge, held,
+                           ask->z - ask->charge);
+    *species = (struct species){
+        .z = ask->z,
+        .charge = ask->charge,
+        .configuration = *ask->configuration,
+        .origin = ORIGIN_USER,
+        .term = {"", -1, -1, -1},
+    };
+    return true;
+}
+
 /* The work space of a model, opened at its first use. */
 static void *work_of(struct study *study, const struct model *model,
                      struct status *st)
@@ -168,8 +200,15 @@ static struct reading ask_closed(const struct study *study,
         unsigned char bytes[4096];
     } work = {.bytes = {0}};
     assert(model->work_size <= sizeof work && !model->open);
-    struct question q = question_of(study, species);
-    model->begin(&work, &q, &study->options);
+    struct question own;
+    struct status st = status_ok();
+    const struct question *q = &own;
+    if (species->origin != ORIGIN_USER)
+        q = ground_question(study, species->z, species->charge, &st);
+    else
+        own = question_of(study, species);
+    assert(q);
+    model->begin(&work, q, &study->options);
     while (model->step(&work) != MODEL_DONE)
         ;
     return model->read(&work, offer, n, l);

@@ -9,7 +9,7 @@ command -v valgrind >/dev/null || { echo "$label: no valgrind here"; exit 77; }
 report=$(mktemp) || exit 1
 trap 'rm -f "$report"' EXIT
 valgrind --tool=callgrind --callgrind-out-file=/dev/null --log-file="$report" \
-    "$@" || exit 1
+    "$@" >/dev/null || exit 1
 sed -n 's/.*Collected : \([0-9]*\).*/\1/p' "$report" |
     awk -v label="$label" -v limit="$limit" '
         { count = $1 / 1e6
