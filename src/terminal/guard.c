@@ -182,6 +182,7 @@ int guard_fd(void)
     return guard.pipe[0];
 }
 
+/* With the handlers held off, or a signal between the two lines is lost. */
 static bool take(int signal)
 {
     int i = place_of(signal);
@@ -192,6 +193,12 @@ static bool take(int signal)
 
 struct guard_news guard_take(void)
 {
+    sigset_t held;
+    sigset_t before;
+    sigemptyset(&held);
+    for (int i = 0; i < FIRST_CRASH; i++)
+        sigaddset(&held, watched[i]);
+    sigprocmask(SIG_BLOCK, &held, &before);
     char bytes[64];
     while (read(guard.pipe[0], bytes, sizeof bytes) > 0)
         ;
@@ -203,7 +210,26 @@ struct guard_news guard_take(void)
     for (int i = 0; i < 3; i++)
         if (take(deaths[i]))
             news.death = deaths[i];
+    sigprocmask(SIG_SETMASK, &before, NULL);
     return news;
+}
+
+static void mask_stop(int how)
+{
+    sigset_t stop;
+    sigemptyset(&stop);
+    sigaddset(&stop, SIGTSTP);
+    sigprocmask(how, &stop, NULL);
+}
+
+void guard_hold(void)
+{
+    mask_stop(SIG_BLOCK);
+}
+
+void guard_release(void)
+{
+    mask_stop(SIG_UNBLOCK);
 }
 
 void guard_stop(void)

@@ -48,6 +48,11 @@ int guard_fd(void);
 
 struct guard_news guard_take(void);
 
+/* Keep SIGTSTP waiting while curses writes: it ignores the signal meanwhile,
+ * and a suspend key pressed just then would be lost. */
+void guard_hold(void);
+void guard_release(void);
+
 /* Stops this process as SIGTSTP does by default; returns when it goes on. */
 void guard_stop(void);
 

@@ -44,6 +44,9 @@ struct terminal {
     int cursor;          /* as curs_set has it; -1: not known */
 
     /* reading */
+    char partial[8]; /* the bytes of a character that is not yet whole */
+    size_t partial_length;
+    bool short_mouse; /* reports are three bytes, not numbers */
     enum sequence_state sequence;
     long long sequence_ms; /* when its last character came */
     bool pasting;

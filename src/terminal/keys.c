@@ -2,7 +2,10 @@
 /* Reading: from what curses gives to events. */
 #include "terminal/inside.h"
 
+#include <limits.h>
+#include <string.h>
 #include <time.h>
+#include <wchar.h>
 
 #include "base/text.h"
 
@@ -39,9 +42,13 @@ static const struct {
 
 void keys_define(const struct terminal *t)
 {
-    for (size_t i = 0; i < sizeof extra_keys / sizeof extra_keys[0]; i++)
-        if (key_defined(extra_keys[i].bytes) == 0)
+    for (size_t i = 0; i < sizeof extra_keys / sizeof extra_keys[0]; i++) {
+        /* codes above KEY_MAX were given to extended names of the description
+         * (kcbt2), which say nothing to us */
+        int known = key_defined(extra_keys[i].bytes);
+        if (known == 0 || known > KEY_MAX)
             define_key(extra_keys[i].bytes, extra_keys[i].code);
+    }
     if (t->paste_on.length > 0) {
         define_key("\033[200~", KEY_PASTE_BEGIN);
         define_key("\033[201~", KEY_PASTE_END);
@@ -102,8 +109,14 @@ static struct event from_code(struct terminal *t, wint_t code)
         t->paste_ms = terminal_clock();
         return (struct event){.kind = EVENT_NONE};
     }
-    if (code == KEY_MOUSE) /* taken from the queue of curses in any case */
+    if (code == KEY_MOUSE && t->mouse)
         return mouse_event();
+    if (code == KEY_MOUSE) {
+        /* not asked for, so curses leaves the rest to us */
+        t->sequence = t->short_mouse ? SEQUENCE_MOUSE_3 : SEQUENCE_CONTROL;
+        t->sequence_ms = terminal_clock();
+        return (struct event){.kind = EVENT_NONE};
+    }
     if (t->pasting) /* a key's sequence inside pasted text is no key press */
         return (struct event){.kind = EVENT_NONE};
     for (size_t i = 0; i < sizeof key_codes / sizeof key_codes[0]; i++)
@@ -138,6 +151,29 @@ static struct event from_character(struct terminal *t, wint_t c)
     return (struct event){.kind = EVENT_CHARACTER, .character = (uint32_t)c};
 }
 
+/* One byte more of a character. Bytes are decoded here and not by get_wch,
+ * which keeps up to eight bytes of what is no character and loses the good one
+ * behind them; and a key's code, above 255, cannot be taken for a letter. */
+static bool complete(struct terminal *t, int byte, wint_t *character)
+{
+    t->partial[t->partial_length++] = (char)byte;
+    wchar_t c = 0;
+    mbstate_t fresh;
+    memset(&fresh, 0, sizeof fresh);
+    size_t n = mbrtowc(&c, t->partial, t->partial_length, &fresh);
+    bool full = t->partial_length == sizeof t->partial;
+    if (n == (size_t)-2 && !full)
+        return false;
+    bool begun_before = t->partial_length > 1;
+    t->partial_length = 0;
+    if (n != (size_t)-1 && n != (size_t)-2) {
+        *character = (wint_t)c;
+        return true;
+    }
+    /* the bytes before were none; this one may begin another */
+    return begun_before && !full && complete(t, byte, character);
+}
+
 /* All is read: what waited for that. */
 static bool nothing_left(struct terminal *t, struct event *event)
 {
@@ -166,13 +202,12 @@ static void forget_stale(struct terminal *t, long long now)
 }
 
 /* One character or key; EVENT_NONE when it gives no event by itself. */
-static struct event digest(struct terminal *t, int status, wint_t c)
+static struct event digest(struct terminal *t, bool key, wint_t c)
 {
     long long now = terminal_clock();
     forget_stale(t, now);
     t->paste_ms = now;
-    /* the status first: a letter and a key may share one number */
-    if (status == KEY_CODE_YES)
+    if (key)
         return from_code(t, c);
     if (t->sequence != SEQUENCE_NONE) {
         sequence_feed(&t->sequence, (uint32_t)c);
@@ -190,11 +225,18 @@ static struct event digest(struct terminal *t, int status, wint_t c)
 bool terminal_read(struct terminal *t, struct event *event)
 {
     for (;;) {
-        wint_t c = 0;
-        int status = get_wch(&c);
-        if (status == ERR)
+        int code = getch();
+        if (code == ERR)
             return nothing_left(t, event);
-        *event = digest(t, status, c);
+        wint_t character = 0;
+        if (code > UCHAR_MAX) {
+            t->partial_length = 0;
+            *event = digest(t, true, (wint_t)code);
+        } else if (complete(t, code, &character)) {
+            *event = digest(t, false, character);
+        } else {
+            continue;
+        }
         if (event->kind != EVENT_NONE)
             return true;
     }

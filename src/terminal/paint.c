@@ -86,7 +86,9 @@ void terminal_paint(struct terminal *t, const struct canvas *canvas)
     }
     move(within(canvas->cursor_row, rows),
          within(canvas->cursor_column, columns));
+    guard_hold();
     refresh();
+    guard_release();
 }
 
 void terminal_repaint(struct terminal *t)

@@ -7,7 +7,7 @@ static enum sequence_state after_escape(uint32_t character)
 {
     switch (character) {
     case '[':
-        return SEQUENCE_CONTROL;
+        return SEQUENCE_BEGUN;
     case 'O':
         return SEQUENCE_SINGLE;
     case ']':
@@ -30,6 +30,14 @@ static enum sequence_state after_string(uint32_t character)
     return character == ESC ? SEQUENCE_STRING_ESCAPE : SEQUENCE_STRING;
 }
 
+static enum sequence_state after_control(uint32_t character)
+{
+    if (character == ESC)
+        return SEQUENCE_ESCAPE;
+    bool more = character >= 0x20 && character <= 0x3F;
+    return more ? SEQUENCE_CONTROL : SEQUENCE_NONE;
+}
+
 void sequence_feed(enum sequence_state *state, uint32_t character)
 {
     if (character == CAN || character == SUB) {
@@ -40,13 +48,19 @@ void sequence_feed(enum sequence_state *state, uint32_t character)
     case SEQUENCE_ESCAPE:
         *state = after_escape(character);
         break;
+    case SEQUENCE_BEGUN:
+        *state = character == '['   ? SEQUENCE_CONSOLE
+                 : character == 'M' ? SEQUENCE_MOUSE_3
+                                    : after_control(character);
+        break;
     case SEQUENCE_CONTROL:
-        if (character == '[')
-            *state = SEQUENCE_CONSOLE;
-        else if (character == ESC)
-            *state = SEQUENCE_ESCAPE;
-        else if (character < 0x20 || character > 0x3F)
-            *state = SEQUENCE_NONE;
+        *state = after_control(character);
+        break;
+    case SEQUENCE_MOUSE_3:
+        *state = SEQUENCE_MOUSE_2;
+        break;
+    case SEQUENCE_MOUSE_2:
+        *state = SEQUENCE_MOUSE_1;
         break;
     case SEQUENCE_SINGLE:
         if ((character < '0' || character > '9') && character != ';')
@@ -59,6 +73,7 @@ void sequence_feed(enum sequence_state *state, uint32_t character)
         *state = character == '\\' ? SEQUENCE_NONE : after_escape(character);
         break;
     case SEQUENCE_NONE:
+    case SEQUENCE_MOUSE_1:
     case SEQUENCE_CONSOLE:
         *state = SEQUENCE_NONE;
         break;

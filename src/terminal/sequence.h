@@ -15,7 +15,11 @@ enum sequence_state {
     SEQUENCE_CONSOLE, /* ESC [ [ : one more byte */
     SEQUENCE_SINGLE,  /* ESC O : digits, then one byte */
     SEQUENCE_STRING,  /* ESC ] P X ^ _ : until ST or BEL */
-    SEQUENCE_STRING_ESCAPE
+    SEQUENCE_STRING_ESCAPE,
+    SEQUENCE_BEGUN,   /* ESC [ : nothing behind it yet */
+    SEQUENCE_MOUSE_3, /* ESC [ M : a mouse report, three more bytes */
+    SEQUENCE_MOUSE_2,
+    SEQUENCE_MOUSE_1
 };
 
 /* Takes one character of a sequence that has begun (*state is not

@@ -98,6 +98,8 @@ static void set_modes(struct terminal *t)
     t->paste_off = capability_get("BD");
     if (t->paste_off.length == 0)
         t->paste_on.length = 0;
+    struct capability mouse = capability_get("kmous");
+    t->short_mouse = mouse.length > 0 && mouse.bytes[mouse.length - 1] == 'M';
     keys_define(t);
 }
 
