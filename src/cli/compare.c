@@ -32,6 +32,17 @@ static void keep_wanted(const struct request *r, struct comparison *c)
     c->line_count = kept;
 }
 
+/* Models that iterate are solved only when one of them was asked for. */
+static bool must_solve(const struct request *r)
+{
+    for (int m = 0; m < r->model_count; m++)
+        for (int q = 0; q < r->quantity_count; q++)
+            if (!r->models[m]->closed &&
+                model_offer_for(r->models[m], r->quantities[q], NULL) >= 0)
+                return true;
+    return false;
+}
+
 static bool write(const struct request *r, const struct comparison *c,
                   struct status *st)
 {
@@ -58,8 +69,9 @@ bool cli_compare(struct request *r, struct status *st)
                            r->atom_count, COMPARISON_MAX);
     for (int a = 0; a < r->atom_count; a++)
         asks[a] = request_ask(r, a, r->quantities[0], NULL);
-    if (!output_check(r, st) || !study_compare(r->study, asks, r->atom_count,
-                                               true, r->units, &comparison, st))
+    if (!output_check(r, st) ||
+        !study_compare(r->study, asks, r->atom_count, must_solve(r), r->units,
+                       &comparison, st))
         return false;
     keep_wanted(r, &comparison);
     bool ok = write(r, &comparison, st);

@@ -4,31 +4,53 @@
 #include <string.h>
 
 #define FIELD_TEXT_MAX 2048
+#define WIDTH 100
+#define INDENT 8
 
 static const char *or_empty(const char *s)
 {
     return s ? s : "";
 }
 
-static void write_text(FILE *out, const struct source *s)
+/* A line with a label, its text in lines of WIDTH columns. */
+static void put_line(FILE *out, const char *label, const char *text)
+{
+    int column = fprintf(out, "    %s", label);
+    while (*text) {
+        int length = (int)strcspn(text, " ");
+        if (column > INDENT && column + 1 + length > WIDTH)
+            column = fprintf(out, "\n%*s", INDENT - 1, "") - 1;
+        column += fprintf(out, " %.*s", length, text);
+        text += length;
+        text += strspn(text, " ");
+    }
+    putc('\n', out);
+}
+
+/* A model tells its name and domain once, then what each part of it rests
+ * on. */
+static void write_text(FILE *out, const struct source *s, bool again)
 {
     char buffer[FIELD_TEXT_MAX];
     const struct provenance *p = s->provenance;
-    fprintf(out, "%s: %s\n", p->id, p->title);
-    fprintf(out, "    %s; %s", p->computed ? "model" : "data set", s->quantity);
-    if (s->count)
-        fprintf(out, "; %d values", s->count);
+    struct text t = text_over(buffer, sizeof buffer);
+    if (!again)
+        fprintf(out, "%s: %s\n", p->id, p->title);
+    if (!again)
+        put_line(out, p->computed ? "domain:" : "terms:", or_empty(s->domain));
+    text_add(&t, s->quantity);
     if (s->unit && s->unit[0])
-        fprintf(out, "; in %s", s->unit);
-    fprintf(out, "\n    %s: %s\n", p->computed ? "domain" : "terms",
-            or_empty(s->domain));
+        text_addf(&t, ", in %s", s->unit);
+    if (s->count)
+        text_addf(&t, "%s%d entries", t.length ? "; " : "", s->count);
+    put_line(out, p->computed ? "for:" : "holds:", buffer);
     for (int i = 0; i < p->citation_count; i++) {
-        struct text t = text_over(buffer, sizeof buffer);
+        t = text_over(buffer, sizeof buffer);
         citation_text(&t, &p->citations[i]);
-        fprintf(out, "    source: %s\n", buffer);
+        put_line(out, "source:", buffer);
     }
     for (int i = 0; i < s->note_count; i++)
-        fprintf(out, "    note: %s\n", s->notes[i]);
+        put_line(out, "note:", s->notes[i]);
 }
 
 static void notes_text(struct text *t, const struct source *s)
@@ -107,7 +129,11 @@ bool sources_write(FILE *out, enum export_format format,
     }
     for (int i = 0; i < count; i++) {
         if (format == EXPORT_TEXT) {
-            write_text(out, &sources[i]);
+            bool again = i > 0 && strcmp(sources[i].provenance->id,
+                                         sources[i - 1].provenance->id) == 0;
+            if (i > 0 && !again)
+                putc('\n', out);
+            write_text(out, &sources[i], again);
             continue;
         }
         if (format == EXPORT_JSON)
