@@ -22,15 +22,23 @@ static bool same_definition(const struct provenance *a,
     return a && b && strcmp(a->definition, b->definition) == 0;
 }
 
-/* A percentage of a signed quantity is meant as a share of its size. */
+/* A percentage of a signed quantity is meant as a share of its size. False
+ * where the reference is zero. */
+static bool percent_of(struct number difference, struct number reference,
+                       struct number *percent)
+{
+    double size = fabs(reference.value);
+    if (size > 0.0)
+        *percent =
+            number_round(100.0 * difference.value / size, PERCENT_DIGITS, 0);
+    return size > 0.0;
+}
+
 static void subtract(struct row *row)
 {
     row->residual = number_subtract(row->value.value, row->reference.value);
-    double reference = fabs(row->reference.value.value);
-    row->has_percent = reference > 0.0;
-    if (row->has_percent)
-        row->percent = number_round(100.0 * row->residual.value / reference,
-                                    PERCENT_DIGITS, 0);
+    row->has_percent =
+        percent_of(row->residual, row->reference.value, &row->percent);
 }
 
 static enum row_state state_without_value(enum reading_state state)
@@ -48,10 +56,12 @@ void row_compare(struct row *row, struct reading value,
     row->like_with_like =
         same_definition(value.provenance, reference.provenance);
     row->has_percent = false;
+    row->disagrees = row->has_disagreement_percent = false;
+    row->against = (struct reading){.reason = "", .remark = ""};
     row->reason = "";
     if (!value.provenance) {
         row->state = ROW_REFERENCE_ONLY;
-        row->reason = "no model computes this quantity";
+        row->reason = value.reason;
         if (reference.state != READING_OK) {
             row->state = ROW_NO_REFERENCE;
             row->reason = reference.reason;
@@ -70,4 +80,19 @@ void row_compare(struct row *row, struct reading value,
         row->state = ROW_OK;
         subtract(row);
     }
+}
+
+void row_disagree(struct row *row, struct reading against)
+{
+    row->against = reading_in_unit(against, row->unit);
+    row->disagrees =
+        against.state == READING_OK && row->reference.state == READING_OK &&
+        (quantity_at(row->quantity)->dimension != DIMENSION_NUMBER ||
+         same_definition(against.provenance, row->reference.provenance));
+    if (!row->disagrees)
+        return;
+    row->disagreement =
+        number_subtract(row->against.value, row->reference.value);
+    row->has_disagreement_percent = percent_of(
+        row->disagreement, row->reference.value, &row->disagreement_percent);
 }

@@ -48,6 +48,13 @@ struct row {
     struct number residual;
     struct number percent;
     const char *reason;
+    /* A second reference beside the first, where one was asked for (else its
+     * provenance is NULL), and how far it is from the first. */
+    struct reading against;
+    bool disagrees; /* both hold a number on one scale */
+    bool has_disagreement_percent;
+    struct number disagreement;
+    struct number disagreement_percent;
 };
 
 /* Fills state, residual, percent and reason of a row whose species, quantity,
@@ -55,5 +62,9 @@ struct row {
  * scales (DIMENSION_NUMBER with other definitions) are never subtracted. */
 void row_compare(struct row *row, struct reading value,
                  struct reading reference);
+
+/* Adds a second reference, in base units, to a row that row_compare filled:
+ * disagreement = against - reference, and in per cent of the reference. */
+void row_disagree(struct row *row, struct reading against);
 
 #endif

@@ -8,21 +8,28 @@
 #include "base/text.h"
 
 #define LINE_MAX_BYTES 256
+/* Charges asked for, both ends included. */
+struct charges {
+    int low, high;
+};
+
 #define BLANKS " \t\r\n\f\v"
 
 static bool add_atom(struct request *r, struct request_atom atom,
                      const char *word, struct status *st)
 {
-    for (int i = 0; i < r->atom_count; i++)
-        if (r->atoms[i].z == atom.z && r->atoms[i].charge == atom.charge) {
-            r->atoms[i].named = r->atoms[i].named || atom.named;
-            return true;
-        }
-    if (r->atom_count == SELECTION_MAX)
+    short *place = &r->place[atom.z][atom.charge - CHARGE_LOWEST];
+    if (*place > 0) {
+        bool *named = &r->atoms[*place - 1].named;
+        *named = *named || atom.named;
+        return true;
+    }
+    if (r->atom_count == REQUEST_ATOM_MAX)
         return status_fail(st, STATUS_USAGE,
                            "%s: more than %d atoms and ions chosen", word,
-                           SELECTION_MAX);
+                           REQUEST_ATOM_MAX);
     r->atoms[r->atom_count++] = atom;
+    *place = (short)r->atom_count;
     return true;
 }
 
@@ -37,40 +44,68 @@ static bool exists(const struct request *r, struct request_atom atom,
     return study_species(r->study, &ask, &species, st);
 }
 
-static bool take(struct request *r, const struct selection *s, int charge,
-                 const char *word, struct status *st)
+/* One element at every charge asked for that it has; a range passes over what
+ * does not exist, and over the bare nucleus, which has no electron left. */
+static bool take_charges(struct request *r, struct chosen c,
+                         struct charges charges, bool named, const char *word,
+                         struct status *st)
 {
-    const char *given = r->call->value[OPTION_CHARGE];
-    for (int i = 0; i < s->count; i++) {
-        const struct chosen *c = &s->items[i];
-        struct request_atom atom = {c->z, c->has_charge ? c->charge : charge,
-                                    s->count == 1};
-        if (c->has_charge && given && c->charge != charge)
-            return status_fail(st, STATUS_USAGE,
-                               "--charge %s: contradicts %s, which carries its "
-                               "own charge",
-                               given, word);
-        struct status why = status_ok();
+    struct status why = status_ok();
+    bool any = false;
+    bool single = charges.low == charges.high;
+    if (c.has_charge)
+        charges.low = charges.high = c.charge;
+    for (int q = charges.low; q <= charges.high && q <= Z_MAX; q++) {
+        struct request_atom atom = {c.z, q, named};
+        if (!single && !c.has_charge && q >= c.z)
+            break;
         if (exists(r, atom, &why)) {
+            any = true;
             if (!add_atom(r, atom, word, st))
                 return false;
-        } else if (atom.named || why.code != STATUS_USAGE) {
+        } else if (why.code != STATUS_USAGE) {
             *st = why;
             return false;
         }
     }
+    if (any || !named)
+        return true;
+    if (why.code == STATUS_OK)
+        return status_fail(st, STATUS_USAGE,
+                           "--charge: %s has no electron left at charge %d",
+                           element_at(c.z)->name, charges.low);
+    *st = why;
+    return false;
+}
+
+static bool take(struct request *r, const struct selection *s,
+                 struct charges charges, const char *word, struct status *st)
+{
+    const char *given = r->call->value[OPTION_CHARGE];
+    for (int i = 0; i < s->count; i++) {
+        const struct chosen *c = &s->items[i];
+        if (c->has_charge && given &&
+            (c->charge < charges.low || c->charge > charges.high))
+            return status_fail(st, STATUS_USAGE,
+                               "--charge %s: contradicts %s, which carries its "
+                               "own charge",
+                               given, word);
+        if (!take_charges(r, *c, charges, s->count == 1, word, st))
+            return false;
+    }
     return true;
 }
 
-static bool take_word(struct request *r, const char *word, int charge,
-                      struct status *st)
+static bool take_word(struct request *r, const char *word,
+                      struct charges charges, struct status *st)
 {
     struct selection s = {0};
-    return selection_add(&s, word, st) && take(r, &s, charge, word, st);
+    return selection_add(&s, word, st) && take(r, &s, charges, word, st);
 }
 
 /* Names from standard input, one per line, blank lines passed over. */
-static bool take_lines(struct request *r, int charge, struct status *st)
+static bool take_lines(struct request *r, struct charges charges,
+                       struct status *st)
 {
     char line[LINE_MAX_BYTES];
     int number = 0;
@@ -90,7 +125,7 @@ static bool take_lines(struct request *r, int charge, struct status *st)
         if (length == 0)
             continue;
         any = true;
-        if (!take_word(r, word, charge, st))
+        if (!take_word(r, word, charges, st))
             return status_context(st, "standard input: line %d", number);
     }
     if (ferror(stdin))
@@ -101,20 +136,65 @@ static bool take_lines(struct request *r, int charge, struct status *st)
                               "one per line");
 }
 
+/* "2", "-1", "0..5", "all". */
+static bool read_charges(const char *text, struct charges *charges,
+                         struct status *st)
+{
+    char first[16];
+    *charges = (struct charges){0, 0};
+    if (!text)
+        return true;
+    if (strcmp(text, "all") == 0) {
+        charges->high = Z_MAX;
+        return true;
+    }
+    const char *dots = strstr(text, "..");
+    size_t length = dots ? (size_t)(dots - text) : strlen(text);
+    bool ok = length < sizeof first;
+    if (ok) {
+        memcpy(first, text, length);
+        first[length] = '\0';
+        ok = text_to_int(first, &charges->low);
+        charges->high = charges->low;
+        if (ok && dots)
+            ok = text_to_int(dots + 2, &charges->high);
+    }
+    if (ok && abs(charges->low) <= Z_MAX && abs(charges->high) <= Z_MAX &&
+        charges->low <= charges->high)
+        return true;
+    return status_fail(st, STATUS_USAGE,
+                       "--charge %s: expected a whole number from %d to %d, a "
+                       "range such as 0..5, or all",
+                       text, -Z_MAX, Z_MAX);
+}
+
+static bool nothing_chosen(const struct request *r, const char *given,
+                           struct status *st)
+{
+    if (r->has_configuration)
+        return status_fail(st, STATUS_USAGE,
+                           "--configuration %s: no chosen element holds so "
+                           "many electrons at charge %s",
+                           r->call->value[OPTION_CONFIGURATION],
+                           given ? given : "0");
+    return status_fail(st, STATUS_USAGE,
+                       "--charge %s: no chosen element has a known ion of "
+                       "this charge",
+                       given ? given : "0");
+}
+
 bool choose_atoms(struct request *r, struct status *st)
 {
     const struct call *call = r->call;
     const char *given = call->value[OPTION_CHARGE];
-    int charge = 0;
+    struct charges charges;
     bool from_input = false;
-    if (given && (!text_to_int(given, &charge) || abs(charge) > Z_MAX))
-        return status_fail(st, STATUS_USAGE,
-                           "--charge %s: expected a whole number from %d to %d",
-                           given, -Z_MAX, Z_MAX);
+    if (!read_charges(given, &charges, st))
+        return false;
     if (call->operand_count == 0) {
         struct selection all = {0};
         selection_all(&all);
-        if (!take(r, &all, charge, "all elements", st))
+        if (!take(r, &all, charges, "all elements", st))
             return false;
     }
     for (int i = 0; i < call->operand_count; i++) {
@@ -124,18 +204,9 @@ bool choose_atoms(struct request *r, struct status *st)
             return status_fail(st, STATUS_USAGE,
                                "-: standard input can be read only once");
         from_input = from_input || dash;
-        if (dash ? !take_lines(r, charge, st) : !take_word(r, word, charge, st))
+        if (dash ? !take_lines(r, charges, st)
+                 : !take_word(r, word, charges, st))
             return false;
     }
-    if (r->atom_count == 0 && r->has_configuration)
-        return status_fail(st, STATUS_USAGE,
-                           "--configuration %s: no chosen element holds so "
-                           "many electrons at charge %d",
-                           call->value[OPTION_CONFIGURATION], charge);
-    if (r->atom_count == 0)
-        return status_fail(st, STATUS_USAGE,
-                           "--charge %d: no chosen element has a known ion of "
-                           "this charge",
-                           charge);
-    return true;
+    return r->atom_count > 0 || nothing_chosen(r, given, st);
 }

@@ -11,10 +11,14 @@
 #include "element/selection.h"
 #include "export/format.h"
 #include "model/registry.h"
+#include "refdata/ground.h"
 #include "study/study.h"
 #include "terminal/palette.h"
 
 #define REQUEST_MODEL_MAX 16
+/* Every element at every charge, from the lowest anion to the bare nucleus. */
+#define REQUEST_CHARGES (Z_MAX - CHARGE_LOWEST + 1)
+#define REQUEST_ATOM_MAX 8192
 #define DIMENSION_COUNT (DIMENSION_VOLUME + 1)
 
 /* A chosen atom or ion. named: chosen by itself, not as part of a run, a
@@ -27,7 +31,9 @@ struct request_atom {
 
 /* quantities and models: those asked for, or the command's default (then
  * has_… is false). references[quantity], units[dimension]: NULL where none was
- * chosen. n = 0: the outermost subshell. output: NULL for standard output. */
+ * chosen; against[quantity] likewise, the second reference. evidence: kinds of
+ * reference values, 0 for all. n = 0: the outermost subshell. output: NULL for
+ * standard output. */
 struct request {
     const struct call *call;
     struct catalogue catalogue;
@@ -38,12 +44,16 @@ struct request {
     int model_count;
     const struct model *models[REQUEST_MODEL_MAX];
     const struct reference *references[QUANTITY_COUNT];
+    const struct reference *against[QUANTITY_COUNT];
+    bool has_against;
+    unsigned evidence;
     const struct unit *units[DIMENSION_COUNT];
     struct configuration configuration;
     int n, l;
     struct atom_method method;
     int atom_count;
-    struct request_atom atoms[SELECTION_MAX];
+    struct request_atom atoms[REQUEST_ATOM_MAX];
+    short place[Z_MAX + 1][REQUEST_CHARGES]; /* in atoms, plus 1 */
     enum export_format format;
     bool bibtex;
     const char *output;

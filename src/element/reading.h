@@ -8,6 +8,7 @@
 
 #include "base/number.h"
 #include "element/element.h"
+#include "element/evidence.h"
 #include "element/provenance.h"
 #include "element/quantity.h"
 
@@ -43,6 +44,7 @@ struct reading {
     const struct provenance *provenance;
     const char *reason;
     const char *remark;
+    enum evidence evidence; /* of a stored value; unstated when computed */
 };
 
 /* A reading with a computed value: decimal from here on, at least 9

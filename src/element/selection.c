@@ -9,7 +9,7 @@
 
 #define ACCEPTED                                                               \
     "expected a symbol, name or number, an ion such as Fe3+, a run such as "   \
-    "Sc-Zn, period:4, group:13 or block:d"
+    "Sc-Zn, period:4, group:13, block:d, block:4f or electrons:10"
 
 static void add(struct selection *s, struct chosen item)
 {
@@ -74,6 +74,37 @@ static bool parse_ion(const char *word, struct chosen *item, bool *is_ion,
     return true;
 }
 
+/* Atoms and ions with so many electrons: from a neutral atom's singly charged
+ * anion on; from the triply charged one where the count is that of a noble
+ * gas, whose series N3- O2- F- Na+ the trade knows. */
+int selection_first_z(int electrons)
+{
+    static const int closed[] = {2, 10, 18, 36, 54, 86, 118};
+    int below = 1;
+    for (size_t i = 0; i < sizeof closed / sizeof closed[0]; i++)
+        if (closed[i] == electrons)
+            below = 3;
+    return electrons > below ? electrons - below : 1;
+}
+
+static void add_isoelectronic(struct selection *s, int electrons)
+{
+    for (int z = selection_first_z(electrons); z <= Z_MAX; z++)
+        add(s, (struct chosen){z, z - electrons, true});
+}
+
+/* "4f", the block row in which that subshell is filled: its period, or 0. */
+static int block_row_period(const char *value)
+{
+    static const char letters[] = "spdf";
+    static const int lead[] = {0, 0, 1, 2};
+    const char *l = value[0] ? strchr(letters, value[1]) : NULL;
+    if (!l || strlen(value) != 2 || value[0] < '1' || value[0] > '7')
+        return 0;
+    int period = value[0] - '0' + lead[l - letters];
+    return period <= PERIOD_MAX && (l - letters) < value[0] - '0' ? period : 0;
+}
+
 static bool parse_keyed(struct selection *s, const char *word,
                         const char *value, struct status *st)
 {
@@ -82,7 +113,14 @@ static bool parse_keyed(struct selection *s, const char *word,
     bool period = strncmp(word, "period:", 7) == 0;
     bool group = strncmp(word, "group:", 6) == 0;
     bool block = strncmp(word, "block:", 6) == 0;
-    bool ok = (period && has_number && number >= 1 && number <= PERIOD_MAX) ||
+    bool electrons = strncmp(word, "electrons:", 10) == 0;
+    int row = block ? block_row_period(value) : 0;
+    if (electrons && has_number && number >= 1 && number <= Z_MAX) {
+        add_isoelectronic(s, number);
+        return true;
+    }
+    bool ok = row ||
+              (period && has_number && number >= 1 && number <= PERIOD_MAX) ||
               (group && has_number && number >= 1 && number <= GROUP_MAX) ||
               (block && strlen(value) == 1 && strchr("spdf", value[0]));
     if (!ok)
@@ -94,7 +132,8 @@ static bool parse_keyed(struct selection *s, const char *word,
     for (int z = 1; z <= Z_MAX; z++) {
         const struct element *e = element_at(z);
         if ((period && e->period == number) || (group && e->group == number) ||
-            (block && e->block == value[0]))
+            (row && e->period == row && e->block == value[1]) ||
+            (block && !row && e->block == value[0]))
             add(s, (struct chosen){.z = z});
     }
     return true;

@@ -24,11 +24,15 @@ struct selection {
 
 /* Adds what one word names: symbol, name or atomic number (Fe, iron, 26); an
  * ion (Fe3+, Cs+, O2-, iron written by its symbol); a run by atomic number
- * (Sc-Zn, 21-30); period:4, group:13, block:d. Fails with STATUS_USAGE naming
- * the word, what would be accepted and, where one is near, the element that
- * may have been meant. */
+ * (Sc-Zn, 21-30); period:4, group:13, block:d, the row of a block (block:4f),
+ * an isoelectronic series (electrons:10), which carries its charges. Fails with
+ * STATUS_USAGE naming the word, what would be accepted and, where one is near,
+ * the element that may have been meant. */
 MUST_CHECK bool selection_add(struct selection *selection, const char *word,
                               struct status *st);
+
+/* The lightest element of the series with so many electrons, 1…Z_MAX. */
+int selection_first_z(int electrons);
 
 /* All elements by atomic number. */
 void selection_all(struct selection *selection);

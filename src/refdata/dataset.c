@@ -13,18 +13,6 @@ const char *dataset_kind_id(enum dataset_kind kind)
     return ids[kind];
 }
 
-const char *evidence_id(enum evidence evidence)
-{
-    static const char *const ids[] = {EVIDENCE_LIST(ID3)};
-    return ids[evidence];
-}
-
-const char *evidence_word(enum evidence evidence)
-{
-    static const char *const words[] = {EVIDENCE_LIST(WORDS3)};
-    return words[evidence];
-}
-
 const char *gap_id(enum gap gap)
 {
     static const char *const ids[] = {GAP_LIST(ID3)};
@@ -176,6 +164,7 @@ struct reading dataset_entry_reading(const struct dataset *set,
         .provenance = &set->provenance,
         .reason = "",
         .remark = dataset_text(set, entry->remark),
+        .evidence = (enum evidence)entry->evidence,
     };
     if (set->unit->per_base != 1.0) {
         r.value = in_base(r.value, set->unit->per_base);

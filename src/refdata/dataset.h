@@ -12,6 +12,7 @@
 #include "base/number.h"
 #include "base/units.h"
 #include "element/element.h"
+#include "element/evidence.h"
 #include "element/provenance.h"
 #include "element/quantity.h"
 #include "element/reading.h"
@@ -23,16 +24,6 @@
     X(DATASET_CONFIGURATIONS, "configurations")                                \
     X(DATASET_OXIDATION_STATES, "oxidation_states")                            \
     X(DATASET_AVAILABILITY, "availability")
-
-/* How a value came about; its id in the file, its words. */
-#define EVIDENCE_LIST(X)                                                       \
-    X(EVIDENCE_UNSTATED, "unstated", "kind of value not stated")               \
-    X(EVIDENCE_MEASURED, "measured", "measured")                               \
-    X(EVIDENCE_EXTRAPOLATED, "extrapolated", "interpolated or extrapolated")   \
-    X(EVIDENCE_THEORETICAL, "theoretical", "theoretical")                      \
-    X(EVIDENCE_DERIVED, "derived", "derived from measurements")                \
-    X(EVIDENCE_RECOMMENDED, "recommended", "recommended by an evaluation")     \
-    X(EVIDENCE_ESTIMATED, "estimated", "estimated")
 
 /* Why an entry has no value; its id in the file, its words. */
 #define GAP_LIST(X)                                                            \
@@ -84,7 +75,6 @@
 #define WORD_ENUM3(name, id, words) name,
 #define WORD_ENUM2(name, id) name,
 enum dataset_kind { DATASET_KIND_LIST(WORD_ENUM2) DATASET_KIND_COUNT };
-enum evidence { EVIDENCE_LIST(WORD_ENUM3) EVIDENCE_COUNT };
 enum gap { GAP_LIST(WORD_ENUM3) GAP_COUNT };
 enum spin_state { SPIN_LIST(WORD_ENUM3) SPIN_COUNT };
 enum coordination { COORDINATION_LIST(WORD_ENUM3) COORDINATION_COUNT };
@@ -97,8 +87,6 @@ enum radioactive { RADIOACTIVE_LIST(WORD_ENUM3) RADIOACTIVE_COUNT };
 
 /* Ids as in the file, and words for a screen; never NULL. */
 const char *dataset_kind_id(enum dataset_kind kind);
-const char *evidence_id(enum evidence evidence);
-const char *evidence_word(enum evidence evidence);
 const char *gap_id(enum gap gap);
 const char *gap_word(enum gap gap);
 const char *spin_id(enum spin_state spin);

@@ -133,6 +133,7 @@ static struct reading zeff_from_ionization(const struct reference *reference,
     r.n = outer->n;
     r.l = outer->l;
     r.remark = energy.remark;
+    r.evidence = energy.evidence;
     r.has_u = energy.has_u;
     if (r.has_u) {
         r.u = number_round(0.5 * z_eff * energy.u.value / ev, 2, 0);

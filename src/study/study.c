@@ -260,6 +260,19 @@ static const struct unit *unit_of(const struct ask *ask, const char *definition)
     return unit_base(dimension);
 }
 
+/* A stored value of a kind that was not asked for is left out. */
+static struct reading chosen_kind(const struct ask *ask, struct reading stored)
+{
+    if (stored.state != READING_OK ||
+        evidence_chosen(ask->evidence, stored.evidence))
+        return stored;
+    struct reading gap =
+        reading_gap(stored.quantity, READING_MISSING,
+                    evidence_left_out(stored.evidence), stored.provenance);
+    gap.evidence = stored.evidence;
+    return gap;
+}
+
 struct row study_row(const struct study *study, const struct ask *ask)
 {
     struct row row = {.quantity = ask->quantity};
@@ -274,8 +287,12 @@ struct row study_row(const struct study *study, const struct ask *ask)
     int offer = ask->model
                     ? model_offer_for(ask->model, ask->quantity, definition)
                     : -1;
-    struct reading value =
-        reading_gap(ask->quantity, READING_MISSING, "not computed", NULL);
+    struct reading value = reading_gap(ask->quantity, READING_MISSING,
+                                       quantity_at(ask->quantity)->modelled
+                                           ? "no model was asked for"
+                                           : "no model computes this "
+                                             "quantity",
+                                       NULL);
     if (offer >= 0) {
         value = value_of(study, ask, &row.species, offer);
         definition = ask->model->offers[offer].provenance.definition;
@@ -290,7 +307,11 @@ struct row study_row(const struct study *study, const struct ask *ask)
     if (reference && !definition)
         definition = reference->provenance->definition;
     row.unit = unit_of(ask, definition);
-    row_compare(&row, value, stored);
+    row_compare(&row, value, chosen_kind(ask, stored));
+    if (ask->against)
+        row_disagree(&row,
+                     chosen_kind(ask, reference_read(ask->against, &row.species,
+                                                     ask->n, ask->l)));
     return row;
 }
 
