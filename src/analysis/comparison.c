@@ -5,13 +5,107 @@
 #include <stdlib.h>
 #include <string.h>
 
+#include "base/text.h"
+
 #define PERCENT_DIGITS 7
 
 void comparison_clear(struct comparison *comparison)
 {
     free(comparison->lines);
     free(comparison->facts);
+    for (int i = 0; i < comparison->pair_count; i++)
+        free(comparison->pairs[i]);
     *comparison = (struct comparison){0};
+}
+
+static int line_of(const struct comparison *c, const struct provenance *source)
+{
+    for (int i = 0; i < c->line_count; i++)
+        if (c->lines[i].provenance == source)
+            return i;
+    return -1;
+}
+
+static struct comparison_pair *pair_new(const struct provenance *first,
+                                        const struct provenance *second)
+{
+    struct comparison_pair *pair = calloc(1, sizeof *pair);
+    if (!pair)
+        return NULL;
+    int count = 0;
+    const struct provenance *sources[] = {first, second};
+    for (int s = 0; s < 2; s++)
+        for (int i = 0; i < sources[s]->citation_count; i++)
+            if (count < PAIR_CITATIONS_MAX)
+                pair->citations[count++] = sources[s]->citations[i];
+    struct text t = text_over(pair->id, sizeof pair->id);
+    text_addf(&t, "%s - %s", second->id, first->id);
+    pair->provenance = (struct provenance){
+        .id = pair->id,
+        .title = "disagreement of two sets",
+        .definition = strcmp(first->definition, second->definition) == 0
+                          ? "disagreement of two sets"
+                          : "disagreement of two sets, not like with like",
+        .citations = pair->citations,
+        .citation_count = count,
+    };
+    return pair;
+}
+
+static struct reading disagreement(const struct reading *first,
+                                   const struct reading *second,
+                                   const struct provenance *provenance)
+{
+    const struct reading *gap = first->state != READING_OK    ? first
+                                : second->state != READING_OK ? second
+                                                              : NULL;
+    if (gap)
+        return reading_gap(first->quantity, gap->state, gap->reason,
+                           provenance);
+    return (struct reading){
+        .state = READING_OK,
+        .quantity = first->quantity,
+        .value = number_subtract(second->value, first->value),
+        .provenance = provenance,
+        .reason = "",
+        .remark = "",
+    };
+}
+
+bool comparison_add_pair(struct comparison *comparison,
+                         const struct provenance *first,
+                         const struct provenance *second, struct status *st)
+{
+    int a = line_of(comparison, first);
+    int b = line_of(comparison, second);
+    if (a < 0 || b < 0 ||
+        comparison->lines[a].unit != comparison->lines[b].unit)
+        return true;
+    bool scale = quantity_at(comparison->lines[a].quantity)->dimension ==
+                 DIMENSION_NUMBER;
+    if (scale && strcmp(first->definition, second->definition) != 0)
+        return true;
+    size_t count = (size_t)comparison->line_count;
+    struct comparison_line *lines =
+        realloc(comparison->lines, (count + 1) * sizeof *lines);
+    if (lines)
+        comparison->lines = lines;
+    struct comparison_pair *pair = lines ? pair_new(first, second) : NULL;
+    if (!pair || comparison->pair_count == QUANTITY_COUNT) {
+        free(pair);
+        return status_fail(st, STATUS_MEMORY, "out of memory");
+    }
+    comparison->pairs[comparison->pair_count++] = pair;
+    int at = (a > b ? a : b) + 1;
+    memmove(&lines[at + 1], &lines[at], (count - (size_t)at) * sizeof *lines);
+    comparison->line_count++;
+    lines[at] = (struct comparison_line){.quantity = lines[a].quantity,
+                                         .unit = lines[a].unit,
+                                         .provenance = &pair->provenance};
+    for (int w = 0; w < comparison->count; w++)
+        lines[at].readings[w] = disagreement(
+            &lines[a].readings[w], &lines[b].readings[w], &pair->provenance);
+    return true;
 }
 
 bool comparison_difference(const struct comparison_line *line, int which,

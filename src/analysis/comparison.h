@@ -5,6 +5,7 @@
 
 #include "analysis/row.h"
 #include "base/text.h"
+#include "base/status.h"
 
 #define COMPARISON_MAX 12 /* atoms side by side */
 #define FACT_TEXT_MAX 320
@@ -23,6 +24,14 @@ struct comparison_fact {
     char text[COMPARISON_MAX][FACT_TEXT_MAX];
 };
 
+/* How far a second reference is from the first, as a source of lines. */
+#define PAIR_CITATIONS_MAX 8
+struct comparison_pair {
+    struct provenance provenance;
+    char id[128];
+    struct citation citations[PAIR_CITATIONS_MAX];
+};
+
 /* lines[line_count] and facts[fact_count] are owned; comparison_clear frees
  * them. */
 struct comparison {
@@ -32,6 +41,8 @@ struct comparison {
     struct comparison_line *lines;
     int fact_count;
     struct comparison_fact *facts;
+    int pair_count;
+    struct comparison_pair *pairs[QUANTITY_COUNT]; /* owned */
 };
 
 void comparison_clear(struct comparison *comparison);
@@ -40,6 +51,13 @@ void comparison_clear(struct comparison *comparison);
  * source gives several numbers for the quantity. */
 void comparison_label(const struct comparison *comparison, int line,
                       struct text *t);
+/* Adds, behind the line of the second set, a line that holds the second less
+ * the first; nothing where one of them has no line, or they are scales that
+ * cannot be subtracted. Fails with STATUS_MEMORY. */
+MUST_CHECK bool comparison_add_pair(struct comparison *comparison,
+                                    const struct provenance *first,
+                                    const struct provenance *second,
+                                    struct status *st);
 
 /* Difference of atom `which` from atom 0 in a line: false when either has no
  * number or which is 0. percent is of the size of the first; has_percent only

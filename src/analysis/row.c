@@ -96,3 +96,24 @@ void row_disagree(struct row *row, struct reading against)
     row->has_disagreement_percent = percent_of(
         row->disagreement, row->reference.value, &row->disagreement_percent);
 }
+
+struct row row_of_sets(const struct row *row)
+{
+    struct row sets = *row;
+    sets.value = row->against;
+    sets.like_with_like =
+        same_definition(row->against.provenance, row->reference.provenance);
+    sets.residual = row->disagreement;
+    sets.has_percent = row->has_disagreement_percent;
+    sets.percent = row->disagreement_percent;
+    sets.state = ROW_OK;
+    sets.reason = "";
+    if (row->disagrees)
+        return sets;
+    sets.state = ROW_NO_REFERENCE;
+    sets.reason = row->reference.state != READING_OK ? row->reference.reason
+                  : row->against.state != READING_OK
+                      ? row->against.reason
+                      : "the sets are on other scales";
+    return sets;
+}

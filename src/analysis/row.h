@@ -67,4 +67,8 @@ void row_compare(struct row *row, struct reading value,
  * disagreement = against - reference, and in per cent of the reference. */
 void row_disagree(struct row *row, struct reading against);
 
+/* The row in which the second reference takes the place of the model: its
+ * residual is the disagreement. */
+struct row row_of_sets(const struct row *row);
+
 #endif

@@ -4,25 +4,32 @@
 #include <assert.h>
 #include <math.h>
 
+void summary_add_residual(struct summary *summary, int z, int charge,
+                          double residual, const double *percent)
+{
+    summary->count++;
+    summary->sum += residual;
+    summary->sum_absolute += fabs(residual);
+    summary->sum_square += residual * residual;
+    if (percent) {
+        summary->percent_count++;
+        summary->sum_absolute_percent += fabs(*percent);
+    }
+    if (summary->largest_z == 0 || fabs(residual) > fabs(summary->largest)) {
+        summary->largest = residual;
+        summary->largest_z = z;
+        summary->largest_charge = charge;
+    }
+}
+
 void summary_add(struct summary *summary, const struct row *row)
 {
-    if (row->state != ROW_OK) {
+    if (row->state == ROW_OK)
+        summary_add_residual(summary, row->species.z, row->species.charge,
+                             row->residual.value,
+                             row->has_percent ? &row->percent.value : NULL);
+    else
         summary->gaps++;
-        return;
-    }
-    double r = row->residual.value;
-    summary->count++;
-    summary->sum += r;
-    summary->sum_absolute += fabs(r);
-    summary->sum_square += r * r;
-    if (row->has_percent) {
-        summary->percent_count++;
-        summary->sum_absolute_percent += fabs(row->percent.value);
-    }
-    if (summary->largest_z == 0 || fabs(r) > fabs(summary->largest)) {
-        summary->largest = r;
-        summary->largest_z = row->species.z;
-    }
 }
 
 double summary_mean(const struct summary *summary)

@@ -15,9 +15,14 @@ struct summary {
     double sum, sum_absolute, sum_square, sum_absolute_percent;
     double largest; /* the residual of largest size, with its sign */
     int largest_z;  /* 0 while count is 0 */
+    int largest_charge;
 };
 
 void summary_add(struct summary *summary, const struct row *row);
+
+/* One residual of a species, with its percentage where there is one. */
+void summary_add_residual(struct summary *summary, int z, int charge,
+                          double residual, const double *percent);
 
 /* Of the residuals; count must be at least 1. */
 double summary_mean(const struct summary *summary);

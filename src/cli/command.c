@@ -9,7 +9,8 @@
 #define SELECTION_ABOUT                                                        \
     "A selection is a symbol, name or atomic number (Fe, iron, 26), an ion "   \
     "that carries its charge (Fe3+, Cs+, O2-), a run by atomic number "        \
-    "(Sc-Zn), period:4, group:13 or block:d; - reads selections from "         \
+    "(Sc-Zn), period:4, group:13, block:d, block:4f, or an isoelectronic "     \
+    "series (electrons:10); - reads selections from "                          \
     "standard input, one per line. What is chosen twice counts once."
 
 /* A new command is one row here and one enumerator. */
@@ -45,6 +46,16 @@ static const struct command commands[COMMAND_COUNT] = {
      "ELEMENT is a symbol, name or atomic number, or an ion that carries its "
      "charge (Fe3+).",
      "atom Fe3+ --functional pbe --format csv", cli_atom},
+    {COMMAND_AUDIT, "audit", "[SELECTION...]", 0, -1,
+     "print how large the residuals of each model are, and where",
+     "Prints statistics of the residuals of each model against a reference "
+     "set: count, gaps, mean, mean absolute, root mean square, and the largest "
+     "with its species, for all chosen species and by block, period and group, "
+     "by charge where several were asked for, by the kind of reference value "
+     "where several occur; then which model is best where, over the species "
+     "that all of them have. With --against the second set takes the place of "
+     "a model. " SELECTION_ABOUT,
+     "audit block:d --quantity ionization", cli_audit},
     {COMMAND_SOURCES, "sources", "", 0, 0,
      "print every model and data set with its citation",
      "Prints what every number rests on: models with their domain, data sets "

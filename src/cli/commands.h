@@ -10,6 +10,7 @@ MUST_CHECK bool cli_screens(struct request *request, struct status *st);
 MUST_CHECK bool cli_list(struct request *request, struct status *st);
 MUST_CHECK bool cli_compare(struct request *request, struct status *st);
 MUST_CHECK bool cli_atom(struct request *request, struct status *st);
+MUST_CHECK bool cli_audit(struct request *request, struct status *st);
 MUST_CHECK bool cli_sources(struct request *request, struct status *st);
 
 #endif

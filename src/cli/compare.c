@@ -7,14 +7,29 @@
 #include "export/compare.h"
 #include "study/facts.h"
 
+/* All sets, or those that were named. */
+static bool is_wanted_set(const struct request *r,
+                          const struct provenance *provenance)
+{
+    for (int i = 0; i < r->set_count; i++)
+        if (r->sets[i]->provenance == provenance)
+            return true;
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        if (r->against[q] && r->against[q]->provenance == provenance)
+            return true;
+    return r->set_count == 0;
+}
+
 static bool is_wanted(const struct request *r,
                       const struct comparison_line *line)
 {
     bool quantity = false;
     for (int i = 0; i < r->quantity_count; i++)
         quantity = quantity || r->quantities[i] == line->quantity;
-    if (!quantity || !line->provenance->computed)
-        return quantity;
+    if (!quantity)
+        return false;
+    if (!line->provenance->computed)
+        return is_wanted_set(r, line->provenance);
     for (int m = 0; m < r->model_count; m++)
         if (strcmp(r->models[m]->id, line->provenance->id) == 0)
             return true;
@@ -41,6 +56,26 @@ static bool must_solve(const struct request *r)
                 model_offer_for(r->models[m], r->quantities[q], NULL) >= 0)
                 return true;
     return false;
+}
+
+/* The first reference of a quantity is the one named, or the first shown. */
+static bool add_disagreements(const struct request *r, struct comparison *c,
+                              struct status *st)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        const struct provenance *first =
+            r->references[q] ? r->references[q]->provenance : NULL;
+        if (!r->against[q])
+            continue;
+        for (int i = 0; i < c->line_count && !first; i++)
+            if (c->lines[i].quantity == (enum quantity_id)q &&
+                !c->lines[i].provenance->computed)
+                first = c->lines[i].provenance;
+        if (first && first != r->against[q]->provenance &&
+            !comparison_add_pair(c, first, r->against[q]->provenance, st))
+            return false;
+    }
+    return true;
 }
 
 static bool write(const struct request *r, const struct comparison *c,
@@ -74,7 +109,8 @@ bool cli_compare(struct request *r, struct status *st)
                        &comparison, st))
         return false;
     keep_wanted(r, &comparison);
-    bool ok = write(r, &comparison, st);
+    bool ok =
+        add_disagreements(r, &comparison, st) && write(r, &comparison, st);
     comparison_clear(&comparison);
     return ok;
 }

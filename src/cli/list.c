@@ -67,6 +67,7 @@ bool cli_list(struct request *r, struct status *st)
     if (!g.rows)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     bool ok = output_check(r, st) && gather_all(r, &g, st) &&
+              (!r->has_order || rows_sort(g.rows, g.count, r->order, st)) &&
               output_open(&out, r, st);
     if (ok) {
         ok = r->format == EXPORT_TEXT

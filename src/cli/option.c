@@ -9,25 +9,28 @@
 #define LIST ON(COMMAND_LIST)
 #define COMPARE ON(COMMAND_COMPARE)
 #define ATOM ON(COMMAND_ATOM)
+#define AUDIT ON(COMMAND_AUDIT)
 #define SOURCES ON(COMMAND_SOURCES)
-#define ANY_COMMAND (LIST | COMPARE | ATOM | SOURCES)
+#define ANY_COMMAND (LIST | COMPARE | ATOM | AUDIT | SOURCES)
 #define EVERYWHERE (ANY_COMMAND | SCREENS)
 
 /* A new option is one row here and one enumerator; a command that takes it
  * adds its bit. */
 static const struct option options[OPTION_COUNT] = {
     {OPTION_QUANTITY, "quantity", 'q', "IDS", OPTION_VALUE, WORDS_QUANTITY,
-     true, LIST | COMPARE,
-     "quantities to show, parted by commas (list: zeff,radius,ionization; "
-     "compare: all)"},
+     true, LIST | COMPARE | AUDIT,
+     "quantities to show, parted by commas (list and audit: "
+     "zeff,radius,ionization; compare: all)"},
     {OPTION_MODEL, "model", 'm', "IDS", OPTION_VALUE, WORDS_MODEL, true,
-     LIST | COMPARE, "models to ask, parted by commas (default: all)"},
+     LIST | COMPARE | AUDIT, "models to ask, parted by commas (default: all)"},
     {OPTION_CHARGE, "charge", 'c', "N", OPTION_VALUE, WORDS_NONE, false,
-     LIST | COMPARE | ATOM,
-     "charge of every chosen element that carries none itself, such as 2 or -1 "
+     LIST | COMPARE | ATOM | AUDIT,
+     "charge of every chosen element that carries none itself, such as 2 or "
+     "-1; a range such as 0..5; all: from the atom to its last electron "
      "(default: 0)"},
     {OPTION_SUBSHELL, "subshell", 's', "NL", OPTION_VALUE, WORDS_SUBSHELL,
-     false, LIST, "subshell asked about, such as 3d (default: the outermost)"},
+     false, LIST | AUDIT,
+     "subshell asked about, such as 3d (default: the outermost)"},
     {OPTION_CONFIGURATION, "configuration", 'C', "TEXT", OPTION_VALUE,
      WORDS_NONE, false, LIST | COMPARE | ATOM,
      "electron configuration in place of the ground state, such as "
@@ -38,11 +41,19 @@ static const struct option options[OPTION_COUNT] = {
      "average, "
      "the average of the configuration (default: hund)"},
     {OPTION_REFERENCE, "reference", 'r', "SETS", OPTION_VALUE, WORDS_REFERENCE,
-     true, LIST,
-     "stored data sets to compare with, at most one per quantity (default: the "
-     "first with the model's own definition)"},
+     true, LIST | COMPARE | AUDIT,
+     "stored data sets to compare with, in list at most one per quantity "
+     "(default: the first with the model's own definition; compare: all)"},
+    {OPTION_AGAINST, "against", 'A', "SETS", OPTION_VALUE, WORDS_REFERENCE,
+     true, LIST | COMPARE | AUDIT,
+     "a second data set beside the reference, with how far it is from it; "
+     "without --model and --quantity the two sets alone"},
+    {OPTION_EVIDENCE, "evidence", 'e', "KINDS", OPTION_VALUE, WORDS_EVIDENCE,
+     true, LIST | AUDIT,
+     "kinds of reference values to take, parted by commas, such as measured "
+     "(default: all)"},
     {OPTION_UNIT, "unit", 'u', "UNITS", OPTION_VALUE, WORDS_UNIT, true,
-     LIST | COMPARE | ATOM,
+     LIST | COMPARE | ATOM | AUDIT,
      "units to print in, at most one per kind of quantity (default: pm, eV; "
      "atom: pm, hartree)"},
     {OPTION_FUNCTIONAL, "functional", 0, "NAME", OPTION_VALUE, WORDS_FUNCTIONAL,
@@ -57,6 +68,14 @@ static const struct option options[OPTION_COUNT] = {
      false, ATOM,
      "in atomic units, for the Dirac equation (default: 137.035999177, CODATA "
      "2022)"},
+    {OPTION_SORT, "sort", 'S', "BY", OPTION_VALUE, WORDS_SORT, false, LIST,
+     "largest first: value, or the size of residual, percent, disagreement or "
+     "disagreement-percent (default: as chosen)"},
+    {OPTION_SCOPE, "scope", 'p', "SCOPES", OPTION_VALUE, WORDS_SCOPE, true,
+     AUDIT,
+     "parts to give figures for: all, block, period, group, charge, evidence "
+     "(default: all, block, period, group; charge and evidence where there is "
+     "more than one)"},
     {OPTION_DATA, "data", 'd', "FILE", OPTION_REPEAT, WORDS_FILE, false,
      EVERYWHERE,
      "add a data set of your own, in the form of outershell-data(5); may be "

@@ -46,6 +46,29 @@ static bool twice(enum option_id id, const char *word, struct status *st)
                        option_at((int)id)->name, word);
 }
 
+static bool is_chosen(const struct request *r, enum quantity_id quantity)
+{
+    for (int i = 0; i < r->quantity_count; i++)
+        if (r->quantities[i] == quantity)
+            return true;
+    return false;
+}
+
+/* Two sets are set against each other and no quantity is named: theirs. */
+static bool quantities_of_sets(struct request *r)
+{
+    const char *list = given(r, OPTION_AGAINST);
+    char word[WORD_TEXT_MAX];
+    while (list && words_next(&list, word)) {
+        const struct reference *found =
+            reference_find(study_references(r->study), word);
+        bool chosen = found && is_chosen(r, found->quantity);
+        if (found && !chosen && r->quantity_count < QUANTITY_COUNT)
+            r->quantities[r->quantity_count++] = found->quantity;
+    }
+    return r->quantity_count > 0;
+}
+
 static bool read_quantities(struct request *r, struct status *st)
 {
     static const enum quantity_id usual[] = {QUANTITY_ZEFF, QUANTITY_RADIUS,
@@ -53,7 +76,11 @@ static bool read_quantities(struct request *r, struct status *st)
     const char *list = given(r, OPTION_QUANTITY);
     char word[WORD_TEXT_MAX];
     r->has_quantities = list != NULL;
-    if (!list && r->call->command->id == COMMAND_LIST) {
+    bool usual_ones = r->call->command->id == COMMAND_LIST ||
+                      r->call->command->id == COMMAND_AUDIT;
+    if (!list && quantities_of_sets(r))
+        return true;
+    if (!list && usual_ones) {
         memcpy(r->quantities, usual, sizeof usual);
         r->quantity_count = sizeof usual / sizeof usual[0];
     } else if (!list) {
@@ -136,7 +163,10 @@ static bool read_models(struct request *r, struct status *st)
     char word[WORD_TEXT_MAX];
     r->has_models = list != NULL;
     assert(model_count() <= REQUEST_MODEL_MAX);
-    for (int m = 0; !list && m < model_count(); m++)
+    /* Set against set needs no model. */
+    bool sets_alone = given(r, OPTION_AGAINST) && !r->has_quantities &&
+                      r->call->command->id != COMMAND_COMPARE;
+    for (int m = 0; !list && !sets_alone && m < model_count(); m++)
         r->models[r->model_count++] = model_at(m);
     while (list) {
         if (!words_next(&list, word))
@@ -161,43 +191,94 @@ static void quantity_names(const struct request *r, struct text *t)
     words_join(t, names, r->quantity_count, "and");
 }
 
-static bool is_chosen(const struct request *r, enum quantity_id quantity)
+/* Puts a set into the slot of its quantity. Only list and what is "against" it
+ * are bound to one set per quantity. */
+static bool take_set(struct request *r, enum option_id id,
+                     const struct reference *found,
+                     const struct reference **slots, struct status *st)
 {
-    for (int i = 0; i < r->quantity_count; i++)
-        if (r->quantities[i] == quantity)
-            return true;
-    return false;
+    char text[WORD_LIST_TEXT_MAX];
+    struct text t = text_over(text, sizeof text);
+    const char *name = option_at((int)id)->name;
+    const char *word = found->provenance->id;
+    const struct reference **slot = &slots[found->quantity];
+    bool single = id == OPTION_AGAINST || r->call->command->id == COMMAND_LIST;
+    quantity_names(r, &t);
+    if (!is_chosen(r, found->quantity))
+        return status_fail(st, STATUS_USAGE,
+                           "--%s %s: holds %s, but the quantities asked for "
+                           "are %s",
+                           name, word, quantity_at(found->quantity)->id, text);
+    if (*slot == found)
+        return twice(id, word, st);
+    if (*slot && single)
+        return status_fail(st, STATUS_USAGE,
+                           "--%s %s: contradicts %s; expected one set for %s",
+                           name, word, (*slot)->provenance->id,
+                           quantity_at(found->quantity)->id);
+    for (int i = 0; id == OPTION_REFERENCE && i < r->set_count; i++)
+        if (r->sets[i] == found)
+            return twice(id, word, st);
+    if (id == OPTION_REFERENCE)
+        r->sets[r->set_count++] = found;
+    if (!*slot)
+        *slot = found;
+    return true;
+}
+
+static bool read_sets(struct request *r, enum option_id id,
+                      const struct reference **slots, struct status *st)
+{
+    const char *list = given(r, id);
+    char word[WORD_TEXT_MAX];
+    while (list) {
+        if (!words_next(&list, word))
+            return too_long(id, list, st);
+        if (place_of(r, id, word, st) < 0)
+            return false;
+        const struct reference *found =
+            reference_find(study_references(r->study), word);
+        if (!take_set(r, id, found, slots, st))
+            return false;
+    }
+    return true;
+}
+
+/* A second set against itself says nothing. */
+static bool check_against(const struct request *r, struct status *st)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        if (r->against[q] && r->against[q] == r->references[q])
+            return status_fail(st, STATUS_USAGE,
+                               "--against %s: is the reference itself; "
+                               "expected another set",
+                               r->against[q]->provenance->id);
+    return true;
 }
 
 static bool read_references(struct request *r, struct status *st)
 {
-    const char *list = given(r, OPTION_REFERENCE);
+    r->has_against = given(r, OPTION_AGAINST) != NULL;
+    return read_sets(r, OPTION_REFERENCE, r->references, st) &&
+           read_sets(r, OPTION_AGAINST, r->against, st) && check_against(r, st);
+}
+
+/* Words of a list option as bits by their place. */
+static bool read_bits(struct request *r, enum option_id id, unsigned *bits,
+                      struct status *st)
+{
+    const char *list = given(r, id);
     char word[WORD_TEXT_MAX];
-    char text[WORD_LIST_TEXT_MAX];
+    *bits = 0;
     while (list) {
         if (!words_next(&list, word))
-            return too_long(OPTION_REFERENCE, list, st);
-        if (place_of(r, OPTION_REFERENCE, word, st) < 0)
+            return too_long(id, list, st);
+        int place = place_of(r, id, word, st);
+        if (place < 0)
             return false;
-        const struct reference *found =
-            reference_find(study_references(r->study), word);
-        struct text t = text_over(text, sizeof text);
-        quantity_names(r, &t);
-        if (!is_chosen(r, found->quantity))
-            return status_fail(st, STATUS_USAGE,
-                               "--reference %s: holds %s, but the quantities "
-                               "asked for are %s",
-                               word, quantity_at(found->quantity)->id, text);
-        const struct reference **slot = &r->references[found->quantity];
-        if (*slot == found)
-            return twice(OPTION_REFERENCE, word, st);
-        if (*slot)
-            return status_fail(st, STATUS_USAGE,
-                               "--reference %s: contradicts %s; expected one "
-                               "set for %s",
-                               word, (*slot)->provenance->id,
-                               quantity_at(found->quantity)->id);
-        *slot = found;
+        if (*bits >> place & 1u)
+            return twice(id, word, st);
+        *bits |= 1u << place;
     }
     return true;
 }
@@ -326,6 +407,16 @@ static bool read_output(struct request *r, struct status *st)
     return true;
 }
 
+static bool read_order(struct request *r, struct status *st)
+{
+    int order = 0;
+    r->has_order = given(r, OPTION_SORT) != NULL;
+    if (!read_choice(r, OPTION_SORT, &order, st))
+        return false;
+    r->order = (enum row_order)order;
+    return true;
+}
+
 static bool read_data(struct request *r, struct status *st)
 {
     for (int i = 0; i < r->call->repeat_count; i++)
@@ -381,11 +472,14 @@ bool request_open(struct request *r, const struct call *call, struct status *st)
     *r = (struct request){.call = call};
     bool chooses = call->command->id == COMMAND_LIST ||
                    call->command->id == COMMAND_COMPARE ||
-                   call->command->id == COMMAND_ATOM;
-    return read_output(r, st) && read_quantities(r, st) && read_models(r, st) &&
-           read_units(r, st) && read_subshell(r, st) &&
-           read_configuration(r, st) && read_data(r, st) &&
-           read_references(r, st) && read_term(r, st) && read_method(r, st) &&
+                   call->command->id == COMMAND_ATOM ||
+                   call->command->id == COMMAND_AUDIT;
+    return read_output(r, st) && read_data(r, st) && read_quantities(r, st) &&
+           read_models(r, st) && read_units(r, st) && read_subshell(r, st) &&
+           read_configuration(r, st) && read_references(r, st) &&
+           read_bits(r, OPTION_EVIDENCE, &r->evidence, st) &&
+           read_bits(r, OPTION_SCOPE, &r->scopes, st) && read_order(r, st) &&
+           read_term(r, st) && read_method(r, st) &&
            (!chooses || choose_atoms(r, st));
 }
 
@@ -404,6 +498,8 @@ struct ask request_ask(const struct request *r, int atom,
                       .quantity = quantity,
                       .model = model,
                       .reference = r->references[quantity],
+                      .against = r->against[quantity],
+                      .evidence = r->evidence,
                       .unit = r->units[q->dimension]};
     if (r->has_configuration)
         ask.configuration = &r->configuration;

@@ -4,6 +4,8 @@
 #define CLI_REQUEST_H
 
 #include "analysis/atom_report.h"
+#include "analysis/audit.h"
+#include "analysis/order.h"
 #include "base/status.h"
 #include "base/units.h"
 #include "cli/parse.h"
@@ -46,6 +48,11 @@ struct request {
     const struct reference *references[QUANTITY_COUNT];
     const struct reference *against[QUANTITY_COUNT];
     bool has_against;
+    int set_count; /* all sets named as references, in order */
+    const struct reference *sets[REFERENCE_MAX];
+    bool has_order;
+    enum row_order order;
+    unsigned scopes; /* bit 1 << audit_scope each; 0: the default ones */
     unsigned evidence;
     const struct unit *units[DIMENSION_COUNT];
     struct configuration configuration;

@@ -5,6 +5,8 @@
 #include <string.h>
 
 #include "analysis/atom_report.h"
+#include "analysis/audit.h"
+#include "analysis/order.h"
 #include "base/units.h"
 #include "element/quantity.h"
 #include "element/subshell.h"
@@ -71,6 +73,18 @@ void words_fill(struct words *words, enum word_kind kind,
     case WORDS_REFERENCE:
         for (int i = 0; references && i < references->count; i++)
             add(words, references->items[i].provenance->id);
+        break;
+    case WORDS_EVIDENCE:
+        for (int e = 0; e < EVIDENCE_COUNT; e++)
+            add(words, evidence_id((enum evidence)e));
+        break;
+    case WORDS_SORT:
+        for (int s = 0; s < ROW_ORDER_COUNT; s++)
+            add(words, row_order_id((enum row_order)s));
+        break;
+    case WORDS_SCOPE:
+        for (int s = 0; s < AUDIT_SCOPE_COUNT; s++)
+            add(words, audit_scope_id((enum audit_scope)s));
         break;
     case WORDS_UNIT:
         add_units(words);

@@ -126,6 +126,42 @@ static void put_reference_source(const struct row *row, struct text *t)
     provenance_text(t, row->reference.provenance);
 }
 
+static void put_against_set(const struct row *row, struct text *t)
+{
+    put_id(row->against.provenance, t);
+}
+
+static bool has_against(const struct row *row)
+{
+    return row->against.provenance && row->against.state == READING_OK;
+}
+
+static void put_against(const struct row *row, struct text *t)
+{
+    put_number(has_against(row), row->against.value, t, true);
+}
+
+static void put_against_u(const struct row *row, struct text *t)
+{
+    put_number(has_against(row) && row->against.has_u, row->against.u, t, true);
+}
+
+static void put_disagreement(const struct row *row, struct text *t)
+{
+    put_number(row->disagrees, row->disagreement, t, false);
+}
+
+static void put_disagreement_percent(const struct row *row, struct text *t)
+{
+    put_number(row->disagrees && row->has_disagreement_percent,
+               row->disagreement_percent, t, false);
+}
+
+static void put_against_source(const struct row *row, struct text *t)
+{
+    provenance_text(t, row->against.provenance);
+}
+
 static void put_version(const struct row *row, struct text *t)
 {
     (void)row;
@@ -140,6 +176,11 @@ static const struct provenance *model_source(const struct row *row)
 static const struct provenance *reference_source(const struct row *row)
 {
     return row->reference.provenance;
+}
+
+static const struct provenance *against_source(const struct row *row)
+{
+    return row->against.provenance;
 }
 
 /* Numbers stand bare in JSON; an empty field is null there. A field of the
@@ -171,8 +212,24 @@ static const struct {
     {"model_source", put_model_source, false, false, model_source},
     {"reference_source", put_reference_source, false, false, reference_source},
     {"version", put_version, false, false, NULL},
+    /* Only where a second reference was asked for. */
+    {"against_set", put_against_set, false, false, NULL},
+    {"against_value", put_against, true, false, NULL},
+    {"against_uncertainty", put_against_u, true, false, NULL},
+    {"disagreement", put_disagreement, true, false, NULL},
+    {"disagreement_percent", put_disagreement_percent, true, false, NULL},
+    {"against_source", put_against_source, false, false, against_source},
 };
-#define FIELD_COUNT ((int)(sizeof fields / sizeof fields[0]))
+#define FIELD_COUNT 20
+#define FIELD_COUNT_AGAINST ((int)(sizeof fields / sizeof fields[0]))
+
+static int fields_of(const struct row *rows, size_t count)
+{
+    for (size_t i = 0; i < count; i++)
+        if (rows[i].against.provenance)
+            return FIELD_COUNT_AGAINST;
+    return FIELD_COUNT;
+}
 
 int row_field_count(void)
 {
@@ -221,9 +278,10 @@ static const char *citation_field(struct citations *c,
 
 /* The fields of one row that are of its species, or the others. */
 static void put_fields(struct text *line, const struct row *row,
-                       bool of_species, struct citations *citations)
+                       bool of_species, int count,
+                       struct citations *citations)
 {
-    for (int f = 0; f < FIELD_COUNT; f++) {
+    for (int f = 0; f < count; f++) {
         char buffer[FIELD_TEXT_MAX];
         struct text t = text_over(buffer, sizeof buffer);
         if (fields[f].of_species != of_species)
@@ -242,13 +300,14 @@ static void put_fields(struct text *line, const struct row *row,
 static bool write_csv(FILE *out, const struct row *rows, size_t count,
                       struct status *st)
 {
+    int field_count = fields_of(rows, count);
     char head[LINE_TEXT_MAX];
     char tail[LINE_TEXT_MAX];
     struct text species = text_over(head, sizeof head);
     struct citations *citations = calloc(1, sizeof *citations);
     if (!citations)
         return status_fail(st, STATUS_MEMORY, "out of memory");
-    for (int f = 0; f < FIELD_COUNT; f++)
+    for (int f = 0; f < field_count; f++)
         csv_field(out, fields[f].name, f == 0);
     csv_end(out);
     for (size_t i = 0; i < count; i++) {
@@ -257,9 +316,9 @@ static bool write_csv(FILE *out, const struct row *rows, size_t count,
         if (i == 0 || memcmp(&rows[i].species, &rows[i - 1].species,
                              sizeof rows[i].species) != 0) {
             species = text_over(head, sizeof head);
-            put_fields(&species, &rows[i], true, citations);
+            put_fields(&species, &rows[i], true, field_count, citations);
         }
-        put_fields(&line, &rows[i], false, citations);
+        put_fields(&line, &rows[i], false, field_count, citations);
         text_add_bytes(&line, "\r\n", 2);
         fwrite(head, 1, species.length, out);
         fwrite(tail, 1, line.length, out);
@@ -286,10 +345,11 @@ static void write_json_field(FILE *out, int f, const struct row *row)
 
 static void write_json(FILE *out, const struct row *rows, size_t count)
 {
+    int field_count = fields_of(rows, count);
     fprintf(out, "{\"schema\": 1, \"rows\": [");
     for (size_t i = 0; i < count; i++) {
         fputs(i ? ",\n  {" : "\n  {", out);
-        for (int f = 0; f < FIELD_COUNT; f++)
+        for (int f = 0; f < field_count; f++)
             write_json_field(out, f, &rows[i]);
         fputs("\"reason\": ", out);
         json_string(out, rows[i].reason);

@@ -16,7 +16,7 @@ MUST_CHECK bool rows_write(FILE *out, enum export_format format,
                            struct status *st);
 
 /* Fields of the CSV, in order. */
-#define ROW_FIELDS_MAX 20
+#define ROW_FIELDS_MAX 20 /* those that are always there */
 int row_field_count(void);
 const char *row_field_name(int field);
 

@@ -98,6 +98,14 @@ static void write_row(const struct table *table, size_t row, const int *widths,
     putc('\n', out);
 }
 
+void table_free(struct table *table)
+{
+    for (size_t i = 0; i < table->count; i++)
+        free(table->cells[i]);
+    free(table->cells);
+    *table = (struct table){.columns = table->columns};
+}
+
 bool table_write(struct table *table, FILE *out, struct status *st)
 {
     return table_write_styled(table, out, &table_plain, st);
@@ -117,9 +125,6 @@ bool table_write_styled(struct table *table, FILE *out,
     }
     for (size_t row = 0; ok && row < table->count / columns; row++)
         write_row(table, row, widths, style, out);
-    for (size_t i = 0; i < table->count; i++)
-        free(table->cells[i]);
-    free(table->cells);
-    *table = (struct table){.columns = table->columns};
+    table_free(table);
     return ok || status_fail(st, STATUS_MEMORY, "out of memory");
 }

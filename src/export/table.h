@@ -41,6 +41,9 @@ void table_cellf(struct table *table, const char *format, ...)
  * frees the cells. */
 MUST_CHECK bool table_write(struct table *table, FILE *out, struct status *st);
 
+/* Frees the cells of a table that is not written. */
+void table_free(struct table *table);
+
 /* The same with marks. */
 MUST_CHECK bool table_write_styled(struct table *table, FILE *out,
                                    const struct table_style *style,
