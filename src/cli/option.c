@@ -44,8 +44,8 @@ static const struct option options[OPTION_COUNT] = {
      true, LIST | COMPARE | AUDIT,
      "stored data sets to compare with, in list at most one per quantity "
      "(default: the first with the model's own definition; compare: all)"},
-    {OPTION_AGAINST, "against", 'A', "SETS", OPTION_VALUE, WORDS_REFERENCE,
-     true, LIST | COMPARE | AUDIT,
+    {OPTION_AGAINST, "against", 0, "SETS", OPTION_VALUE, WORDS_REFERENCE, true,
+     LIST | COMPARE | AUDIT,
      "a second data set beside the reference, with how far it is from it; "
      "without --model and --quantity the two sets alone"},
     {OPTION_EVIDENCE, "evidence", 'e', "KINDS", OPTION_VALUE, WORDS_EVIDENCE,
@@ -68,11 +68,10 @@ static const struct option options[OPTION_COUNT] = {
      false, ATOM,
      "in atomic units, for the Dirac equation (default: 137.035999177, CODATA "
      "2022)"},
-    {OPTION_SORT, "sort", 'S', "BY", OPTION_VALUE, WORDS_SORT, false, LIST,
+    {OPTION_SORT, "sort", 0, "BY", OPTION_VALUE, WORDS_SORT, false, LIST,
      "largest first: value, or the size of residual, percent, disagreement or "
      "disagreement-percent (default: as chosen)"},
-    {OPTION_SCOPE, "scope", 'p', "SCOPES", OPTION_VALUE, WORDS_SCOPE, true,
-     AUDIT,
+    {OPTION_SCOPE, "scope", 0, "SCOPES", OPTION_VALUE, WORDS_SCOPE, true, AUDIT,
      "parts to give figures for: all, block, period, group, charge, evidence "
      "(default: all, block, period, group; charge and evidence where there is "
      "more than one)"},
