@@ -74,13 +74,67 @@ static void fill_subshells(struct ui *ui, struct chooser *c)
     }
 }
 
+/* Units of the quantity, or of everything that the screen Atom shows. */
 static void fill_units(struct ui *ui, struct chooser *c)
 {
     const struct unit *now = ui_unit(ui, ui->choice.quantity);
-    for (size_t u = 0; u < unit_count(); u++)
-        if (unit_at(u)->dimension == now->dimension)
-            add(c, (int)u, unit_at(u) == now, "%s: %s", unit_at(u)->id,
-                unit_at(u)->title);
+    bool atom = ui->screen == SCREEN_ATOM;
+    for (size_t u = 0; u < unit_count(); u++) {
+        const struct unit *unit = unit_at(u);
+        bool length = unit->dimension == DIMENSION_LENGTH;
+        bool energy = unit->dimension == DIMENSION_ENERGY;
+        if (atom)
+            now = ui_unit(ui, length ? QUANTITY_RADIUS : QUANTITY_IONIZATION);
+        if (atom ? length || energy : unit->dimension == now->dimension)
+            add(c, (int)u, unit == now && (!atom || length), "%s: %s%s",
+                unit->id, unit->title, atom && unit == now ? ", shown" : "");
+    }
+}
+
+/* value: functional and equation in one number. */
+static void fill_methods(struct ui *ui, struct chooser *c)
+{
+    struct atom_method now = ui->choice.atom.method;
+    for (int f = 0; f < FUNCTIONAL_COUNT; f++)
+        for (int r = 0; r < RELATIVITY_COUNT; r++)
+            add(c, f * RELATIVITY_COUNT + r,
+                (int)now.functional == f && (int)now.relativity == r, "%s, %s",
+                functional_title((enum functional)f),
+                relativity_title((enum relativity)r));
+}
+
+/* value: the kind of overlay; for another species OVERLAY_COUNT and on. */
+static void fill_overlays(struct ui *ui, struct chooser *c)
+{
+    const struct choice *choice = &ui->choice;
+    const struct atom_choice *a = &choice->atom;
+    char ion[ION_TEXT_MAX];
+    struct ask ask;
+    add(c, OVERLAY_NONE, a->overlay == OVERLAY_NONE, "nothing");
+    for (int i = 0; i < choice->pin_count; i++) {
+        const struct pin *p = &choice->pins[i];
+        if (p->z != choice->z || p->charge != choice->charge)
+            add(c, OVERLAY_COUNT + i,
+                a->overlay == OVERLAY_SPECIES && a->over.z == p->z &&
+                    a->over.charge == p->charge,
+                "%s, pinned", ion_print(p->z, p->charge, ion));
+    }
+    if (ui_ask(ui, choice->z, choice->charge + 1, &ask) &&
+        choice->charge + 1 < choice->z)
+        add(c, OVERLAY_COUNT + PIN_MAX,
+            a->overlay == OVERLAY_SPECIES && a->over.z == choice->z &&
+                a->over.charge == choice->charge + 1,
+            "%s, one electron less",
+            ion_print(choice->z, choice->charge + 1, ion));
+    add(c, OVERLAY_RELATIVITY, a->overlay == OVERLAY_RELATIVITY,
+        "the same by the %s",
+        relativity_title(a->method.relativity == RELATIVITY_DIRAC
+                             ? RELATIVITY_NONE
+                             : RELATIVITY_DIRAC));
+    add(c, OVERLAY_SLATER, a->overlay == OVERLAY_SLATER,
+        "slater: Slater-type orbitals by Slater's rules");
+    add(c, OVERLAY_ZETA, a->overlay == OVERLAY_ZETA,
+        "single-zeta: orbitals of single-zeta Hartree-Fock");
 }
 
 static void fill_exports(struct ui *ui, struct chooser *c)
@@ -100,6 +154,8 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
         [CHOOSER_SUBSHELL] = fill_subshells,
         [CHOOSER_UNIT] = fill_units,
         [CHOOSER_EXPORT] = fill_exports,
+        [CHOOSER_METHOD] = fill_methods,
+        [CHOOSER_OVERLAY] = fill_overlays,
     };
     ui->chooser = (struct chooser){.kind = kind};
     ui->message[0] = '\0';
@@ -128,6 +184,19 @@ static void take_quantity(struct ui *ui, enum quantity_id quantity)
         c->shown = SHOWN_REFERENCE;
 }
 
+static void take_overlay(struct ui *ui, int value)
+{
+    struct choice *c = &ui->choice;
+    if (value < OVERLAY_COUNT) {
+        c->atom.overlay = (enum atom_overlay)value;
+        return;
+    }
+    int pin = value - OVERLAY_COUNT;
+    c->atom.overlay = OVERLAY_SPECIES;
+    c->atom.over =
+        pin < PIN_MAX ? c->pins[pin] : (struct pin){c->z, c->charge + 1};
+}
+
 static enum effect take(struct ui *ui)
 {
     struct chooser *c = &ui->chooser;
@@ -150,6 +219,13 @@ static enum effect take(struct ui *ui)
     } else if (kind == CHOOSER_UNIT) {
         const struct unit *unit = unit_at((size_t)value);
         ui->choice.units[unit->dimension] = unit;
+    } else if (kind == CHOOSER_METHOD) {
+        ui->choice.atom.method.functional =
+            (enum functional)(value / RELATIVITY_COUNT);
+        ui->choice.atom.method.relativity =
+            (enum relativity)(value % RELATIVITY_COUNT);
+    } else if (kind == CHOOSER_OVERLAY) {
+        take_overlay(ui, value);
     } else {
         export_prompt(ui, (enum export_scope)value);
     }

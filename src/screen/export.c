@@ -4,8 +4,10 @@
 #include <stdlib.h>
 
 #include "base/text.h"
+#include "export/atom.h"
 #include "export/compare.h"
 #include "export/rows.h"
+#include "screen/atom.h"
 #include "screen/parts.h"
 #include "study/facts.h"
 
@@ -73,8 +75,20 @@ static bool export_comparison(const struct ui *ui, FILE *out, struct status *st)
     return compare_write(out, EXPORT_CSV, &ui->comparison, st);
 }
 
+static bool export_atom(const struct ui *ui, FILE *out, struct status *st)
+{
+    const struct atom_report *report = atom_solved(ui, SLOT_CHOSEN);
+    if (!report)
+        return status_fail(st, STATUS_CONVERGENCE, "the atom is not solved");
+    atom_write(out, EXPORT_CSV, report, ui_unit(ui, QUANTITY_IONIZATION),
+               ui_unit(ui, QUANTITY_RADIUS));
+    return true;
+}
+
 bool ui_export(const struct ui *ui, FILE *out, struct status *st)
 {
+    if (ui->scope == SCOPE_ATOM)
+        return export_atom(ui, out, st);
     struct rows rows = {0};
     if (ui->scope == SCOPE_COMPARE)
         return export_comparison(ui, out, st);
@@ -102,9 +116,25 @@ static void add_units(const struct ui *ui, struct text *t)
     }
 }
 
+static void atom_command(const struct ui *ui, struct text *t)
+{
+    const struct choice *c = &ui->choice;
+    text_add(t, "outershell atom");
+    add_species(t, c->z, c->charge);
+    text_addf(t, " --functional %s --relativity %s --unit %s,%s --format csv",
+              functional_id(c->atom.method.functional),
+              relativity_id(c->atom.method.relativity),
+              ui_unit(ui, QUANTITY_RADIUS)->id,
+              ui_unit(ui, QUANTITY_IONIZATION)->id);
+}
+
 void ui_export_command(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
+    if (ui->scope == SCOPE_ATOM) {
+        atom_command(ui, t);
+        return;
+    }
     char label[SUBSHELL_TEXT_MAX];
     bool compare = ui->scope == SCOPE_COMPARE;
     text_add(t, compare ? "outershell compare" : "outershell list");

@@ -6,9 +6,10 @@
 
 #define ON_MAP (1u << SCREEN_MAP)
 #define ON_COMPARE (1u << SCREEN_COMPARE)
+#define ON_ATOM (1u << SCREEN_ATOM)
 #define ON_SOURCES (1u << SCREEN_SOURCES)
 #define ON_KEYS (1u << SCREEN_KEYS)
-#define ON_DATA (ON_MAP | ON_COMPARE)
+#define ON_DATA (ON_MAP | ON_COMPARE | ON_ATOM)
 #define ON_ALL (ON_DATA | ON_SOURCES | ON_KEYS)
 
 /* Capital letters and digits are missing on purpose: they start a jump. */
@@ -23,10 +24,26 @@ static const struct key_row rows[] = {
     {ACTION_SHOWN, 'v', 0, "v", "show",
      "colour by the model's value, the reference, or the residual", true,
      ON_MAP},
+    {ACTION_CURVES, 'v', 0, "v", "curves",
+     "draw the subshell, all subshells, or the charge within r", true, ON_ATOM},
+    {ACTION_OVERLAY, 'n', 0, "n", "overlay",
+     "lay another atom, equation or model's orbital over this one", true,
+     ON_ATOM},
+    {ACTION_METHOD, 'b', 0, "b", "method", "choose functional and equation",
+     true, ON_ATOM},
+    {ACTION_WHOLE, 'z', 0, "z", "range",
+     "the axis of r from near the subshell on, or from the nucleus", true,
+     ON_ATOM},
+    {ACTION_AXIS, 'g', 0, "g", "axis", "logarithmic or square-root axis of r",
+     true, ON_ATOM},
+    {ACTION_DOTS, '.', 0, ".", "dots",
+     "draw curves in braille dots, or in blocks", false, ON_ATOM},
     {ACTION_PIN, 'p', 0, "p", "pin", "pin or unpin the selected species", true,
      ON_DATA},
     {ACTION_COMPARE, 'c', 0, "c", "compare", "the pinned species side by side",
      true, ON_ALL},
+    {ACTION_ATOM, 'a', 0, "a", "atom", "the self-consistent atom", true,
+     ON_ALL},
     {ACTION_EXPORT, 'e', 0, "e", "export", "write what is shown to a CSV file",
      true, ON_DATA},
     {ACTION_CHARGE_UP, '+', 0, "+", "charge", "one electron less", true,
@@ -54,7 +71,8 @@ static const struct key_row rows[] = {
     {ACTION_GROUP3, 'y', 0, "y", "group 3",
      "group 3 as Sc Y Lu Lr or as Sc Y La Ac", false, ON_MAP},
     {ACTION_OPEN, 0, KEY_CODE_ENTER, "Enter", "details",
-     "grid or pane, where only one fits", false, ON_MAP},
+     "grid or pane, table or plots, where only one fits; goes on solving",
+     false, ON_MAP | ON_ATOM},
     {ACTION_BACK, 0, KEY_CODE_ESCAPE, "Esc", "back", "back to the map", false,
      ON_ALL},
     {ACTION_MOUSE, 'i', 0, "i", "mouse",

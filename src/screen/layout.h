@@ -42,4 +42,18 @@ struct map_layout layout_map(int rows, int columns, enum grid_width wanted);
 struct area layout_cell(const struct map_layout *layout, int z,
                         enum grid_group3 group3);
 
+/* The screen Atom: a table of subshells, numbers at the cursor, plots. In
+ * FORM_SINGLE table and plots have the same area, one is shown at a time.
+ * levels: energies and levels below the table; charge: the second plot. Areas
+ * with no rows are absent. Row 0 is the title, row 1 the state, the last two
+ * are message and keys. */
+struct atom_layout {
+    enum map_form form;
+    bool wide; /* the table has all its columns */
+    struct area table, levels, cursor, plot, charge;
+};
+
+/* shells: subshells of the atom. */
+struct atom_layout layout_atom(int rows, int columns, int shells);
+
 #endif

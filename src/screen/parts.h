@@ -25,6 +25,7 @@ enum action {
     ACTION_KEYS,
     ACTION_MAP,
     ACTION_COMPARE,
+    ACTION_ATOM,
     ACTION_SOURCES,
     ACTION_JUMP,
     ACTION_QUANTITY,
@@ -33,6 +34,12 @@ enum action {
     ACTION_SHOWN,
     ACTION_SUBSHELL,
     ACTION_UNIT,
+    ACTION_METHOD,
+    ACTION_OVERLAY,
+    ACTION_CURVES,
+    ACTION_AXIS,
+    ACTION_WHOLE,
+    ACTION_DOTS,
     ACTION_CHARGE_UP,
     ACTION_CHARGE_DOWN,
     ACTION_PIN,
@@ -73,6 +80,7 @@ struct screen_ops {
 };
 extern const struct screen_ops screen_map;
 extern const struct screen_ops screen_compare;
+extern const struct screen_ops screen_atom;
 extern const struct screen_ops screen_sources;
 extern const struct screen_ops screen_keys;
 
@@ -81,6 +89,10 @@ const char *ui_screen_name(enum screen_id screen);
 
 /* A click selects, the wheel goes to the next element or scrolls. */
 enum effect map_mouse(struct ui *ui, const struct event *event);
+
+/* A click moves the cursor or chooses a subshell, the wheel goes to the next
+ * element. */
+enum effect atom_mouse(struct ui *ui, const struct event *event);
 
 /* Rows are filled from the choice: the ask for an element under the chosen
  * model, quantity, reference, subshell and unit. False when the element has no

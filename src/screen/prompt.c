@@ -165,6 +165,9 @@ void export_prompt(struct ui *ui, enum export_scope scope)
         text_addf(&t, "%s-%s.csv",
                   ui->choice.model ? ui->choice.model->id : "reference",
                   quantity);
+    else if (scope == SCOPE_ATOM)
+        text_addf(&t, "%s-atom.csv",
+                  ion_print(ui->choice.z, ui->choice.charge, ion));
     else
         text_add(&t, "compare.csv");
     prompt_open(ui, PROMPT_FILE, name);

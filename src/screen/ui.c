@@ -8,12 +8,12 @@
 
 #include "export/compare.h"
 #include "export/rows.h"
+#include "screen/atom.h"
 #include "screen/parts.h"
 
 static const struct screen_ops *const screens[] = {
-    [SCREEN_MAP] = &screen_map,
-    [SCREEN_COMPARE] = &screen_compare,
-    [SCREEN_SOURCES] = &screen_sources,
+    [SCREEN_MAP] = &screen_map,   [SCREEN_COMPARE] = &screen_compare,
+    [SCREEN_ATOM] = &screen_atom, [SCREEN_SOURCES] = &screen_sources,
     [SCREEN_KEYS] = &screen_keys,
 };
 
@@ -27,6 +27,7 @@ void ui_init(struct ui *ui, struct study *study)
                 .quantity = QUANTITY_ZEFF,
                 .model = model_find("slater"),
                 .shown = SHOWN_VALUE,
+                .atom = {.method = atom_method_default},
             },
         .screen = SCREEN_MAP,
         .wanting = true,
@@ -38,6 +39,8 @@ void ui_init(struct ui *ui, struct study *study)
 void ui_clear(struct ui *ui)
 {
     comparison_clear(&ui->comparison);
+    atom_work_free(ui->atom);
+    ui->atom = NULL;
 }
 
 void ui_report(struct ui *ui, bool caution, const char *format, ...)
@@ -211,6 +214,8 @@ static enum effect open_export(struct ui *ui)
 {
     if (ui->screen == SCREEN_COMPARE)
         export_prompt(ui, SCOPE_COMPARE);
+    else if (ui->screen == SCREEN_ATOM)
+        export_prompt(ui, SCOPE_ATOM);
     else
         chooser_open(ui, CHOOSER_EXPORT);
     return EFFECT_REDRAW;
@@ -228,6 +233,8 @@ static bool open_list(struct ui *ui, enum action action)
         {ACTION_REFERENCE, CHOOSER_REFERENCE},
         {ACTION_SUBSHELL, CHOOSER_SUBSHELL},
         {ACTION_UNIT, CHOOSER_UNIT},
+        {ACTION_METHOD, CHOOSER_METHOD},
+        {ACTION_OVERLAY, CHOOSER_OVERLAY},
     };
     for (size_t i = 0; i < sizeof lists / sizeof lists[0]; i++)
         if (lists[i].action == action) {
@@ -242,10 +249,13 @@ static bool open_screen(struct ui *ui, enum action action)
 {
     if (action == ACTION_MAP ||
         (action == ACTION_BACK &&
-         (ui->screen == SCREEN_COMPARE || ui->screen == SCREEN_SOURCES)))
+         (ui->screen == SCREEN_COMPARE || ui->screen == SCREEN_ATOM ||
+          ui->screen == SCREEN_SOURCES)))
         go(ui, SCREEN_MAP);
     else if (action == ACTION_COMPARE)
         go(ui, SCREEN_COMPARE);
+    else if (action == ACTION_ATOM)
+        go(ui, SCREEN_ATOM);
     else if (action == ACTION_SOURCES)
         go(ui, SCREEN_SOURCES);
     else if (action == ACTION_KEYS && ui->screen != SCREEN_KEYS)
@@ -324,8 +334,8 @@ static enum effect act(struct ui *ui, enum action action)
         ui_report(ui, false, ui->mouse ? "mouse on" : "mouse off");
         return EFFECT_MOUSE;
     }
-    if (ui->screen != SCREEN_MAP && action >= ACTION_UP &&
-        action <= ACTION_PAGE_DOWN)
+    if (ui->screen != SCREEN_MAP && ui->screen != SCREEN_ATOM &&
+        action >= ACTION_UP && action <= ACTION_PAGE_DOWN)
         scroll(ui, action);
     enum effect effect = screens[ui->screen]->update(ui, action);
     return effect == EFFECT_NONE ? EFFECT_REDRAW : effect;
@@ -336,12 +346,17 @@ static bool starts_jump(const struct event *event, enum screen_id screen)
 {
     uint32_t c = event->character;
     return event->kind == EVENT_CHARACTER &&
-           (screen == SCREEN_MAP || screen == SCREEN_COMPARE) &&
+           (screen == SCREEN_MAP || screen == SCREEN_COMPARE ||
+            screen == SCREEN_ATOM) &&
            ((c >= 'A' && c <= 'Z') || (c >= '1' && c <= '9'));
 }
 
 static enum effect interrupt(struct ui *ui)
 {
+    if (ui->screen == SCREEN_ATOM && atom_stop(ui)) {
+        ui_report(ui, false, "stopped; Enter goes on");
+        return EFFECT_REDRAW;
+    }
     if (study_progress(ui->study).total > 0) {
         study_stop(ui->study);
         ui->stopped = true;
@@ -373,7 +388,8 @@ static enum effect take_event(struct ui *ui, const struct event *event)
     if (ui->chooser.kind != CHOOSER_NONE)
         return chooser_update(ui, event);
     if (event->kind == EVENT_MOUSE)
-        return map_mouse(ui, event);
+        return ui->screen == SCREEN_ATOM ? atom_mouse(ui, event)
+                                         : map_mouse(ui, event);
     if (starts_jump(event, ui->screen)) {
         prompt_open(ui, PROMPT_JUMP, "");
         return prompt_update(ui, event);

@@ -7,6 +7,7 @@
 
 #include <stdio.h>
 
+#include "analysis/atom_report.h"
 #include "analysis/comparison.h"
 #include "base/text.h"
 #include "element/element.h"
@@ -20,7 +21,26 @@
 #define PIN_MAX COMPARISON_MAX
 
 /* Which screen is shown; order of screen_list in ui.c. */
-enum screen_id { SCREEN_MAP, SCREEN_COMPARE, SCREEN_SOURCES, SCREEN_KEYS };
+enum screen_id {
+    SCREEN_MAP,
+    SCREEN_COMPARE,
+    SCREEN_ATOM,
+    SCREEN_SOURCES,
+    SCREEN_KEYS
+};
+
+/* What the screen Atom draws. */
+enum atom_curves { CURVES_SHELL, CURVES_ALL, CURVES_CHARGE, CURVES_COUNT };
+
+/* What is laid over the solved atom for comparison. */
+enum atom_overlay {
+    OVERLAY_NONE,
+    OVERLAY_SPECIES,    /* another element or ion, by the same method */
+    OVERLAY_RELATIVITY, /* the same species by the other equation */
+    OVERLAY_SLATER,     /* Slater-type orbitals by Slater's rules */
+    OVERLAY_ZETA,       /* orbitals of single-zeta Hartree-Fock */
+    OVERLAY_COUNT
+};
 
 /* What colours the map. */
 enum shown { SHOWN_VALUE, SHOWN_REFERENCE, SHOWN_RESIDUAL, SHOWN_COUNT };
@@ -37,7 +57,13 @@ enum effect {
 };
 
 /* What an export holds. */
-enum export_scope { SCOPE_ROW, SCOPE_PINS, SCOPE_SHEET, SCOPE_COMPARE };
+enum export_scope {
+    SCOPE_ROW,
+    SCOPE_PINS,
+    SCOPE_SHEET,
+    SCOPE_COMPARE,
+    SCOPE_ATOM
+};
 
 /* A line being typed. */
 enum prompt_kind { PROMPT_NONE, PROMPT_JUMP, PROMPT_FILE, PROMPT_OVERWRITE };
@@ -56,7 +82,9 @@ enum chooser_kind {
     CHOOSER_REFERENCE,
     CHOOSER_SUBSHELL,
     CHOOSER_UNIT,
-    CHOOSER_EXPORT
+    CHOOSER_EXPORT,
+    CHOOSER_METHOD,
+    CHOOSER_OVERLAY
 };
 #define CHOOSER_MAX 64
 struct chooser {
@@ -68,6 +96,21 @@ struct chooser {
 
 struct pin {
     int z, charge;
+};
+
+/* What the screen Atom shows, and how. n, l: the subshell in question; n = 0:
+ * the outermost, n = -1: all electrons. over: of OVERLAY_SPECIES. radius: of
+ * the cursor, bohr; 0: at the maximum of the subshell. */
+struct atom_choice {
+    struct atom_method method;
+    enum atom_curves curves;
+    enum atom_overlay overlay;
+    struct pin over;
+    int n, l;
+    double radius;
+    bool root;    /* square-root axis of r in place of the logarithmic one */
+    bool braille; /* curves in braille dots */
+    bool whole;   /* r from the nucleus on, not from near the subshell */
 };
 
 /* What is chosen; everything that a remembered view keeps. */
@@ -84,6 +127,7 @@ struct choice {
     enum grid_group3 group3;
     int pin_count;
     struct pin pins[PIN_MAX];
+    struct atom_choice atom;
 };
 
 /* One element on the map, prepared once per choice. */
@@ -95,6 +139,8 @@ struct map_cell {
     bool has_percent; /* of the residual */
     double percent;
 };
+
+struct atom_work;
 
 struct ui {
     struct study *study;
@@ -124,6 +170,7 @@ struct ui {
     struct map_cell cells[Z_MAX + 1];
     struct scale scale;
     struct summary block_summary[4]; /* s p d f, the whole block */
+    struct atom_work *atom;          /* of the screen Atom, when it was used */
 };
 
 /* A ui over a study, with the first view: Z_eff by Slater's rules. The study

@@ -14,6 +14,12 @@ static const char *const shown_names[SHOWN_COUNT] = {
     [SHOWN_RESIDUAL] = "residual",
 };
 
+static const char *const curves_names[CURVES_COUNT] = {
+    [CURVES_SHELL] = "subshell",
+    [CURVES_ALL] = "all",
+    [CURVES_CHARGE] = "charge",
+};
+
 void ui_save_view(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
@@ -37,6 +43,11 @@ void ui_save_view(const struct ui *ui, struct text *t)
     for (int i = 0; i < c->pin_count; i++)
         text_addf(t, "pin %s\n",
                   ion_print(c->pins[i].z, c->pins[i].charge, ion));
+    text_addf(t, "functional %s\n", functional_id(c->atom.method.functional));
+    text_addf(t, "relativity %s\n", relativity_id(c->atom.method.relativity));
+    text_addf(t, "curves %s\n", curves_names[c->atom.curves]);
+    text_addf(t, "axis %s\n", c->atom.root ? "root" : "log");
+    text_addf(t, "dots %s\n", c->atom.braille ? "on" : "off");
     text_addf(t, "mouse %s\n", ui->mouse ? "on" : "off");
 }
 
@@ -139,6 +150,37 @@ static void load_mouse(struct ui *ui, const char *value)
     ui->mouse = strcmp(value, "on") == 0;
 }
 
+static void load_functional(struct ui *ui, const char *value)
+{
+    for (int f = 0; f < FUNCTIONAL_COUNT; f++)
+        if (strcmp(value, functional_id((enum functional)f)) == 0)
+            ui->choice.atom.method.functional = (enum functional)f;
+}
+
+static void load_relativity(struct ui *ui, const char *value)
+{
+    for (int r = 0; r < RELATIVITY_COUNT; r++)
+        if (strcmp(value, relativity_id((enum relativity)r)) == 0)
+            ui->choice.atom.method.relativity = (enum relativity)r;
+}
+
+static void load_curves(struct ui *ui, const char *value)
+{
+    for (int c = 0; c < CURVES_COUNT; c++)
+        if (strcmp(value, curves_names[c]) == 0)
+            ui->choice.atom.curves = (enum atom_curves)c;
+}
+
+static void load_axis(struct ui *ui, const char *value)
+{
+    ui->choice.atom.root = strcmp(value, "root") == 0;
+}
+
+static void load_dots(struct ui *ui, const char *value)
+{
+    ui->choice.atom.braille = strcmp(value, "on") == 0;
+}
+
 /* In the order in which they are written: a model is judged by the quantity
  * before it. */
 static const struct {
@@ -156,6 +198,11 @@ static const struct {
     {"columns", load_columns},
     {"group3", load_group3},
     {"pin", load_pin},
+    {"functional", load_functional},
+    {"relativity", load_relativity},
+    {"curves", load_curves},
+    {"axis", load_axis},
+    {"dots", load_dots},
     {"mouse", load_mouse},
 };
 

@@ -1,6 +1,7 @@
 /* SPDX-License-Identifier: MIT */
 /* What the screens ask the models that iterate to solve, in the order in which
  * someone looks: the selected species first, then the map. */
+#include "screen/atom.h"
 #include "screen/parts.h"
 
 static void want(struct ui *ui, int z, int charge, const struct model *model,
@@ -20,6 +21,8 @@ static void want(struct ui *ui, int z, int charge, const struct model *model,
 static void want_shown(struct ui *ui)
 {
     const struct choice *c = &ui->choice;
+    if (ui->screen == SCREEN_ATOM)
+        return;
     if (c->model && !c->model->closed && ui->screen == SCREEN_MAP)
         for (int z = 1; z <= Z_MAX; z++)
             want(ui, z, c->charge, c->model, false);
@@ -32,11 +35,16 @@ static void want_shown(struct ui *ui)
 
 bool ui_has_work(const struct ui *ui)
 {
-    return study_progress(ui->study).total > 0 || ui->wanting;
+    return atom_pending(ui) || study_progress(ui->study).total > 0 ||
+           ui->wanting;
 }
 
 bool ui_step(struct ui *ui, bool *changed)
 {
+    if (atom_pending(ui)) {
+        atom_step_work(ui, changed);
+        return true;
+    }
     struct study_progress before = study_progress(ui->study);
     if (ui->wanting && !ui->stopped)
         want_shown(ui);
