@@ -119,7 +119,7 @@ bool utf8_is_control(uint32_t code)
 
 static char ascii_lower(char c)
 {
-    return c >= 'A' && c <= 'Z' ? (char)(c - 'A' + 'a') : c;
+    return (char)(c >= 'A' && c <= 'Z' ? c - 'A' + 'a' : c);
 }
 
 bool text_starts_ignoring_case(const char *s, const char *prefix)

@@ -1,5 +1,6 @@
 /* SPDX-License-Identifier: MIT */
 /* `list`: one row per element, quantity and model. */
+#include <assert.h>
 #include <stdlib.h>
 
 #include "cli/commands.h"
@@ -63,7 +64,9 @@ static bool gather_all(struct request *r, struct gathered *g, struct status *st)
 bool cli_list(struct request *r, struct status *st)
 {
     struct output out;
-    struct gathered g = {calloc(rows_wanted(r), sizeof *g.rows), 0};
+    size_t wanted = rows_wanted(r);
+    assert(wanted > 0); /* at least one atom and one quantity are chosen */
+    struct gathered g = {calloc(wanted, sizeof *g.rows), 0};
     if (!g.rows)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     bool ok = output_check(r, st) && gather_all(r, &g, st) &&
