@@ -231,9 +231,12 @@ static bool check_belongs(const struct call *call, struct status *st)
 static bool check_operands(const struct call *call, struct status *st)
 {
     const struct command *c = call->command;
-    if (c->most >= 0 && call->operand_count > c->most)
+    if (c->most > 0 && call->operand_count > c->most)
+        return status_fail(st, STATUS_USAGE, "%s: too much; %s takes %s alone",
+                           call->operands[c->most], name_of(c), c->operands);
+    if (c->most == 0 && call->operand_count > 0)
         return status_fail(st, STATUS_USAGE, "%s: %s takes no operand",
-                           call->operands[c->most], name_of(c));
+                           call->operands[0], name_of(c));
     if (call->operand_count < c->least)
         return status_fail(st, STATUS_USAGE, "%s: names nothing; expected %s",
                            name_of(c), c->operands);

@@ -11,5 +11,6 @@ TCase *call_cases(void);
 TCase *output_cases(void);
 TCase *residual_cases(void);
 TCase *stream_cases(void);
+TCase *atom_cases(void);
 
 #endif

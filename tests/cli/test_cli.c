@@ -11,5 +11,6 @@ int main(void)
     suite_add_tcase(suite, output_cases());
     suite_add_tcase(suite, residual_cases());
     suite_add_tcase(suite, stream_cases());
+    suite_add_tcase(suite, atom_cases());
     return run_suite(suite);
 }
