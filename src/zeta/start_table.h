@@ -7,7 +7,7 @@
 #define START_CHARGE_COUNT 19 /* 1s … 7s, 2p … 7p, 3d … 6d, 4f, 5f */
 #define START_CURVATURE_COUNT 318
 #define START_SUBSHELLS 26 /* all n l with n <= 8, l <= 3 */
-#define START_VARIABLES (2 * START_SUBSHELLS)
+#define START_VARIABLES 52 /* an exponent and a rotation for each */
 
 /* Effective charge of one subshell: constant + by_z Z + the sum over the 19
  * subshells, in the order of the table, of by_electrons times the electrons in

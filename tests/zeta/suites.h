@@ -9,5 +9,6 @@ TCase *coupling_cases(void);
 TCase *slater_cases(void);
 TCase *energy_cases(void);
 TCase *zeta_cases(void);
+TCase *list_cases(void);
 
 #endif
