@@ -131,7 +131,7 @@ static void put_models(FILE *out)
 static void put_key(FILE *out, const char *name)
 {
     fputs(".It Sy ", out);
-    if (strchr("+-=/?", name[0]) && name[1] == '\0')
+    if (strchr(".,;:!()[]|+-=/?", name[0]) && name[1] == '\0')
         fprintf(out, "\\&%s", name[0] == '-' ? "\\-" : name);
     else
         fputs(name, out);

@@ -203,14 +203,26 @@ START_TEST(bibtex_entries_have_unique_keys_and_closed_braces)
 }
 END_TEST
 
-/* Where the locale is not installed the program sees the C locale, as a user
- * there would. */
+/* A locale with a decimal comma is made for the purpose where that can be
+ * done; else the program sees the C locale, as a user there would. */
 START_TEST(no_locale_brings_a_decimal_comma)
 {
     static const char *const calls[] = {
         "list " CLOSED " --format csv", "list Fe --format json " CLOSED,
         "list period:4 " CLOSED, "compare Fe Cr " CLOSED};
-    static const char *const german[] = {"LC_ALL=de_DE.UTF-8", NULL};
+    char folder[] = "/tmp/outershell-locale-XXXXXX";
+    char place[64];
+    char script[256];
+    ck_assert_ptr_nonnull(mkdtemp(folder));
+    snprintf(place, sizeof place, "LOCPATH=%s", folder);
+    snprintf(script, sizeof script,
+             "localedef -i de_DE -f UTF-8 %s/de_DE.UTF-8 >%s/log 2>&1", folder,
+             folder);
+    struct program maker = {
+        .path = "/bin/sh", .count = 2, .arguments = {"-c", script}};
+    struct program_result made = program_run(&maker);
+    program_free(&made);
+    const char *const german[] = {"LC_ALL=de_DE.UTF-8", place, NULL};
     static const char *const plain[] = {"LC_ALL=C", NULL};
     for (size_t i = 0; i < sizeof calls / sizeof calls[0]; i++) {
         char store[512];
@@ -224,6 +236,10 @@ START_TEST(no_locale_brings_a_decimal_comma)
         program_free(&a);
         program_free(&b);
     }
+    snprintf(script, sizeof script, "rm -r %s", folder);
+    made = program_run(&maker);
+    ck_assert_int_eq(made.status, 0);
+    program_free(&made);
 }
 END_TEST
 

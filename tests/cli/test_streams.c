@@ -244,14 +244,15 @@ START_TEST(closed_standard_streams_harm_no_file)
     scratch_begin(folder);
     snprintf(script, sizeof script,
              "'%s' list Fe -m shells --output a <&- >&- 2>&-; "
-             "'%s' list Xx --output b <&- >&- 2>&-; echo $?",
-             OUTERSHELL, OUTERSHELL);
+             "'%s' list Xx --output b <&- >&- 2>&-; echo $?; "
+             "'%s' list - --output b <&- 2>&-; echo $?",
+             OUTERSHELL, OUTERSHELL, OUTERSHELL);
     struct program p = {.path = "/bin/sh",
                         .count = 2,
                         .arguments = {"-c", script},
                         .folder = folder};
     struct program_result r = program_run(&p);
-    ck_assert_str_eq(r.out, "2\n");
+    ck_assert_str_eq(r.out, "2\n1\n");
     program_free(&r);
     char *text = text_of(folder, "a");
     ck_assert_ptr_nonnull(text);
