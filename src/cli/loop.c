@@ -150,20 +150,31 @@ static bool pending(const struct loop *loop)
     return client->has_work != NULL && client->has_work(client->state);
 }
 
+/* The result of short work in the same screen as what asked for it. */
+static void grant_grace(struct loop *loop)
+{
+    long long start = clock_ms();
+    while (!loop->quit && pending(loop) && !terminal_waiting(loop->terminal) &&
+           clock_ms() - start < loop->client->grace_ms)
+        work(loop);
+}
+
 bool loop_run(struct terminal *terminal, const struct loop_client *client,
               int *signal, struct status *st)
 {
     struct loop loop = {.terminal = terminal, .client = client};
     *signal = 0;
+    bool drawn = false; /* the first screen waits for nothing */
     bool ok = canvas_init(&loop.canvas, 0, 0, st);
     loop.canvas.ascii = terminal_ascii(terminal);
     if (ok)
         tell_size(&loop);
     while (ok && !loop.quit) {
-        if (loop.redraw && !draw(&loop, st)) {
-            ok = false;
+        if (loop.redraw && drawn)
+            grant_grace(&loop);
+        if (loop.redraw && !(ok = draw(&loop, st)))
             break;
-        }
+        drawn = true;
         bool busy = pending(&loop);
         struct terminal_news news = terminal_wait(terminal, busy ? 0 : -1);
         answer(&loop, &news);

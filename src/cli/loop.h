@@ -34,6 +34,11 @@ struct loop_client {
      * of a key. Both may be NULL when there is never any. */
     bool (*has_work)(void *state);
     void (*step)(void *state);
+
+    /* A redraw waits so long for pending work, unless a key waits: short work
+     * then shows its result in the same screen, without a flicker. 0: never.
+     */
+    int grace_ms;
 };
 
 /* Runs until update says quit, the terminal has gone, or a signal ends it.

@@ -102,7 +102,7 @@ static bool keep_view(const struct ui *ui, struct status *st)
 static bool run(struct session *s, const struct terminal_options *options,
                 int *signal, struct status *st)
 {
-    const struct loop_client client = {s, update, draw, has_work, step};
+    const struct loop_client client = {s, update, draw, has_work, step, 8};
     if (!terminal_open(&s->terminal, options, st))
         return false;
     bool ok = loop_run(s->terminal, &client, signal, st);

@@ -1,7 +1,9 @@
 /* SPDX-License-Identifier: MIT */
-/* Roles to curses pairs and attributes. At most one pair per role, so that
- * even a terminal with 64 pairs holds them all. */
+/* Roles to curses pairs and attributes; so few pairs that even a terminal with
+ * 64 of them holds them all. */
 #include "terminal/inside.h"
+
+enum { PAIRS_MAX = 60 };
 
 enum color_tier colors_capability(void)
 {
@@ -29,37 +31,52 @@ static attr_t style_of(unsigned style)
     return attributes;
 }
 
+/* Pairs given out so far; number i + 1 has these colours. */
+struct pairs {
+    struct paint list[PAIRS_MAX];
+    int count;
+};
+
 /* The pair of two colours: 0 for the terminal's own, an earlier one when the
- * colours are the same, -1 when the terminal refuses. */
-static int pair_of(const struct paint *paint, const struct paint *earlier,
-                   const int *pairs, int count, int *last)
+ * colours are the same, -1 when there are too many or the terminal refuses. */
+static int pair_of(struct pairs *pairs, int fg, int bg)
 {
-    int fg = paint->foreground;
-    int bg = paint->background;
     if (fg == PAINT_DEFAULT && bg == PAINT_DEFAULT)
         return 0;
-    for (int i = 0; i < count; i++)
-        if (earlier[i].foreground == fg && earlier[i].background == bg)
-            return pairs[i];
-    if (init_extended_pair(*last + 1, fg, bg) == ERR)
+    for (int i = 0; i < pairs->count; i++)
+        if (pairs->list[i].foreground == fg && pairs->list[i].background == bg)
+            return i + 1;
+    if (pairs->count == PAIRS_MAX ||
+        init_extended_pair(pairs->count + 1, fg, bg) == ERR)
         return -1;
-    return ++*last;
+    pairs->list[pairs->count++] = (struct paint){fg, bg, 0};
+    return pairs->count;
 }
 
 static bool assign(struct terminal *t)
 {
+    struct pairs pairs = {.count = 0};
     struct paint paints[ROLE_COUNT];
-    int last = 0;
     for (int i = 0; i < ROLE_COUNT; i++) {
-        paints[i] = palette_paint((enum role)i, t->scheme, t->tier);
-        bool half = (paints[i].foreground == PAINT_DEFAULT) !=
-                    (paints[i].background == PAINT_DEFAULT);
+        struct paint *p = &paints[i];
+        *p = palette_paint((enum role)i, t->scheme, t->tier);
+        bool half = (p->foreground == PAINT_DEFAULT) !=
+                    (p->background == PAINT_DEFAULT);
         if (half && !t->has_default)
-            paints[i].foreground = paints[i].background = PAINT_DEFAULT;
-        t->style[i] = style_of(paints[i].style);
-        t->pair[i] = pair_of(&paints[i], paints, t->pair, i, &last);
+            p->foreground = p->background = PAINT_DEFAULT;
+        t->style[i] = style_of(p->style);
+        t->pair[i] = pair_of(&pairs, p->foreground, p->background);
         if (t->pair[i] < 0)
             return false;
+    }
+    /* Exchanged colours cost fewer bytes than the reverse attribute, which
+     * makes curses set everything anew; where pairs run out it does. */
+    for (int i = 0; i < ROLE_COUNT; i++) {
+        const struct paint *p = &paints[i];
+        bool both = p->foreground != PAINT_DEFAULT &&
+                    p->background != PAINT_DEFAULT && p->style == 0;
+        t->turned[i] =
+            both ? pair_of(&pairs, p->background, p->foreground) : -1;
     }
     return true;
 }
@@ -70,6 +87,8 @@ void colors_assign(struct terminal *t)
         return;
     t->tier = TIER_MONO; /* no pairs: every role still has its attributes */
     if (!assign(t))
-        for (int i = 0; i < ROLE_COUNT; i++)
+        for (int i = 0; i < ROLE_COUNT; i++) {
             t->pair[i] = 0;
+            t->turned[i] = -1;
+        }
 }

@@ -36,6 +36,7 @@ struct terminal {
     bool mouse;
     struct capability paste_on, paste_off;
     int pair[ROLE_COUNT];
+    int turned[ROLE_COUNT]; /* the pair with its colours exchanged; -1: none */
     attr_t style[ROLE_COUNT];
 
     /* painting */

@@ -12,12 +12,14 @@ static cchar_t curses_cell(const struct terminal *t, const struct cell *cell)
 {
     wchar_t text[2] = {(wchar_t)cell->character, L'\0'};
     attr_t style = t->style[cell->role];
-    if (cell->reverse)
+    /* the pair as an int beside: a short would wrap */
+    int pair = t->pair[cell->role];
+    if (cell->reverse && t->turned[cell->role] >= 0)
+        pair = t->turned[cell->role];
+    else if (cell->reverse)
         style ^= A_REVERSE;
     cchar_t out;
     memset(&out, 0, sizeof out);
-    /* the pair as an int beside: a short would wrap */
-    int pair = t->pair[cell->role];
     if (setcchar(&out, text, style, 0, &pair) == ERR)
         setcchar(&out, L"?", style, 0, &pair);
     return out;

@@ -233,6 +233,10 @@ struct paint palette_paint(enum role role, enum scheme scheme,
     paint.foreground = color_of(text_color(c, role), tier);
     paint.background =
         color_of(role == ROLE_FIELD ? c->field : c->ground, tier);
+    /* one mark is enough, and each change of attributes costs bytes */
+    bool colored = paint.foreground != color_of(c->ink, tier);
+    if (colored && tier >= TIER_256 && role != ROLE_CAUTION)
+        paint.style &= ~(unsigned)PAINT_BOLD;
     return paint;
 }
 

@@ -237,6 +237,13 @@ struct terminal_news terminal_wait(struct terminal *t, int timeout_ms)
     return news;
 }
 
+bool terminal_waiting(const struct terminal *t)
+{
+    struct pollfd fds[2] = {{.fd = t->input_fd, .events = POLLIN},
+                            {.fd = guard_fd(), .events = POLLIN}};
+    return poll(fds, 2, 0) != 0;
+}
+
 /* The screen again, after the shell or another program had the terminal. */
 static void enter(struct terminal *t)
 {

@@ -69,6 +69,9 @@ struct terminal_news {
  * looks). */
 struct terminal_news terminal_wait(struct terminal *terminal, int timeout_ms);
 
+/* True when input or a signal waits already. */
+bool terminal_waiting(const struct terminal *terminal);
+
 /* The next event without waiting (a lone Escape takes the escape delay); false
  * when all are read. However many size changes arrive, they are one
  * EVENT_RESIZE, behind the keys. What the terminal sends that no key is known

@@ -55,17 +55,21 @@ struct bench bench_start(char *const *argv)
     return b;
 }
 
-struct burst bench_read(struct bench *b, int quiet_ms)
+struct burst bench_read(struct bench *b, int quiet_ms, const char *mark)
 {
+    static char kept[1 << 16];
     struct burst burst = {0};
     struct pollfd fd = {.fd = b->master, .events = POLLIN};
-    while (poll(&fd, 1, quiet_ms) > 0) {
-        char bytes[16384];
-        ssize_t n = read(b->master, bytes, sizeof bytes);
+    while (poll(&fd, 1, quiet_ms) > 0 && burst.bytes < sizeof kept - 1) {
+        ssize_t n =
+            read(b->master, kept + burst.bytes, sizeof kept - 1 - burst.bytes);
         if (n <= 0)
             break; /* the program has ended */
         burst.bytes += (size_t)n;
         burst.last = bench_now();
+        kept[burst.bytes] = '\0';
+        if (mark != NULL && strstr(kept, mark) != NULL)
+            break;
     }
     return burst;
 }
@@ -79,7 +83,7 @@ void bench_send(struct bench *b, const char *bytes)
 void bench_end(struct bench *b)
 {
     kill(b->pid, SIGTERM);
-    bench_read(b, 200);
+    bench_read(b, 200, NULL);
     kill(b->pid, SIGKILL);
     waitpid(b->pid, NULL, 0);
     close(b->master);

@@ -11,7 +11,8 @@ struct bench {
     double started; /* seconds */
 };
 
-/* What came until nothing came for a while, or the program ended. */
+/* What came until nothing came for a while, the program ended, or the mark
+ * (unless NULL) had come. */
 struct burst {
     size_t bytes;
     double last; /* seconds, when the last of them came; 0: none did */
@@ -22,7 +23,7 @@ double bench_now(void);
 /* Starts argv (NULL at the end) in an environment of its own; ends the
  * benchmark when it cannot. */
 struct bench bench_start(char *const *argv);
-struct burst bench_read(struct bench *bench, int quiet_ms);
+struct burst bench_read(struct bench *bench, int quiet_ms, const char *mark);
 void bench_send(struct bench *bench, const char *bytes);
 /* Ends the program, by force if it must. */
 void bench_end(struct bench *bench);

@@ -209,7 +209,7 @@ int main(int argc, char **argv)
     take_options(argc, argv, &options);
     d.typed = text_over(d.field, sizeof d.field);
     d.mouse = options.mouse;
-    struct loop_client client = {&d, update, draw, has_work, step};
+    struct loop_client client = {&d, update, draw, has_work, step, 4};
     bool ok = terminal_open(&d.terminal, &options, &st);
     if (ok) {
         ok = loop_run(d.terminal, &client, &signal, &st);
