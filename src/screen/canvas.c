@@ -191,6 +191,13 @@ static bool is_blank(const struct cell *cell, bool roles)
     return cell->character == ' ';
 }
 
+static char letter_of(const struct cell *cell)
+{
+    if (cell->reverse)
+        return '@';
+    return role_letter((enum role)cell->role);
+}
+
 /* One row of either grid; gives the place behind it. */
 static char *row_to_text(const struct canvas *canvas, int row, bool roles,
                          char *out)
@@ -204,8 +211,7 @@ static char *row_to_text(const struct canvas *canvas, int row, bool roles,
         if (!roles)
             out += utf8_encode(cells[c].character, out);
         else
-            *out++ =
-                cells[c].reverse ? '@' : role_letter((enum role)cells[c].role);
+            *out++ = letter_of(&cells[c]);
     }
     *out++ = '\n';
     return out;

@@ -3,6 +3,7 @@
  * since term.h makes macros of words such as columns. */
 #include "terminal/inside.h"
 
+#include <stdint.h>
 #include <stdlib.h>
 #include <string.h>
 #include <term.h>
@@ -15,15 +16,16 @@ static void printable_term(char out[64])
     const char *term = getenv("TERM");
     struct text t = text_over(out, 64);
     for (; term != NULL && *term; term++) {
-        char c = *term > ' ' && *term <= '~' ? *term : '?';
-        text_add_bytes(&t, &c, 1);
+        bool plain = *term > ' ' && *term <= '~';
+        text_add_bytes(&t, plain ? term : "?", 1);
     }
 }
 
-static bool has_string(const char *name)
+/* NULL when the terminal has no such string; curses also says -1. */
+static const char *string_of(const char *name)
 {
     const char *value = tigetstr(name);
-    return value != NULL && value != (const char *)-1;
+    return (intptr_t)value == -1 ? NULL : value;
 }
 
 bool capability_check(int fd, struct status *st)
@@ -42,7 +44,7 @@ bool capability_check(int fd, struct status *st)
             "entry is missing; many more are in the package "
             "ncurses-term)" NO_SCREEN_HINT,
             term);
-    bool usable = found == 1 && has_string("cup");
+    bool usable = found == 1 && string_of("cup") != NULL;
     if (cur_term != NULL)
         del_curterm(cur_term);
     if (!usable)
@@ -56,9 +58,7 @@ bool capability_check(int fd, struct status *st)
 /* Appends a capability without its delays ("$<5/>"). */
 static void add_capability(struct text *out, const char *value)
 {
-    if (value == NULL || value == (const char *)-1)
-        return;
-    while (*value) {
+    while (value != NULL && *value) {
         const char *end =
             value[0] == '$' && value[1] == '<' ? strchr(value, '>') : NULL;
         if (end != NULL) {
@@ -74,7 +74,7 @@ struct capability capability_get(const char *name)
 {
     struct capability c = {.length = 0};
     struct text t = text_over(c.bytes, sizeof c.bytes);
-    add_capability(&t, tigetstr(name));
+    add_capability(&t, string_of(name));
     c.length = t.cut ? 0 : t.length;
     return c;
 }
@@ -85,16 +85,17 @@ struct guard_rescue capability_rescue(const struct terminal *t)
         .fd = t->output_fd, .modes = t->modes, .has_modes = t->has_modes};
     struct text out = text_over(r.reset, sizeof r.reset);
     text_add_bytes(&out, t->paste_off.bytes, t->paste_off.length);
-    if (has_string("XM"))
-        add_capability(
-            &out, tparm(tigetstr("XM"), 0L, 0L, 0L, 0L, 0L, 0L, 0L, 0L, 0L));
-    else if (has_string("kmous"))
+    const char *mouse = string_of("XM");
+    if (mouse != NULL)
+        add_capability(&out, tparm(mouse, 0L, 0L, 0L, 0L, 0L, 0L, 0L, 0L, 0L));
+    else if (string_of("kmous") != NULL)
         text_add(&out, "\033[?1000l");
     static const char *const names[] = {"rmkx", "sgr0", "op", "cnorm"};
     for (size_t i = 0; i < sizeof names / sizeof names[0]; i++)
-        add_capability(&out, tigetstr(names[i]));
-    if (has_string("rmcup"))
-        add_capability(&out, tigetstr("rmcup"));
+        add_capability(&out, string_of(names[i]));
+    const char *leave = string_of("rmcup");
+    if (leave != NULL)
+        add_capability(&out, leave);
     else
         text_add(&out, "\r\n");
     r.reset_length = out.length;

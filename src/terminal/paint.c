@@ -36,8 +36,9 @@ static void paint_row(struct terminal *t, const struct canvas *canvas, int row,
                       int columns)
 {
     cchar_t run[CANVAS_COLUMNS_MAX];
-    const struct cell *new = &canvas->cells[row * canvas->columns];
-    struct cell *old = &t->shown.cells[row * t->shown.columns];
+    const struct cell *new =
+        &canvas->cells[(size_t)row * (size_t)canvas->columns];
+    struct cell *old = &t->shown.cells[(size_t)row * (size_t)t->shown.columns];
     for (int c = 0; c < columns; c++) {
         int first = c;
         while (c < columns && (t->everything || !same(&new[c], &old[c]))) {

@@ -14,27 +14,26 @@ enum { BLACK = 16, WHITE = 231, CUBE = 16, GREYS = 232, FEW_CLASSES = 5 };
  * white, else black, whichever has the higher contrast (at least 4.58:1). */
 struct shade {
     uint32_t rgb; /* TIER_DIRECT */
-    bool rgb_white;
-    int index; /* TIER_256 */
-    bool index_white;
+    int index;    /* TIER_256 */
+    bool rgb_white, index_white;
 };
 
 /* Plum through blue and teal to pale green; lightness rises strictly. */
 static const struct shade ramp[RAMP_STEPS] = {
-    {0x420B5F, true, 53, true},    {0x422B8B, true, 55, true},
-    {0x2F4EA9, true, 25, true},    {0x1E72AC, true, 27, true},
-    {0x2890AF, false, 33, false},  {0x31AEB5, false, 38, false},
-    {0x3ACCB4, false, 43, false},  {0x6AE8A3, false, 119, false},
-    {0xB9FB93, false, 194, false},
+    {0x420B5F, 53, true, true},    {0x422B8B, 55, true, true},
+    {0x2F4EA9, 25, true, true},    {0x1E72AC, 27, true, true},
+    {0x2890AF, 33, false, false},  {0x31AEB5, 38, false, false},
+    {0x3ACCB4, 43, false, false},  {0x6AE8A3, 119, false, false},
+    {0xB9FB93, 194, false, false},
 };
 
 /* Blue below, orange above, the middle neutral; both sides equally light. */
 static const struct shade balance[BALANCE_STEPS] = {
-    {0x306CB6, true, 61, true},    {0x5A8DCE, false, 68, false},
-    {0x8BAEDA, false, 110, false}, {0xBCCEE5, false, 153, false},
-    {0xEEEEEE, false, 255, false}, {0xE0C6B5, false, 187, false},
-    {0xD09F7D, false, 144, false}, {0xBF7743, false, 166, false},
-    {0xA45300, true, 94, true},
+    {0x306CB6, 61, true, true},    {0x5A8DCE, 68, false, false},
+    {0x8BAEDA, 110, false, false}, {0xBCCEE5, 153, false, false},
+    {0xEEEEEE, 255, false, false}, {0xE0C6B5, 187, false, false},
+    {0xD09F7D, 144, false, false}, {0xBF7743, 166, false, false},
+    {0xA45300, 94, true, true},
 };
 
 /* With 16 and 8 colours the theme decides how light they are; in the usual

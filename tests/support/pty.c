@@ -130,6 +130,7 @@ static void put_env(char **list, const char *entry)
            (strncmp(list[i], entry, name) != 0 || list[i][name] != '='))
         i++;
     ck_assert_int_lt(i, ENV_MAX - 1);
+    free(list[i]);
     if (entry[name] == '=') {
         list[i] = strdup(entry);
         return;
