@@ -320,7 +320,8 @@ static void block_scale(const struct energy_block *b,
             mat->fock[i][j] = f;
             mat->fock[j][i] = f;
         }
-        mat->pull[i] *= eta;
+        if (b->open > 0)
+            mat->pull[i] *= eta;
     }
 }
 

@@ -12,8 +12,9 @@
 #define SLATER_CHAIN_MAX (SLATER_POWER_MAX - 1)
 #define SLATER_SECOND_MAX (SLATER_POWER_MAX + SLATER_ORDER_MAX)
 
-/* Two integrals at a time, in the two lanes of one vector. */
-typedef double slater_lanes __attribute__((vector_size(16)));
+/* Two integrals at a time, in the two lanes of one vector; it may lie over two
+ * neighbours of an array of double at an address divisible by 16. */
+typedef double slater_lanes __attribute__((vector_size(16), may_alias));
 
 /* The numbers that depend on powers and order alone. */
 struct slater_tables {
