@@ -142,6 +142,7 @@ static struct reading gap(const struct model_offer *offer,
 }
 
 static struct reading read_ionization(const struct model_offer *offer,
+                                      const struct work *w,
                                       const struct zeta_subshell *s)
 {
     if (s->energy >= 0.0)
@@ -150,7 +151,11 @@ static struct reading read_ionization(const struct model_offer *offer,
     struct reading r = reading_computed(
         offer->quantity, -s->energy * HARTREE_EV, &offer->provenance);
     r.remark =
-        "one-electron estimate (Koopmans): 1 to 3 eV too small on average";
+        w->result.state == ZETA_UNBOUND
+            ? "one-electron estimate (Koopmans), and an inner subshell is not "
+              "bound in this minimal basis"
+            : "one-electron estimate (Koopmans): 1 to 3 eV too small on "
+              "average";
     return r;
 }
 
@@ -171,7 +176,7 @@ static struct reading read(const void *work, int offer, int n, int l)
     const struct zeta_subshell *s =
         result_subshell(&w->result, asked->n, asked->l);
     if (offer == OFFER_IONIZATION)
-        return read_ionization(o, s);
+        return read_ionization(o, w, s);
     struct reading r = reading_computed(
         o->quantity, offer == OFFER_ZEFF ? s->z_eff : s->peak_radius * BOHR_PM,
         &o->provenance);

@@ -38,6 +38,9 @@ void slater_tables_fill(struct slater_tables *tables);
 double slater_integral(const struct slater_tables *tables, int N, double a,
                        int M, double b, int k, double *log_a);
 
+/* A call would cost as much as a short chain. */
+#define SLATER_INLINE static inline __attribute__((always_inline))
+
 /* One step of slater_chain. */
 #define SLATER_STEP(u)                                                         \
     case u:                                                                    \
@@ -47,7 +50,7 @@ double slater_integral(const struct slater_tables *tables, int N, double a,
 
 /* T_P of the recurrence T_u = y^u + u/(u+Q) T_(u-1), T_0 = 1, all of whose
  * terms are positive; *power receives y^P. ratio points to ratio[Q][P]. */
-static inline slater_lanes slater_chain(slater_lanes y,
+SLATER_INLINE slater_lanes slater_chain(slater_lanes y,
                                         const slater_lanes *ratio, int P,
                                         slater_lanes *power)
 {
@@ -68,8 +71,10 @@ static inline slater_lanes slater_chain(slater_lanes y,
         SLATER_STEP(3)
         SLATER_STEP(2)
         SLATER_STEP(1)
-    default:
+    case 0:
         break;
+    default:
+        __builtin_unreachable(); /* P <= SLATER_CHAIN_MAX */
     }
     *power = w;
     return t;
@@ -86,7 +91,7 @@ struct slater_halves {
 /* Both halves at order k. With p = M-k-1, q = N+k the inner half is
  * A(p, q) = int r^p e^(-br) int_0^r r'^q e^(-ar'), and integrating by parts
  * b A(p, q) = p A(p-1, q) + (p+q)!/(a+b)^(p+q+1): the chain. */
-static inline void slater_top(const struct slater_tables *tables,
+SLATER_INLINE void slater_top(const struct slater_tables *tables,
                               slater_lanes a, int N, slater_lanes b, int M,
                               int k, struct slater_halves *h)
 {
@@ -110,7 +115,7 @@ static inline void slater_top(const struct slater_tables *tables,
 
 /* From order k+1 to order k, again with positive terms only: by parts in the
  * inner integral, A(p-1, q) = (a A(p-1, q+1) + (p+q)!/s^(p+q+1))/(q+1). */
-static inline void slater_descend(const struct slater_tables *tables, int N,
+SLATER_INLINE void slater_descend(const struct slater_tables *tables, int N,
                                   int M, int k, struct slater_halves *h)
 {
     double down_inner = tables->descend[k][M][N];

@@ -79,6 +79,10 @@ START_TEST(an_unbound_subshell_is_marked)
     ck_assert_msg(strstr(r.remark, "not bound") != NULL, "%s", r.remark);
     r = ask(57, lanthanum, QUANTITY_ZEFF, 6, 0, false);
     ck_assert_str_eq(r.remark, "");
+    r = ask(57, lanthanum, QUANTITY_IONIZATION, 0, 0, false);
+    ck_assert_int_eq(r.state, READING_OK);
+    ck_assert_msg(strstr(r.remark, "inner subshell is not bound") != NULL, "%s",
+                  r.remark);
     r = ask(9, "[He] 2s2 2p6", QUANTITY_IONIZATION, 0, 0, false);
     ck_assert_int_eq(r.state, READING_OUTSIDE);
     ck_assert_msg(strstr(r.reason, "not bound") != NULL, "%s", r.reason);
