@@ -1,4 +1,7 @@
 /* SPDX-License-Identifier: MIT */
+/* For realpath. */
+#define _XOPEN_SOURCE 700
+
 #include "base/file.h"
 
 #include <errno.h>
@@ -83,14 +86,11 @@ static bool target_free(const struct file_draft *draft, struct status *st)
     return true;
 }
 
-bool file_draft_open(struct file_draft *draft, const char *target, bool replace,
-                     struct status *st)
+static bool open_at(struct file_draft *draft, const char *target,
+                    struct status *st)
 {
-    *draft = (struct file_draft){.replace = replace};
     static const char suffix[] = ".XXXXXX";
     size_t length = strlen(target);
-    if (length == 0)
-        return status_fail(st, STATUS_FILE, "the file name is empty");
     draft->target = malloc(length + 1);
     draft->temporary = malloc(length + sizeof suffix);
     if (!draft->target || !draft->temporary) {
@@ -120,6 +120,21 @@ bool file_draft_open(struct file_draft *draft, const char *target, bool replace,
         return status_fail(st, STATUS_MEMORY, "%s: out of memory", target);
     }
     return true;
+}
+
+bool file_draft_open(struct file_draft *draft, const char *target, bool replace,
+                     struct status *st)
+{
+    *draft = (struct file_draft){.replace = replace};
+    if (target[0] == '\0')
+        return status_fail(st, STATUS_FILE, "the file name is empty");
+    /* What a link leads to is replaced, not the link. */
+    struct stat info;
+    bool linked = replace && lstat(target, &info) == 0 && S_ISLNK(info.st_mode);
+    char *real = linked ? realpath(target, NULL) : NULL;
+    bool ok = open_at(draft, real ? real : target, st);
+    free(real);
+    return ok;
 }
 
 /* mkstemp makes a private file; a new one gets what umask allows, a replaced

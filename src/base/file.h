@@ -25,9 +25,9 @@ struct file_draft {
     bool replace;
 };
 
-/* Opens a draft for target. replace: an existing regular file may be
- * overwritten; without it an existing one is refused (STATUS_FILE) now and
- * again at commit. On failure nothing is left behind. */
+/* Opens a draft for target. replace: an existing regular file, or the one that
+ * a link leads to, may be overwritten; without it an existing one is refused
+ * (STATUS_FILE) now and again at commit. On failure nothing is left behind. */
 MUST_CHECK bool file_draft_open(struct file_draft *draft, const char *target,
                                 bool replace, struct status *st);
 

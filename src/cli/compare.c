@@ -20,13 +20,19 @@ static bool is_wanted_set(const struct request *r,
     return r->set_count == 0;
 }
 
+/* Place of a line's quantity among those asked for; -1 when it was not. */
+static int rank_of(const struct request *r, const struct comparison_line *line)
+{
+    for (int i = 0; i < r->quantity_count; i++)
+        if (r->quantities[i] == line->quantity)
+            return i;
+    return -1;
+}
+
 static bool is_wanted(const struct request *r,
                       const struct comparison_line *line)
 {
-    bool quantity = false;
-    for (int i = 0; i < r->quantity_count; i++)
-        quantity = quantity || r->quantities[i] == line->quantity;
-    if (!quantity)
+    if (rank_of(r, line) < 0)
         return false;
     if (!line->provenance->computed)
         return is_wanted_set(r, line->provenance);
@@ -41,9 +47,18 @@ static bool is_wanted(const struct request *r,
 static void keep_wanted(const struct request *r, struct comparison *c)
 {
     int kept = 0;
-    for (int i = 0; i < c->line_count; i++)
-        if (is_wanted(r, &c->lines[i]))
-            c->lines[kept++] = c->lines[i];
+    for (int i = 0; i < c->line_count; i++) {
+        struct comparison_line line = c->lines[i];
+        int place = kept;
+        if (!is_wanted(r, &line))
+            continue;
+        for (;
+             place > 0 && rank_of(r, &c->lines[place - 1]) > rank_of(r, &line);
+             place--)
+            c->lines[place] = c->lines[place - 1];
+        c->lines[place] = line;
+        kept++;
+    }
     c->line_count = kept;
 }
 

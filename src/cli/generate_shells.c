@@ -8,7 +8,7 @@
 /* True when a command takes elements. */
 static bool takes_elements(int command)
 {
-    return strstr(command_at(command)->operands, "SELECTION");
+    return command_at(command)->operands[0] != '\0';
 }
 
 static bool has_words(const struct option *o)

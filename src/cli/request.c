@@ -137,22 +137,23 @@ static bool check_models(const struct request *r, struct status *st)
                            "for; it gives %s",
                            r->models[m]->id, text);
     }
-    for (int i = 0; r->has_quantities && i < r->quantity_count; i++) {
+    /* compare shows references all the same, and so does list for what no
+     * model gives. */
+    bool needs_models = r->call->command->id == COMMAND_LIST;
+    for (int i = 0; needs_models && i < r->quantity_count; i++) {
         enum quantity_id q = r->quantities[i];
         int count = 0;
-        if (offered(r, q))
-            continue;
-        struct text t = text_over(text, sizeof text);
         for (int m = 0; m < model_count(); m++)
             if (model_offer_for(model_at(m), q, NULL) >= 0)
                 names[count++] = model_at(m)->id;
+        if (offered(r, q) || count == 0 || !r->has_quantities)
+            continue;
+        struct text t = text_over(text, sizeof text);
         words_join(&t, names, count, "and");
-        return status_fail(
-            st, STATUS_USAGE,
-            "--quantity %s: given by none of the models named; "
-            "%s%s",
-            quantity_at(q)->id,
-            count ? "models that give it: " : "only stored values exist", text);
+        return status_fail(st, STATUS_USAGE,
+                           "--quantity %s: given by none of the models named; "
+                           "models that give it: %s",
+                           quantity_at(q)->id, text);
     }
     return true;
 }

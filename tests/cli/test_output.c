@@ -259,6 +259,31 @@ START_TEST(the_same_choice_in_other_words_prints_the_same)
 }
 END_TEST
 
+START_TEST(rows_and_lines_come_in_the_order_in_which_they_were_asked_for)
+{
+    struct csv csv = csv_of("list Fe Al -q ionization,zeff -m slater,shells "
+                            "-f csv");
+    static const char *const want[] = {
+        "Fe ionization slater", "Fe ionization shells", "Fe zeff slater",
+        "Fe zeff shells",       "Al ionization slater", "Al ionization shells",
+        "Al zeff slater",       "Al zeff shells"};
+    ck_assert_uint_eq(csv_rows(&csv), 8);
+    for (size_t i = 0; i < 8; i++) {
+        char got[64];
+        snprintf(got, sizeof got, "%s %s %s", csv_cell(&csv, i, "symbol"),
+                 csv_cell(&csv, i, "quantity"), csv_cell(&csv, i, "model"));
+        ck_assert_str_eq(got, want[i]);
+    }
+    csv_free(&csv);
+    csv = csv_of("compare Fe Al -q ionization,zeff -m slater -f csv");
+    ck_assert_str_eq(csv_cell(&csv, 0, "quantity"), "ionization");
+    ck_assert_str_eq(csv_cell(&csv, 0, "symbol"), "Fe");
+    ck_assert_str_eq(csv_cell(&csv, 1, "symbol"), "Al");
+    ck_assert_str_eq(csv_cell(&csv, csv_rows(&csv) - 1, "quantity"), "zeff");
+    csv_free(&csv);
+}
+END_TEST
+
 START_TEST(names_are_read_from_standard_input_one_per_line)
 {
     struct program p = {.path = OUTERSHELL,
@@ -271,6 +296,21 @@ START_TEST(names_are_read_from_standard_input_one_per_line)
     ck_assert_str_eq(a.out, b.out);
     program_free(&a);
     program_free(&b);
+}
+END_TEST
+
+/* No model gives an affinity: the stored value stands alone. */
+START_TEST(a_quantity_without_a_model_is_listed_by_its_reference)
+{
+    struct csv csv = csv_of("list Fe -q zeff,affinity -m slater -f csv");
+    ck_assert_uint_eq(csv_rows(&csv), 2);
+    ck_assert_str_eq(csv_cell(&csv, 1, "state"), "reference-only");
+    ck_assert_str_eq(csv_cell(&csv, 1, "model"), "");
+    ck_assert_str_ne(csv_cell(&csv, 1, "reference_value"), "");
+    csv_free(&csv);
+    csv = csv_of("compare Fe Cr -q affinity,zeff -m slater -f csv");
+    ck_assert_str_eq(csv_cell(&csv, 0, "source_kind"), "reference");
+    csv_free(&csv);
 }
 END_TEST
 
@@ -386,7 +426,10 @@ TCase *output_cases(void)
     tcase_add_test(c, bibtex_entries_have_unique_keys_and_closed_braces);
     tcase_add_test(c, no_locale_brings_a_decimal_comma);
     tcase_add_test(c, the_same_choice_in_other_words_prints_the_same);
+    tcase_add_test(
+        c, rows_and_lines_come_in_the_order_in_which_they_were_asked_for);
     tcase_add_test(c, names_are_read_from_standard_input_one_per_line);
+    tcase_add_test(c, a_quantity_without_a_model_is_listed_by_its_reference);
     tcase_add_test(c, a_subshell_is_asked_for_by_name);
     tcase_add_test(c,
                    runs_leave_out_elements_without_the_charge_and_names_do_not);

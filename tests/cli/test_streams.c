@@ -172,6 +172,29 @@ START_TEST(force_replaces_a_file_and_keeps_its_mode)
 }
 END_TEST
 
+START_TEST(a_link_stays_one_and_what_it_leads_to_is_replaced)
+{
+    static const char *const names[] = {"link", "a", NULL};
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    char path[256];
+    struct stat info;
+    scratch_begin(folder);
+    put_file(folder, "a", "old", 0644);
+    snprintf(path, sizeof path, "%s/link", folder);
+    ck_assert_int_eq(symlink("a", path), 0);
+    struct program_result r =
+        run_in(folder, "list Fe -m shells --output link --force");
+    ck_assert_int_eq(r.status, 0);
+    program_free(&r);
+    ck_assert_int_eq(lstat(path, &info), 0);
+    ck_assert(S_ISLNK(info.st_mode));
+    char *text = text_of(folder, "a");
+    ck_assert_int_eq(strncmp(text, "species", 7), 0);
+    free(text);
+    scratch_end(folder, names);
+}
+END_TEST
+
 /* A limit on file size stands for a disk that fills up half-way; SIGXFSZ is
  * ignored, so that the write fails as it does on a full disk. */
 START_TEST(a_disk_that_fills_up_leaves_the_old_file_and_no_other)
@@ -272,6 +295,7 @@ TCase *stream_cases(void)
         c, a_pipe_without_a_reader_ends_it_by_its_signal_and_in_silence);
     tcase_add_test(c, a_file_holds_what_standard_output_would_have_shown);
     tcase_add_test(c, force_replaces_a_file_and_keeps_its_mode);
+    tcase_add_test(c, a_link_stays_one_and_what_it_leads_to_is_replaced);
     tcase_add_test(c, a_disk_that_fills_up_leaves_the_old_file_and_no_other);
     tcase_add_test(c, a_target_that_is_no_regular_file_is_never_replaced);
     tcase_add_test(c, closed_standard_streams_harm_no_file);
