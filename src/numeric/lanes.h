@@ -13,6 +13,7 @@ struct lane_group {
     int channel, used; /* lanes in use; the others repeat the last one */
     int elements;      /* of the mesh, as far as these levels reach */
     int filled;        /* elements that hold other than zeros */
+    double reached;    /* highest energy that `elements` was found for */
     _Alignas(LANES_ALIGN) double kappa[LANES_MAX];
     _Alignas(LANES_ALIGN) double centrifugal[LANES_MAX]; /* κ(κ+1) */
     _Alignas(LANES_ALIGN) double energy[LANES_MAX];
@@ -46,6 +47,7 @@ struct lane_work {
     const double *schwarz;     /* hw schwarz */
     const double *mass;        /* hw slope² */
     const double *centrifugal; /* hw slope²/y² */
+    const double *origin;      /* hw dF/dt in the field of the origin */
     double *factor;            /* of the matrix, elements × FACTOR × width */
     double *norm;              /* -dG/dE, points × width */
     double *right;             /* right-hand side, points × width */
@@ -70,6 +72,8 @@ struct lane_kernel {
     /* Normalises chi, fills density. */
     void (*density)(const struct lane_work *, const struct lane_channel *,
                     struct lane_group *);
+    /* Adds weight[lane] × density to sum, points × width. */
+    void (*add)(const struct lane_group *, const double *weight, double *sum);
     /* First-order change of the energies, into shift[]. */
     void (*moved)(const struct lane_work *, const struct lane_channel *,
                   struct lane_group *);

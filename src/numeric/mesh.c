@@ -47,6 +47,9 @@ bool mesh_init(struct mesh *mesh, double first, double last, double length,
 {
     memset(mesh, 0, sizeof *mesh);
     lobatto_make(&mesh->rule);
+    for (int j = 0; j <= P; j++)
+        for (int i = 0; i <= P; i++)
+            mesh->running[j][i] = mesh->rule.cumulative[i][j];
     mesh->first = first;
     mesh->length = length;
     double t0 = mesh_t(first);
@@ -147,15 +150,16 @@ void mesh_cumulate(const struct mesh *mesh, int elements, const double *f,
     double total = inner;
     out[0] = inner;
     for (int e = 0; e < elements; e++) {
-        double g[LOBATTO_POINTS];
-        for (int j = 0; j <= P; j++)
-            g[j] = 0.5 * mesh->length * mesh->slope[e * P + j] * f[e * P + j];
-        for (int i = 1; i <= P; i++) {
-            double sum = 0.0;
-            for (int j = 0; j <= P; j++)
-                sum += mesh->rule.cumulative[i][j] * g[j];
-            out[e * P + i] = total + sum;
+        double sum[LOBATTO_POINTS] = {0};
+        for (int j = 0; j <= P; j++) {
+            int at = e * P + j;
+            double g = 0.5 * mesh->length * mesh->slope[at] * f[at];
+            const double *column = mesh->running[j];
+            for (int i = 0; i <= P; i++)
+                sum[i] += column[i] * g;
         }
+        for (int i = 1; i <= P; i++)
+            out[e * P + i] = total + sum[i];
         total = out[(e + 1) * P];
     }
 }

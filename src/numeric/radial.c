@@ -20,8 +20,13 @@ enum {
 /* A search ends when a Rayleigh quotient moves the energy by less than this
  * part of it; the step is of third order, so that the result is far better. */
 static const double FOUND = 1e-7;
+/* First part of the energy by which a search moves when it can only guess. */
+static const double NUDGE = 0.06;
+/* Change of the highest energy of a group, relative, at which its reach is
+ * found anew. */
+static const double REACH_KEPT = 0.01;
 /* A first-order shift is followed up to this part of the energy. */
-static const double SHIFT_MAX = 0.3;
+static const double SHIFT_MAX = 0.3, SHIFT_SMALL = 0.03;
 
 /* Search of one level. Energies lo and hi with at most, and more than `nodes`
  * levels below. */
@@ -29,7 +34,7 @@ struct search {
     double lo, hi;
     bool open; /* hi is not known to be above */
     bool lost; /* must be found anew */
-    int steps;
+    int tries; /* energies that were no more than guessed */
 };
 
 struct radial {
@@ -41,8 +46,10 @@ struct radial {
     struct search search[RADIAL_LEVELS_MAX];
     int member[GROUPS][LANES_MAX]; /* level of each lane */
     struct lane_group group[GROUPS];
+    double *origin; /* of work, writable */
+    double *sum;    /* densities of a channel by lane, points × width */
     double *block;
-    size_t per_group;
+    int room; /* groups that have arrays */
 };
 
 static double *take(double **at, size_t n)
@@ -52,10 +59,14 @@ static double *take(double **at, size_t n)
     return p;
 }
 
-static void carve(struct radial *r, double *at)
+/* Hands out the arrays, each aligned for the widest vectors; with at = NULL
+ * only counts the numbers needed. */
+static size_t carve(struct radial *r, double *base)
 {
-    size_t n = (size_t)r->work.mesh->points, width = LANES_MAX;
+    size_t n = (size_t)r->work.mesh->points;
+    size_t width = (size_t)r->kernel->width;
     size_t factor = (size_t)r->work.mesh->elements * LANES_FACTOR;
+    double *at = base;
     r->work.stiffness = take(&at, LANES_TRIANGLE * width);
     r->work.derivative = take(&at, LOBATTO_POINTS * LOBATTO_POINTS);
     r->work.schwarz = take(&at, n);
@@ -64,6 +75,8 @@ static void carve(struct radial *r, double *at)
     r->work.factor = take(&at, factor * width);
     r->work.norm = take(&at, n * width);
     r->work.right = take(&at, n * width);
+    r->sum = take(&at, n * width);
+    r->work.origin = r->origin = take(&at, n);
     for (int c = 0; c < RADIAL_CHANNELS; c++) {
         struct lane_channel *ch = &r->channel[c];
         double **array[] = {&ch->v,    &ch->base,   &ch->moved, &ch->radial,
@@ -71,10 +84,11 @@ static void carve(struct radial *r, double *at)
         for (size_t k = 0; k < sizeof array / sizeof *array; k++)
             *array[k] = take(&at, n);
     }
-    for (int g = 0; g < GROUPS; g++) {
+    for (int g = 0; g < r->room; g++) {
         r->group[g].chi = take(&at, n * width);
         r->group[g].density = take(&at, n * width);
     }
+    return (size_t)(at - base);
 }
 
 static void fill_tables(struct radial *r)
@@ -122,21 +136,20 @@ struct radial *radial_new(const struct mesh *mesh, struct status *st)
     memset(r, 0, sizeof *r);
     r->work.mesh = mesh;
     r->kernel = choose_kernel();
-    size_t n = (size_t)mesh->points + 4, width = LANES_MAX;
-    size_t total =
-        n * (3 + RADIAL_CHANNELS * 7) + n * width * (2 + 2 * (size_t)GROUPS) +
-        (size_t)mesh->elements * LANES_FACTOR * width + LANES_TRIANGLE * width +
-        LOBATTO_POINTS * LOBATTO_POINTS + 64;
-    total = (total + 3) / 4 * 4;
-    r->block = aligned_alloc(LANES_ALIGN, total * sizeof *r->block);
+    r->room = (RADIAL_LEVELS_MAX + r->kernel->width - 1) / r->kernel->width +
+              RADIAL_CHANNELS - 1;
+    static double nothing[1];
+    size_t total = carve(r, nothing) + LANES_ALIGN / sizeof(double);
+    /* calloc: memory that is not touched costs nothing */
+    r->block = calloc(total, sizeof *r->block);
     if (!r->block) {
         free(r);
         status_fail(st, STATUS_MEMORY, "radial solver, %d points",
                     mesh->points);
         return NULL;
     }
-    memset(r->block, 0, total * sizeof *r->block);
-    carve(r, r->block);
+    uintptr_t odd = (uintptr_t)r->block % LANES_ALIGN;
+    carve(r, r->block + (odd ? (LANES_ALIGN - odd) / sizeof(double) : 0));
     fill_tables(r);
     return r;
 }
@@ -160,12 +173,13 @@ static void make_groups(struct radial *r)
             if (r->level[i].channel != c)
                 continue;
             if (!g || g->used == width) {
-                assert(r->groups < GROUPS);
+                assert(r->groups < r->room);
                 g = &r->group[r->groups++];
                 g->channel = c;
                 g->used = 0;
-                g->filled = r->work.mesh->elements;
+                g->filled = r->elements;
                 g->elements = r->elements;
+                g->reached = 0.0;
             }
             r->member[g - r->group][g->used++] = i;
         }
@@ -182,6 +196,19 @@ static void make_groups(struct radial *r)
     }
 }
 
+/* In the Coulomb field of the origin F is -a2/2 slope/y / (2y + a2); its
+ * derivative belongs to G where only its sign and size are asked for. */
+static void fill_origin(struct radial *r)
+{
+    const struct mesh *mesh = r->work.mesh;
+    double a2 = r->work.a2;
+    for (int i = 0; i <= r->elements * P; i++) {
+        double d = 2.0 * mesh->y[i] + a2;
+        r->origin[i] = 0.5 * mesh->length * mesh->weight[i] * a2 *
+                       mesh->slope[i] / (d * d);
+    }
+}
+
 void radial_begin(struct radial *radial, double a2, int elements, int count,
                   const struct radial_level *levels)
 {
@@ -195,6 +222,7 @@ void radial_begin(struct radial *radial, double a2, int elements, int count,
     for (int i = 0; i < count; i++)
         radial->search[i].lost = true;
     make_groups(radial);
+    fill_origin(radial);
 }
 
 void radial_potential(struct radial *radial, int channel, const double *q,
@@ -269,7 +297,14 @@ static void step(struct radial *r, struct lane_group *g)
     const struct lane_channel *c = &r->channel[g->channel];
     for (int lane = 0; lane < r->kernel->width; lane++)
         set_boundary(r, g, lane);
-    g->elements = r->kernel->reach(&r->work, c, g, r->elements);
+    double highest = g->energy[0];
+    for (int lane = 1; lane < r->kernel->width; lane++)
+        highest = fmax(highest, g->energy[lane]);
+    /* looked up again when the highest level has moved */
+    if (fabs(highest - g->reached) > REACH_KEPT * fabs(highest)) {
+        g->elements = r->kernel->reach(&r->work, c, g, r->elements);
+        g->reached = highest;
+    }
     r->kernel->step(&r->work, c, g);
 }
 
@@ -287,23 +322,24 @@ static double lowest(double a2, double kappa, int nodes)
     return -1.0 / (root * (root + nr));
 }
 
-/* Energies at which the WKB phase is (nodes + ½)π, by bisection in ln(-E)
- * with all lanes at once. In t the centrifugal term has Langer's form by
- * itself. */
+/* Energies of the lost levels at which the WKB phase is (nodes + ½)π, by
+ * bisection in ln(-E) with all lanes at once. In t the centrifugal term has
+ * Langer's form by itself. */
 static void guess(struct radial *r, int k)
 {
     struct lane_group *g = &r->group[k];
     const struct lane_channel *c = &r->channel[g->channel];
     const double pi = acos(-1.0);
-    double lo[LANES_MAX], hi[LANES_MAX], goal[LANES_MAX];
+    double lo[LANES_MAX], hi[LANES_MAX], goal[LANES_MAX], kept[LANES_MAX];
     int width = r->kernel->width;
     for (int lane = 0; lane < width; lane++) {
         const struct radial_level *level = &r->level[r->member[k][lane]];
         struct search *s = &r->search[r->member[k][lane]];
+        kept[lane] = g->energy[lane];
         s->lo = 1.001 * lowest(r->work.a2, level->kappa, level->nodes);
         s->hi = -1e-9;
         s->open = true;
-        s->steps = 0;
+        s->tries = 0;
         lo[lane] = log(-s->lo);
         hi[lane] = lo[lane] - 14.0;
         goal[lane] = (level->nodes + 0.5) * pi;
@@ -321,19 +357,29 @@ static void guess(struct radial *r, int k)
         }
     }
     for (int lane = 0; lane < width; lane++)
-        g->energy[lane] = -exp(0.5 * (lo[lane] + hi[lane]));
+        g->energy[lane] = r->search[r->member[k][lane]].lost
+                              ? -exp(0.5 * (lo[lane] + hi[lane]))
+                              : kept[lane];
 }
 
-/* A next energy within the bracket when the quotient is of no use: geometric
- * between negative ends, doubling above when the upper end is open. */
-static double between(struct search *s)
+/* A next energy when the quotient is of no use: away from `energy` to the
+ * side where the level is, by parts that double from try to try, and halfway
+ * within the bracket once that is narrower; upwards without end as long as
+ * the upper end is open. */
+static double between(struct search *s, double energy)
 {
+    bool above = energy >= s->hi;
+    double part = NUDGE * (double)(1 << (s->tries < 8 ? s->tries : 8));
+    s->tries++;
     if (s->open && s->lo >= s->hi) {
         s->hi = s->lo > 0.0 ? 4.0 * s->lo : 1e-9;
         return s->hi;
     }
-    if (s->hi < 0.0)
-        return -sqrt(s->lo * s->hi);
+    if (s->hi < 0.0) {
+        double near_it = above ? energy * (1.0 + part) : energy / (1.0 + part);
+        double middle = -sqrt(s->lo * s->hi);
+        return above ? fmax(near_it, middle) : fmin(near_it, middle);
+    }
     if (s->lo < 0.0)
         return s->lo < -1e-9 ? -1e-9 : 0.5 * (s->lo + s->hi);
     return 0.5 * (s->lo + s->hi);
@@ -358,7 +404,7 @@ static double judge(struct search *s, int nodes, double energy, double below,
         s->lost = false;
         return next;
     }
-    return fits ? next : between(s);
+    return fits ? next : between(s, energy);
 }
 
 static bool any_lost(const struct radial *r, int k)
@@ -381,7 +427,6 @@ static int find_group(struct radial *r, int k)
             int i = r->member[k][lane];
             if (!r->search[i].lost)
                 continue;
-            r->search[i].steps++;
             g->energy[lane] =
                 judge(&r->search[i], r->level[i].nodes, g->energy[lane],
                       g->below[lane], g->shift[lane]);
@@ -400,10 +445,10 @@ int radial_find(struct radial *radial)
     int missing = 0;
     for (int k = 0; k < radial->groups; k++) {
         struct lane_group *g = &radial->group[k];
-        int n = radial->work.mesh->points * radial->kernel->width;
+        int n = (radial->elements * P + 1) * radial->kernel->width;
         for (int i = 0; i < n; i++)
             g->chi[i] = 1.0;
-        g->filled = radial->work.mesh->elements;
+        g->filled = radial->elements;
         for (int lane = 0; lane < g->used; lane++)
             radial->search[radial->member[k][lane]].lost = true;
         guess(radial, k);
@@ -412,43 +457,42 @@ int radial_find(struct radial *radial)
     return missing;
 }
 
-/* One step of every lane; those whose count and quotient do not fit are
- * searched for from the whole range. */
+/* Whether a step led nearer to the level itself: as many levels below as it
+ * has nodes (then it lies above) or one more, and a shift to that side, unless
+ * it is small. A step towards a neighbour shows in the next count. */
+static bool fits(int nodes, double energy, double below, double shift)
+{
+    bool above = below > nodes + 0.5;
+    double size = fabs(shift), whole = fabs(energy);
+    return isfinite(shift) && below > nodes - 0.5 && below < nodes + 1.5 &&
+           (size < SHIFT_SMALL * whole ||
+            (size < SHIFT_MAX * whole && (shift < 0.0) == above));
+}
+
+/* One step of every lane; lost levels are searched for from the whole
+ * range. */
 static int update_group(struct radial *r, int k)
 {
     struct lane_group *g = &r->group[k];
-    double before[LANES_MAX];
-    memcpy(before, g->energy, sizeof before);
-    step(r, g);
     bool lost = false;
+    step(r, g);
     for (int lane = 0; lane < g->used; lane++) {
         int i = r->member[k][lane];
-        double below = g->below[lane] - r->level[i].nodes;
-        double shift = g->shift[lane], e = g->energy[lane];
-        /* E rises to the level when none more is below, falls otherwise */
-        bool fits =
-            isfinite(shift) && (below > 0.5 ? below < 1.5 : below > -0.5) &&
-            (below > 0.5 ? shift < 1e-9 * fabs(e) : shift > -1e-9 * fabs(e)) &&
-            fabs(shift) < SHIFT_MAX * fabs(e);
-        r->search[i].lost = !fits;
-        if (fits)
-            g->energy[lane] = e + shift;
-        lost |= !fits;
+        bool good = fits(r->level[i].nodes, g->energy[lane], g->below[lane],
+                         g->shift[lane]);
+        r->search[i].lost = !good;
+        lost |= !good;
+        if (good)
+            g->energy[lane] += g->shift[lane];
     }
     for (int lane = g->used; lane < r->kernel->width; lane++)
         g->energy[lane] = g->energy[g->used - 1];
-    if (!lost) {
-        r->kernel->density(&r->work, &r->channel[g->channel], g);
-        return 0;
+    if (lost) {
+        guess(r, k);
+        return find_group(r, k);
     }
-    for (int lane = 0; lane < g->used; lane++) {
-        struct search *s = &r->search[r->member[k][lane]];
-        const struct radial_level *level = &r->level[r->member[k][lane]];
-        s->lo = 1.001 * lowest(r->work.a2, level->kappa, level->nodes);
-        s->hi = -1e-9;
-        s->open = true;
-    }
-    return find_group(r, k);
+    r->kernel->density(&r->work, &r->channel[g->channel], g);
+    return 0;
 }
 
 int radial_update(struct radial *radial)
@@ -558,19 +602,22 @@ void radial_functions(const struct radial *radial, int i, double *p, double *q)
 
 void radial_total(const struct radial *radial, int channel, double *density)
 {
-    int width = radial->kernel->width;
-    memset(density, 0, (size_t)radial->work.mesh->points * sizeof *density);
+    int width = radial->kernel->width, points = radial->elements * P + 1;
+    double *sum = radial->sum;
+    memset(sum, 0, (size_t)(points * width) * sizeof *sum);
     for (int k = 0; k < radial->groups; k++) {
         const struct lane_group *g = &radial->group[k];
-        double weight[LANES_MAX] = {0};
+        _Alignas(LANES_ALIGN) double weight[LANES_MAX] = {0};
         if (g->channel != channel)
             continue;
         for (int lane = 0; lane < g->used; lane++)
             weight[lane] = radial->level[radial->member[k][lane]].weight;
-        const double *d = g->density;
-        for (int i = 0; i <= g->filled * P; i++, d += width)
-            for (int lane = 0; lane < width; lane++)
-                density[i] += weight[lane] * d[lane];
+        radial->kernel->add(g, weight, sum);
+    }
+    for (int i = 0; i < points; i++, sum += width) {
+        density[i] = sum[0];
+        for (int lane = 1; lane < width; lane++)
+            density[i] += sum[lane];
     }
 }
 
