@@ -16,26 +16,31 @@
  * in which the same occupied level lay at or above zero so many times since
  * half of it has no solution with that level bound: with it bound the field
  * does not hold it, without it the field does. */
+/* OUTER: electrons counted as outer ones in a warm start. */
+enum { OUTER = 5 };
+
 enum { P = LOBATTO_ORDER, CYCLES_MAX = 150, PATIENCE = 80, ABOVE = 10 };
 
 /* Everything that decides accuracy and convergence. */
 static const struct {
-    double first[2];    /* y of the first point, by equation: the Dirac
-                           density has a weak singularity at the origin */
-    double length[2];   /* of an element; shorter for the derivatives of a
-                           gradient functional */
-    double last;        /* y where the mesh ends */
-    double reach;       /* bohr, for a start */
-    double mixing;      /* of Anderson's extrapolation */
-    double residual;    /* electrons */
-    double energy;      /* change of the total energy, hartree, */
-    double energy_part; /* and relative: rounding */
-    double tail;        /* density near the end of the mesh / its maximum */
+    double first[2];     /* y of the first point, by equation: the Dirac
+                            density has a weak singularity at the origin */
+    double length[2];    /* of an element; shorter for the derivatives of a
+                            gradient functional */
+    double last;         /* y where the mesh ends */
+    double reach;        /* bohr, for a start */
+    double first_mixing; /* the start is far off; later */
+    double mixing;       /* of Anderson's extrapolation */
+    double residual;     /* electrons */
+    double energy;       /* change of the total energy, hartree, */
+    double energy_part;  /* and relative: rounding */
+    double tail;         /* density near the end of the mesh / its maximum */
 } CHOICE = {
     .first = {1e-3, 1e-5},
     .length = {1.0, 0.8},
     .last = 118.0 * 100.0,
     .reach = 45.0,
+    .first_mixing = 0.5,
     .mixing = 0.75,
     .residual = 3e-7,
     .energy = 1e-9,
@@ -174,7 +179,7 @@ static bool has_electrons(const struct atom_solver *s, int channel)
 }
 
 /* Starts self-consistency over `elements` of the mesh. */
-static void start(struct atom_solver *s, int elements)
+static void start(struct atom_solver *s, int elements, bool warm)
 {
     struct atom_space *space = s->now;
     s->elements = elements;
@@ -183,14 +188,35 @@ static void start(struct atom_solver *s, int elements)
         /* the potential of a channel without electrons has no say */
         double share = has_electrons(s, c) ? 1.0 / s->channels : 0.0;
         for (int i = 0; i < points; i++)
-            space->weight[c * points + i] = share * space->mesh.weight[i];
+            space->weight[c * points + i] =
+                share * space->mesh.weight_y[i] / space->mesh.y[i];
     }
     radial_begin(space->radial, s->a2, elements, s->count, s->level);
     int n = s->channels * points;
     mixer_reset(space->mixer, s->a2 > 0.0 ? 2 * n : n, n);
-    start_potential(s);
+    if (!warm)
+        start_potential(s);
+    s->warm = warm;
     s->found = false;
     s->last_total = 0.0;
+}
+
+/* Starts from the last potential of an atom of the same nucleus: where the
+ * outermost electrons are, their charge is scaled to what is left. */
+static void warm_potential(struct atom_solver *s, double electrons)
+{
+    struct atom_space *space = s->now;
+    int points = s->elements * P + 1;
+    double Z = s->Z, change = s->electrons - electrons;
+    for (int i = 0; i < points; i++) {
+        double outer = space->enclosed[i] - (electrons - OUTER);
+        double part = outer > 0.0 ? outer / OUTER : 0.0;
+        for (int c = 0; c < s->channels; c++) {
+            space->q[c * points + i] += part * change / Z;
+            if (s->a2 > 0.0)
+                space->q[(s->channels + c) * points + i] -= part * change / Z;
+        }
+    }
 }
 
 bool atom_begin(struct atom_solver *solver, int Z,
@@ -200,6 +226,11 @@ bool atom_begin(struct atom_solver *solver, int Z,
     struct atom_solver *s = solver;
     if (!check(configuration, Z, st))
         return false;
+    int before_Z = s->Z, before_channels = s->channels,
+        before_elements = s->elements;
+    const struct atom_space *before_space = s->now;
+    double before = s->electrons;
+    bool warm = options->warm && s->state == ATOM_CONVERGED;
     s->Z = Z;
     s->configuration = *configuration;
     s->options = *options;
@@ -235,7 +266,12 @@ bool atom_begin(struct atom_solver *solver, int Z,
     s->cycles = 0;
     memset(&s->result, 0, sizeof s->result);
     memset(s->above, 0, sizeof s->above);
-    start(s, mesh_elements_to(&s->now->mesh, CHOICE.reach * Z));
+    int elements = mesh_elements_to(&s->now->mesh, CHOICE.reach * Z);
+    warm = warm && before_Z == Z && before_channels == s->channels &&
+           before_space == s->now && before_elements == elements;
+    start(s, elements, warm);
+    if (warm)
+        warm_potential(s, before);
     return true;
 }
 
@@ -418,8 +454,11 @@ enum atom_state atom_step(struct atom_solver *solver)
     int missing = cycle(s);
     s->cycles++;
     int free = take_levels(s);
-    s->residual = s->Z * mixer_next(s->now->mixer, s->now->weight,
-                                    CHOICE.mixing, s->now->q, s->now->out);
+    s->residual =
+        s->Z * mixer_next(s->now->mixer, s->now->weight,
+                          s->cycles > 1 || s->warm ? CHOICE.mixing
+                                                   : CHOICE.first_mixing,
+                          s->now->q, s->now->out);
     double change = fabs(s->result.total - s->last_total);
     s->last_total = s->result.total;
     if (missing > 0 || !(s->residual < CHOICE.residual) ||
@@ -432,7 +471,7 @@ enum atom_state atom_step(struct atom_solver *solver)
     if (s->state == ATOM_OUT_OF_REACH && s->culprit < 0) {
         /* the same again on a longer mesh */
         s->state = ATOM_RUNNING;
-        start(s, s->now->mesh.elements);
+        start(s, s->now->mesh.elements, false);
     }
     return s->state;
 }

@@ -24,7 +24,8 @@ enum atom_relativity { ATOM_SCHROEDINGER, ATOM_DIRAC };
  * LSD exchange carries its relativistic factor, PBE does not. Spin-polarised
  * functionals fill the majority channel of every open subshell first.
  * speed_of_light: in atomic units, 0 for CODATA's. warm: start from the last
- * solution of this solver where it is of use. */
+ * solution of this solver when it has converged and is of the same nucleus and
+ * kind; the result is the same to the tolerance of the solver. */
 struct atom_options {
     enum atom_functional functional;
     enum atom_relativity relativity;

@@ -49,6 +49,7 @@ struct atom_solver {
     enum atom_state state;
     int cycles, culprit;
     int above[RADIAL_LEVELS_MAX]; /* cycles that ended with energy >= 0 */
+    bool warm;                    /* started from another solution */
     bool found;                   /* levels have been found once */
     double residual, last_total;
     struct atom_energy result;

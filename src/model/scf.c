@@ -124,8 +124,11 @@ static void close_work(void *work)
 static enum phase start(struct work *w, const struct species *species,
                         struct half *half, enum phase solve, enum phase next)
 {
-    static const struct atom_options options = {.functional = ATOM_LSD,
-                                                .relativity = ATOM_DIRAC};
+    /* the ion from its atom, the atom from nothing: an answer must not depend
+     * on what was asked before */
+    const struct atom_options options = {.functional = ATOM_LSD,
+                                         .relativity = ATOM_DIRAC,
+                                         .warm = half == &w->ion};
     struct status st = status_ok();
     *half = (struct half){.state = ATOM_CONVERGED, .evaluated = true};
     if (species->configuration.count == 0)

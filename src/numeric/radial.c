@@ -18,8 +18,8 @@ enum {
 };
 
 /* A search ends when a Rayleigh quotient moves the energy by less than this
- * part of it; the step is of third order, so that the result is far better. */
-static const double FOUND = 1e-7;
+ * part of it: the step is of third order, and further ones follow. */
+static const double FOUND = 1e-3;
 /* First part of the energy by which a search moves when it can only guess. */
 static const double NUDGE = 0.06;
 /* Change of the highest energy of a group, relative, at which its reach is

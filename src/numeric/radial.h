@@ -54,7 +54,8 @@ void radial_begin(struct radial *radial, double a2, int elements, int count,
 void radial_potential(struct radial *radial, int channel, const double *q,
                       const double *force);
 
-/* Finds every level from nothing. Gives the number not found. */
+/* Finds every level from nothing, each to about 1e-6 of its energy
+ * (radial_settle goes on from there). Gives the number not found. */
 int radial_find(struct radial *radial);
 
 /* One step after a small change of the potentials: energies shifted to first

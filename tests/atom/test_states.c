@@ -261,6 +261,33 @@ START_TEST(energies_agree_between_meshes)
 }
 END_TEST
 
+START_TEST(a_warm_start_leads_to_the_same_ion)
+{
+    struct cases cases = cases_read();
+    struct atom_solver *solver = case_solver();
+    struct species species;
+    int cold = 0, warm = 0;
+    struct atom_options from_atom = DIRAC;
+    from_atom.warm = true;
+    for (int Z = 3; Z <= 118; Z += 5) {
+        cases_species(&cases, Z, 1, &species);
+        check_species(solver, &species, &DIRAC);
+        double want = atom_energies(solver).total;
+        cold += atom_cycles(solver);
+        cases_species(&cases, Z, 0, &species);
+        check_species(solver, &species, &DIRAC);
+        cases_species(&cases, Z, 1, &species);
+        check_species(solver, &species, &from_atom);
+        near(atom_energies(solver).total, want, 2e-9, 1e-13, "Z=%d", Z);
+        warm += atom_cycles(solver);
+    }
+    printf("# ions: %d cycles cold, %d warm\n", cold, warm);
+    ck_assert_int_lt(warm, cold);
+    atom_solver_free(solver);
+    cases_free(&cases);
+}
+END_TEST
+
 TCase *case_states(void)
 {
     TCase *c = tcase_create("states");
@@ -275,5 +302,6 @@ TCase *case_states(void)
     tcase_add_test(c, a_solution_can_be_stepped_left_and_begun_again);
     tcase_add_test(c, fuzzed_configurations_end_in_a_state);
     tcase_add_test(c, energies_agree_between_meshes);
+    tcase_add_test(c, a_warm_start_leads_to_the_same_ion);
     return c;
 }
