@@ -37,7 +37,7 @@ static const struct {
     double tail;         /* density near the end of the mesh / its maximum */
 } CHOICE = {
     .first = {1e-3, 1e-5},
-    .length = {1.0, 0.8},
+    .length = {1.1, 0.8},
     .last = 118.0 * 100.0,
     .reach = 45.0,
     .first_mixing = 0.5,

@@ -47,6 +47,7 @@ struct lane_work {
     const double *schwarz;     /* hw schwarz */
     const double *mass;        /* hw slope² */
     const double *centrifugal; /* hw slope²/y² */
+    const double *square;      /* 2 weight slope² */
     const double *origin;      /* hw dF/dt in the field of the origin */
     double *factor;            /* of the matrix, elements × FACTOR × width */
     double *norm;              /* -dG/dE, points × width */
@@ -69,11 +70,15 @@ struct lane_kernel {
     /* Factors at energy[], one inverse iteration: chi, below, shift. */
     void (*step)(const struct lane_work *, const struct lane_channel *,
                  struct lane_group *);
+    /* Brings chi to size 1 or so. */
+    void (*rescale)(const struct lane_work *, struct lane_group *);
     /* Normalises chi, fills density. */
     void (*density)(const struct lane_work *, const struct lane_channel *,
                     struct lane_group *);
-    /* Adds weight[lane] × density to sum, points × width. */
-    void (*add)(const struct lane_group *, const double *weight, double *sum);
+    /* Adds weight[lane] × density to sum, points × width; the first time sum
+     * is set. */
+    void (*add)(const struct lane_group *, const double *weight, bool first,
+                int points, double *sum);
     /* First-order change of the energies, into shift[]. */
     void (*moved)(const struct lane_work *, const struct lane_channel *,
                   struct lane_group *);

@@ -14,7 +14,8 @@
  * the points e*LOBATTO_ORDER … (e+1)*LOBATTO_ORDER. */
 struct mesh {
     struct lobatto rule;
-    double running[LOBATTO_POINTS][LOBATTO_POINTS]; /* cumulative by column */
+    double running[LOBATTO_POINTS][LOBATTO_POINTS + 1]; /* cumulative by
+                                                           column */
     int elements, points;
     double first;  /* y of the first point */
     double length; /* of an element, in t */

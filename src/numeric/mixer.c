@@ -16,13 +16,15 @@ struct mixer {
     int capacity, n, measured, held, newest;
     double *x[H], *f[H];  /* trials and their residuals, a ring */
     double product[H][H]; /* of residuals */
+    double *sum;
     double *block;
 };
 
 struct mixer *mixer_new(int capacity, struct status *st)
 {
     struct mixer *m = calloc(1, sizeof *m);
-    double *block = calloc((size_t)capacity * 2 * H, sizeof *block);
+    size_t n = (size_t)capacity + 2;
+    double *block = calloc(n * (2 * H + 1), sizeof *block);
     if (!m || !block) {
         free(m);
         free(block);
@@ -32,9 +34,10 @@ struct mixer *mixer_new(int capacity, struct status *st)
     m->block = block;
     m->capacity = capacity;
     for (int k = 0; k < H; k++) {
-        m->x[k] = block + (size_t)capacity * (size_t)(2 * k);
-        m->f[k] = block + (size_t)capacity * (size_t)(2 * k + 1);
+        m->x[k] = block + n * (size_t)(2 * k);
+        m->f[k] = block + n * (size_t)(2 * k + 1);
     }
+    m->sum = block + n * 2 * H;
     return m;
 }
 
@@ -55,12 +58,40 @@ void mixer_reset(struct mixer *mixer, int n, int measured)
     mixer->newest = 0;
 }
 
-static double dot(int n, const double *w, const double *a, const double *b)
+/* Two numbers at a time, anywhere in memory; the work space is padded. */
+typedef double pair __attribute__((vector_size(16), aligned(8), may_alias));
+
+static pair load(const double *at)
 {
-    double sum = 0.0;
-    for (int i = 0; i < n; i++)
-        sum += w[i] * a[i] * b[i];
-    return sum;
+    return *(const pair *)(const void *)at;
+}
+
+static void store(double *at, pair value)
+{
+    *(pair *)(void *)at = value;
+}
+
+static double dot(int n, const double *a, const double *b)
+{
+    pair sum = {0};
+    for (int i = 0; i + 1 < n; i += 2)
+        sum += load(a + i) * load(b + i);
+    return sum[0] + sum[1] + (n % 2 ? a[n - 1] * b[n - 1] : 0.0);
+}
+
+/* x = Σ part_k (x_k + beta f_k) over the trials held, newest first. */
+static void combine(struct mixer *m, int now, const double *part, double beta,
+                    double *x)
+{
+    memset(m->sum, 0, (size_t)(m->n + 1) * sizeof *m->sum);
+    for (int k = 0; k < m->held; k++) {
+        int old = (now - k + H) % H;
+        double a = part[k], b = part[k] * beta;
+        for (int i = 0; i < m->n; i += 2)
+            store(m->sum + i, load(m->sum + i) + a * load(m->x[old] + i) +
+                                  b * load(m->f[old] + i));
+    }
+    memcpy(x, m->sum, (size_t)m->n * sizeof *x);
 }
 
 /* Cholesky solution of the m×m system in the differences of residuals, the
@@ -112,9 +143,11 @@ double mixer_next(struct mixer *mixer, const double *weight, double beta,
         m->x[now][i] = x[i];
         m->f[now][i] = g[i] - x[i];
     }
+    for (int i = 0; i < m->measured; i++)
+        m->sum[i] = weight[i] * m->f[now][i];
     for (int k = 0; k < m->held; k++) {
         int old = (now - k + H) % H;
-        double p = dot(m->measured, weight, m->f[now], m->f[old]);
+        double p = dot(m->measured, m->sum, m->f[old]);
         m->product[now][old] = m->product[old][now] = p;
     }
     double a[H][H], theta[H], whole = m->product[now][now];
@@ -128,15 +161,11 @@ double mixer_next(struct mixer *mixer, const double *weight, double beta,
         }
     }
     solve(m->held - 1, a, theta);
-    for (int i = 0; i < n; i++)
-        x[i] += beta * m->f[now][i];
+    double part[H] = {1.0};
     for (int j = 1; j < m->held; j++) {
-        int old = (now - j + H) % H;
-        const double *ox = m->x[old], *of = m->f[old];
-        const double *nx = m->x[now], *nf = m->f[now];
-        double t = theta[j - 1];
-        for (int i = 0; i < n; i++)
-            x[i] += t * (ox[i] - nx[i] + beta * (of[i] - nf[i]));
+        part[j] = theta[j - 1];
+        part[0] -= theta[j - 1];
     }
+    combine(m, now, part, beta, x);
     return sqrt(whole);
 }

@@ -13,6 +13,8 @@
 enum {
     P = LOBATTO_ORDER,
     GROUPS = RADIAL_LEVELS_MAX / 2 + RADIAL_CHANNELS,
+    BISECTIONS = 9, /* of WKB energies: to 3 % */
+    RESCALE = 4,    /* steps of a search between rescalings */
     SERIES = 7,     /* terms of the expansion at the origin */
     FIND_MAX = 200, /* steps before a search is given up */
 };
@@ -72,6 +74,7 @@ static size_t carve(struct radial *r, double *base)
     r->work.schwarz = take(&at, n);
     r->work.mass = take(&at, n);
     r->work.centrifugal = take(&at, n);
+    r->work.square = take(&at, n);
     r->work.factor = take(&at, factor * width);
     r->work.norm = take(&at, n * width);
     r->work.right = take(&at, n * width);
@@ -100,6 +103,7 @@ static void fill_tables(struct radial *r)
     double *schwarz = (double *)(uintptr_t)r->work.schwarz;
     double *mass = (double *)(uintptr_t)r->work.mass;
     double *centrifugal = (double *)(uintptr_t)r->work.centrifugal;
+    double *square = (double *)(uintptr_t)r->work.square;
     for (int i = 0; i <= P; i++)
         for (int j = 0; j <= i; j++)
             for (int k = 0; k < width; k++)
@@ -113,6 +117,7 @@ static void fill_tables(struct radial *r)
         schwarz[i] = hw * mesh->schwarz[i];
         mass[i] = hw * mesh->slope[i] * mesh->slope[i];
         centrifugal[i] = hw * relative * relative;
+        square[i] = 2.0 * mesh->weight[i] * mesh->slope[i] * mesh->slope[i];
     }
 }
 
@@ -344,7 +349,7 @@ static void guess(struct radial *r, int k)
         hi[lane] = lo[lane] - 14.0;
         goal[lane] = (level->nodes + 0.5) * pi;
     }
-    for (int step = 0; step < 11; step++) {
+    for (int step = 0; step < BISECTIONS; step++) {
         for (int lane = 0; lane < width; lane++)
             g->energy[lane] = -exp(0.5 * (lo[lane] + hi[lane]));
         r->kernel->phase(&r->work, c, g, r->elements);
@@ -423,6 +428,8 @@ static int find_group(struct radial *r, int k)
     int width = r->kernel->width, missing = 0;
     for (int turn = 0; turn < FIND_MAX && any_lost(r, k); turn++) {
         step(r, g);
+        if (turn % RESCALE == RESCALE - 1)
+            r->kernel->rescale(&r->work, g);
         for (int lane = 0; lane < g->used; lane++) {
             int i = r->member[k][lane];
             if (!r->search[i].lost)
@@ -603,8 +610,8 @@ void radial_functions(const struct radial *radial, int i, double *p, double *q)
 void radial_total(const struct radial *radial, int channel, double *density)
 {
     int width = radial->kernel->width, points = radial->elements * P + 1;
-    double *sum = radial->sum;
-    memset(sum, 0, (size_t)(points * width) * sizeof *sum);
+    const double *sum = radial->sum;
+    bool first = true;
     for (int k = 0; k < radial->groups; k++) {
         const struct lane_group *g = &radial->group[k];
         _Alignas(LANES_ALIGN) double weight[LANES_MAX] = {0};
@@ -612,11 +619,12 @@ void radial_total(const struct radial *radial, int channel, double *density)
             continue;
         for (int lane = 0; lane < g->used; lane++)
             weight[lane] = radial->level[radial->member[k][lane]].weight;
-        radial->kernel->add(g, weight, sum);
+        radial->kernel->add(g, weight, first, points, radial->sum);
+        first = false;
     }
     for (int i = 0; i < points; i++, sum += width) {
-        density[i] = sum[0];
-        for (int lane = 1; lane < width; lane++)
+        density[i] = first ? 0.0 : sum[0];
+        for (int lane = 1; lane < width && !first; lane++)
             density[i] += sum[lane];
     }
 }
