@@ -125,8 +125,7 @@ END_TEST
 START_TEST(a_level_beyond_the_mesh_is_out_of_reach)
 {
     struct atom_solver *solver = case_solver();
-    case_solve(solver, 118, "[Rn] 5f14 6d10 7s2 7p4 8f1", &LDA,
-               ATOM_OUT_OF_REACH);
+    case_solve(solver, 80, "[Xe] 4f14 5d10 6s1 8f1", &LDA, ATOM_OUT_OF_REACH);
     int culprit = atom_culprit(solver);
     ck_assert_int_eq(atom_level_at(solver, culprit).n, 8);
     /* the same level of a light atom is within it */
