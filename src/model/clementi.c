@@ -19,13 +19,11 @@ static const struct citation citations[] = {
             1                                                                  \
     }
 
-enum { OFFER_ZEFF, OFFER_RADIUS, OFFER_IONIZATION, OFFER_COUNT };
-
-static const struct model_offer offers[OFFER_COUNT] = {
-    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_RULE)},
-    [OFFER_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(DEFINITION_RADIAL_MAXIMUM)},
-    [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION)},
+static const struct model_offer offers[RULE_OFFERS] = {
+    [RULE_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_RULE)},
+    [RULE_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(DEFINITION_RADIAL_MAXIMUM)},
+    [RULE_IONIZATION] = {QUANTITY_IONIZATION,
+                         PROVENANCE(DEFINITION_IONIZATION)},
 };
 
 /* Subshells of the rules, as bits in the order in which they fill a row. */
@@ -151,21 +149,10 @@ static bool sigma(const struct species *species,
     return true;
 }
 
-static double n_star(int n)
-{
-    return n;
-}
-
 static struct reading read(const void *work, int offer, int n, int l)
 {
-    const struct question *q = &((const struct rule_work *)work)->question;
-    const struct model_offer *o = &offers[offer];
-    if (offer == OFFER_ZEFF)
-        return rule_zeff(o, q, sigma, n, l);
-    if (offer == OFFER_RADIUS)
-        return rule_radius(o, q, sigma, n_star, n, l);
-    struct reading r = rule_ionization(o, q, sigma);
-    if (r.state == READING_OK)
+    struct reading r = rule_read(work, offers, offer, sigma, n, l);
+    if (offer == RULE_IONIZATION && r.state == READING_OK)
         r.remark = "one-electron estimate; the paper gives no energies";
     return r;
 }
@@ -176,7 +163,7 @@ const struct model model_clementi = {
     .domain = "configurations up to 4p, so up to Kr",
     .closed = true,
     .offers = offers,
-    .offer_count = OFFER_COUNT,
+    .offer_count = RULE_OFFERS,
     .work_size = sizeof(struct rule_work),
     .begin = rule_begin,
     .step = rule_step,

@@ -85,3 +85,20 @@ struct reading rule_ionization(const struct model_offer *offer,
     energy.remark = r.remark;
     return energy;
 }
+
+double rule_plain_n(int n)
+{
+    return n;
+}
+
+struct reading rule_read(const void *work, const struct model_offer *offers,
+                         int offer, rule_sigma *sigma, int n, int l)
+{
+    const struct question *q = &((const struct rule_work *)work)->question;
+    const struct model_offer *o = &offers[offer];
+    if (offer == RULE_ZEFF)
+        return rule_zeff(o, q, sigma, n, l);
+    if (offer == RULE_RADIUS)
+        return rule_radius(o, q, sigma, rule_plain_n, n, l);
+    return rule_ionization(o, q, sigma);
+}

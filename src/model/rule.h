@@ -44,4 +44,15 @@ struct reading rule_ionization(const struct model_offer *offer,
                                const struct question *question,
                                rule_sigma *sigma);
 
+/* n itself: the effective quantum number of a rule that has none of its own. */
+double rule_plain_n(int n);
+
+/* The first offers of every rule, in this order; slater has one more. */
+enum { RULE_ZEFF, RULE_RADIUS, RULE_IONIZATION, RULE_OFFERS };
+
+/* model.read of a rule whose ionization energy is the outermost subshell's:
+ * offers[RULE_OFFERS]. */
+struct reading rule_read(const void *work, const struct model_offer *offers,
+                         int offer, rule_sigma *sigma, int n, int l);
+
 #endif

@@ -1,7 +1,6 @@
 /* SPDX-License-Identifier: MIT */
 /* Every allocation of a call fails once in turn: status 1, one line that says
- * so, no file left behind, nothing leaked (the sanitizer build looks). The
- * linker sends the program's allocations through the __wrap_ functions. */
+ * so, no file left behind, nothing leaked (the sanitizer build looks). */
 #include <check.h>
 #include <fcntl.h>
 #include <stdio.h>
@@ -11,42 +10,8 @@
 
 #include "cli/run.h"
 #include "support/program.h"
+#include "support/fault.h"
 #include "support/run.h"
-
-void *__real_malloc(size_t size);
-void *__real_calloc(size_t count, size_t size);
-void *__real_realloc(void *old, size_t size);
-void *__wrap_malloc(size_t size);
-void *__wrap_calloc(size_t count, size_t size);
-void *__wrap_realloc(void *old, size_t size);
-
-/* Allocations still to be granted; negative: no limit. */
-static long granted = -1;
-
-static int refuse(void)
-{
-    if (granted < 0)
-        return 0;
-    if (granted == 0)
-        return 1;
-    granted--;
-    return 0;
-}
-
-void *__wrap_malloc(size_t size)
-{
-    return refuse() ? NULL : __real_malloc(size);
-}
-
-void *__wrap_calloc(size_t count, size_t size)
-{
-    return refuse() ? NULL : __real_calloc(count, size);
-}
-
-void *__wrap_realloc(void *old, size_t size)
-{
-    return refuse() ? NULL : __real_realloc(old, size);
-}
 
 /* Runs a call with all but `limit` allocations refused; the message goes to
  * complaint[size]. */
@@ -64,9 +29,9 @@ static int run_with(const char *line, long limit, char *complaint, size_t size)
     fflush(stderr);
     int kept = dup(STDERR_FILENO);
     dup2(fileno(caught), STDERR_FILENO);
-    granted = limit;
+    fault_grant(limit);
     int status = cli_run(p.count + 1, argv);
-    granted = -1;
+    fault_grant(-1);
     fflush(stderr);
     dup2(kept, STDERR_FILENO);
     close(kept);

@@ -10,42 +10,8 @@
 
 #include "refdata/catalogue.h"
 #include "refdata/loader.h"
+#include "support/fault.h"
 #include "support/run.h"
-
-void *__real_malloc(size_t size);
-void *__real_calloc(size_t count, size_t size);
-void *__real_realloc(void *old, size_t size);
-void *__wrap_malloc(size_t size);
-void *__wrap_calloc(size_t count, size_t size);
-void *__wrap_realloc(void *old, size_t size);
-
-/* Allocations still to be granted; negative: no limit. */
-static long granted = -1;
-
-static int refuse(void)
-{
-    if (granted < 0)
-        return 0;
-    if (granted == 0)
-        return 1;
-    granted--;
-    return 0;
-}
-
-void *__wrap_malloc(size_t size)
-{
-    return refuse() ? NULL : __real_malloc(size);
-}
-
-void *__wrap_calloc(size_t count, size_t size)
-{
-    return refuse() ? NULL : __real_calloc(count, size);
-}
-
-void *__wrap_realloc(void *old, size_t size)
-{
-    return refuse() ? NULL : __real_realloc(old, size);
-}
 
 /* Adds one file with all but `limit` allocations refused. */
 static bool add_with(const char *path, long limit, struct catalogue *catalogue,
@@ -53,9 +19,9 @@ static bool add_with(const char *path, long limit, struct catalogue *catalogue,
 {
     cJSON_Hooks hooks = {__wrap_malloc, free};
     cJSON_InitHooks(&hooks);
-    granted = limit;
+    fault_grant(limit);
     bool ok = catalogue_add_file(catalogue, path, st);
-    granted = -1;
+    fault_grant(-1);
     cJSON_InitHooks(NULL);
     return ok;
 }
