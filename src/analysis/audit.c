@@ -126,10 +126,16 @@ bool audit_holds(struct audit_part part, const struct audit_point *point)
 struct summary audit_summary(const struct audit_series *series,
                              struct audit_part part)
 {
+    return audit_summary_without(series, part, 0);
+}
+
+struct summary audit_summary_without(const struct audit_series *series,
+                                     struct audit_part part, int z)
+{
     struct summary summary = {0};
     for (int i = 0; i < series->count; i++) {
         const struct audit_point *p = &series->points[i];
-        if (!audit_holds(part, p))
+        if (p->z == z || !audit_holds(part, p))
             continue;
         if (p->state == ROW_OK)
             summary_add_residual(&summary, p->z, p->charge, p->residual,

@@ -77,6 +77,11 @@ bool audit_holds(struct audit_part part, const struct audit_point *point);
 struct summary audit_summary(const struct audit_series *series,
                              struct audit_part part);
 
+/* The same without one element: how large residuals usually are where it
+ * stands. */
+struct summary audit_summary_without(const struct audit_series *series,
+                                     struct audit_part part, int z);
+
 /* The parts of the chosen scopes (bit 1 << scope each; 0: all, block, period,
  * group, and charge and evidence where there is more than one of them) in which
  * the series of a quantity have species, at most max. */

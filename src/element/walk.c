@@ -60,7 +60,7 @@ void walk_fill(struct walk *walk, enum walk_kind kind, int z, int charge)
             add(walk, i, i - electrons);
     } else {
         for (int i = 1; i <= Z_MAX; i++)
-            if (i == z || (i > charge && is_beside(element_at(i), from, kind)))
+            if (i == z || (i >= charge && is_beside(element_at(i), from, kind)))
                 add(walk, i, charge);
     }
 }

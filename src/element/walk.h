@@ -33,8 +33,8 @@ struct walk {
     } steps[WALK_MAX];
 };
 
-/* The walk of a kind through a species: elements at the same charge where they
- * have an electron left (the f elements go down in pairs, Ce Th); all charges
+/* The walk of a kind through a species: elements that have its charge (the f
+ * elements go down in pairs, Ce Th); all charges
  * from 0, or from that of an anion, to the last electron; all atoms and ions
  * with as many electrons. A bare nucleus walks alone or with its element. */
 void walk_fill(struct walk *walk, enum walk_kind kind, int z, int charge);

@@ -44,6 +44,18 @@ static void fill_models(struct ui *ui, struct chooser *c)
     }
 }
 
+/* Kinds of stored values as the list of references offers them. */
+static const struct {
+    const char *words;
+    unsigned set;
+} kinds[] = {
+    {"all kinds", 0},
+    {"measured alone", 1u << EVIDENCE_MEASURED},
+    {"extrapolated alone", 1u << EVIDENCE_EXTRAPOLATED},
+    {"theoretical alone", 1u << EVIDENCE_THEORETICAL},
+};
+#define KINDS_FROM (-10) /* value of the first of them, and downwards */
+
 static void fill_references(struct ui *ui, struct chooser *c)
 {
     const struct reference_list *list = study_references(ui->study);
@@ -55,6 +67,42 @@ static void fill_references(struct ui *ui, struct chooser *c)
             add(c, r, ui->choice.reference == ref, "%s: %s",
                 ref->provenance->id, ref->provenance->definition);
     }
+    for (size_t k = 0; k < sizeof kinds / sizeof kinds[0]; k++)
+        add(c, KINDS_FROM - (int)k, false, "values: %s%s", kinds[k].words,
+            ui->choice.evidence == kinds[k].set ? ", as now" : "");
+}
+
+static void fill_against(struct ui *ui, struct chooser *c)
+{
+    const struct reference_list *list = study_references(ui->study);
+    add(c, -1, ui->choice.against == NULL, "no second set");
+    for (int r = 0; r < list->count; r++) {
+        const struct reference *ref = &list->items[r];
+        if (ref->quantity == ui->choice.quantity)
+            add(c, r, ui->choice.against == ref, "%s: %s", ref->provenance->id,
+                ref->provenance->definition);
+    }
+}
+
+/* One line per model, on or off; Enter turns it and the list stays. */
+static void fill_curves(struct ui *ui, struct chooser *c)
+{
+    for (int m = 0; m < model_count(); m++)
+        if (model_offer_for(model_at(m), ui->choice.quantity, NULL) >= 0)
+            add(c, m, false, "[%c] %s",
+                ui->choice.hidden_curves >> m & 1u ? ' ' : 'x',
+                model_at(m)->id);
+}
+
+/* The one after the present walk is offered first: opened and accepted, the
+ * list goes through them. */
+static void fill_walks(struct ui *ui, struct chooser *c)
+{
+    enum walk_kind next = (enum walk_kind)((ui->choice.walk + 1) % WALK_COUNT);
+    for (int k = 0; k < WALK_COUNT; k++)
+        add(c, k, k == (int)next, "%s: %s%s", walk_id((enum walk_kind)k),
+            walk_words((enum walk_kind)k),
+            k == (int)ui->choice.walk ? ", as now" : "");
 }
 
 static void fill_subshells(struct ui *ui, struct chooser *c)
@@ -156,6 +204,9 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
         [CHOOSER_EXPORT] = fill_exports,
         [CHOOSER_METHOD] = fill_methods,
         [CHOOSER_OVERLAY] = fill_overlays,
+        [CHOOSER_AGAINST] = fill_against,
+        [CHOOSER_CURVES] = fill_curves,
+        [CHOOSER_WALK] = fill_walks,
     };
     ui->chooser = (struct chooser){.kind = kind};
     ui->message[0] = '\0';
@@ -171,7 +222,7 @@ static void take_quantity(struct ui *ui, enum quantity_id quantity)
 {
     struct choice *c = &ui->choice;
     c->quantity = quantity;
-    c->reference = NULL;
+    c->reference = c->against = NULL;
     if (!quantity_at(quantity)->per_subshell)
         c->n = c->l = 0;
     if (c->model && model_offer_for(c->model, quantity, NULL) >= 0)
@@ -203,13 +254,15 @@ static enum effect take(struct ui *ui)
     int value = c->values[c->at];
     enum chooser_kind kind = c->kind;
     c->kind = CHOOSER_NONE;
-    ui->stale = true;
+    ui->stale = ui->comparison_stale = true;
     if (kind == CHOOSER_QUANTITY) {
         take_quantity(ui, (enum quantity_id)value);
     } else if (kind == CHOOSER_MODEL) {
         ui->choice.model = model_at(value);
         if (ui->choice.shown == SHOWN_REFERENCE)
             ui->choice.shown = SHOWN_VALUE;
+    } else if (kind == CHOOSER_REFERENCE && value <= KINDS_FROM) {
+        ui->choice.evidence = kinds[KINDS_FROM - value].set;
     } else if (kind == CHOOSER_REFERENCE) {
         ui->choice.reference =
             value < 0 ? NULL : &study_references(ui->study)->items[value];
@@ -224,6 +277,16 @@ static enum effect take(struct ui *ui)
             (enum functional)(value / RELATIVITY_COUNT);
         ui->choice.atom.method.relativity =
             (enum relativity)(value % RELATIVITY_COUNT);
+    } else if (kind == CHOOSER_AGAINST) {
+        ui->choice.against =
+            value < 0 ? NULL : &study_references(ui->study)->items[value];
+    } else if (kind == CHOOSER_CURVES) {
+        ui->choice.hidden_curves ^= 1u << value;
+        int at = c->at;
+        chooser_open(ui, CHOOSER_CURVES);
+        c->at = at;
+    } else if (kind == CHOOSER_WALK) {
+        ui->choice.walk = (enum walk_kind)value;
     } else if (kind == CHOOSER_OVERLAY) {
         take_overlay(ui, value);
     } else {
@@ -302,6 +365,9 @@ static void draw_frame(struct canvas *canvas, struct area a, const char *title)
 void chooser_draw(const struct ui *ui, struct canvas *canvas)
 {
     static const char *const titles[] = {
+        [CHOOSER_AGAINST] = "Second reference",
+        [CHOOSER_CURVES] = "Curves: Enter turns one on or off, Esc ends",
+        [CHOOSER_WALK] = "Walk",
         [CHOOSER_NONE] = "",
         [CHOOSER_QUANTITY] = "Quantity",
         [CHOOSER_MODEL] = "Model",

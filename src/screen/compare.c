@@ -22,7 +22,32 @@ static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
             (struct ask){.z = c->pins[i].z, .charge = c->pins[i].charge};
     if (count == 0)
         asks[count++] = (struct ask){.z = c->z, .charge = c->charge};
+    for (int i = 0; i < count; i++) {
+        struct ask own;
+        if (ui_ask(ui, asks[i].z, asks[i].charge, &own))
+            asks[i].configuration = own.configuration;
+    }
     return count;
+}
+
+/* The second reference less the first set shown, as `compare --against` prints
+ * it. */
+static bool add_second(struct ui *ui)
+{
+    const struct reference *against = ui->choice.against;
+    struct comparison *c = &ui->comparison;
+    struct status st = status_ok();
+    for (int i = 0; against && i < c->line_count; i++) {
+        const struct provenance *first = c->lines[i].provenance;
+        if (c->lines[i].quantity != against->quantity || first->computed)
+            continue;
+        if (first == against->provenance ||
+            comparison_add_pair(c, first, against->provenance, &st))
+            return true;
+        ui_report(ui, true, "%s", st.message);
+        return false;
+    }
+    return true;
 }
 
 static bool refresh(struct ui *ui)
@@ -39,7 +64,7 @@ static bool refresh(struct ui *ui)
         return false;
     }
     ui->comparison_stale = false;
-    return true;
+    return add_second(ui);
 }
 
 /* Columns of the labels: enough for the longest id where there is room. */

@@ -4,7 +4,9 @@
 #include <stdlib.h>
 
 #include "base/text.h"
+#include "element/subshell.h"
 #include "export/atom.h"
+#include "export/audit.h"
 #include "export/compare.h"
 #include "export/rows.h"
 #include "screen/atom.h"
@@ -51,6 +53,28 @@ static bool add_all_models(const struct ui *ui, struct rows *rows, int z,
     return any || add_row(ui, rows, &ask, st);
 }
 
+/* Every step of the trend under every model that has a curve. */
+static bool collect_trend(const struct ui *ui, struct rows *rows,
+                          struct status *st)
+{
+    const struct trend *trend = &ui->trend;
+    for (int i = 0; i < trend->walk.count; i++) {
+        struct ask ask;
+        if (!ui_ask(ui, trend->walk.steps[i].z, trend->walk.steps[i].charge,
+                    &ask))
+            continue;
+        ask.model = NULL;
+        if (trend->series_count == 0 && !add_row(ui, rows, &ask, st))
+            return false;
+        for (int s = 0; s < trend->series_count; s++) {
+            ask.model = trend->series[s].model;
+            if (!add_row(ui, rows, &ask, st))
+                return false;
+        }
+    }
+    return true;
+}
+
 static bool collect(const struct ui *ui, struct rows *rows, struct status *st)
 {
     const struct choice *c = &ui->choice;
@@ -63,6 +87,8 @@ static bool collect(const struct ui *ui, struct rows *rows, struct status *st)
                 return false;
         return true;
     }
+    if (ui->scope == SCOPE_TREND)
+        return collect_trend(ui, rows, st);
     for (int z = 1; z <= Z_MAX; z++)
         if (ui_ask(ui, z, c->charge, &ask) && !add_row(ui, rows, &ask, st))
             return false;
@@ -87,6 +113,9 @@ static bool export_atom(const struct ui *ui, FILE *out, struct status *st)
 
 bool ui_export(const struct ui *ui, FILE *out, struct status *st)
 {
+    /* Up to date for the same reason. */
+    if (ui->scope == SCOPE_AUDIT)
+        return audit_write(out, EXPORT_CSV, &ui->audit, 0, st);
     if (ui->scope == SCOPE_ATOM)
         return export_atom(ui, out, st);
     struct rows rows = {0};
@@ -128,14 +157,87 @@ static void atom_command(const struct ui *ui, struct text *t)
               ui_unit(ui, QUANTITY_IONIZATION)->id);
 }
 
+/* The choices that list and audit share. */
+static void add_choices(const struct ui *ui, struct text *t)
+{
+    const struct choice *c = &ui->choice;
+    char label[SUBSHELL_TEXT_MAX];
+    bool begun = false;
+    if (c->n)
+        text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
+    if (c->reference)
+        text_addf(t, " --reference %s", c->reference->provenance->id);
+    if (c->against && ui->scope != SCOPE_AUDIT)
+        text_addf(t, " --against %s", c->against->provenance->id);
+    for (int e = 0; e < EVIDENCE_COUNT && c->evidence; e++)
+        if (c->evidence >> e & 1u) {
+            text_addf(t, "%s%s", begun ? "," : " --evidence ",
+                      evidence_id((enum evidence)e));
+            begun = true;
+        }
+}
+
+/* The words that choose the steps of a walk. */
+static void add_walk(const struct ui *ui, struct text *t)
+{
+    const struct choice *c = &ui->choice;
+    const struct element *e = element_at(c->z);
+    int lead = e->block == 'd' ? 1 : e->block == 'f' ? 2 : 0;
+    if (c->walk == WALK_PERIOD)
+        text_addf(t, " period:%d", e->period);
+    else if (c->walk == WALK_BLOCK)
+        text_addf(t, " block:%d%c", e->period - lead, e->block);
+    else if (c->walk == WALK_ISOELECTRONIC)
+        text_addf(t, " electrons:%d", c->z - c->charge);
+    else if (c->walk == WALK_CHARGES)
+        text_addf(t, " %s --charge all", e->symbol);
+    else if (e->group)
+        text_addf(t, " group:%d", e->group);
+    else
+        for (int i = 0; i < ui->trend.walk.count; i++)
+            text_addf(t, " %s", element_at(ui->trend.walk.steps[i].z)->symbol);
+    if (c->charge && c->walk < WALK_CHARGES)
+        text_addf(t, " --charge %d", c->charge);
+}
+
+static void trend_command(const struct ui *ui, struct text *t)
+{
+    text_add(t, "outershell list");
+    add_walk(ui, t);
+    text_addf(t, " --quantity %s", quantity_at(ui->choice.quantity)->id);
+    for (int s = 0; s < ui->trend.series_count; s++)
+        text_addf(t, "%s%s", s ? "," : " --model ",
+                  ui->trend.series[s].model->id);
+    add_choices(ui, t);
+    add_units(ui, t);
+    text_add(t, " --format csv");
+}
+
+static void audit_command(const struct ui *ui, struct text *t)
+{
+    text_addf(t, "outershell audit --quantity %s",
+              quantity_at(ui->choice.quantity)->id);
+    if (ui->choice.charge)
+        text_addf(t, " --charge %d", ui->choice.charge);
+    add_choices(ui, t);
+    add_units(ui, t);
+    text_add(t, " --format csv");
+}
+
 void ui_export_command(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
+    if (ui->scope == SCOPE_TREND || ui->scope == SCOPE_AUDIT) {
+        if (ui->scope == SCOPE_TREND)
+            trend_command(ui, t);
+        else
+            audit_command(ui, t);
+        return;
+    }
     if (ui->scope == SCOPE_ATOM) {
         atom_command(ui, t);
         return;
     }
-    char label[SUBSHELL_TEXT_MAX];
     bool compare = ui->scope == SCOPE_COMPARE;
     text_add(t, compare ? "outershell compare" : "outershell list");
     if (ui->scope == SCOPE_ROW || (compare && c->pin_count == 0))
@@ -149,10 +251,9 @@ void ui_export_command(const struct ui *ui, struct text *t)
             text_addf(t, " --model %s", c->model->id);
         if (ui->scope == SCOPE_SHEET && c->charge)
             text_addf(t, " --charge %d", c->charge);
-        if (c->n)
-            text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
-        if (c->reference)
-            text_addf(t, " --reference %s", c->reference->provenance->id);
+        add_choices(ui, t);
+    } else if (c->against) {
+        text_addf(t, " --against %s", c->against->provenance->id);
     }
     add_units(ui, t);
     text_add(t, " --format csv");

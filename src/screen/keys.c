@@ -6,21 +6,39 @@
 
 #define ON_MAP (1u << SCREEN_MAP)
 #define ON_COMPARE (1u << SCREEN_COMPARE)
+#define ON_TREND (1u << SCREEN_TREND)
+#define ON_AUDIT (1u << SCREEN_AUDIT)
 #define ON_ATOM (1u << SCREEN_ATOM)
 #define ON_SOURCES (1u << SCREEN_SOURCES)
 #define ON_KEYS (1u << SCREEN_KEYS)
-#define ON_DATA (ON_MAP | ON_COMPARE | ON_ATOM)
-#define ON_ALL (ON_DATA | ON_SOURCES | ON_KEYS)
+#define ON_VALUES (ON_MAP | ON_TREND | ON_AUDIT)
+#define ON_DATA (ON_MAP | ON_COMPARE | ON_TREND | ON_ATOM)
+#define ON_ALL (ON_DATA | ON_AUDIT | ON_SOURCES | ON_KEYS)
 
 /* Capital letters and digits are missing on purpose: they start a jump. */
 static const struct key_row rows[] = {
     {ACTION_KEYS, '?', 0, "?", "keys", "what every key does", true, ON_ALL},
     {ACTION_QUIT, 'q', 0, "q", "quit", "leave the program", true, ON_ALL},
     {ACTION_QUANTITY, 'w', 0, "w", "quantity", "choose what is shown", true,
-     ON_MAP},
-    {ACTION_MODEL, 'b', 0, "b", "model", "choose by which model", true, ON_MAP},
+     ON_VALUES},
+    {ACTION_MODEL, 'b', 0, "b", "model", "choose by which model", true,
+     ON_MAP | ON_AUDIT},
+    {ACTION_MODELS, 'b', 0, "b", "curves", "choose which models have a curve",
+     true, ON_TREND},
     {ACTION_REFERENCE, 'r', 0, "r", "reference",
-     "choose against which stored set", true, ON_MAP},
+     "choose against which stored set, and which kinds of its values", true,
+     ON_VALUES},
+    {ACTION_WALK, 'z', 0, "z", "walk",
+     "along period, group, row of the block, charges, isoelectronic series",
+     true, ON_TREND},
+    {ACTION_WALK, 'z', 0, "", "", "", false, ON_MAP},
+    {ACTION_PERCENT, 'v', 0, "v", "%",
+     "residuals in the unit or in per cent of the reference", true, ON_TREND},
+    {ACTION_TREND_AXIS, 'g', 0, "g", "axis",
+     "linear or logarithmic axis, or as the values ask for", true, ON_TREND},
+    {ACTION_STATISTIC, 'v', 0, "v", "figure",
+     "mean size, per cent, mean, root mean square, largest, or counts", true,
+     ON_AUDIT},
     {ACTION_SHOWN, 'v', 0, "v", "show",
      "colour by the model's value, the reference, or the residual", true,
      ON_MAP},
@@ -37,24 +55,35 @@ static const struct key_row rows[] = {
     {ACTION_AXIS, 'g', 0, "g", "axis", "logarithmic or square-root axis of r",
      true, ON_ATOM},
     {ACTION_DOTS, '.', 0, ".", "dots",
-     "draw curves in braille dots, or in blocks", false, ON_ATOM},
+     "draw curves in braille dots, or in blocks", false,
+     ON_MAP | ON_TREND | ON_ATOM},
+    {ACTION_TREND, 't', 0, "t", "trend",
+     "the quantity along a period, a group, charges", true, ON_ALL},
     {ACTION_PIN, 'p', 0, "p", "pin", "pin or unpin the selected species", true,
      ON_DATA},
     {ACTION_COMPARE, 'c', 0, "c", "compare", "the pinned species side by side",
      true, ON_ALL},
+    {ACTION_AUDIT, 'd', 0, "d", "audit",
+     "how large the residuals of each model are, and where", true, ON_ALL},
+    {ACTION_AGAINST, 'n', 0, "n", "second",
+     "choose a second stored set beside the reference", true,
+     ON_MAP | ON_COMPARE | ON_TREND},
     {ACTION_ATOM, 'a', 0, "a", "atom", "the self-consistent atom", true,
      ON_ALL},
     {ACTION_EXPORT, 'e', 0, "e", "export", "write what is shown to a CSV file",
-     true, ON_DATA},
+     true, ON_DATA | ON_AUDIT},
     {ACTION_CHARGE_UP, '+', 0, "+", "charge", "one electron less", true,
-     ON_DATA},
-    {ACTION_CHARGE_UP, '=', 0, "=", "", "", false, ON_DATA},
+     ON_DATA | ON_AUDIT},
+    {ACTION_CHARGE_UP, '=', 0, "=", "", "", false, ON_DATA | ON_AUDIT},
     {ACTION_CHARGE_DOWN, '-', 0, "-", "charge", "one electron more", false,
-     ON_DATA},
+     ON_DATA | ON_AUDIT},
     {ACTION_SUBSHELL, 'o', 0, "o", "subshell",
-     "choose a subshell, or the outermost", true, ON_MAP},
+     "choose a subshell, or the outermost", true, ON_VALUES},
+    {ACTION_CONFIGURATION, ':', 0, ":", "configuration",
+     "type electrons of your own for the selected species", true,
+     ON_MAP | ON_COMPARE | ON_TREND},
     {ACTION_UNIT, 'u', 0, "u", "unit", "choose the unit of the quantity", true,
-     ON_DATA},
+     ON_DATA | ON_AUDIT},
     {ACTION_MAP, 'm', 0, "m", "map", "the grid of elements", true, ON_ALL},
     {ACTION_SOURCES, 's', 0, "s", "sources", "what the numbers rest on", true,
      ON_ALL},
@@ -70,6 +99,9 @@ static const struct key_row rows[] = {
      "18 or 32 columns, where the terminal is wide enough", false, ON_MAP},
     {ACTION_GROUP3, 'y', 0, "y", "group 3",
      "group 3 as Sc Y Lu Lr or as Sc Y La Ac", false, ON_MAP},
+    {ACTION_OPEN, 0, KEY_CODE_ENTER, "Enter", "open",
+     "to the species of the part, then to the selected one on the map", true,
+     ON_AUDIT},
     {ACTION_OPEN, 0, KEY_CODE_ENTER, "Enter", "details",
      "grid or pane, table or plots, where only one fits; goes on solving",
      false, ON_MAP | ON_ATOM},

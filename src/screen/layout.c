@@ -6,6 +6,13 @@
 #define PANE_ROWS_MIN 7
 #define PANE_ROWS_TALL 18 /* what must be left below cells of three rows */
 #define SIDE_COLUMNS_MIN 34
+#define TREND_COLUMNS_MIN 56 /* for a trend beside the map */
+#define TREND_ROWS_MIN 16
+#define TREND_FACTS_ROWS 9 /* what the facts keep above it */
+#define TREND_TABLE_COLUMNS 48
+#define TREND_BESIDE_MIN 110
+#define TREND_LINES 3
+#define AUDIT_LABEL_COLUMNS 15
 
 /* Rows of the grid: periods, and in 18 columns a gap and two f rows. */
 static int grid_height(enum grid_width width, int cell_rows, int gap)
@@ -58,6 +65,12 @@ static void place_rest(struct map_layout *l, int rows, int columns)
     if (beside >= SIDE_COLUMNS_MIN)
         l->side = (struct area){l->grid.row, l->grid.columns + 1, l->grid.rows,
                                 beside};
+    int trend = l->side.rows - TREND_FACTS_ROWS;
+    if (beside >= TREND_COLUMNS_MIN && trend >= TREND_ROWS_MIN) {
+        l->trend = (struct area){l->side.row + TREND_FACTS_ROWS, l->side.column,
+                                 trend, beside};
+        l->side.rows = TREND_FACTS_ROWS - 1;
+    }
 }
 
 static struct map_layout layout_single(int rows, int columns)
@@ -153,5 +166,47 @@ struct atom_layout layout_atom(int rows, int columns, int shells)
     int charge = free * 2 / 5 >= CHARGE_ROWS_MIN ? free * 2 / 5 : 0;
     l.plot = (struct area){top, column, free - charge, right};
     l.charge = (struct area){top + free - charge, column, charge, right};
+    return l;
+}
+
+struct trend_layout layout_trend(struct area area)
+{
+    struct trend_layout l = {.beside = area.columns >= TREND_BESIDE_MIN};
+    struct area plots = area;
+    if (l.beside) {
+        plots.columns -= TREND_TABLE_COLUMNS + 2;
+        l.table = (struct area){area.row, plots.column + plots.columns + 2,
+                                area.rows, TREND_TABLE_COLUMNS};
+    } else {
+        int lines = area.rows < 14 ? 1 : TREND_LINES;
+        plots.rows -= lines;
+        l.table = (struct area){area.row + plots.rows, area.column, lines,
+                                area.columns};
+    }
+    /* Each plot has a title, an axis and names besides its inside. */
+    int residuals = plots.rows < 15 ? 0 : plots.rows * 2 / 5;
+    l.values = (struct area){plots.row, plots.column, plots.rows - residuals,
+                             plots.columns};
+    l.residuals = (struct area){plots.row + plots.rows - residuals,
+                                plots.column, residuals, plots.columns};
+    return l;
+}
+
+struct audit_layout layout_audit(int rows, int columns, int models)
+{
+    struct audit_layout l = {.cell_columns = columns >= 110 ? 12 : 8};
+    int words = columns >= 110 ? 3 : 4;
+    int height = rows - 3 - words; /* title, message, keys */
+    int table = AUDIT_LABEL_COLUMNS + models * l.cell_columns;
+    int right = columns - table - 2;
+    l.words = (struct area){rows - 2 - words, 0, words, columns};
+    l.table = (struct area){1, 0, height, table < columns ? table : columns};
+    if (right < 22)
+        return l;
+    int scatter = height * 3 / 5;
+    if (scatter > right * 2 / 3 && height - right * 2 / 3 > 6)
+        scatter = right * 2 / 3;
+    l.scatter = (struct area){1, table + 2, scatter, right};
+    l.points = (struct area){1 + scatter, table + 2, height - scatter, right};
     return l;
 }

@@ -25,6 +25,23 @@ enum map_form {
  * FORM_SINGLE the last row is both). Areas with no rows are absent. side:
  * facts of the element, right of the grid; where it is absent they stand in
  * the gap of the grid above the d block. */
+/* The trend in an area: plots one above the other, the numbers of the selected
+ * step beside them, or below in few rows. Without rows a part is absent. */
+struct trend_layout {
+    struct area values, residuals, table;
+    bool beside;
+};
+
+struct trend_layout layout_trend(struct area area);
+
+/* Audit: the table of figures, the scatter, its species, a few rows of words.
+ */
+struct audit_layout {
+    struct area table, scatter, points, words;
+    int cell_columns;
+};
+struct audit_layout layout_audit(int rows, int columns, int models);
+
 struct map_layout {
     enum map_form form;
     enum grid_width width;
@@ -33,6 +50,7 @@ struct map_layout {
     struct area scale;
     struct area pane;
     struct area side;
+    struct area trend; /* below the facts, where the side is large */
     int message_row, key_row;
 };
 

@@ -6,6 +6,7 @@
 
 #include "base/text.h"
 #include "screen/parts.h"
+#include "screen/trend.h"
 
 #define GLYPH_GAP 0x2571 /* hatching */
 #define GLYPH_PIN '*'
@@ -292,6 +293,12 @@ static void draw_list(const struct ui *ui, struct canvas *canvas, struct area a)
     }
 }
 
+bool trend_on_map(const struct ui *ui)
+{
+    struct map_layout l = layout_of(ui);
+    return ui->screen == SCREEN_MAP && l.form == FORM_WHOLE && l.trend.rows > 0;
+}
+
 static void draw(struct ui *ui, struct canvas *canvas)
 {
     struct map_layout l = layout_of(ui);
@@ -307,6 +314,8 @@ static void draw(struct ui *ui, struct canvas *canvas)
     if (l.form == FORM_WHOLE) {
         draw_facts(ui, canvas, l.side.rows ? l.side : gap_area(&l));
         draw_pane(ui, canvas, l.pane);
+        if (l.trend.rows > 0)
+            draw_trend(ui, canvas, l.trend);
     }
     bool shared = l.message_row == l.key_row;
     bool busy = ui->prompt.kind != PROMPT_NONE || ui->message[0] != '\0' ||

@@ -261,35 +261,53 @@ static int draw_source(const struct ui *ui, struct canvas *canvas,
     return 2;
 }
 
+/* The audit of the chosen model against the set that the selected element is
+ * shown against; NULL when there is none. */
+static const struct audit_series *usual_series(const struct ui *ui)
+{
+    struct ask ask;
+    if (!ui->choice.model || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        return NULL;
+    struct row row = study_row(ui->study, &ask);
+    for (int i = 0; i < ui->usual.count; i++)
+        if (ui->usual.series[i].value == row.value.provenance &&
+            ui->usual.series[i].reference == row.reference.provenance)
+            return &ui->usual.series[i];
+    return NULL;
+}
+
 /* How large residuals usually are in the block, this element left out. */
 static int draw_usual(const struct ui *ui, struct canvas *canvas, struct area a)
 {
-    struct ask ask;
-    char block = element_at(ui->choice.z)->block;
+    char buffer[UI_TEXT_MAX];
+    char number[NUMBER_TEXT_MAX];
     char ion[ION_TEXT_MAX];
-    char mean[NUMBER_TEXT_MAX];
-    char largest[NUMBER_TEXT_MAX];
-    if (a.rows < 1 || !ui->choice.model ||
-        !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    struct text t = text_over(buffer, sizeof buffer);
+    const struct element *e = element_at(ui->choice.z);
+    const struct audit_series *series = usual_series(ui);
+    struct audit_part part = {AUDIT_BLOCK, e->block};
+    if (a.rows < 1 || !series)
         return 0;
-    struct summary s =
-        study_block_summary(ui->study, &ask, block, ui->choice.z);
+    struct summary s = audit_summary_without(series, part, e->z);
+    int places = series->unit->decimals;
+    text_addf(&t, "%s, %c block without %s: ", series->value->id, e->block,
+              e->symbol);
     if (s.count == 0) {
-        canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
-                     "%s in the other %c elements: no residual, %d gaps",
-                     ask.model->id, block, s.gaps);
-        return 1;
+        text_addf(&t, "no residual, %d gaps", s.gaps);
+    } else {
+        text_addf(
+            &t, "mean size %s %s",
+            number_print_places(summary_mean_absolute(&s), places, number),
+            series->unit->id);
+        if (s.percent_count > 0)
+            text_addf(&t, " (%.0f %%)", summary_mean_absolute_percent(&s));
+        text_addf(&t, ", largest %s%s (%s)", s.largest > 0 ? "+" : "",
+                  number_print_places(s.largest, places, number),
+                  ion_print(s.largest_z, s.largest_charge, ion));
+        if (a.columns >= 100)
+            text_addf(&t, "; %d residuals, %d gaps", s.count, s.gaps);
     }
-    int places = ask.unit->decimals;
-    number_print_places(summary_mean_absolute(&s), places, mean);
-    number_print_places(s.largest, places, largest);
-    canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
-                 "%s in the other %c elements: off by %s %s on average "
-                 "(%.0f %%), %s%s at most (%s); %d values, %d gaps",
-                 ask.model->id, block, mean, ask.unit->id,
-                 s.percent_count ? summary_mean_absolute_percent(&s) : 0.0,
-                 s.largest > 0 ? "+" : "", largest,
-                 ion_print(s.largest_z, ask.charge, ion), s.count, s.gaps);
+    canvas_text(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT, buffer);
     return 1;
 }
 

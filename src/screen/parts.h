@@ -25,12 +25,21 @@ enum action {
     ACTION_KEYS,
     ACTION_MAP,
     ACTION_COMPARE,
+    ACTION_TREND,
+    ACTION_AUDIT,
     ACTION_ATOM,
     ACTION_SOURCES,
     ACTION_JUMP,
     ACTION_QUANTITY,
     ACTION_MODEL,
     ACTION_REFERENCE,
+    ACTION_AGAINST,
+    ACTION_CONFIGURATION,
+    ACTION_WALK,
+    ACTION_MODELS,
+    ACTION_TREND_AXIS,
+    ACTION_PERCENT,
+    ACTION_STATISTIC,
     ACTION_SHOWN,
     ACTION_SUBSHELL,
     ACTION_UNIT,
@@ -80,6 +89,8 @@ struct screen_ops {
 };
 extern const struct screen_ops screen_map;
 extern const struct screen_ops screen_compare;
+extern const struct screen_ops screen_trend;
+extern const struct screen_ops screen_audit;
 extern const struct screen_ops screen_atom;
 extern const struct screen_ops screen_sources;
 extern const struct screen_ops screen_keys;
@@ -107,6 +118,10 @@ void ui_refresh(struct ui *ui);
 
 /* Moves the selection; marks what depends on it. */
 void ui_select(struct ui *ui, int z);
+
+/* Selects a species, its charge with it; along says that it stands on the same
+ * walk. */
+void ui_select_species(struct ui *ui, int z, int charge, bool along);
 
 /* Place of a pin, or -1. */
 int ui_pin_place(const struct ui *ui, int z, int charge);
@@ -141,6 +156,9 @@ void chooser_draw(const struct ui *ui, struct canvas *canvas);
 void prompt_open(struct ui *ui, enum prompt_kind kind, const char *text);
 enum effect prompt_update(struct ui *ui, const struct event *event);
 void prompt_draw(const struct ui *ui, struct canvas *canvas, int row);
+
+/* Opens the line that asks for a configuration of the selected species. */
+void configuration_prompt(struct ui *ui);
 
 /* Opens the line that asks for a file, with a name made from the choice. */
 void export_prompt(struct ui *ui, enum export_scope scope);

@@ -80,6 +80,56 @@ static enum effect answer_overwrite(struct ui *ui, const struct event *event)
     return EFFECT_REDRAW;
 }
 
+void configuration_prompt(struct ui *ui)
+{
+    struct ask ask;
+    struct species species;
+    struct status st = status_ok();
+    char text[CONFIGURATION_TEXT_MAX];
+    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask) ||
+        !study_species(ui->study, &ask, &species, &st)) {
+        ui_report(ui, true, "no such ion");
+        return;
+    }
+    configuration_print(&species.configuration, text);
+    prompt_open(ui, PROMPT_CONFIGURATION, text);
+}
+
+/* An empty line gives the ground state back; a wrong one is kept and told. */
+static enum effect accept_configuration(struct ui *ui)
+{
+    struct choice *c = &ui->choice;
+    struct status st = status_ok();
+    struct species species;
+    struct configuration typed = {0};
+    struct ask ask = {.z = c->z, .charge = c->charge, .configuration = &typed};
+    bool blank = ui->prompt.text[strspn(ui->prompt.text, " ")] == '\0';
+    if (!blank && (!configuration_parse(ui->prompt.text, &typed, &st) ||
+                   !study_species(ui->study, &ask, &species, &st))) {
+        ui_report(ui, true, "%s", st.message);
+        close_prompt(ui);
+        return EFFECT_REDRAW;
+    }
+    bool own = !blank && species.origin == ORIGIN_USER;
+    c->configuration = own ? typed : (struct configuration){0};
+    c->configured = (struct pin){c->z, c->charge};
+    ui->stale = ui->comparison_stale = true;
+    close_prompt(ui);
+    ui_report(ui, false,
+              own ? "configuration as given, for this species alone"
+                  : "the ground state");
+    return EFFECT_REDRAW;
+}
+
+static enum effect accept(struct ui *ui)
+{
+    if (ui->prompt.kind == PROMPT_JUMP)
+        return accept_jump(ui);
+    if (ui->prompt.kind == PROMPT_CONFIGURATION)
+        return accept_configuration(ui);
+    return accept_file(ui);
+}
+
 /* While a place is typed the selection goes along, so that Enter holds no
  * surprise; where the text fits none it is back where it came from. */
 static void follow(struct ui *ui)
@@ -108,7 +158,7 @@ enum effect prompt_update(struct ui *ui, const struct event *event)
         ui_select(ui, p->from);
         close_prompt(ui);
     } else if (event->key == KEY_CODE_ENTER) {
-        return p->kind == PROMPT_JUMP ? accept_jump(ui) : accept_file(ui);
+        return accept(ui);
     } else if (p->kind == PROMPT_JUMP) {
         /* An arrow ends the jump and moves on from there. */
         close_prompt(ui);
@@ -124,6 +174,7 @@ void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
         [PROMPT_JUMP] = "element: ",
         [PROMPT_FILE] = "write CSV to: ",
         [PROMPT_OVERWRITE] = "",
+        [PROMPT_CONFIGURATION] = "configuration (none: ground state): ",
     };
     int width = canvas->columns;
     if (ui->prompt.kind == PROMPT_OVERWRITE) {
@@ -168,6 +219,10 @@ void export_prompt(struct ui *ui, enum export_scope scope)
     else if (scope == SCOPE_ATOM)
         text_addf(&t, "%s-atom.csv",
                   ion_print(ui->choice.z, ui->choice.charge, ion));
+    else if (scope == SCOPE_TREND)
+        text_addf(&t, "trend-%s.csv", quantity);
+    else if (scope == SCOPE_AUDIT)
+        text_addf(&t, "audit-%s.csv", quantity);
     else
         text_add(&t, "compare.csv");
     prompt_open(ui, PROMPT_FILE, name);

@@ -3,6 +3,7 @@
 
 #include <math.h>
 #include <stdio.h>
+#include <stdlib.h>
 #include <string.h>
 
 #include "base/text.h"
@@ -44,8 +45,8 @@ int trend_models(const struct ui *ui, const struct model *models[])
 static bool same_walk(const struct walk *a, const struct walk *b)
 {
     return a->kind == b->kind && a->count == b->count &&
-           memcmp(a->steps, b->steps,
-                  (size_t)a->count * sizeof a->steps[0]) == 0;
+           memcmp(a->steps, b->steps, (size_t)a->count * sizeof a->steps[0]) ==
+               0;
 }
 
 void trend_refresh(struct ui *ui)
@@ -153,16 +154,26 @@ static int label_columns(const struct trend *t)
     return (int)longest + 3;
 }
 
-/* The steps stand at 0, 1, 2 …; room for the names behind the last one. */
-static struct plot_axis level_axis(const struct trend *t, int columns)
+/* Opens a plot whose steps stand at 0, 1, 2 …, a whole number of columns apart
+ * where there are enough, with room for the names behind the last one. */
+static bool open_plot(struct plot *plot, const struct ui *ui,
+                      struct canvas *canvas, struct area area,
+                      struct plot_axis up)
 {
+    const struct trend *t = &ui->trend;
     int n = t->walk.count;
+    struct plot_axis level = {
+        .title = "", .low = -0.5, .high = n - 0.5, .whole = true};
+    enum plot_style style = ui->choice.atom.braille ? PLOT_BRAILLE : PLOT_BLOCK;
+    if (!plot_open(plot, canvas, area, style, level, up))
+        return false;
     int labels = label_columns(t);
-    int inside = columns - 8;
-    double part =
-        inside > 2 * labels ? (double)inside / (inside - labels) : 1.0;
-    return (struct plot_axis){
-        .title = "", .low = -0.5, .high = -0.5 + n * part, .whole = true};
+    int inside = plot->inside.columns;
+    int room = inside > 2 * labels ? inside - labels : inside;
+    int apart = room / n;
+    plot->x.high = apart > 0 ? -0.5 + (double)inside / apart
+                             : -0.5 + (double)n * inside / room;
+    return true;
 }
 
 static int step_column(const struct plot *plot, int step)
@@ -296,8 +307,8 @@ static void draw_stored(const struct plot *plot, const struct trend_set *set,
 static void draw_curve(const struct plot *plot, int curve,
                        const struct plot_point *points, int count)
 {
-    struct plot_line line = {trend_role(curve),
-                             (enum plot_pattern)(curve % 3), '.'};
+    struct plot_line line = {trend_role(curve), (enum plot_pattern)(curve % 3),
+                             '.'};
     plot_curve(plot, line, points, count);
 }
 
@@ -305,13 +316,8 @@ static void set_points(const struct trend_set *set, int count,
                        struct plot_point *points)
 {
     for (int i = 0; i < count; i++)
-        points[i] = (struct plot_point){i, set->values[i].value,
-                                        set->values[i].there};
-}
-
-static enum plot_style style_of(const struct ui *ui)
-{
-    return ui->choice.atom.braille ? PLOT_BRAILLE : PLOT_BLOCK;
+        points[i] =
+            (struct plot_point){i, set->values[i].value, set->values[i].there};
 }
 
 /* Values of models and sets. */
@@ -334,17 +340,15 @@ static void draw_values(const struct ui *ui, struct canvas *canvas,
                     "no number along this walk");
         return;
     }
-    if (!plot_open(&plot, canvas, area, style_of(ui),
-                   level_axis(t, area.columns), axis_of(r, log, title)))
+    if (!open_plot(&plot, ui, canvas, area, axis_of(r, log, title)))
         return;
     draw_steps(t, &plot, at);
     for (int s = 0; s < t->set_count; s++)
         draw_bars(&plot, &t->sets[s], n, false);
     for (int s = 0; s < t->series_count; s++) {
         for (int i = 0; i < n; i++)
-            points[s][i] =
-                (struct plot_point){i, t->series[s].values[i].value,
-                                    t->series[s].values[i].there};
+            points[s][i] = (struct plot_point){i, t->series[s].values[i].value,
+                                               t->series[s].values[i].there};
         draw_curve(&plot, s, points[s], n);
     }
     for (int s = 0; s < t->series_count; s++)
@@ -382,8 +386,7 @@ static void draw_residuals(const struct ui *ui, struct canvas *canvas,
                      "%s: no residual along this walk", title);
         return;
     }
-    if (!plot_open(&plot, canvas, area, style_of(ui),
-                   level_axis(t, area.columns), axis_of(r, false, title)))
+    if (!open_plot(&plot, ui, canvas, area, axis_of(r, false, title)))
         return;
     draw_steps(t, &plot, at);
     for (int s = 0; !percent && s < t->set_count; s++)
@@ -413,8 +416,7 @@ void draw_trend(struct ui *ui, struct canvas *canvas, struct area area)
     trend_refresh(ui);
     const struct trend *t = &ui->trend;
     int at = walk_place(&t->walk, ui->choice.z, ui->choice.charge);
-    struct trend_layout l =
-        layout_trend(area, t->series_count + 2 * t->set_count + 2);
+    struct trend_layout l = layout_trend(area);
     draw_values(ui, canvas, l.values, at);
     if (l.residuals.rows > 0)
         draw_residuals(ui, canvas, l.residuals, at);
@@ -423,3 +425,86 @@ void draw_trend(struct ui *ui, struct canvas *canvas, struct area area)
     else
         draw_trend_lines(ui, canvas, l.table, at);
 }
+
+/* What is shown, along what, in words. */
+static void draw_title(const struct ui *ui, struct canvas *canvas)
+{
+    char buffer[UI_TEXT_MAX];
+    char label[SUBSHELL_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    const struct choice *c = &ui->choice;
+    const struct quantity *q = quantity_at(c->quantity);
+    text_addf(&t, "Trend   %s, %s   %s", q->title, ui->trend.unit->id,
+              walk_words(c->walk));
+    if (c->walk < WALK_CHARGES)
+        text_addf(&t, c->charge ? "   charge %+d" : "   neutral", c->charge);
+    if (c->walk == WALK_ISOELECTRONIC)
+        text_addf(&t, " of %d electrons", c->z - c->charge);
+    if (q->per_subshell)
+        text_addf(&t, "   %s",
+                  c->n ? subshell_print(c->n, c->l, label) : "outermost");
+    for (int s = 0; s < ui->trend.set_count; s++)
+        text_addf(&t, "%s%s", s ? ", " : "   ",
+                  ui->trend.sets[s].provenance->id);
+    canvas_text(canvas, 0, 0, canvas->columns, ROLE_TITLE, buffer);
+}
+
+static void draw(struct ui *ui, struct canvas *canvas)
+{
+    struct area area = {1, 0, canvas->rows - 3, canvas->columns};
+    draw_trend(ui, canvas, area);
+    draw_title(ui, canvas);
+}
+
+static enum effect go_along(struct ui *ui, int by)
+{
+    const struct walk *w = &ui->trend.walk;
+    int at = walk_place(w, ui->choice.z, ui->choice.charge) + by;
+    if (at < 0)
+        at = 0;
+    if (at >= w->count)
+        at = w->count - 1;
+    ui_select_species(ui, w->steps[at].z, w->steps[at].charge, true);
+    return EFFECT_REDRAW;
+}
+
+/* To the walk beside this one. */
+static enum effect go_across(struct ui *ui, int by)
+{
+    const struct choice *c = &ui->choice;
+    struct ask ask;
+    int z = c->z;
+    int charge = c->charge;
+    if (c->walk == WALK_CHARGES)
+        z += by;
+    else if (c->walk == WALK_ISOELECTRONIC)
+        charge -= by;
+    else
+        z = element_neighbour(z, c->walk == WALK_GROUP ? by : 0,
+                              c->walk == WALK_GROUP ? 0 : by, GRID_18,
+                              c->group3);
+    if (z < 1 || z > Z_MAX || !ui_ask(ui, z, charge, &ask))
+        return EFFECT_REDRAW;
+    ui_select_species(ui, z, charge, false);
+    return EFFECT_REDRAW;
+}
+
+static enum effect update(struct ui *ui, enum action action)
+{
+    trend_refresh(ui);
+    if (action == ACTION_LEFT || action == ACTION_RIGHT)
+        return go_along(ui, action == ACTION_LEFT ? -1 : 1);
+    if (action == ACTION_HOME || action == ACTION_END)
+        return go_along(ui, action == ACTION_HOME ? -WALK_MAX : WALK_MAX);
+    if (action == ACTION_UP || action == ACTION_DOWN)
+        return go_across(ui, action == ACTION_UP ? -1 : 1);
+    if (action == ACTION_PAGE_UP && ui->choice.z > 1)
+        ui_select(ui, ui->choice.z - 1);
+    else if (action == ACTION_PAGE_DOWN && ui->choice.z < Z_MAX)
+        ui_select(ui, ui->choice.z + 1);
+    else
+        return EFFECT_NONE;
+    return EFFECT_REDRAW;
+}
+
+const struct screen_ops screen_trend = {"Trend", update, draw};

@@ -12,6 +12,9 @@ void trend_refresh(struct ui *ui);
 /* Models that have a curve, in the order of the registry. */
 int trend_models(const struct ui *ui, const struct model *models[]);
 
+/* Whether the map shows the trend beside itself now. */
+bool trend_on_map(const struct ui *ui);
+
 /* Draws everything into an area. */
 void draw_trend(struct ui *ui, struct canvas *canvas, struct area area);
 
@@ -23,9 +26,9 @@ void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
                       struct area area, int at);
 
 /* Mark and role of the i-th curve, marks of stored values. */
-#define MARK_STORED 0x25CB    /* circle */
+#define MARK_STORED 0x25CB     /* circle */
 #define MARK_UNMEASURED 0x25C7 /* diamond: extrapolated, theoretical … */
-#define MARK_SECOND 0x25A1    /* square: the second reference */
+#define MARK_SECOND 0x25A1     /* square: the second reference */
 uint32_t trend_mark(int curve);
 enum role trend_role(int curve);
 

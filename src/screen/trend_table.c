@@ -84,7 +84,7 @@ static int draw_stored(struct canvas *canvas, struct area a, int row,
 {
     char buffer[UI_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    uint32_t mark = second                              ? MARK_SECOND
+    uint32_t mark = second                               ? MARK_SECOND
                     : trend_unmeasured(stored->evidence) ? MARK_UNMEASURED
                                                          : MARK_STORED;
     enum role role = second ? ROLE_HEADING : ROLE_TITLE;
@@ -119,15 +119,16 @@ static int draw_stored_pair(struct canvas *canvas, struct area a, int row,
     signed_text(r->disagreement.value, r->unit->decimals, text, sizeof text);
     signed_text(r->disagreement_percent.value, 1, percent, sizeof percent);
     canvas_textf(canvas, row + used, a.column + 2, a.columns - 2,
-                 sign_role(r->disagreement.value), "second - first: %s %s%s%s%s",
-                 text, r->unit->id, r->has_disagreement_percent ? " (" : "",
+                 sign_role(r->disagreement.value),
+                 "second - first: %s %s%s%s%s", text, r->unit->id,
+                 r->has_disagreement_percent ? " (" : "",
                  r->has_disagreement_percent ? percent : "",
                  r->has_disagreement_percent ? " %)" : "");
     return used + 1;
 }
 
-static void draw_head(const struct ui *ui, struct canvas *canvas,
-                      struct area a, const struct row *r)
+static void draw_head(const struct ui *ui, struct canvas *canvas, struct area a,
+                      const struct row *r)
 {
     char ion[ION_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
@@ -164,7 +165,7 @@ static void draw_along(const struct ui *ui, struct canvas *canvas,
                        struct area a, int row)
 {
     const struct trend *t = &ui->trend;
-    char text[NUMBER_TEXT_MAX];
+    char text[NUMBER_TEXT_MAX + 4];
     char ion[ION_TEXT_MAX];
     int bottom = a.row + a.rows;
     if (row + 1 >= bottom || t->series_count == 0)
@@ -244,10 +245,9 @@ static void put_entry(struct line *l, enum role role, uint32_t mark,
     if (l->row >= l->area.row + l->area.rows)
         return;
     canvas_put(l->canvas, l->row, l->column, role, mark);
-    l->column =
-        canvas_text(l->canvas, l->row, l->column + 2, end - l->column - 2,
-                    ROLE_TEXT, text) +
-        2;
+    l->column = canvas_text(l->canvas, l->row, l->column + 2,
+                            end - l->column - 2, ROLE_TEXT, text) +
+                2;
 }
 
 static void entry_text(const struct row *r, const char *name, struct text *t)
@@ -259,8 +259,8 @@ static void entry_text(const struct row *r, const char *name, struct text *t)
         text_add(t, row_state_id(r->state));
         return;
     }
-    text_add(t, number_print_places(r->value.value.value, r->unit->decimals,
-                                    value));
+    text_add(
+        t, number_print_places(r->value.value.value, r->unit->decimals, value));
     if (r->state != ROW_OK)
         return;
     if (r->has_percent) {
@@ -282,10 +282,10 @@ void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
     if (area.rows < 1 || at < 0 ||
         !row_at(ui, t->series_count ? t->series[0].model : NULL, &r))
         return;
-    l.column = canvas_textf(canvas, l.row, l.column, area.columns, ROLE_TITLE,
-                            "%s", ion_print(ui->choice.z, ui->choice.charge,
-                                            ion)) +
-               2;
+    l.column =
+        canvas_textf(canvas, l.row, l.column, area.columns, ROLE_TITLE, "%s",
+                     ion_print(ui->choice.z, ui->choice.charge, ion)) +
+        2;
     struct text text = text_over(buffer, sizeof buffer);
     if (r.reference.state == READING_OK)
         reading_text(&text, &r.reference);

@@ -12,8 +12,9 @@
 #include "screen/parts.h"
 
 static const struct screen_ops *const screens[] = {
-    [SCREEN_MAP] = &screen_map,   [SCREEN_COMPARE] = &screen_compare,
-    [SCREEN_ATOM] = &screen_atom, [SCREEN_SOURCES] = &screen_sources,
+    [SCREEN_MAP] = &screen_map,     [SCREEN_COMPARE] = &screen_compare,
+    [SCREEN_TREND] = &screen_trend, [SCREEN_AUDIT] = &screen_audit,
+    [SCREEN_ATOM] = &screen_atom,   [SCREEN_SOURCES] = &screen_sources,
     [SCREEN_KEYS] = &screen_keys,
 };
 
@@ -33,12 +34,16 @@ void ui_init(struct ui *ui, struct study *study)
         .wanting = true,
         .stale = true,
         .comparison_stale = true,
+        .trend_stale = true,
+        .audit_stale = true,
     };
 }
 
 void ui_clear(struct ui *ui)
 {
     comparison_clear(&ui->comparison);
+    audit_clear(&ui->audit);
+    audit_clear(&ui->usual);
     atom_work_free(ui->atom);
     ui->atom = NULL;
 }
@@ -72,10 +77,16 @@ bool ui_ask(const struct ui *ui, int z, int charge, struct ask *ask)
         .quantity = c->quantity,
         .model = c->model,
         .reference = c->reference,
+        .against = c->against,
+        .evidence = c->evidence,
         .n = c->n,
         .l = c->l,
         .unit = ui_unit(ui, c->quantity),
     };
+    bool own = c->configuration.count > 0 && c->configured.z == z &&
+               c->configured.charge == charge;
+    if (own)
+        ask->configuration = &c->configuration;
     struct species species;
     struct status st = status_ok();
     return study_species(ui->study, ask, &species, &st);
@@ -106,8 +117,9 @@ static void fill_cell(struct ui *ui, int z)
     cell->has_value = shown_number(&row, ui->choice.shown, &cell->value);
     cell->has_percent = row.state == ROW_OK && row.has_percent;
     cell->percent = cell->has_percent ? row.percent.value : 0.0;
-    int block = (int)(strchr("spdf", element_at(z)->block) - "spdf");
-    summary_add(&ui->block_summary[block], &row);
+    struct status st = status_ok();
+    if (!audit_add(&ui->usual, &row, &st))
+        ui_report(ui, true, "%s", st.message);
 }
 
 void ui_refresh(struct ui *ui)
@@ -116,7 +128,11 @@ void ui_refresh(struct ui *ui)
     int count = 0;
     if (!ui->stale)
         return;
-    memset(ui->block_summary, 0, sizeof ui->block_summary);
+    audit_clear(&ui->usual);
+    if (!ui->trend_keeps)
+        ui->trend_stale = true;
+    ui->trend_keeps = false;
+    ui->audit_stale = true;
     for (int z = 1; z <= Z_MAX; z++) {
         fill_cell(ui, z);
         if (ui->cells[z].has_value)
@@ -134,6 +150,17 @@ void ui_select(struct ui *ui, int z)
 {
     ui->choice.z = z;
     ui->comparison_stale = true;
+}
+
+void ui_select_species(struct ui *ui, int z, int charge, bool along)
+{
+    bool fresh = !ui->stale;
+    ui_select(ui, z);
+    if (charge == ui->choice.charge)
+        return;
+    ui->choice.charge = charge;
+    ui->stale = true;
+    ui->trend_keeps = along && fresh;
 }
 
 int ui_pin_place(const struct ui *ui, int z, int charge)
@@ -216,6 +243,10 @@ static enum effect open_export(struct ui *ui)
         export_prompt(ui, SCOPE_COMPARE);
     else if (ui->screen == SCREEN_ATOM)
         export_prompt(ui, SCOPE_ATOM);
+    else if (ui->screen == SCREEN_TREND)
+        export_prompt(ui, SCOPE_TREND);
+    else if (ui->screen == SCREEN_AUDIT)
+        export_prompt(ui, SCOPE_AUDIT);
     else
         chooser_open(ui, CHOOSER_EXPORT);
     return EFFECT_REDRAW;
@@ -235,6 +266,9 @@ static bool open_list(struct ui *ui, enum action action)
         {ACTION_UNIT, CHOOSER_UNIT},
         {ACTION_METHOD, CHOOSER_METHOD},
         {ACTION_OVERLAY, CHOOSER_OVERLAY},
+        {ACTION_AGAINST, CHOOSER_AGAINST},
+        {ACTION_MODELS, CHOOSER_CURVES},
+        {ACTION_WALK, CHOOSER_WALK},
     };
     for (size_t i = 0; i < sizeof lists / sizeof lists[0]; i++)
         if (lists[i].action == action) {
@@ -249,11 +283,15 @@ static bool open_screen(struct ui *ui, enum action action)
 {
     if (action == ACTION_MAP ||
         (action == ACTION_BACK &&
-         (ui->screen == SCREEN_COMPARE || ui->screen == SCREEN_ATOM ||
-          ui->screen == SCREEN_SOURCES)))
+         (ui->screen == SCREEN_COMPARE || ui->screen == SCREEN_TREND ||
+          ui->screen == SCREEN_ATOM || ui->screen == SCREEN_SOURCES)))
         go(ui, SCREEN_MAP);
     else if (action == ACTION_COMPARE)
         go(ui, SCREEN_COMPARE);
+    else if (action == ACTION_TREND)
+        go(ui, SCREEN_TREND);
+    else if (action == ACTION_AUDIT)
+        go(ui, SCREEN_AUDIT);
     else if (action == ACTION_ATOM)
         go(ui, SCREEN_ATOM);
     else if (action == ACTION_SOURCES)
@@ -262,6 +300,24 @@ static bool open_screen(struct ui *ui, enum action action)
         go(ui, SCREEN_KEYS);
     else if (action == ACTION_NEXT_SCREEN)
         go(ui, (enum screen_id)((ui->screen + 1) % (SCREEN_KEYS + 1)));
+    else
+        return false;
+    return true;
+}
+
+/* Actions that change how Trend and Audit show it. */
+static bool change_view(struct ui *ui, enum action action)
+{
+    struct choice *c = &ui->choice;
+    if (action == ACTION_PERCENT)
+        c->trend_percent = !c->trend_percent;
+    else if (action == ACTION_TREND_AXIS)
+        c->trend_axis =
+            (enum trend_axis)((c->trend_axis + 1) % TREND_AXIS_COUNT);
+    else if (action == ACTION_STATISTIC)
+        c->statistic = (enum statistic)((c->statistic + 1) % STATISTIC_KINDS);
+    else if (action == ACTION_DOTS && ui->screen != SCREEN_ATOM)
+        c->atom.braille = !c->atom.braille;
     else
         return false;
     return true;
@@ -315,7 +371,7 @@ static enum effect act(struct ui *ui, enum action action)
 {
     ui->message[0] = '\0';
     if (open_list(ui, action) || open_screen(ui, action) ||
-        change_choice(ui, action))
+        change_view(ui, action) || change_choice(ui, action))
         return EFFECT_REDRAW;
     if (action == ACTION_QUIT)
         return EFFECT_QUIT;
@@ -325,6 +381,10 @@ static enum effect act(struct ui *ui, enum action action)
         return forget(ui);
     if (action == ACTION_EXPORT)
         return open_export(ui);
+    if (action == ACTION_CONFIGURATION) {
+        configuration_prompt(ui);
+        return EFFECT_REDRAW;
+    }
     if (action == ACTION_JUMP) {
         prompt_open(ui, PROMPT_JUMP, "");
         return EFFECT_REDRAW;
@@ -334,8 +394,8 @@ static enum effect act(struct ui *ui, enum action action)
         ui_report(ui, false, ui->mouse ? "mouse on" : "mouse off");
         return EFFECT_MOUSE;
     }
-    if (ui->screen != SCREEN_MAP && ui->screen != SCREEN_ATOM &&
-        action >= ACTION_UP && action <= ACTION_PAGE_DOWN)
+    bool scrolls = ui->screen == SCREEN_COMPARE || ui->screen >= SCREEN_SOURCES;
+    if (scrolls && action >= ACTION_UP && action <= ACTION_PAGE_DOWN)
         scroll(ui, action);
     enum effect effect = screens[ui->screen]->update(ui, action);
     return effect == EFFECT_NONE ? EFFECT_REDRAW : effect;
@@ -345,9 +405,8 @@ static enum effect act(struct ui *ui, enum action action)
 static bool starts_jump(const struct event *event, enum screen_id screen)
 {
     uint32_t c = event->character;
-    return event->kind == EVENT_CHARACTER &&
-           (screen == SCREEN_MAP || screen == SCREEN_COMPARE ||
-            screen == SCREEN_ATOM) &&
+    return event->kind == EVENT_CHARACTER && screen < SCREEN_SOURCES &&
+           screen != SCREEN_AUDIT &&
            ((c >= 'A' && c <= 'Z') || (c >= '1' && c <= '9'));
 }
 

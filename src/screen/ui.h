@@ -8,6 +8,7 @@
 #include <stdio.h>
 
 #include "analysis/atom_report.h"
+#include "analysis/audit.h"
 #include "analysis/comparison.h"
 #include "base/text.h"
 #include "element/element.h"
@@ -16,6 +17,7 @@
 #include "element/selection.h"
 #include "screen/scale.h"
 #include "study/study.h"
+#include "study/trend.h"
 
 #define UI_TEXT_MAX 256
 #define PIN_MAX COMPARISON_MAX
@@ -24,6 +26,8 @@
 enum screen_id {
     SCREEN_MAP,
     SCREEN_COMPARE,
+    SCREEN_TREND,
+    SCREEN_AUDIT,
     SCREEN_ATOM,
     SCREEN_SOURCES,
     SCREEN_KEYS
@@ -40,6 +44,26 @@ enum atom_overlay {
     OVERLAY_SLATER,     /* Slater-type orbitals by Slater's rules */
     OVERLAY_ZETA,       /* orbitals of single-zeta Hartree-Fock */
     OVERLAY_COUNT
+};
+
+/* The upright axis of Trend: logarithmic where the values span much, or as
+ * chosen. */
+enum trend_axis {
+    TREND_AXIS_AUTO,
+    TREND_AXIS_LINEAR,
+    TREND_AXIS_LOG,
+    TREND_AXIS_COUNT
+};
+
+/* Which figure Audit's table holds. */
+enum statistic {
+    STATISTIC_MEAN_ABSOLUTE,
+    STATISTIC_PERCENT,
+    STATISTIC_MEAN,
+    STATISTIC_RMS,
+    STATISTIC_LARGEST,
+    STATISTIC_COUNTS,
+    STATISTIC_KINDS
 };
 
 /* What colours the map. */
@@ -62,11 +86,19 @@ enum export_scope {
     SCOPE_PINS,
     SCOPE_SHEET,
     SCOPE_COMPARE,
-    SCOPE_ATOM
+    SCOPE_ATOM,
+    SCOPE_TREND,
+    SCOPE_AUDIT
 };
 
 /* A line being typed. */
-enum prompt_kind { PROMPT_NONE, PROMPT_JUMP, PROMPT_FILE, PROMPT_OVERWRITE };
+enum prompt_kind {
+    PROMPT_NONE,
+    PROMPT_JUMP,
+    PROMPT_FILE,
+    PROMPT_OVERWRITE,
+    PROMPT_CONFIGURATION
+};
 struct prompt {
     enum prompt_kind kind;
     char text[UI_TEXT_MAX]; /* UTF-8 */
@@ -84,7 +116,10 @@ enum chooser_kind {
     CHOOSER_UNIT,
     CHOOSER_EXPORT,
     CHOOSER_METHOD,
-    CHOOSER_OVERLAY
+    CHOOSER_OVERLAY,
+    CHOOSER_AGAINST,
+    CHOOSER_CURVES,
+    CHOOSER_WALK
 };
 #define CHOOSER_MAX 64
 struct chooser {
@@ -120,6 +155,16 @@ struct choice {
     enum quantity_id quantity;
     const struct model *model;         /* NULL: no model offers the quantity */
     const struct reference *reference; /* NULL: the default one */
+    const struct reference *against;   /* NULL: no second one */
+    unsigned evidence;                 /* kinds of stored values; 0: all */
+    /* The user's own, of one species; no electrons: none. */
+    struct configuration configuration;
+    struct pin configured;
+    enum walk_kind walk;
+    unsigned hidden_curves; /* bit by place in the registry */
+    enum trend_axis trend_axis;
+    bool trend_percent; /* residuals of Trend in per cent */
+    enum statistic statistic;
     enum shown shown;
     int n, l;                                       /* n = 0: outermost */
     const struct unit *units[DIMENSION_VOLUME + 1]; /* NULL: base unit */
@@ -169,8 +214,15 @@ struct ui {
     struct comparison comparison; /* of the pins, or of the selection */
     struct map_cell cells[Z_MAX + 1];
     struct scale scale;
-    struct summary block_summary[4]; /* s p d f, the whole block */
-    struct atom_work *atom;          /* of the screen Atom, when it was used */
+    struct audit usual; /* of the chosen model at the chosen charge */
+    bool trend_stale, audit_stale;
+    bool trend_keeps; /* only the selection went along the walk */
+    struct trend trend;
+    struct audit audit; /* of the chosen quantity, all elements */
+    struct audit_part audit_part;
+    bool audit_points; /* the cursor is among the species of the part */
+    int audit_point;
+    struct atom_work *atom; /* of the screen Atom, when it was used */
 };
 
 /* A ui over a study, with the first view: Z_eff by Slater's rules. The study

@@ -30,6 +30,15 @@ void ui_save_view(const struct ui *ui, struct text *t)
         text_addf(t, "model %s\n", c->model->id);
     if (c->reference)
         text_addf(t, "reference %s\n", c->reference->provenance->id);
+    if (c->against)
+        text_addf(t, "against %s\n", c->against->provenance->id);
+    for (int e = 0; e < EVIDENCE_COUNT && c->evidence; e++)
+        if (c->evidence >> e & 1u)
+            text_addf(t, "evidence %s\n", evidence_id((enum evidence)e));
+    text_addf(t, "walk %s\n", walk_id(c->walk));
+    for (int m = 0; m < model_count(); m++)
+        if (c->hidden_curves >> m & 1u)
+            text_addf(t, "hidden %s\n", model_at(m)->id);
     text_addf(t, "shown %s\n", shown_names[c->shown]);
     text_addf(t, "element %s\n", element_at(c->z)->symbol);
     text_addf(t, "charge %d\n", c->charge);
@@ -71,6 +80,35 @@ static void load_reference(struct ui *ui, const char *value)
         reference_find(study_references(ui->study), value);
     if (r && r->quantity == ui->choice.quantity)
         ui->choice.reference = r;
+}
+
+static void load_against(struct ui *ui, const char *value)
+{
+    const struct reference *r =
+        reference_find(study_references(ui->study), value);
+    if (r && r->quantity == ui->choice.quantity)
+        ui->choice.against = r;
+}
+
+static void load_evidence(struct ui *ui, const char *value)
+{
+    enum evidence found;
+    if (evidence_find(value, &found))
+        ui->choice.evidence |= 1u << found;
+}
+
+static void load_walk(struct ui *ui, const char *value)
+{
+    for (int k = 0; k < WALK_COUNT; k++)
+        if (strcmp(value, walk_id((enum walk_kind)k)) == 0)
+            ui->choice.walk = (enum walk_kind)k;
+}
+
+static void load_hidden(struct ui *ui, const char *value)
+{
+    const struct model *m = model_find(value);
+    if (m)
+        ui->choice.hidden_curves |= 1u << model_index(m);
 }
 
 static void load_model(struct ui *ui, const char *value)
@@ -190,6 +228,10 @@ static const struct {
     {"quantity", load_quantity},
     {"model", load_model},
     {"reference", load_reference},
+    {"against", load_against},
+    {"evidence", load_evidence},
+    {"walk", load_walk},
+    {"hidden", load_hidden},
     {"shown", load_shown},
     {"element", load_element},
     {"charge", load_charge},

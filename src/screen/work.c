@@ -3,6 +3,7 @@
  * someone looks: the selected species first, then the map. */
 #include "screen/atom.h"
 #include "screen/parts.h"
+#include "screen/trend.h"
 
 static void want(struct ui *ui, int z, int charge, const struct model *model,
                  bool first)
@@ -18,11 +19,27 @@ static void want(struct ui *ui, int z, int charge, const struct model *model,
 }
 
 /* Queues what is shown and not solved yet. */
+static void want_trend(struct ui *ui)
+{
+    const struct model *models[TREND_MODELS_MAX];
+    struct walk walk;
+    int count = trend_models(ui, models);
+    walk_fill(&walk, ui->choice.walk, ui->choice.z, ui->choice.charge);
+    for (int m = count - 1; m >= 0; m--)
+        for (int i = walk.count - 1; i >= 0; i--)
+            want(ui, walk.steps[i].z, walk.steps[i].charge, models[m], true);
+}
+
 static void want_shown(struct ui *ui)
 {
     const struct choice *c = &ui->choice;
     if (ui->screen == SCREEN_ATOM)
         return;
+    if (ui->screen == SCREEN_TREND || trend_on_map(ui))
+        want_trend(ui);
+    for (int m = 0; ui->screen == SCREEN_AUDIT && m < model_count(); m++)
+        for (int z = 1; z <= Z_MAX; z++)
+            want(ui, z, c->charge, model_at(m), false);
     if (c->model && !c->model->closed && ui->screen == SCREEN_MAP)
         for (int z = 1; z <= Z_MAX; z++)
             want(ui, z, c->charge, c->model, false);

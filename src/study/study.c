@@ -424,20 +424,3 @@ struct study_progress study_progress(const struct study *study)
 {
     return (struct study_progress){study->done, study->total};
 }
-
-struct summary study_block_summary(const struct study *study,
-                                   const struct ask *ask, char block,
-                                   int without)
-{
-    struct summary summary = {0};
-    struct ask each = *ask;
-    for (int z = 1; z <= Z_MAX; z++) {
-        if (z == without || element_at(z)->block != block || each.charge > z)
-            continue;
-        each.z = z;
-        each.configuration = NULL;
-        struct row row = study_row(study, &each);
-        summary_add(&summary, &row);
-    }
-    return summary;
-}

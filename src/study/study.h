@@ -5,7 +5,6 @@
 #define STUDY_STUDY_H
 
 #include "analysis/row.h"
-#include "analysis/summary.h"
 #include "base/status.h"
 #include "model/registry.h"
 #include "refdata/catalogue.h"
@@ -78,12 +77,5 @@ struct study_progress {
     int done, total;
 };
 struct study_progress study_progress(const struct study *study);
-
-/* Statistics of the ask's model and quantity over the elements of a block at
- * the ask's charge, leaving element `without` out (0: none). Atoms that are
- * not solved yet count as gaps. */
-struct summary study_block_summary(const struct study *study,
-                                   const struct ask *ask, char block,
-                                   int without);
 
 #endif

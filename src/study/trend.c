@@ -1,9 +1,8 @@
 /* SPDX-License-Identifier: MIT */
 #include "study/trend.h"
 
-static struct trend_set *set_of(struct trend *trend,
-                                const struct provenance *provenance,
-                                bool against)
+static struct trend_set *
+set_of(struct trend *trend, const struct provenance *provenance, bool against)
 {
     for (int i = 0; i < trend->set_count; i++)
         if (trend->sets[i].provenance == provenance &&

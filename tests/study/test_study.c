@@ -172,24 +172,6 @@ START_TEST(the_ion_of_an_excited_configuration_is_that_configuration_less_one)
 }
 END_TEST
 
-START_TEST(a_block_summary_equals_its_rows_and_leaves_one_out)
-{
-    struct ask ask = {.z = 40,
-                      .quantity = QUANTITY_IONIZATION,
-                      .model = model_find("slater")};
-    struct summary all = study_block_summary(study, &ask, 'd', 0);
-    struct summary less = study_block_summary(study, &ask, 'd', 40);
-    struct row zr = study_row(study, &ask);
-    ck_assert_int_eq(all.count, less.count + 1);
-    near(all.sum_absolute, less.sum_absolute + fabs(zr.residual.value), 1e-9, 0,
-         "sum of sizes");
-    int in_block = 0;
-    for (int z = 1; z <= Z_MAX; z++)
-        in_block += element_at(z)->block == 'd';
-    ck_assert_int_eq(all.count + all.gaps, in_block);
-}
-END_TEST
-
 START_TEST(units_are_converted_and_a_scale_keeps_its_own)
 {
     struct ask ask = {.z = 26,
@@ -223,7 +205,6 @@ int main(void)
     tcase_add_test(
         rows,
         the_ion_of_an_excited_configuration_is_that_configuration_less_one);
-    tcase_add_test(rows, a_block_summary_equals_its_rows_and_leaves_one_out);
     tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
     suite_add_tcase(suite, rows);
     return run_suite(suite);

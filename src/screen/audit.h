@@ -1,0 +1,25 @@
+/* SPDX-License-Identifier: MIT */
+/* The audit: how large the residuals of each model are, and where; model
+ * against reference as a scatter whose species can be reached. */
+#ifndef SCREEN_AUDIT_H
+#define SCREEN_AUDIT_H
+
+#include "screen/parts.h"
+
+/* Brings ui->audit up to date with the choice. */
+void audit_refresh(struct ui *ui);
+
+/* The series of the chosen model, or NULL. */
+const struct audit_series *audit_chosen(const struct ui *ui);
+
+/* Species of a series in the chosen part that have a residual, the largest
+ * first; gives their number, at most Z_MAX. */
+int audit_outliers(const struct ui *ui, const struct audit_series *series,
+                   const struct audit_point *points[Z_MAX]);
+
+/* The scatter, and the species below it. */
+void draw_scatter(const struct ui *ui, struct canvas *canvas, struct area area);
+void draw_outliers(const struct ui *ui, struct canvas *canvas,
+                   struct area area);
+
+#endif
