@@ -27,7 +27,7 @@ static const struct {
     const char *below; /* NULL: the unit */
     int narrow, wide;  /* columns; 0: not there */
 } columns[] = {
-    {COLUMN_OCC, "occ", "", 6, 7},
+    {COLUMN_OCC, "occ", "", 5, 7},
     {COLUMN_ENERGY, "E", NULL, 11, 13},
     {COLUMN_MEAN, "mean r", NULL, 0, 8},
     {COLUMN_PEAK, "max D", NULL, 7, 8},

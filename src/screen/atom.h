@@ -74,6 +74,10 @@ double atom_length(const struct ui *ui);
 /* Role of the curves of a subshell. */
 enum role atom_role(int l);
 
+/* Role of what is laid over a subshell (l = -1: over all electrons): another
+ * one than those of the subshell and of all electrons. */
+enum role atom_overlay_role(int l);
+
 /* Draw the plots, and the numbers at the cursor. */
 void atom_draw_plots(struct ui *ui, struct canvas *canvas,
                      const struct atom_layout *layout,

@@ -36,6 +36,11 @@ enum role atom_role(int l)
     return (enum role)(ROLE_CURVE_1 + l);
 }
 
+enum role atom_overlay_role(int l)
+{
+    return l == 3 ? ROLE_CURVE_2 : ROLE_CURVE_4;
+}
+
 double atom_radius(const struct ui *ui, const struct atom_report *report)
 {
     int shell = atom_shell(ui, report);
@@ -200,15 +205,16 @@ static bool draw_shell(const struct ui *ui, struct canvas *canvas,
         return false;
     const struct report_level *level =
         shell < 0 ? NULL : &report->subshells[shell];
+    enum role over_role = atom_overlay_role(level ? level->l : -1);
     enum role role = level ? atom_role(level->l) : ROLE_CURVE_5;
     plot_fill(plot, role, one.points, one.count);
     if (level)
         draw_curve(plot, ROLE_CURVE_5, PLOT_SOLID, '*', &all);
     if (has_over)
-        draw_curve(plot, ROLE_PIN, PLOT_DASHED, 'o', &over);
+        draw_curve(plot, over_role, PLOT_DASHED, 'o', &over);
     label_top(plot, role, &one, level ? level_print(level, label) : "all");
     if (has_over)
-        label_top(plot, ROLE_PIN, &over, atom_overlay_name(ui, name));
+        label_top(plot, over_role, &over, atom_overlay_name(ui, name));
     return true;
 }
 
@@ -289,8 +295,8 @@ static bool draw_charge(const struct ui *ui, struct canvas *canvas,
     plot_fill(plot, ROLE_CURVE_5, s.points, s.count);
     if (over) {
         sample(ui, SLOT_OVER, RUN_ZEFF, -1, &s);
-        draw_curve(plot, ROLE_PIN, PLOT_DASHED, 'o', &s);
-        plot_label(plot, ROLE_PIN, s.points[s.count / 3].x,
+        draw_curve(plot, atom_overlay_role(-1), PLOT_DASHED, 'o', &s);
+        plot_label(plot, atom_overlay_role(-1), s.points[s.count / 3].x,
                    s.points[s.count / 3].y, atom_overlay_name(ui, name));
     }
     sample(ui, SLOT_CHOSEN, RUN_ZEFF, -1, &s);
@@ -464,6 +470,6 @@ void atom_draw_cursor(const struct ui *ui, struct canvas *canvas, struct area a,
         return;
     }
     line.label = atom_overlay_name(ui, name);
-    line.role = ROLE_PIN;
+    line.role = atom_overlay_role(shell < 0 ? -1 : report->subshells[shell].l);
     draw_cursor_numbers(ui, canvas, a, row, &line);
 }

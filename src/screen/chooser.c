@@ -375,6 +375,8 @@ void chooser_draw(const struct ui *ui, struct canvas *canvas)
         [CHOOSER_SUBSHELL] = "Subshell",
         [CHOOSER_UNIT] = "Unit",
         [CHOOSER_EXPORT] = "Export",
+        [CHOOSER_METHOD] = "Method",
+        [CHOOSER_OVERLAY] = "Laid over",
     };
     const struct chooser *c = &ui->chooser;
     int width = 24;

@@ -282,6 +282,7 @@ START_TEST(every_overlay_is_drawn_and_named)
     for (int i = 0; i < 4; i++) {
         ui.choice.atom.overlay = OVERLAY_NONE;
         type("n");
+        ck_assert(shows(" Laid over "));
         for (int k = 0; k <= i; k++)
             type("j");
         key(KEY_CODE_ENTER);
@@ -302,6 +303,7 @@ END_TEST
 START_TEST(methods_are_chosen_from_a_list)
 {
     type("ab");
+    ck_assert(shows(" Method "));
     key(KEY_CODE_UP);
     key(KEY_CODE_UP);
     key(KEY_CODE_UP);
