@@ -27,6 +27,8 @@ struct terminal {
     SCREEN *screen;
     FILE *input, *output;
     int input_fd, output_fd;
+    FILE *stream;         /* what curses writes to: a duplicate of output */
+    int stage_fd;         /* where it writes while a frame is made; -1: none */
     struct termios modes; /* as found */
     bool has_modes;
     bool ascii;
@@ -75,6 +77,18 @@ struct guard_rescue capability_rescue(const struct terminal *t);
 
 /* True when colours are given as red, green, blue. */
 bool capability_direct(void);
+
+/* frame.c: between the two calls everything that curses writes is kept, and
+ * then sent at once: curses writes a piece at every move of the cursor, which
+ * shows half-painted screens and wakes the other end each time. Without a
+ * stage they do nothing. */
+void frame_open(struct terminal *t);
+void frame_close(struct terminal *t);
+void frame_begin(struct terminal *t);
+void frame_end(struct terminal *t);
+
+/* Writes everything, or until the terminal has gone. */
+void terminal_send(const struct terminal *t, const char *bytes, size_t length);
 
 /* keys.c: tells curses the sequences that descriptions often leave out. */
 void keys_define(const struct terminal *t);

@@ -83,6 +83,7 @@ void terminal_paint(struct terminal *t, const struct canvas *canvas)
     for (int r = 0; r < last_row; r++)
         paint_row(t, canvas, r, last_column);
     t->everything = false;
+    frame_begin(t);
     if (t->cursor != (canvas->cursor_visible ? 1 : 0)) {
         t->cursor = canvas->cursor_visible ? 1 : 0;
         curs_set(t->cursor);
@@ -91,6 +92,7 @@ void terminal_paint(struct terminal *t, const struct canvas *canvas)
          within(canvas->cursor_column, columns));
     guard_hold();
     refresh();
+    frame_end(t);
     guard_release();
 }
 

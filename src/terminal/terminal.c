@@ -61,8 +61,7 @@ static bool check_streams(const struct terminal *t,
     return true;
 }
 
-static void send_bytes(const struct terminal *t, const char *bytes,
-                       size_t length)
+void terminal_send(const struct terminal *t, const char *bytes, size_t length)
 {
     while (length > 0) {
         ssize_t done = write(t->output_fd, bytes, length);
@@ -77,7 +76,7 @@ static void send_bytes(const struct terminal *t, const char *bytes,
 
 static void send(const struct terminal *t, const struct capability *c)
 {
-    send_bytes(t, c->bytes, c->length);
+    terminal_send(t, c->bytes, c->length);
 }
 
 /* ---- open and close ---- */
@@ -90,6 +89,7 @@ static void set_modes(struct terminal *t)
     intrflush(stdscr, FALSE);
     keypad(stdscr, TRUE);
     nodelay(stdscr, TRUE);
+    typeahead(-1);          /* or a key could leave a screen half painted */
     leaveok(stdscr, FALSE); /* the cursor marks the selection */
     mouseinterval(0);
     if (getenv("ESCDELAY") == NULL)
@@ -107,9 +107,13 @@ static bool start_screen(struct terminal *t,
                          const struct terminal_options *options,
                          struct status *st)
 {
-    FILE *out = options->output ? options->output : stdout;
     FILE *in = options->input ? options->input : stdin;
-    t->screen = newterm(NULL, out, in);
+    int fd = dup(t->output_fd);
+    t->stream = fd >= 0 ? fdopen(fd, "w") : NULL;
+    if (t->stream == NULL && fd >= 0)
+        close(fd);
+    if (t->stream != NULL)
+        t->screen = newterm(NULL, t->stream, in);
     if (t->screen == NULL)
         return status_fail(st, STATUS_TERMINAL,
                            "the screen cannot be opened" NO_SCREEN_HINT);
@@ -143,6 +147,7 @@ bool terminal_open(struct terminal **terminal,
     t->ascii = !take_locale() || options->ascii;
     t->cursor = -1;
     t->everything = true;
+    frame_open(t);
     t->has_modes = tcgetattr(t->output_fd, &t->modes) == 0;
     /* exported ones would freeze the size for good */
     unsetenv("LINES");
@@ -174,6 +179,9 @@ void terminal_close(struct terminal *t)
             tcsetattr(t->output_fd, TCSADRAIN, &t->modes);
         delscreen(t->screen);
     }
+    if (t->stream != NULL)
+        fclose(t->stream);
+    frame_close(t);
     guard_close();
     canvas_clear(&t->shown);
     free(t);

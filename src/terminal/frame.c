@@ -1,0 +1,58 @@
+/* SPDX-License-Identifier: MIT */
+#include "terminal/inside.h"
+
+#include <fcntl.h>
+#include <sys/mman.h>
+#include <unistd.h>
+
+enum { NAMES_MAX = 8, CHUNK = 16384 };
+
+void frame_open(struct terminal *t)
+{
+    t->stage_fd = -1;
+    for (int i = 0; i < NAMES_MAX && t->stage_fd < 0; i++) {
+        char name[64];
+        snprintf(name, sizeof name, "/frame-%ld-%d", (long)getpid(), i);
+        t->stage_fd = shm_open(name, O_RDWR | O_CREAT | O_EXCL, 0600);
+        if (t->stage_fd >= 0)
+            shm_unlink(name); /* the descriptor is enough */
+    }
+}
+
+void frame_close(struct terminal *t)
+{
+    if (t->stage_fd >= 0)
+        close(t->stage_fd);
+    t->stage_fd = -1;
+}
+
+void frame_begin(struct terminal *t)
+{
+    /* when it comes back from a stop, curses asks the terminal for its modes
+     * and size and must find it */
+    if (t->stage_fd < 0 || isendwin())
+        return;
+    if (ftruncate(t->stage_fd, 0) != 0 ||
+        lseek(t->stage_fd, 0, SEEK_SET) != 0 ||
+        dup2(t->stage_fd, fileno(t->stream)) < 0)
+        frame_close(t);
+}
+
+void frame_end(struct terminal *t)
+{
+    if (t->stage_fd < 0)
+        return;
+    dup2(t->output_fd, fileno(t->stream));
+    off_t end = lseek(t->stage_fd, 0, SEEK_CUR);
+    for (off_t at = 0; at < end;) {
+        char chunk[CHUNK];
+        size_t want = end - at < CHUNK ? (size_t)(end - at) : CHUNK;
+        ssize_t got = pread(t->stage_fd, chunk, want, at);
+        if (got <= 0)
+            return;
+        terminal_send(t, chunk, (size_t)got);
+        at += got;
+    }
+    if (ftruncate(t->stage_fd, 0) != 0 || lseek(t->stage_fd, 0, SEEK_SET) != 0)
+        frame_close(t);
+}
