@@ -20,20 +20,41 @@ static const struct citation citations[] = {
      "Physica", 1934, "1", "104", "10.1016/S0031-8914(34)90011-2"},
 };
 
-#define PROVENANCE(what, count)                                                \
+/* The energy of the average of configuration goes back to this book; the
+ * record says in an export which of the two energies a number belongs to. */
+static const struct citation average_citations[] = {
+    {"slater1960", "book", "J. C. Slater",
+     "Quantum Theory of Atomic Structure, vol. 1 (average of configuration)",
+     "McGraw-Hill", 1960, NULL, NULL, NULL},
+    {"clementi1963", "article", "E. Clementi and D. L. Raimondi",
+     "Atomic Screening Constants from SCF Functions", "J. Chem. Phys.", 1963,
+     "38", "2686", "10.1063/1.1733573"},
+};
+
+#define PROVENANCE(what, cited, count)                                         \
     {                                                                          \
-        true, "single-zeta", "single-zeta Hartree-Fock", what, citations,      \
-            count                                                              \
+        true, "single-zeta", "single-zeta Hartree-Fock", what, cited, count    \
     }
 
 enum { OFFER_ZEFF, OFFER_RADIUS, OFFER_IONIZATION, OFFER_COUNT };
 
 static const struct model_offer offers[OFFER_COUNT] = {
-    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_EXPONENT, 1)},
+    [OFFER_ZEFF] = {QUANTITY_ZEFF,
+                    PROVENANCE(DEFINITION_ZEFF_EXPONENT, citations, 1)},
     [OFFER_RADIUS] = {QUANTITY_RADIUS,
-                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, 1)},
+                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, citations, 1)},
     [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION, 2)},
+                          PROVENANCE(DEFINITION_IONIZATION, citations, 2)},
+};
+
+static const struct model_offer average_offers[OFFER_COUNT] = {
+    [OFFER_ZEFF] = {QUANTITY_ZEFF,
+                    PROVENANCE(DEFINITION_ZEFF_EXPONENT, average_citations, 2)},
+    [OFFER_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(DEFINITION_RADIAL_MAXIMUM,
+                                                  average_citations, 2)},
+    [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
+                          PROVENANCE(DEFINITION_IONIZATION, average_citations,
+                                     2)},
 };
 
 struct work {
@@ -162,7 +183,8 @@ static struct reading read_ionization(const struct model_offer *offer,
 static struct reading read(const void *work, int offer, int n, int l)
 {
     const struct work *w = work;
-    const struct model_offer *o = &offers[offer];
+    const struct model_offer *o =
+        &(w->average ? average_offers : offers)[offer];
     const char *reason;
     bool outermost = n == 0 || offer == OFFER_IONIZATION;
     const struct subshell *asked = rule_subshell(&w->species, outermost ? 0 : n,
