@@ -12,5 +12,6 @@ TCase *output_cases(void);
 TCase *residual_cases(void);
 TCase *stream_cases(void);
 TCase *atom_cases(void);
+TCase *audit_cases(void);
 
 #endif

@@ -12,5 +12,6 @@ int main(void)
     suite_add_tcase(suite, residual_cases());
     suite_add_tcase(suite, stream_cases());
     suite_add_tcase(suite, atom_cases());
+    suite_add_tcase(suite, audit_cases());
     return run_suite(suite);
 }
