@@ -318,7 +318,7 @@ START_TEST(a_second_set_stands_beside_the_first_and_can_be_sorted)
 END_TEST
 
 /* Rahm, Hoffmann, Ashcroft 2016 print 226 pm for Fe, their corrigendum of 2017
- * 237 (10.1002/chem.201602949, 10.1002/chem.201701610). */
+ * 237 (10.1002/chem.201602949, 10.1002/chem.201700610). */
 START_TEST(a_revised_value_is_shown_beside_the_old_one)
 {
     struct csv list =
