@@ -27,6 +27,7 @@ static const struct {
                             density has a weak singularity at the origin */
     double length[2];    /* of an element; shorter for the derivatives of a
                             gradient functional */
+    double core;         /* y within which a gradient potential is smoothed */
     double last;         /* y where the mesh ends */
     double reach;        /* bohr, for a start */
     double first_mixing; /* the start is far off; later */
@@ -38,6 +39,7 @@ static const struct {
 } CHOICE = {
     .first = {1e-3, 1e-5},
     .length = {1.1, 0.8},
+    .core = 1e-2,
     .last = 118.0 * 100.0,
     .reach = 45.0,
     .first_mixing = 0.5,
@@ -288,6 +290,29 @@ double space_integral(const struct atom_solver *solver, const double *f,
 }
 
 /* Exchange and correlation of the density in D, into energy and v. */
+/* Close to the nucleus the gradient of the density is the small difference of
+ * large numbers, and a potential with its second derivative would be noise
+ * that the Dirac equation, which knows the slope of the potential, feeds
+ * back. There, within 1e-6 of the innermost shell's charge, the potential is
+ * continued with the shape of the local one. The energy is not touched. */
+static void smooth_core(struct atom_solver *s)
+{
+    struct atom_space *space = s->now;
+    int last = 0;
+    while (space->mesh.y[last] < CHOICE.core && last < s->elements * P)
+        last += P;
+    /* the new potential, not there yet, lends its room */
+    double *energy = space->out, *up = energy + space->mesh.points;
+    double *down = up + space->mesh.points;
+    uniform_lsd(last + 1, space->rho[0], space->rho[1], 0.0, energy, up, down);
+    double shift[2] = {space->v[0][last] - up[last],
+                       space->v[1][last] - down[last]};
+    for (int i = 0; i < last; i++) {
+        space->v[0][i] = up[i] + shift[0];
+        space->v[1][i] = down[i] + shift[1];
+    }
+}
+
 static void exchange_correlation(struct atom_solver *s)
 {
     struct atom_space *space = s->now;
@@ -314,6 +339,7 @@ static void exchange_correlation(struct atom_solver *s)
         gradient_potential(space->gradient,
                            s->options.functional == ATOM_PBE_VWN, space->energy,
                            space->v[0], space->v[1]);
+        smooth_core(s);
         break;
     }
 }

@@ -70,6 +70,26 @@ START_TEST(every_element_and_three_cations_converge_with_dirac)
 }
 END_TEST
 
+/* Gradient functionals at neutral atoms and first cations. */
+START_TEST(every_element_converges_with_a_gradient_functional)
+{
+    struct cases cases = cases_read();
+    struct atom_solver *solver = case_solver();
+    struct species species;
+    for (int Z = 1; Z <= 118; Z++)
+        for (int charge = 0; charge < 2 && charge < Z; charge++)
+            for (int dirac = 0; dirac < 2; dirac++) {
+                struct atom_options options = {
+                    .functional = ATOM_PBE,
+                    .relativity = dirac ? ATOM_DIRAC : ATOM_SCHROEDINGER};
+                cases_species(&cases, Z, charge, &species);
+                check_species(solver, &species, &options);
+            }
+    atom_solver_free(solver);
+    cases_free(&cases);
+}
+END_TEST
+
 START_TEST(every_ion_of_iron_xenon_and_uranium_converges)
 {
     static const int element[] = {26, 54, 92};
@@ -243,12 +263,13 @@ START_TEST(energies_agree_between_meshes)
     struct cases cases = cases_read();
     struct atom_solver *solver = case_solver();
     struct species species;
-    const struct atom_options *base[] = {&LDA, &LSD, &DIRAC};
+    const struct atom_options pbe = {.functional = ATOM_PBE};
+    const struct atom_options *base[] = {&LDA, &LSD, &DIRAC, &pbe};
     for (int Z = 2; Z <= 118; Z += 6)
-        for (size_t m = 0; m < 3; m++) {
+        for (size_t m = 0; m < 4; m++) {
             cases_species(&cases, Z, 0, &species);
             struct atom_options fine = *base[m];
-            fine.element_length = 0.7;
+            fine.element_length = m < 3 ? 0.7 : 0.6;
             check_species(solver, &species, &fine);
             double want = atom_energies(solver).total;
             check_species(solver, &species, base[m]);
@@ -293,6 +314,7 @@ TCase *case_states(void)
     tcase_add_test(c, every_element_and_three_cations_converge_in_lda);
     tcase_add_test(c, every_element_and_three_cations_converge_in_lsd);
     tcase_add_test(c, every_element_and_three_cations_converge_with_dirac);
+    tcase_add_test(c, every_element_converges_with_a_gradient_functional);
     tcase_add_test(c, every_ion_of_iron_xenon_and_uranium_converges);
     tcase_add_test(c, unbound_anions_say_so);
     tcase_add_test(c, too_few_cycles_are_unsettled);
