@@ -79,7 +79,7 @@ static bool space_make(struct atom_space *space, double first, double length,
     if (!mesh_init(&space->mesh, first, CHOICE.last, length, st))
         return false;
     size_t n = (size_t)space->mesh.points;
-    space->radial = radial_new(&space->mesh, st);
+    space->radial = radial_new(&space->mesh, 0, st);
     space->mixer = mixer_new(2 * ATOM_CHANNELS * space->mesh.points, st);
     space->block = calloc(n * 22, sizeof *space->block);
     if (!space->radial || !space->mixer || !space->block) {
@@ -385,7 +385,7 @@ static void new_potential(struct atom_solver *s, int channel)
     if (s->a2 <= 0.0)
         return;
     out += s->channels * points;
-    mesh_derivative(&space->mesh, s->elements, v, space->scratch, NULL);
+    mesh_derivative(&space->mesh, s->elements, v, space->scratch);
     for (int i = 0; i < points; i++)
         out[i] =
             1.0 - space->enclosed[i] / Z +

@@ -86,7 +86,7 @@ void gradient_density(struct gradient *gradient, double Z, int elements,
     g->elements = elements;
     g->points = elements * P + 1;
     for (int c = 0; c < 2; c++) {
-        mesh_derivative(g->mesh, elements, rho[c], g->slope[c], NULL);
+        mesh_derivative(g->mesh, elements, rho[c], g->slope[c]);
         for (int i = 0; i < g->points; i++) {
             g->slope[c][i] *= Z / g->mesh->slope[i];
             g->rho[2 * i + c] = rho[c][i] > 0.0 ? rho[c][i] : 0.0;
@@ -123,7 +123,7 @@ static void channel_potential(struct gradient *g, int c, double *v)
         flux[i] = y[i] * y[i] *
                   (2.0 * by_grad2[3 * i + 2 * c] * g->slope[c][i] +
                    by_grad2[3 * i + 1] * g->slope[1 - c][i]);
-    mesh_derivative(g->mesh, g->elements, flux, v, NULL);
+    mesh_derivative(g->mesh, g->elements, flux, v);
     for (int i = 0; i < g->points; i++)
         v[i] =
             by_rho[2 * i + c] - v[i] * g->Z / (g->mesh->slope[i] * y[i] * y[i]);

@@ -87,7 +87,7 @@ static void add_kinetic(struct hybrid *h, double f, int l, const double *p,
 {
     const struct mesh *mesh = &h->solver->now->mesh;
     double *slope = h->two, factor = f / (8.0 * 3.14159265358979323846);
-    mesh_derivative(mesh, h->solver->elements, p, slope, NULL);
+    mesh_derivative(mesh, h->solver->elements, p, slope);
     for (int i = 0; i < h->points; i++) {
         double y = mesh->y[i];
         double d = (slope[i] / mesh->slope[i] - p[i] / y) / y;

@@ -73,7 +73,7 @@ static double outermost_maximum(const struct atom_solver *s, const double *D,
     double most = 0.0;
     for (int i = 0; i <= last; i++)
         most = D[i] > most ? D[i] : most;
-    mesh_derivative(mesh, s->elements, D, slope, NULL);
+    mesh_derivative(mesh, s->elements, D, slope);
     for (int i = last; i > 0; i--)
         if (D[i] > PEAK_MIN * most && slope[i] <= 0.0 && slope[i - 1] > 0.0)
             return crossing(mesh, slope, 0.0, mesh->y[i - 1], mesh->y[i]);

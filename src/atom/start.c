@@ -33,8 +33,7 @@ void start_potential(struct atom_solver *solver)
     }
     if (solver->a2 <= 0.0)
         return;
-    mesh_derivative(&space->mesh, solver->elements, space->q, space->scratch,
-                    NULL);
+    mesh_derivative(&space->mesh, solver->elements, space->q, space->scratch);
     for (int i = 0; i < points; i++)
         for (int c = 0; c < solver->channels; c++)
             space->q[(solver->channels + c) * points + i] =

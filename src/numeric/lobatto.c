@@ -94,13 +94,10 @@ void lobatto_make(struct lobatto *rule)
     make_cumulative(rule);
     for (int i = 0; i <= P; i++) {
         for (int j = 0; j <= P; j++) {
-            double second = 0.0, stiffness = 0.0;
-            for (int q = 0; q <= P; q++) {
-                second += rule->derivative[i][q] * rule->derivative[q][j];
+            double stiffness = 0.0;
+            for (int q = 0; q <= P; q++)
                 stiffness += rule->w[q] * rule->derivative[q][i] *
                              rule->derivative[q][j];
-            }
-            rule->second[i][j] = second;
             rule->stiffness[i][j] = stiffness;
         }
     }

@@ -14,7 +14,6 @@ struct lobatto {
     double x[LOBATTO_POINTS];                          /* ascending */
     double w[LOBATTO_POINTS];                          /* sum is 2 */
     double derivative[LOBATTO_POINTS][LOBATTO_POINTS]; /* d/dx */
-    double second[LOBATTO_POINTS][LOBATTO_POINTS];     /* d2/dx2 */
     double cumulative[LOBATTO_POINTS][LOBATTO_POINTS]; /* integral -1…x_i */
     double stiffness[LOBATTO_POINTS][LOBATTO_POINTS];  /* ∫ l_i' l_j' dx */
     double barycentric[LOBATTO_POINTS];

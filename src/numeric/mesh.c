@@ -123,14 +123,11 @@ static void apply(const double matrix[LOBATTO_POINTS][LOBATTO_POINTS],
 }
 
 void mesh_derivative(const struct mesh *mesh, int elements, const double *f,
-                     double *first, double *second)
+                     double *out)
 {
     double factor = 2.0 / mesh->length;
-    for (int e = 0; e < elements; e++) {
-        apply(mesh->rule.derivative, factor, f, e, first);
-        if (second)
-            apply(mesh->rule.second, factor * factor, f, e, second);
-    }
+    for (int e = 0; e < elements; e++)
+        apply(mesh->rule.derivative, factor, f, e, out);
 }
 
 double mesh_inner(const struct mesh *mesh, double value, double derivative,

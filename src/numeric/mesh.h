@@ -44,9 +44,9 @@ double mesh_t(double y);
 double mesh_value(const struct mesh *mesh, const double *f, double y);
 
 /* d f / dt at the points of the first `elements` elements; where two elements
- * meet, the mean of both sides. second: d² f / dt², or NULL. */
+ * meet, the mean of both sides. */
 void mesh_derivative(const struct mesh *mesh, int elements, const double *f,
-                     double *first, double *second);
+                     double *out);
 
 /* Integral over the part below the first point of a function that goes like
  * y^power (1 + b y) there, from its value and its derivative d f/dt at the

@@ -121,16 +121,17 @@ static void fill_tables(struct radial *r)
     }
 }
 
-static const struct lane_kernel *choose_kernel(void)
+static const struct lane_kernel *choose_kernel(int width)
 {
 #if defined(__x86_64__)
-    if (__builtin_cpu_supports("avx2"))
+    if (width != 2 && __builtin_cpu_supports("avx2"))
         return &lanes_four;
 #endif
+    (void)width;
     return &lanes_two;
 }
 
-struct radial *radial_new(const struct mesh *mesh, struct status *st)
+struct radial *radial_new(const struct mesh *mesh, int width, struct status *st)
 {
     /* the vectors in it need more than malloc's alignment */
     struct radial *r = aligned_alloc(LANES_ALIGN, sizeof *r);
@@ -140,7 +141,7 @@ struct radial *radial_new(const struct mesh *mesh, struct status *st)
     }
     memset(r, 0, sizeof *r);
     r->work.mesh = mesh;
-    r->kernel = choose_kernel();
+    r->kernel = choose_kernel(width);
     r->room = (RADIAL_LEVELS_MAX + r->kernel->width - 1) / r->kernel->width +
               RADIAL_CHANNELS - 1;
     static double nothing[1];
@@ -245,7 +246,7 @@ void radial_potential(struct radial *radial, int channel, const double *q,
     if (radial->work.a2 <= 0.0)
         return;
     if (!force)
-        mesh_derivative(mesh, radial->elements, q, c->beta, NULL);
+        mesh_derivative(mesh, radial->elements, q, c->beta);
     for (int i = 0; i < points; i++) {
         double y = mesh->y[i], slope = mesh->slope[i];
         double v1 =
@@ -593,7 +594,7 @@ void radial_functions(const struct radial *radial, int i, double *p, double *q)
         p[k] = g->chi[k * width + lane];
     if (q) {
         memset(q, 0, (size_t)mesh->points * sizeof *q);
-        mesh_derivative(mesh, g->filled, p, q, NULL);
+        mesh_derivative(mesh, g->filled, p, q);
     }
     for (int k = 0; k <= g->filled * P; k++) {
         double m = 2.0 + a2 * (g->energy[lane] - c->v[k]);

@@ -38,8 +38,10 @@ enum radial_state {
 
 struct radial;
 
-/* A solver on a mesh, which must outlive it. NULL with STATUS_MEMORY. */
-MUST_CHECK struct radial *radial_new(const struct mesh *mesh,
+/* A solver on a mesh, which must outlive it. width: levels worked on at a
+ * time, 2 or 4; 0 takes what suits the processor, and 4 counts as 2 where it
+ * has no vectors of that size. NULL with STATUS_MEMORY. */
+MUST_CHECK struct radial *radial_new(const struct mesh *mesh, int width,
                                      struct status *st);
 void radial_free(struct radial *radial);
 
