@@ -42,16 +42,16 @@ struct lane_channel {
 struct lane_work {
     double a2;
     const struct mesh *mesh;
-    const double *stiffness;   /* lower triangle, each entry × width */
-    const double *derivative;  /* d/dx matrix */
-    const double *schwarz;     /* hw schwarz */
-    const double *mass;        /* hw slope² */
-    const double *centrifugal; /* hw slope²/y² */
-    const double *square;      /* 2 weight slope² */
-    const double *origin;      /* hw dF/dt in the field of the origin */
-    double *factor;            /* of the matrix, elements × FACTOR × width */
-    double *norm;              /* -dG/dE, points × width */
-    double *right;             /* right-hand side, points × width */
+    double *stiffness;   /* lower triangle, each entry × width */
+    double *derivative;  /* d/dx matrix */
+    double *schwarz;     /* hw schwarz */
+    double *mass;        /* hw slope² */
+    double *centrifugal; /* hw slope²/y² */
+    double *square;      /* 2 weight slope² */
+    double *origin;      /* hw dF/dt in the field of the origin */
+    double *factor;      /* of the matrix, elements × FACTOR × width */
+    double *norm;        /* -dG/dE, points × width */
+    double *right;       /* right-hand side, points × width */
 };
 
 enum {
