@@ -184,10 +184,21 @@ bool text_to_int(const char *s, int *value)
     return true;
 }
 
+#define DIGITS_EXACT 9 /* fit an int */
+
 bool text_to_double(const char *s, double *value)
 {
     if (*s == '\0' || s[strspn(s, "+-.0123456789eE")] != '\0')
         return false;
+    /* Most numbers are a few digits: those are exact without strtod. */
+    size_t digits = strspn(s, "0123456789");
+    if (s[digits] == '\0' && digits <= DIGITS_EXACT) {
+        int whole = 0;
+        for (size_t i = 0; i < digits; i++)
+            whole = 10 * whole + (s[i] - '0');
+        *value = whole;
+        return true;
+    }
     char *end;
     double v = strtod(s, &end);
     if (end == s || *end != '\0' || !isfinite(v))

@@ -11,14 +11,18 @@
 /* Occupations closer than this are the same: they are typed, not computed. */
 #define OCCUPATION_TOLERANCE 1e-9
 
-/* Each noble gas in closed subshells, written on top of the one before. */
+/* Each noble gas in closed subshells, in the order of a configuration. */
 static const struct {
     const char *symbol;
-    const char *added;
+    const char *closed;
 } cores[] = {
-    {"He", "1s"},          {"Ne", "2s 2p"},    {"Ar", "3s 3p"},
-    {"Kr", "3d 4s 4p"},    {"Xe", "4d 5s 5p"}, {"Rn", "4f 5d 6s 6p"},
-    {"Og", "5f 6d 7s 7p"},
+    {"He", "1s"},
+    {"Ne", "1s2s2p"},
+    {"Ar", "1s2s2p3s3p"},
+    {"Kr", "1s2s2p3s3p3d4s4p"},
+    {"Xe", "1s2s2p3s3p3d4s4p4d5s5p"},
+    {"Rn", "1s2s2p3s3p3d4s4p4d4f5s5p5d6s6p"},
+    {"Og", "1s2s2p3s3p3d4s4p4d4f5s5p5d5f6s6p6d7s7p"},
 };
 #define CORE_COUNT (sizeof cores / sizeof cores[0])
 
@@ -57,15 +61,17 @@ bool configuration_change(struct configuration *c, int n, int l, double change)
     return true;
 }
 
-/* Adds the closed subshells named in a core's list. */
-static void add_closed(struct configuration *c, const char *list)
+/* Makes the closed subshells of a core the whole configuration. */
+static void set_core(struct configuration *c, const char *closed)
 {
-    for (const char *p = list; *p; p += p[2] ? 3 : 2) {
+    c->count = 0;
+    for (const char *p = closed; *p; p += 2) {
         char label[SUBSHELL_TEXT_MAX] = {p[0], p[1], '\0'};
-        int n, l;
-        if (!subshell_parse(label, &n, &l) ||
-            !configuration_change(c, n, l, 4 * l + 2))
-            assert(!"core table");
+        struct subshell *s = &c->shells[c->count++];
+        bool right = subshell_parse(label, &s->n, &s->l);
+        assert(right);
+        (void)right;
+        s->occ = 4 * s->l + 2;
     }
 }
 
@@ -77,11 +83,11 @@ static bool parse_core(const char **at, struct configuration *c,
     if (!close)
         return status_fail(st, STATUS_USAGE,
                            "configuration '%s': '[' without ']'", open);
+    size_t length = (size_t)(close - open - 1);
     for (size_t i = 0; i < CORE_COUNT; i++) {
-        add_closed(c, cores[i].added);
-        if (strlen(cores[i].symbol) == (size_t)(close - open - 1) &&
-            strncmp(cores[i].symbol, open + 1, (size_t)(close - open - 1)) ==
-                0) {
+        if (strlen(cores[i].symbol) == length &&
+            strncmp(cores[i].symbol, open + 1, length) == 0) {
+            set_core(c, cores[i].closed);
             *at = close + 1;
             return true;
         }
@@ -178,7 +184,7 @@ const char *configuration_print(const struct configuration *configuration,
     if (configuration->count == 0)
         text_add(&t, "none");
     for (size_t i = 0; i < CORE_COUNT; i++) {
-        add_closed(&core, cores[i].added);
+        set_core(&core, cores[i].closed);
         if (!holds_core(configuration, &core))
             continue;
         used = core;

@@ -30,8 +30,8 @@ struct bench bench_start(char *const *argv)
 {
     static char term[] = "TERM=xterm-256color";
     static char locale[] = "LC_ALL=C.UTF-8";
-    static char home[] = "HOME=/nonexistent";
-    static char memory[] = "XDG_STATE_HOME=/nonexistent";
+    static char home[] = "HOME=none";
+    static char memory[] = "XDG_STATE_HOME=none";
     char *environment[] = {term, locale, home, memory, NULL};
     struct bench b = {.master = posix_openpt(O_RDWR | O_NOCTTY)};
     if (b.master < 0 || grantpt(b.master) != 0 || unlockpt(b.master) != 0)
