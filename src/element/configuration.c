@@ -246,3 +246,30 @@ double configuration_shell(const struct configuration *configuration, int n)
             sum += configuration->shells[i].occ;
     return sum;
 }
+
+/* Characters from '0' upwards are printable and need no escape but for the
+ * backslash, which neither range reaches: n, l to 4n + l, 4 … 35; electrons 1
+ * … 14. */
+const char *configuration_pack(const struct configuration *configuration,
+                               char out[CONFIGURATION_PACKED_MAX])
+{
+    char *p = out;
+    for (int i = 0; i < configuration->count; i++) {
+        const struct subshell *s = &configuration->shells[i];
+        *p++ = (char)('0' + 4 * s->n + s->l);
+        *p++ = (char)('0' + (int)s->occ);
+    }
+    *p = '\0';
+    return out;
+}
+
+void configuration_unpack(const char *packed,
+                          struct configuration *configuration)
+{
+    configuration->count = 0;
+    for (; packed[0] && packed[1]; packed += 2) {
+        int place = packed[0] - '0';
+        configuration->shells[configuration->count++] =
+            (struct subshell){place / 4, place % 4, (double)(packed[1] - '0')};
+    }
+}

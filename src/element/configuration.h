@@ -52,6 +52,16 @@ MUST_CHECK bool configuration_change(struct configuration *configuration, int n,
 bool configuration_same(const struct configuration *a,
                         const struct configuration *b);
 
+/* A configuration of whole electrons as two printable characters a subshell,
+ * for tables that are read often: in the order of n, then l. Returns out. */
+#define CONFIGURATION_PACKED_MAX (2 * SUBSHELL_MAX + 1)
+const char *configuration_pack(const struct configuration *configuration,
+                               char out[CONFIGURATION_PACKED_MAX]);
+
+/* Back from what configuration_pack made; nothing is checked. */
+void configuration_unpack(const char *packed,
+                          struct configuration *configuration);
+
 /* Electrons in shell n. */
 double configuration_shell(const struct configuration *configuration, int n);
 

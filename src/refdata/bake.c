@@ -125,11 +125,11 @@ static void put_elements(FILE *out, const struct dataset *set, size_t i)
         const struct element_facts *f = &set->elements[k];
         fprintf(out, "{");
         put_number(out, f->weight);
-        fprintf(out, ", %u, %u, %u, %u, %d, %d, %u, %s, %s},\n",
-                (unsigned)f->configuration, (unsigned)f->term,
-                (unsigned)f->category, (unsigned)f->note, f->z,
-                f->longest_lived, (unsigned)f->status, bool_word(f->has_weight),
-                bool_word(f->has_stable_isotope));
+        fprintf(out, ", %u, %u, %u, %u, %u, %d, %d, %u, %s, %s},\n",
+                (unsigned)f->configuration, (unsigned)f->shells,
+                (unsigned)f->term, (unsigned)f->category, (unsigned)f->note,
+                f->z, f->longest_lived, (unsigned)f->status,
+                bool_word(f->has_weight), bool_word(f->has_stable_isotope));
     }
 }
 
@@ -138,10 +138,10 @@ static void put_configurations(FILE *out, const struct dataset *set, size_t i)
     fprintf(out, "static const struct configuration_entry rows_%zu[] = {\n", i);
     for (int k = 0; k < set->count; k++) {
         const struct configuration_entry *c = &set->configurations[k];
-        fprintf(out, "{%u, %u, %u, %d, %d, %u, %s},\n",
-                (unsigned)c->configuration, (unsigned)c->term,
-                (unsigned)c->note, c->z, c->charge, (unsigned)c->status,
-                bool_word(c->irregular));
+        fprintf(out, "{%u, %u, %u, %u, %d, %d, %u, %s},\n",
+                (unsigned)c->configuration, (unsigned)c->shells,
+                (unsigned)c->term, (unsigned)c->note, c->z, c->charge,
+                (unsigned)c->status, bool_word(c->irregular));
     }
 }
 

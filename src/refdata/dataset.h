@@ -130,6 +130,7 @@ struct entry {
 /* Ground configuration of an ion. */
 struct configuration_entry {
     text_offset configuration; /* shorthand, checked: holds z - charge */
+    text_offset shells;        /* the same, for configuration_unpack */
     text_offset term;          /* "" when unknown */
     text_offset note;
     int16_t z;
@@ -143,6 +144,7 @@ struct configuration_entry {
 struct element_facts {
     struct number weight; /* standard atomic weight, abridged, as printed */
     text_offset configuration;
+    text_offset shells; /* the same, for configuration_unpack */
     text_offset term;
     text_offset category; /* "transition metal" */
     text_offset note;

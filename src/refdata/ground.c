@@ -28,31 +28,30 @@ static enum configuration_origin origin_of(unsigned status)
     return status == CONFIGURATION_PREDICTED ? ORIGIN_PREDICTED : ORIGIN_STORED;
 }
 
-/* Fills species from the tables; false when they do not hold it. The texts
- * were checked when the tables were made, so that they parse. */
-static bool from_tables(int z, int charge, struct species *species,
-                        struct status *st)
+/* Fills species from the tables; false when they do not hold it. */
+static bool from_tables(int z, int charge, struct species *species)
 {
     const struct dataset *set = catalogue_elements();
-    const char *configuration;
-    const char *term;
+    text_offset shells;
+    text_offset term;
     if (charge == 0) {
         const struct element_facts *f = dataset_element(set, z);
         assert(f);
-        configuration = dataset_text(set, f->configuration);
-        term = dataset_text(set, f->term);
+        shells = f->shells;
+        term = f->term;
         species->origin = origin_of(f->status);
     } else {
         const struct configuration_entry *c = stored_ion(z, charge, &set);
         if (!c)
             return false;
-        configuration = dataset_text(set, c->configuration);
-        term = dataset_text(set, c->term);
+        shells = c->shells;
+        term = c->term;
         species->origin = origin_of(c->status);
     }
+    configuration_unpack(dataset_text(set, shells), &species->configuration);
     /* Some stored terms ("*", "(1/2,1/2)0") have no L S J to read. */
-    (void)term_parse(term, &species->term);
-    return configuration_parse(configuration, &species->configuration, st);
+    (void)term_parse(dataset_text(set, term), &species->term);
+    return true;
 }
 
 /* Takes the outermost electron away. */
@@ -77,11 +76,10 @@ static void gain_one(struct configuration *c)
 }
 
 /* The nearest charge towards the neutral atom that the tables hold. */
-static int nearest_stored(int z, int charge, struct species *s,
-                          struct status *st)
+static int nearest_stored(int z, int charge, struct species *s)
 {
     int step = charge > 0 ? -1 : 1;
-    while (!from_tables(z, charge, s, st))
+    while (!from_tables(z, charge, s))
         charge += step;
     return charge;
 }
@@ -99,7 +97,7 @@ bool ground_state(int z, int charge, struct species *species, struct status *st)
                            "charge %d: no such anion of %s; expected %d or "
                            "above",
                            charge, element_at(z)->symbol, CHARGE_LOWEST);
-    int base = nearest_stored(z, charge, &s, st);
+    int base = nearest_stored(z, charge, &s);
     if (base != charge) {
         for (int q = base; q < charge; q++)
             lose_one(&s.configuration);

@@ -25,7 +25,7 @@ static const char *const status_words[] = {CONFIGURATION_STATUS_LIST(ID3)};
  * electrons. */
 static bool load_configuration(struct load *ld, const cJSON *object, int z,
                                int charge, text_offset *configuration,
-                               text_offset *term)
+                               text_offset *shells, text_offset *term)
 {
     const char *text = object_text(object, "configuration");
     const char *term_text = object_text(object, "term");
@@ -51,7 +51,15 @@ static bool load_configuration(struct load *ld, const cJSON *object, int z,
         return status_fail(ld->st, STATUS_DATA,
                            "term '%s': longer than %d bytes",
                            quoted(term_text).text, TERM_TEXT_MAX - 1);
+    char packed[CONFIGURATION_PACKED_MAX];
+    for (int i = 0; i < c.count; i++)
+        if (c.shells[i].occ != floor(c.shells[i].occ))
+            return status_fail(ld->st, STATUS_DATA,
+                               "configuration '%s': expected whole electrons",
+                               quoted(text).text);
     return load_text(ld, object, "configuration", configuration) &&
+           pool_add(&ld->pool, configuration_pack(&c, packed), shells,
+                    ld->st) &&
            load_text(ld, object, "term", term);
 }
 
@@ -148,7 +156,8 @@ static bool read_element(struct load *ld, const cJSON *object, void *row)
         return false;
     f->z = (int16_t)load_element(ld, object);
     if (f->z == 0 ||
-        !load_configuration(ld, object, f->z, 0, &f->configuration, &f->term) ||
+        !load_configuration(ld, object, f->z, 0, &f->configuration, &f->shells,
+                            &f->term) ||
         !load_word(ld, object, "status", status_words,
                    CONFIGURATION_STATUS_COUNT, &status))
         return false;
@@ -218,7 +227,7 @@ static bool read_configuration(struct load *ld, const cJSON *object, void *row)
                            c->z - 1);
     c->charge = (int8_t)charge;
     if (!load_configuration(ld, object, c->z, charge, &c->configuration,
-                            &c->term) ||
+                            &c->shells, &c->term) ||
         !load_word(ld, object, "status", status_words,
                    CONFIGURATION_STATUS_COUNT, &status))
         return false;

@@ -73,8 +73,9 @@ static void draw_signed(struct canvas *canvas, int row, int column, int width,
     number_fit(value, places, width - 1, out);
     bool plus = value > 0 && out[strspn(out, "0.")] != '\0';
     snprintf(text, sizeof text, "%s%s", plus ? "+" : "", out);
-    canvas_right(canvas, row, column, width,
-                 value < 0 ? ROLE_BELOW : ROLE_ABOVE, text);
+    /* The sign and the bar say which side: a colour here would cost a change
+     * of colours for every number that changes with the selection. */
+    canvas_right(canvas, row, column, width, ROLE_TEXT, text);
 }
 
 static void draw_reading(struct canvas *canvas, int row, int column, int width,

@@ -113,6 +113,13 @@ START_TEST(configurations_print_as_they_were_typed)
         char out[CONFIGURATION_TEXT_MAX];
         ck_assert_msg(configuration_parse(usual[i], &c, &st), "%s", usual[i]);
         ck_assert_str_eq(configuration_print(&c, out), usual[i]);
+        if (strchr(usual[i], '.'))
+            continue;
+        char packed[CONFIGURATION_PACKED_MAX];
+        struct configuration back;
+        configuration_unpack(configuration_pack(&c, packed), &back);
+        ck_assert(configuration_same(&c, &back));
+        ck_assert_ptr_null(strpbrk(packed, "\\\"?"));
     }
 }
 END_TEST
