@@ -130,9 +130,15 @@ static void draw_heading(const struct ui *ui, struct canvas *canvas,
 
 /* Why there is no residual, from the first column that is then empty. */
 static void draw_reason(struct canvas *canvas, struct area a, int row,
-                        const struct row *r)
+                        const struct row *r, bool chosen)
 {
     const struct columns *c = columns_for(a);
+    /* Of the models that are not chosen a word will do. */
+    if (!chosen && r->state == ROW_NO_REFERENCE) {
+        canvas_right(canvas, row, c->reference, c->reference_width, ROLE_GAP,
+                     reading_state_word(READING_MISSING));
+        return;
+    }
     bool no_value = r->value.state != READING_OK && r->value.provenance;
     int from = no_value                           ? c->value
                : r->reference.state != READING_OK ? c->reference
@@ -141,8 +147,25 @@ static void draw_reason(struct canvas *canvas, struct area a, int row,
                  r->reason);
 }
 
+/* The reference of a row; a ditto mark where it is the one above. */
+static void draw_reference(struct canvas *canvas, int row,
+                           const struct columns *c, const struct row *r,
+                           const struct row *above)
+{
+    bool same = above && above->reference.state == READING_OK &&
+                above->value.state == READING_OK &&
+                above->reference.provenance == r->reference.provenance;
+    if (r->reference.state == READING_OK && same)
+        canvas_right(canvas, row, c->reference, c->reference_width, ROLE_QUIET,
+                     "\"");
+    else
+        draw_reading(canvas, row, c->reference, c->reference_width,
+                     &r->reference);
+}
+
 static void draw_row(struct canvas *canvas, struct area a, int row,
-                     const struct row *r, bool chosen, double full)
+                     const struct row *r, const struct row *above, bool chosen,
+                     double full)
 {
     const struct columns *c = columns_for(a);
     char out[NUMBER_TEXT_MAX];
@@ -154,16 +177,13 @@ static void draw_row(struct canvas *canvas, struct area a, int row,
         canvas_right(canvas, row, c->value, c->value_width, ROLE_TEXT,
                      number_fit(r->value.value.value, r->unit->decimals,
                                 c->value_width, out));
-    if (r->reference.state == READING_OK && r->value.state == READING_OK)
-        draw_reading(canvas, row, c->reference, c->reference_width,
-                     &r->reference);
-    if (r->state == ROW_REFERENCE_ONLY) {
-        draw_reading(canvas, row, c->reference, c->reference_width,
-                     &r->reference);
+    if (r->reference.state == READING_OK &&
+        (r->value.state == READING_OK || r->state == ROW_REFERENCE_ONLY))
+        draw_reference(canvas, row, c, r, above);
+    if (r->state == ROW_REFERENCE_ONLY)
         return;
-    }
     if (r->state != ROW_OK) {
-        draw_reason(canvas, a, row, r);
+        draw_reason(canvas, a, row, r, chosen);
         return;
     }
     if (c->residual_width > 0)
@@ -229,7 +249,8 @@ static int draw_group(const struct ui *ui, struct canvas *canvas, struct area a,
         bool chosen = quantity == ui->choice.quantity && model &&
                       rows[i].value.provenance &&
                       strcmp(model->id, rows[i].value.provenance->id) == 0;
-        draw_row(canvas, a, a.row + 1 + i, &rows[i], chosen, full);
+        draw_row(canvas, a, a.row + 1 + i, &rows[i], i ? &rows[i - 1] : NULL,
+                 chosen, full);
     }
     return count + 1 < a.rows ? count + 1 : a.rows;
 }
