@@ -80,6 +80,26 @@ static const struct model_offer offers[OFFER_COUNT] = {
                      PROVENANCE(DEFINITION_ALLEN, SOURCES_ALLEN)},
 };
 
+/* Standard uncertainty of a first ionization energy in eV, by block: the root
+ * mean square of its deviations from NIST ASD 5.12, Z = 1…103, as this model
+ * gives them (tests/model/test_scf.c checks the coverage). Nothing is known
+ * that would bound the errors of higher charges as well. */
+static double uncertainty_ev(const struct species *species)
+{
+    if (species->charge != 0)
+        return 0.0;
+    switch (element_at(species->z)->block) {
+    case 's':
+        return 0.09;
+    case 'p':
+        return 0.14;
+    case 'd':
+        return 0.18;
+    default:
+        return 0.10;
+    }
+}
+
 /* One of the two solutions. */
 struct half {
     enum atom_state state;
@@ -261,6 +281,9 @@ static struct reading read_ionization(const struct work *w)
     struct reading r =
         reading_computed(QUANTITY_IONIZATION, energy * HARTREE_EV,
                          &offers[OFFER_IONIZATION].provenance);
+    double u = uncertainty_ev(&w->question.species);
+    r.has_u = u > 0.0;
+    r.u = number_round(u, 2, 2);
     if (energy < 0.0)
         r.remark = "negative: the ion lies lower in this model";
     return r;
