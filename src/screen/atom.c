@@ -331,9 +331,9 @@ static void draw_state(const struct ui *ui, struct canvas *canvas)
     }
     const char *failure = atom_overlay_failure(ui);
     if (failure[0] != '\0')
-        text_addf(&t, "; %s: %s", atom_overlay_name(ui, name), failure);
+        text_addf(&t, "; %s: %s", atom_overlay_name(ui, NULL, name), failure);
     else if (over && !atom_solved(ui, SLOT_OVER))
-        text_addf(&t, "; %s: cycle %d", atom_overlay_name(ui, name),
+        text_addf(&t, "; %s: cycle %d", atom_overlay_name(ui, NULL, name),
                   atom_run_report(over->run)->cycles);
     canvas_text(canvas, 1, 0, canvas->columns,
                 bad || failure[0] != '\0' ? ROLE_CAUTION : ROLE_TEXT, line);

@@ -56,12 +56,18 @@ const struct orbital_run *atom_orbitals(const struct ui *ui);
 
 /* Place of the chosen subshell in a report; -1 for all electrons. */
 int atom_shell(const struct ui *ui, const struct atom_report *report);
-/* Place of the same n l in another configuration; -2 when it has none. */
-int atom_same_shell(const struct report_level *shell,
-                    const struct configuration *configuration);
+/* Place in `over` of the subshell to lay over subshell `shell` of a report: the
+ * same n l, or, for the outermost subshell of its l and an element of another
+ * period, the n that differs as the periods do (4s of Fe, 5s of Ru). -1 for
+ * all electrons, -2 when there is none. */
+int atom_other_shell(const struct atom_report *report, int shell,
+                     const struct atom_report *over);
 
-/* What the overlay is called: "Fe2+", "Schroedinger", "slater". */
-const char *atom_overlay_name(const struct ui *ui, char out[ATOM_LABEL_MAX]);
+/* What the overlay is called: "Ru 5s", "Schrödinger", "slater"; shell is the
+ * chosen one. */
+const char *atom_overlay_name(const struct ui *ui,
+                              const struct atom_report *report,
+                              char out[ATOM_LABEL_MAX]);
 
 /* Radius of the cursor, bohr. */
 double atom_radius(const struct ui *ui, const struct atom_report *report);

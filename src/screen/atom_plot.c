@@ -120,13 +120,10 @@ static bool sample_overlay(const struct ui *ui,
         to_points(ui, s, true);
         return true;
     }
-    int same = !over || shell < 0
-                   ? -1
-                   : atom_same_shell(&report->subshells[shell],
-                                     &over->species.configuration);
-    if (!over || same == -2)
+    int other = over ? atom_other_shell(report, shell, over) : -2;
+    if (other == -2)
         return false;
-    sample(ui, SLOT_OVER, RUN_DENSITY, same, s);
+    sample(ui, SLOT_OVER, RUN_DENSITY, other, s);
     return true;
 }
 
@@ -214,7 +211,7 @@ static bool draw_shell(const struct ui *ui, struct canvas *canvas,
         draw_curve(plot, over_role, PLOT_DASHED, 'o', &over);
     label_top(plot, role, &one, level ? level_print(level, label) : "all");
     if (has_over)
-        label_top(plot, over_role, &over, atom_overlay_name(ui, name));
+        label_top(plot, over_role, &over, atom_overlay_name(ui, report, name));
     return true;
 }
 
@@ -297,7 +294,8 @@ static bool draw_charge(const struct ui *ui, struct canvas *canvas,
         sample(ui, SLOT_OVER, RUN_ZEFF, -1, &s);
         draw_curve(plot, atom_overlay_role(-1), PLOT_DASHED, 'o', &s);
         plot_label(plot, atom_overlay_role(-1), s.points[s.count / 3].x,
-                   s.points[s.count / 3].y, atom_overlay_name(ui, name));
+                   s.points[s.count / 3].y,
+                   atom_overlay_name(ui, report, name));
     }
     sample(ui, SLOT_CHOSEN, RUN_ZEFF, -1, &s);
     draw_curve(plot, ROLE_CURVE_1, PLOT_SOLID, '*', &s);
@@ -465,11 +463,13 @@ void atom_draw_cursor(const struct ui *ui, struct canvas *canvas, struct area a,
         line = (struct cursor_line){0};
         orbital_run_density(orbitals, shell, 1, &r, &line.density);
     } else if (over) {
-        line = line_of(ui, SLOT_OVER, -1, r);
+        int other = atom_other_shell(report, shell, over);
+        line = line_of(ui, SLOT_OVER, other < 0 ? -1 : other, r);
+        line.has_zeff = true;
     } else {
         return;
     }
-    line.label = atom_overlay_name(ui, name);
+    line.label = atom_overlay_name(ui, report, name);
     line.role = atom_overlay_role(shell < 0 ? -1 : report->subshells[shell].l);
     draw_cursor_numbers(ui, canvas, a, row, &line);
 }

@@ -267,14 +267,69 @@ const struct orbital_run *atom_orbitals(const struct ui *ui)
     return ui->atom->orbitals;
 }
 
-const char *atom_overlay_name(const struct ui *ui, char out[ATOM_LABEL_MAX])
+int atom_shell(const struct ui *ui, const struct atom_report *r)
 {
     const struct atom_choice *a = &ui->choice.atom;
+    const struct configuration *c = &r->species.configuration;
+    if (a->n < 0)
+        return -1;
+    const struct subshell *outer = configuration_outermost(c);
+    int last = outer ? (int)(outer - c->shells) : -1;
+    for (int i = 0; i < c->count && a->n > 0; i++)
+        if (c->shells[i].n == a->n && c->shells[i].l == a->l)
+            return i;
+    return last;
+}
+
+static int find_shell(const struct atom_report *report, int n, int l)
+{
+    const struct configuration *c = &report->species.configuration;
+    for (int i = 0; i < c->count; i++)
+        if (c->shells[i].n == n && c->shells[i].l == l)
+            return i;
+    return -2;
+}
+
+int atom_other_shell(const struct atom_report *report, int shell,
+                     const struct atom_report *over)
+{
+    if (shell < 0)
+        return -1;
+    const struct subshell *s = &report->species.configuration.shells[shell];
+    int n = s->n;
+    bool outermost = true;
+    for (int i = shell + 1; i < report->subshell_count; i++)
+        outermost = outermost && report->subshells[i].l != s->l;
+    if (outermost)
+        n += element_at(over->species.z)->period -
+             element_at(report->species.z)->period;
+    return find_shell(over, n, s->l);
+}
+
+/* "Ru 5s" */
+static void species_name(const struct ui *ui, const struct atom_report *report,
+                         struct text *t)
+{
+    const struct pin *over = &ui->choice.atom.over;
+    const struct atom_report *r = atom_solved(ui, SLOT_OVER);
     char ion[ION_TEXT_MAX];
+    char label[LEVEL_TEXT_MAX];
+    text_add(t, ion_print(over->z, over->charge, ion));
+    int shell =
+        r && report ? atom_other_shell(report, atom_shell(ui, report), r) : -1;
+    if (shell >= 0)
+        text_addf(t, " %s", level_print(&r->subshells[shell], label));
+}
+
+const char *atom_overlay_name(const struct ui *ui,
+                              const struct atom_report *report,
+                              char out[ATOM_LABEL_MAX])
+{
+    const struct atom_choice *a = &ui->choice.atom;
     struct text t = text_over(out, ATOM_LABEL_MAX);
     switch (a->overlay) {
     case OVERLAY_SPECIES:
-        text_add(&t, ion_print(a->over.z, a->over.charge, ion));
+        species_name(ui, report, &t);
         break;
     case OVERLAY_RELATIVITY:
         text_add(&t, a->method.relativity == RELATIVITY_DIRAC ? "Schrödinger"
@@ -291,27 +346,4 @@ const char *atom_overlay_name(const struct ui *ui, char out[ATOM_LABEL_MAX])
         break;
     }
     return out;
-}
-
-int atom_shell(const struct ui *ui, const struct atom_report *r)
-{
-    const struct atom_choice *a = &ui->choice.atom;
-    const struct configuration *c = &r->species.configuration;
-    if (a->n < 0)
-        return -1;
-    const struct subshell *outer = configuration_outermost(c);
-    int last = outer ? (int)(outer - c->shells) : -1;
-    for (int i = 0; i < c->count && a->n > 0; i++)
-        if (c->shells[i].n == a->n && c->shells[i].l == a->l)
-            return i;
-    return last;
-}
-
-int atom_same_shell(const struct report_level *shell,
-                    const struct configuration *c)
-{
-    for (int i = 0; i < c->count; i++)
-        if (c->shells[i].n == shell->n && c->shells[i].l == shell->l)
-            return i;
-    return -2;
 }

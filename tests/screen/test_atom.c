@@ -296,7 +296,13 @@ START_TEST(every_overlay_is_drawn_and_named)
     type("nj");
     key(KEY_CODE_ENTER);
     ck_assert_int_eq(atom_solved(&ui, SLOT_OVER)->species.z, 44);
-    ck_assert(shows("Ru "));
+    ck_assert(shows("Ru 5s"));
+    key(KEY_CODE_UP);
+    ck_assert(shows("Ru 4d"));
+    key(KEY_CODE_UP); /* 3p is the outermost p of Fe, 4p of Ru */
+    ck_assert(shows("Ru 4p"));
+    key(KEY_CODE_UP); /* 3s is a core shell in both */
+    ck_assert(shows("Ru 3s"));
 }
 END_TEST
 
