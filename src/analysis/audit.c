@@ -226,17 +226,21 @@ static bool compared(const struct audit_point *p, struct audit_part part)
     return p->state == ROW_OK && audit_holds(part, p);
 }
 
-/* Counts the residuals of a series in a part by species; how many there are. */
-static int count_species(const struct audit_series *s, struct audit_part part,
-                         unsigned char have[Z_MAX + 1][CHARGES])
+static int count_compared(const struct audit_series *s, struct audit_part part)
 {
     int count = 0;
     for (int i = 0; i < s->count; i++)
-        if (compared(&s->points[i], part)) {
-            have[s->points[i].z][s->points[i].charge - CHARGE_LOW]++;
-            count++;
-        }
+        count += compared(&s->points[i], part);
     return count;
+}
+
+/* Marks the species for which a series has a residual. */
+static void mark_species(const struct audit_series *s, struct audit_part part,
+                         unsigned char have[Z_MAX + 1][CHARGES])
+{
+    for (int i = 0; i < s->count; i++)
+        if (compared(&s->points[i], part))
+            have[s->points[i].z][s->points[i].charge - CHARGE_LOW]++;
 }
 
 static double mean_of_common(const struct audit_series *s,
@@ -276,13 +280,24 @@ struct audit_rank audit_rank(const struct audit *audit,
     struct audit_rank rank = {0};
     unsigned char have[Z_MAX + 1][CHARGES] = {{0}};
     int taking_part[AUDIT_RANK_MAX];
+    int counts[AUDIT_RANK_MAX];
     int models = 0;
+    int most = 0;
     for (int i = 0; i < audit->count && models < AUDIT_RANK_MAX; i++) {
         const struct audit_series *s = &audit->series[i];
-        if (s->quantity == quantity && s->reference == reference &&
-            count_species(s, part, have) > 0)
-            taking_part[models++] = i;
+        if (s->quantity != quantity || s->reference != reference)
+            continue;
+        counts[models] = count_compared(s, part);
+        most = counts[models] > most ? counts[models] : most;
+        taking_part[models++] = i;
     }
+    int kept = 0;
+    for (int m = 0; m < models; m++)
+        if (counts[m] > 0 && 2 * counts[m] >= most)
+            taking_part[kept++] = taking_part[m];
+    models = kept;
+    for (int m = 0; m < models; m++)
+        mark_species(&audit->series[taking_part[m]], part, have);
     for (int m = 0; m < models; m++) {
         double mean = mean_of_common(&audit->series[taking_part[m]], part, have,
                                      models, &rank.species);

@@ -90,9 +90,10 @@ int audit_parts(const struct audit *audit, enum quantity_id quantity,
                 unsigned scopes, struct audit_part parts[AUDIT_PARTS_MAX]);
 
 /* The models against one reference set in order of their mean absolute
- * residual over the species of a part for which all of them have one. Models
- * that have none in the part do not take part. series: indices into
- * audit->series, best first; species: how many were compared. */
+ * residual over the species of a part for which all of them have one. A model
+ * that has less than half as many residuals in the part as the one with the
+ * most does not take part: the others would be judged on a few species. series:
+ * indices into audit->series, best first; species: how many were compared. */
 #define AUDIT_RANK_MAX 24
 struct audit_rank {
     int count;

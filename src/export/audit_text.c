@@ -157,8 +157,9 @@ static bool write_best(FILE *out, const struct audit *audit, unsigned scopes,
         if (is_first(audit, i))
             lines += add_best(&table, audit, scopes, legend, i);
     if (lines > 0)
-        fputs("\nBest by mean absolute residual, over the species that all "
-              "of these models have\n",
+        fputs("\nBest by mean absolute residual over the species that all of "
+              "these models have (a model with\nless than half of the "
+              "residuals does not take part)\n",
               out);
     if (lines > 0)
         return table_write_styled(&table, out, style, st);

@@ -132,7 +132,7 @@ static void draw_heads(const struct ui *ui, struct canvas *canvas,
     const struct audit_series *chosen = audit_chosen(ui);
     for (int i = 0; i < ui->audit.count; i++) {
         const struct audit_series *s = &ui->audit.series[i];
-        int row = l->table.row + (l->cell_columns < 12 ? i % 2 : 0);
+        int row = l->table.row + (l->cell_columns < 13 ? i % 2 : 0);
         int column = l->table.column + LABEL_COLUMNS + i * l->cell_columns;
         canvas_put(canvas, row, column, trend_role(i), trend_mark(i));
         canvas_textf(canvas, row, column + 1, 14,
@@ -177,7 +177,7 @@ static void draw_table(struct ui *ui, struct canvas *canvas,
     struct audit_part parts[AUDIT_PARTS_MAX];
     int count = audit_parts(&ui->audit, ui->choice.quantity, 0, parts);
     int at = part_place(ui, parts, count);
-    int heads = l->cell_columns < 12 ? 2 : 1;
+    int heads = l->cell_columns < 13 ? 2 : 1;
     int room = l->table.rows - heads;
     int first = at >= room ? at - room + 1 : 0;
     draw_heads(ui, canvas, l);

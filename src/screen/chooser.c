@@ -211,6 +211,8 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
     ui->chooser = (struct chooser){.kind = kind};
     ui->message[0] = '\0';
     fill[kind](ui, &ui->chooser);
+    if (kind == CHOOSER_CURVES)
+        ui_report(ui, false, "Enter turns a curve on or off; Esc ends");
     if (ui->chooser.count == 0) {
         ui->chooser.kind = CHOOSER_NONE;
         ui_report(ui, false, "nothing to choose from: no model computes %s",
@@ -366,7 +368,7 @@ void chooser_draw(const struct ui *ui, struct canvas *canvas)
 {
     static const char *const titles[] = {
         [CHOOSER_AGAINST] = "Second reference",
-        [CHOOSER_CURVES] = "Curves: Enter turns one on or off, Esc ends",
+        [CHOOSER_CURVES] = "Curves",
         [CHOOSER_WALK] = "Walk",
         [CHOOSER_NONE] = "",
         [CHOOSER_QUANTITY] = "Quantity",

@@ -11,6 +11,8 @@
 #define TREND_FACTS_ROWS 9 /* what the facts keep above it */
 #define TREND_TABLE_COLUMNS 48
 #define TREND_BESIDE_MIN 110
+#define TREND_BELOW_MIN 40
+#define TREND_TABLE_ROWS 20
 #define TREND_LINES 3
 #define AUDIT_LABEL_COLUMNS 15
 
@@ -65,11 +67,14 @@ static void place_rest(struct map_layout *l, int rows, int columns)
     if (beside >= SIDE_COLUMNS_MIN)
         l->side = (struct area){l->grid.row, l->grid.columns + 1, l->grid.rows,
                                 beside};
-    int trend = l->side.rows - TREND_FACTS_ROWS;
-    if (beside >= TREND_COLUMNS_MIN && trend >= TREND_ROWS_MIN) {
-        l->trend = (struct area){l->side.row + TREND_FACTS_ROWS, l->side.column,
-                                 trend, beside};
+    int below = l->side.row + TREND_FACTS_ROWS;
+    if (beside >= TREND_COLUMNS_MIN &&
+        l->message_row - below >= TREND_ROWS_MIN) {
+        /* Down the whole right side; the pane and the scale stay left. */
+        l->trend = (struct area){below, l->side.column, l->message_row - below,
+                                 beside};
         l->side.rows = TREND_FACTS_ROWS - 1;
+        l->scale.columns = l->pane.columns = l->grid.columns;
     }
 }
 
@@ -171,14 +176,17 @@ struct atom_layout layout_atom(int rows, int columns, int shells)
 
 struct trend_layout layout_trend(struct area area)
 {
-    struct trend_layout l = {.beside = area.columns >= TREND_BESIDE_MIN};
+    bool beside = area.columns >= TREND_BESIDE_MIN;
+    struct trend_layout l = {.full = beside || area.rows >= TREND_BELOW_MIN};
     struct area plots = area;
-    if (l.beside) {
+    if (beside) {
         plots.columns -= TREND_TABLE_COLUMNS + 2;
         l.table = (struct area){area.row, plots.column + plots.columns + 2,
                                 area.rows, TREND_TABLE_COLUMNS};
     } else {
-        int lines = area.rows < 14 ? 1 : TREND_LINES;
+        int lines = l.full           ? TREND_TABLE_ROWS
+                    : area.rows < 14 ? 1
+                                     : TREND_LINES;
         plots.rows -= lines;
         l.table = (struct area){area.row + plots.rows, area.column, lines,
                                 area.columns};
@@ -194,7 +202,7 @@ struct trend_layout layout_trend(struct area area)
 
 struct audit_layout layout_audit(int rows, int columns, int models)
 {
-    struct audit_layout l = {.cell_columns = columns >= 110 ? 12 : 8};
+    struct audit_layout l = {.cell_columns = columns >= 118 ? 13 : 8};
     int words = columns >= 110 ? 3 : 4;
     int height = rows - 3 - words; /* title, message, keys */
     int table = AUDIT_LABEL_COLUMNS + models * l.cell_columns;

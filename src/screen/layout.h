@@ -26,10 +26,11 @@ enum map_form {
  * facts of the element, right of the grid; where it is absent they stand in
  * the gap of the grid above the d block. */
 /* The trend in an area: plots one above the other, the numbers of the selected
- * step beside them, or below in few rows. Without rows a part is absent. */
+ * step as a full table beside or below them, or below in few rows. Without
+ * rows a part is absent. */
 struct trend_layout {
     struct area values, residuals, table;
-    bool beside;
+    bool full;
 };
 
 struct trend_layout layout_trend(struct area area);

@@ -155,7 +155,7 @@ static int label_columns(const struct trend *t)
 }
 
 /* Opens a plot whose steps stand at 0, 1, 2 …, a whole number of columns apart
- * where there are enough, with room for the names behind the last one. */
+ * where that wastes little, with room for the names behind the last one. */
 static bool open_plot(struct plot *plot, const struct ui *ui,
                       struct canvas *canvas, struct area area,
                       struct plot_axis up)
@@ -171,8 +171,9 @@ static bool open_plot(struct plot *plot, const struct ui *ui,
     int inside = plot->inside.columns;
     int room = inside > 2 * labels ? inside - labels : inside;
     int apart = room / n;
-    plot->x.high = apart > 0 ? -0.5 + (double)inside / apart
-                             : -0.5 + (double)n * inside / room;
+    bool even = apart > 0 && 5 * apart * n >= 4 * room;
+    plot->x.high =
+        even ? -0.5 + (double)inside / apart : -0.5 + (double)n * inside / room;
     return true;
 }
 
@@ -198,6 +199,14 @@ static void step_text(const struct trend *t, int step, char *out, size_t size)
         snprintf(out, size, "%s", element_at(s->z)->symbol);
 }
 
+/* What the level axis counts, at its right end where nothing else stands. */
+static const char *step_title(enum walk_kind kind)
+{
+    return kind == WALK_CHARGES         ? "charge"
+           : kind == WALK_ISOELECTRONIC ? "ion"
+                                        : "element";
+}
+
 /* Names of the steps in place of numbers; the selected one always. */
 static void draw_steps(const struct trend *t, const struct plot *plot, int at)
 {
@@ -213,6 +222,8 @@ static void draw_steps(const struct trend *t, const struct plot *plot, int at)
                 RULE_LEVEL);
     canvas_fill(plot->canvas, row, plot->area.column, 1, plot->area.columns,
                 ROLE_TEXT, ' ');
+    canvas_right(plot->canvas, row, plot->area.column, plot->area.columns,
+                 ROLE_HEADING, step_title(t->walk.kind));
     int every = 1;
     while (every < t->walk.count &&
            step_column(plot, every) - step_column(plot, 0) < width + 1)
@@ -290,15 +301,20 @@ static void draw_bars(const struct plot *plot, const struct trend_set *set,
     }
 }
 
+static uint32_t stored_mark(const struct trend_set *set, int step)
+{
+    return set->against                                   ? MARK_SECOND
+           : trend_unmeasured(set->values[step].evidence) ? MARK_UNMEASURED
+                                                          : MARK_STORED;
+}
+
 static void draw_stored(const struct plot *plot, const struct trend_set *set,
                         int count)
 {
     for (int i = 0; i < count; i++) {
         const struct trend_stored *v = &set->values[i];
         struct plot_point point = {i, v->value, v->there};
-        uint32_t mark = set->against                    ? MARK_SECOND
-                        : trend_unmeasured(v->evidence) ? MARK_UNMEASURED
-                                                        : MARK_STORED;
+        uint32_t mark = stored_mark(set, i);
         plot_marks(plot, set->against ? ROLE_HEADING : ROLE_TITLE, mark, &point,
                    1);
     }
@@ -307,8 +323,10 @@ static void draw_stored(const struct plot *plot, const struct trend_set *set,
 static void draw_curve(const struct plot *plot, int curve,
                        const struct plot_point *points, int count)
 {
-    struct plot_line line = {trend_role(curve), (enum plot_pattern)(curve % 3),
-                             '.'};
+    /* The marks are the numbers; what joins them is thin. */
+    struct plot_line line = {
+        trend_role(curve),
+        plot->style == PLOT_BRAILLE ? PLOT_SOLID : PLOT_DOTTED, '.'};
     plot_curve(plot, line, points, count);
 }
 
@@ -359,11 +377,14 @@ static void draw_values(const struct ui *ui, struct canvas *canvas,
         draw_name(&plot, trend_role(s), trend_mark(s), t->series[s].model->id,
                   points[s], n);
     for (int s = 0; s < t->set_count; s++) {
-        bool against = t->sets[s].against;
-        set_points(&t->sets[s], n, stored);
-        draw_name(&plot, against ? ROLE_HEADING : ROLE_TITLE,
-                  against ? MARK_SECOND : MARK_STORED,
-                  against ? "second" : "reference", stored, n);
+        const struct trend_set *set = &t->sets[s];
+        int last = n - 1;
+        while (last > 0 && !set->values[last].there)
+            last--;
+        set_points(set, n, stored);
+        draw_name(&plot, set->against ? ROLE_HEADING : ROLE_TITLE,
+                  stored_mark(set, last), set->against ? "second" : "reference",
+                  stored, n);
     }
     plot_upright(&plot, ROLE_QUIET, at);
 }
@@ -420,7 +441,7 @@ void draw_trend(struct ui *ui, struct canvas *canvas, struct area area)
     draw_values(ui, canvas, l.values, at);
     if (l.residuals.rows > 0)
         draw_residuals(ui, canvas, l.residuals, at);
-    if (l.beside)
+    if (l.full)
         draw_trend_table(ui, canvas, l.table, at);
     else
         draw_trend_lines(ui, canvas, l.table, at);

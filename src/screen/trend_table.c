@@ -132,6 +132,7 @@ static void draw_head(const struct ui *ui, struct canvas *canvas, struct area a,
 {
     char ion[ION_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
+    char configuration[CONFIGURATION_TEXT_MAX];
     char buffer[UI_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     const struct element *e = element_at(ui->choice.z);
@@ -141,7 +142,9 @@ static void draw_head(const struct ui *ui, struct canvas *canvas, struct area a,
         text_addf(&t, ", %s", subshell_print(r->n, r->l, label));
     canvas_text(canvas, a.row, a.column, a.columns, ROLE_TITLE, buffer);
     t = text_over(buffer, sizeof buffer);
-    species_configuration_text(&t, &r->species);
+    text_add(&t, configuration_print(&r->species.configuration, configuration));
+    if (r->species.origin != ORIGIN_STORED)
+        text_addf(&t, " (%s)", configuration_origin_text(r->species.origin));
     canvas_text(canvas, a.row + 1, a.column, a.columns, ROLE_TEXT, buffer);
 }
 
