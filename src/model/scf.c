@@ -117,7 +117,8 @@ struct work {
     struct half atom, ion;
     int count;
     struct atom_orbital orbital[SUBSHELL_MAX];
-    double isodensity; /* bohr */
+    double top[SUBSHELL_MAX]; /* highest level of each, hartree */
+    double isodensity;        /* bohr */
 };
 
 static bool open_work(void *work, struct status *st)
@@ -187,8 +188,16 @@ static void evaluate(struct work *w, const struct species *species,
 static void keep(struct work *w)
 {
     w->count = atom_subshell_count(w->solver);
-    for (int i = 0; i < w->count; i++)
+    for (int i = 0; i < w->count; i++) {
         w->orbital[i] = atom_subshell_at(w->solver, i);
+        w->top[i] = -HUGE_VAL;
+    }
+    for (int k = 0; k < atom_level_count(w->solver); k++) {
+        struct atom_level level = atom_level_at(w->solver, k);
+        for (int i = 0; i < w->count; i++)
+            if (w->orbital[i].n == level.n && w->orbital[i].l == level.l)
+                w->top[i] = fmax(w->top[i], level.energy);
+    }
     w->isodensity = atom_isodensity_radius(w->solver, ISODENSITY);
 }
 
@@ -358,12 +367,12 @@ static bool is_valence(const struct element *element, int last,
 
 /* Configuration energy, the mean energy to remove a valence electron. The
  * orbital energies of a local potential lie too high by about the same amount
- * for all valence electrons; all are shifted so that the highest one is the
- * computed ionization energy. */
+ * for all valence electrons; all are shifted so that the highest level, which
+ * the first electron leaves, is the computed ionization energy. */
 static struct reading read_allen(const struct work *w)
 {
     const struct element *element = element_at(w->question.species.z);
-    double energy, sum = 0.0, electrons = 0.0, highest = -1e9;
+    double energy, sum = 0.0, electrons = 0.0, highest = -HUGE_VAL;
     struct reading none;
     if (w->question.species.charge != 0)
         return gap(OFFER_ALLEN, READING_OUTSIDE,
@@ -380,7 +389,7 @@ static struct reading read_allen(const struct work *w)
             continue;
         electrons += w->orbital[i].occ;
         sum -= w->orbital[i].occ * w->orbital[i].energy;
-        highest = fmax(highest, w->orbital[i].energy);
+        highest = fmax(highest, w->top[i]);
     }
     if (electrons <= 0.0)
         return gap(OFFER_ALLEN, READING_OUTSIDE, "no valence electron");
