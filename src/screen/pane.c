@@ -193,7 +193,7 @@ static void draw_row(struct canvas *canvas, struct area a, int row,
         draw_signed(canvas, row, c->percent, c->percent_width, r->percent.value,
                     1);
     if (!r->like_with_like)
-        canvas_put(canvas, row, c->mark, ROLE_CAUTION, UNEQUAL);
+        canvas_put(canvas, row, c->mark, ROLE_TEXT, UNEQUAL);
     if (r->has_percent && bar_half(a) > 0)
         draw_bar(canvas, row, bar_half(a), r->percent.value, full);
 }
@@ -276,7 +276,7 @@ static int draw_source(const struct ui *ui, struct canvas *canvas,
     canvas_text(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT, buffer);
     if (a.rows < 2 || row.like_with_like || !row.value.provenance)
         return 1;
-    canvas_put(canvas, a.row + 1, NAME, ROLE_CAUTION, UNEQUAL);
+    canvas_put(canvas, a.row + 1, NAME, ROLE_TEXT, UNEQUAL);
     canvas_textf(canvas, a.row + 1, NAME + 2, a.columns - NAME - 2, ROLE_TEXT,
                  "the model gives another thing: %s",
                  row.value.provenance->definition);

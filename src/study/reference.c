@@ -13,25 +13,35 @@
 /* Significant digits of it at least; more where the energy is that sharp. */
 #define ZEFF_DIGITS 7
 
-static const struct citation ionization_citation[] = {
-    {"ionization_zeff", "misc", "common practice, no source",
-     "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)", NULL,
-     0, NULL, NULL, NULL},
-    {"nist_asd", "misc",
-     "A. Kramida and Yu. Ralchenko and J. Reader and NIST ASD Team",
-     "NIST Atomic Spectra Database, version 5.12",
-     "National Institute of Standards and Technology, Gaithersburg, MD", 2024,
-     NULL, NULL, "10.18434/T4W30F"},
-};
+static const struct citation formula = {
+    "ionization_zeff",
+    "misc",
+    "common practice, no source",
+    "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)",
+    NULL,
+    0,
+    NULL,
+    NULL,
+    NULL};
 
-static const struct provenance zeff_provenance = {
-    false,
-    REFERENCE_ZEFF_FROM_IONIZATION,
-    "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
-    "from the energy, n sqrt(E/Ry)",
-    ionization_citation,
-    2,
-};
+/* What the derived quantity cites. */
+static void set_derived(struct reference_list *list,
+                        const struct provenance *energies)
+{
+    int count = 0;
+    list->derived_citations[count++] = formula;
+    for (int i = 0;
+         i < energies->citation_count && count < DERIVED_CITATIONS_MAX; i++)
+        list->derived_citations[count++] = energies->citations[i];
+    list->derived = (struct provenance){
+        false,
+        REFERENCE_ZEFF_FROM_IONIZATION,
+        "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
+        "from the energy, n sqrt(E/Ry)",
+        list->derived_citations,
+        count,
+    };
+}
 
 static void insert(struct reference_list *list, struct reference item)
 {
@@ -77,10 +87,12 @@ void reference_list_fill(struct reference_list *list,
         insert(list,
                (struct reference){&set->provenance, set->quantity, set,
                                   rank_of(set), false, is_outermost_only(set)});
-        if (set->quantity == QUANTITY_IONIZATION &&
-            rank_of(set) == IONIZATION_RANK)
-            insert(list, (struct reference){&zeff_provenance, QUANTITY_ZEFF,
-                                            set, 0, true, true});
+        if (set->quantity != QUANTITY_IONIZATION ||
+            rank_of(set) != IONIZATION_RANK)
+            continue;
+        set_derived(list, &set->provenance);
+        insert(list, (struct reference){&list->derived, QUANTITY_ZEFF, set, 0,
+                                        true, true});
     }
 }
 

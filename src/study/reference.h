@@ -27,9 +27,14 @@ struct reference {
 
 /* All references of a catalogue, sorted by quantity, then rank, then their
  * order there. */
+#define DERIVED_CITATIONS_MAX 4
 struct reference_list {
     int count;
     struct reference items[REFERENCE_MAX];
+    /* Z_eff from the ionization energy: cites its formula, then the set that
+     * it follows from. Items point here, so a list is not copied. */
+    struct provenance derived;
+    struct citation derived_citations[DERIVED_CITATIONS_MAX];
 };
 
 void reference_list_fill(struct reference_list *list,
