@@ -128,7 +128,7 @@ void draw_outliers(const struct ui *ui, struct canvas *canvas, struct area area)
     int at = ui->audit_point < count ? ui->audit_point : count - 1;
     int first = at >= room ? at - room + 1 : 0;
     canvas_textf(canvas, area.row, area.column, area.columns, ROLE_HEADING,
-                 "largest, %s: %s", s->unit->id,
+                 "worst, %s: %s", s->unit->id,
                  ui->audit_points ? "Enter opens" : "Enter");
     for (int i = 0; i < room && first + i < count; i++) {
         bool chosen = ui->audit_points && first + i == at;

@@ -137,8 +137,9 @@ int main(int argc, char **argv)
 {
     if (argc != 2)
         return EXIT_FAILURE;
-    outershell = argv[1];
-    if (!mkdtemp(folder))
+    /* It runs in another folder: the path must not depend on this one. */
+    outershell = realpath(argv[1], NULL);
+    if (!outershell || !mkdtemp(folder))
         return EXIT_FAILURE;
     Suite *suite = suite_create("atom on a terminal");
     TCase *tc = tcase_create("pty");
