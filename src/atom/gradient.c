@@ -163,3 +163,13 @@ void gradient_meta_correlation(struct gradient *gradient, const double *major,
     xc_mgga_exc(&g->functional[META], (size_t)g->points, g->rho, g->grad2,
                 g->laplacian, g->tau, energy);
 }
+
+void gradient_at(struct gradient *gradient, int n, const double *rho,
+                 const double *grad2, const double *tau, double *exchange,
+                 double *correlation)
+{
+    struct gradient *g = gradient;
+    xc_gga_exc(&g->functional[EXCHANGE], (size_t)n, rho, grad2, exchange);
+    xc_mgga_exc(&g->functional[META], (size_t)n, rho, grad2, g->laplacian, tau,
+                correlation);
+}

@@ -40,4 +40,12 @@ void gradient_potential(struct gradient *gradient, bool vwn, double *energy,
 void gradient_meta_correlation(struct gradient *gradient, const double *major,
                                const double *minor, double *energy);
 
+/* PBE exchange and revised TPSS correlation, energies per electron, at points
+ * that are given directly: rho[2n] spin densities, grad2[3n] products of their
+ * gradients (aa, ab, bb), tau[2n] kinetic energy densities; n at most the
+ * points of the mesh. */
+void gradient_at(struct gradient *gradient, int n, const double *rho,
+                 const double *grad2, const double *tau, double *exchange,
+                 double *correlation);
+
 #endif

@@ -6,11 +6,12 @@
 #include <stdlib.h>
 #include <string.h>
 
+#include "atom/shape.h"
 #include "atom/solver.h"
 #include "atom/term.h"
 #include "numeric/repulsion.h"
 
-enum { P = LOBATTO_ORDER, SHELLS = 2 * SUBSHELL_MAX };
+enum { P = LOBATTO_ORDER, SHELLS = 2 * SUBSHELL_MAX, SHAPE_ARRAYS = 20 };
 
 /* Part of exact exchange. */
 static const double QUARTER = 0.25;
@@ -29,7 +30,7 @@ struct hybrid {
     struct shell shell[SHELLS];
     struct repulsion repulsion;
     double *p; /* functions of the shells */
-    double *tau[2], *one, *two, *three;
+    double *tau[2], *one, *two, *three, *shape;
     double *block;
 };
 
@@ -66,7 +67,7 @@ static bool prepare(struct hybrid *h, const struct atom_solver *solver,
     h->capacity = 0;
     if (!repulsion_init(&h->repulsion, mesh, st))
         return false;
-    h->block = calloc(n * (SHELLS + 5), sizeof *h->block);
+    h->block = calloc(n * (SHELLS + 5 + SHAPE_ARRAYS), sizeof *h->block);
     if (!h->block)
         return status_fail(st, STATUS_MEMORY, "hybrid energy on %zu points", n);
     h->capacity = mesh->points;
@@ -78,6 +79,7 @@ static bool prepare(struct hybrid *h, const struct atom_solver *solver,
     h->one = at + 2 * n;
     h->two = at + 3 * n;
     h->three = at + 4 * n;
+    h->shape = at + 5 * n;
     return true;
 }
 
@@ -210,6 +212,12 @@ double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term)
     return term_spin_orbit(open, count, term);
 }
 
+/* Terms belong to whole numbers of electrons. */
+static bool is_whole(double occ)
+{
+    return fabs(occ - (double)lround(occ)) < 1e-6;
+}
+
 /* ΔLS of all open d and f subshells. */
 static double term_shift(struct hybrid *h)
 {
@@ -217,12 +225,56 @@ static double term_shift(struct hybrid *h)
     const struct configuration *c = &h->solver->configuration;
     for (int i = 0; i < c->count; i++) {
         const struct subshell *s = &c->shells[i];
-        if (s->l < 2 || s->occ > 4 * s->l + 1.5)
+        if (s->l < 2 || !is_whole(s->occ))
             continue;
         double f2 = hybrid_slater(h, s->n, s->l, 2);
         double f4 = hybrid_slater(h, s->n, s->l, 4);
         double f6 = s->l > 2 ? hybrid_slater(h, s->n, s->l, 6) : 0.0;
         sum += term_hund_shift(s->l, (int)lround(s->occ), f2, f4, f6);
+    }
+    return sum;
+}
+
+static const double *shell_function(const struct hybrid *h, int n, int l,
+                                    int spin, const double *none)
+{
+    for (int i = 0; i < h->count; i++)
+        if (h->shell[i].n == n && h->shell[i].l == l &&
+            h->shell[i].spin == spin)
+            return h->shell[i].p;
+    return none;
+}
+
+/* ΔP of all open p subshells. p_z against p_x and p_y: the multipole that
+ * repels itself is 2/5 F² wide, ½ (2/5)² F² = 0.08 F². */
+static double shape_shift(struct hybrid *h)
+{
+    const struct atom_solver *s = h->solver;
+    const struct configuration *c = &s->configuration;
+    double sum = 0.0;
+    memset(h->one, 0, (size_t)h->points * sizeof *h->one);
+    for (int i = 0; i < c->count; i++) {
+        const struct subshell *p = &c->shells[i];
+        int electrons = (int)lround(p->occ);
+        if (p->l != 1 || !is_whole(p->occ) || electrons % 3 == 0)
+            continue;
+        struct shape shape = {.mesh = &s->now->mesh,
+                              .Z = s->Z,
+                              .elements = s->elements,
+                              .work = h->shape};
+        for (int spin = 0; spin < 2; spin++) {
+            int held = spin == 0 ? (electrons < 3 ? electrons : 3)
+                                 : (electrons < 3 ? 0 : electrons - 3);
+            shape.rho[spin] = s->now->rho[spin];
+            shape.tau[spin] = h->tau[spin];
+            shape.p[spin] = shell_function(h, p->n, p->l, 1 - 2 * spin, h->one);
+            shape.axial[spin] = held == 1 ? 1 : held == 2 ? -1 : 0;
+        }
+        double exchange, correlation;
+        shape_change(&shape, s->now->gradient, &exchange, &correlation);
+        sum +=
+            (1.0 - QUARTER) * (0.08 * hybrid_slater(h, p->n, 1, 2) + exchange) +
+            correlation;
     }
     return sum;
 }
@@ -259,11 +311,12 @@ bool hybrid_evaluate(struct hybrid *hybrid, struct atom_solver *solver,
     energy->correlation = weigh(h, h->one);
     energy->exchange_exact = exact_exchange(h);
     energy->term = term_shift(h);
+    energy->shape = shape_shift(h);
     double rest = solver->result.total - solver->result.xc;
     energy->lsd = solver->result.total;
     energy->pbe = rest + energy->exchange_pbe + energy->correlation_pbe;
     energy->total = rest + (1.0 - QUARTER) * energy->exchange_pbe +
                     QUARTER * (energy->exchange_exact + energy->term) +
-                    energy->correlation;
+                    energy->correlation + energy->shape;
     return true;
 }

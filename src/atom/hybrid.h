@@ -2,7 +2,12 @@
 /* A better total energy for a self-consistent spin-polarised atom, evaluated
  * once on its density and orbitals, with no constant fitted to atoms:
  *   E = E_kin + E_nuc + E_coul + ¾ E_x[PBE] + ¼ (E_x[exact] + ΔLS)
- *       + E_c[revTPSS].
+ *       + E_c[revTPSS] + ΔP.
+ * ΔP takes an open p subshell for what it is: not round. Hund's determinant in
+ * real p orbitals has one (p1, p4) or is short of one (p2, p5) along an axis;
+ * its repulsion, PBE exchange and revTPSS correlation differ from those of the
+ * average: ΔP = ¾ (ΔE_coul + ΔE_x[PBE]) + ΔE_c[revTPSS]. The remaining quarter
+ * is exact, and there Coulomb and exchange cancel for p.
  * The quarter is that of J. P. Perdew, M. Ernzerhof, K. Burke, J. Chem. Phys.
  * 105, 9982 (1996), doi 10.1063/1.472933. Hartree. */
 #ifndef ATOM_HYBRID_H
@@ -19,6 +24,7 @@ struct hybrid_energy {
     double correlation;     /* E_c[revTPSS] */
     double correlation_pbe; /* E_c[PBE] */
     double term;            /* ΔLS */
+    double shape;           /* ΔP */
 };
 
 /* Work space, made for the first solver it is used with and grown when

@@ -92,7 +92,7 @@ static double uncertainty_ev(const struct species *species)
     case 's':
         return 0.09;
     case 'p':
-        return 0.14;
+        return 0.12;
     case 'd':
         return 0.18;
     default:

@@ -98,7 +98,7 @@ START_TEST(the_claimed_uncertainty_covers_the_deviations)
            "u, %d within 1.645 u\n",
            count, sum / count, once, wide);
     ck_assert_int_eq(count, 103);
-    ck_assert(sum / count <= 0.105);
+    ck_assert(sum / count <= 0.10);
     ck_assert(once >= 0.65 * count && wide >= 0.88 * count);
     csv_free(&csv);
     work_free(work);
