@@ -197,8 +197,8 @@ static void draw_energies(const struct ui *ui, struct canvas *canvas,
     for (int i = 0; i < count && i + 1 < a.rows; i++) {
         canvas_text(canvas, a.row + 1 + i, a.column + 1, width - 1, ROLE_TEXT,
                     parts[i].name);
-        number_fit(energy_in(ui, parts[i].value), unit->decimals + 3,
-                   width - 19, out);
+        number_fit(energy_in(ui, parts[i].value), unit->decimals, width - 19,
+                   out);
         canvas_right(canvas, a.row + 1 + i, a.column, width, ROLE_TEXT, out);
     }
 }

@@ -220,6 +220,16 @@ void terminal_scheme(struct terminal *t, enum scheme scheme)
     t->everything = true;
 }
 
+/* Takes a new size over from the terminal. Curses looks for itself when it is
+ * told of a change, but asks the stage if that is while a frame is drawn. */
+static void check_size(struct terminal *t)
+{
+    struct winsize size;
+    if (ioctl(t->output_fd, TIOCGWINSZ, &size) == 0 && size.ws_row > 0 &&
+        size.ws_col > 0 && is_term_resized(size.ws_row, size.ws_col))
+        t->resized = resizeterm(size.ws_row, size.ws_col) == OK;
+}
+
 struct terminal_news terminal_wait(struct terminal *t, int timeout_ms)
 {
     struct terminal_news news = {.input = false};
@@ -230,6 +240,8 @@ struct terminal_news terminal_wait(struct terminal *t, int timeout_ms)
     if (ready < 0)
         fds[0].revents = 0;
     struct guard_news noted = guard_take();
+    if (ready < 0 || (fds[1].revents & POLLIN) != 0)
+        check_size(t);
     news.interrupt = noted.interrupt;
     news.stop = noted.stop;
     news.resumed = noted.resumed;
@@ -261,11 +273,7 @@ static void enter(struct terminal *t)
     t->cursor = -1;
     t->pasting = false;
     t->sequence = SEQUENCE_NONE;
-    /* a change of size can be missed while stopped */
-    struct winsize size;
-    if (ioctl(t->output_fd, TIOCGWINSZ, &size) == 0 && size.ws_row > 0 &&
-        size.ws_col > 0 && is_term_resized(size.ws_row, size.ws_col))
-        t->resized = resizeterm(size.ws_row, size.ws_col) == OK;
+    check_size(t); /* a change can be missed while stopped */
 }
 
 void terminal_suspend(struct terminal *t)
