@@ -118,7 +118,7 @@ bool cli_compare(struct request *r, struct status *st)
                            "compare: %d atoms chosen; expected 2 to %d",
                            r->atom_count, COMPARISON_MAX);
     for (int a = 0; a < r->atom_count; a++)
-        asks[a] = request_ask(r, a, r->quantities[0], NULL);
+        asks[a] = request_ask(r, a, QUANTITY_ZEFF, NULL); /* by subshell */
     if (!output_check(r, st) ||
         !study_compare(r->study, asks, r->atom_count, must_solve(r), r->units,
                        &comparison, st))

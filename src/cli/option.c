@@ -29,7 +29,7 @@ static const struct option options[OPTION_COUNT] = {
      "-1; a range such as 0..5; all: from the atom to its last electron "
      "(default: 0)"},
     {OPTION_SUBSHELL, "subshell", 's', "NL", OPTION_VALUE, WORDS_SUBSHELL,
-     false, LIST | AUDIT,
+     false, LIST | COMPARE | AUDIT,
      "subshell asked about, such as 3d (default: the outermost)"},
     {OPTION_CONFIGURATION, "configuration", 'C', "TEXT", OPTION_VALUE,
      WORDS_NONE, false, LIST | COMPARE | ATOM,

@@ -132,11 +132,12 @@ static void draw_heads(const struct ui *ui, struct canvas *canvas,
     const struct audit_series *chosen = audit_chosen(ui);
     for (int i = 0; i < ui->audit.count; i++) {
         const struct audit_series *s = &ui->audit.series[i];
+        const struct model *model = model_find(s->value->id);
         int row = l->table.row + (l->cell_columns < 13 ? i % 2 : 0);
         int column = l->table.column + LABEL_COLUMNS + i * l->cell_columns;
-        canvas_put(canvas, row, column, trend_role(i), trend_mark(i));
+        canvas_put(canvas, row, column, trend_role(model), trend_mark(model));
         canvas_textf(canvas, row, column + 1, 14,
-                     s == chosen ? ROLE_TITLE : trend_role(i), "%s%s",
+                     s == chosen ? ROLE_TITLE : trend_role(model), "%s%s",
                      s->value->id,
                      s->like_with_like || !s->reference ? "" : "\xE2\x89\xA0");
     }

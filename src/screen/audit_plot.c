@@ -14,11 +14,6 @@
 #define DIAGONAL_POINTS 48
 #define MARK_CURSOR 0x25CE
 
-static int series_place(const struct ui *ui, const struct audit_series *s)
-{
-    return (int)(s - ui->audit.series);
-}
-
 /* One scale for both axes, so that equal values lie on the diagonal. */
 static struct plot_axis common_axis(const struct audit_point *const *points,
                                     int count)
@@ -77,10 +72,10 @@ void draw_scatter(const struct ui *ui, struct canvas *canvas, struct area area)
     if (!plot_open(&plot, canvas, area, style, axis, up))
         return;
     draw_diagonal(&plot);
-    int curve = series_place(ui, s);
+    const struct model *model = model_find(s->value->id);
     for (int i = count - 1; i >= 0; i--) {
         struct plot_point at = {points[i]->reference, points[i]->value, true};
-        plot_marks(&plot, trend_role(curve), trend_mark(curve), &at, 1);
+        plot_marks(&plot, trend_role(model), trend_mark(model), &at, 1);
     }
     int chosen = ui->audit_point < count ? ui->audit_point : count - 1;
     const struct audit_point *p = points[chosen];

@@ -318,6 +318,12 @@ static void seek(struct chooser *c, uint32_t letter)
     }
 }
 
+static void leave(struct ui *ui)
+{
+    ui->chooser.kind = CHOOSER_NONE;
+    ui->message[0] = '\0';
+}
+
 enum effect chooser_update(struct ui *ui, const struct event *event)
 {
     struct chooser *c = &ui->chooser;
@@ -325,7 +331,7 @@ enum effect chooser_update(struct ui *ui, const struct event *event)
         if (event->character == 'j' || event->character == 'k')
             move(c, event->character == 'j' ? 1 : -1);
         else if (event->character == 'q')
-            c->kind = CHOOSER_NONE;
+            leave(ui);
         else
             seek(c, event->character);
         return EFFECT_REDRAW;
@@ -335,7 +341,7 @@ enum effect chooser_update(struct ui *ui, const struct event *event)
     if (event->key == KEY_CODE_ENTER || event->key == KEY_CODE_RIGHT)
         return take(ui);
     if (event->key == KEY_CODE_ESCAPE || event->key == KEY_CODE_LEFT)
-        c->kind = CHOOSER_NONE;
+        leave(ui);
     else if (event->key == KEY_CODE_UP)
         move(c, -1);
     else if (event->key == KEY_CODE_DOWN)

@@ -26,6 +26,8 @@ static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
         struct ask own;
         if (ui_ask(ui, asks[i].z, asks[i].charge, &own))
             asks[i].configuration = own.configuration;
+        asks[i].n = c->n;
+        asks[i].l = c->l;
     }
     return count;
 }

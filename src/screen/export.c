@@ -252,8 +252,12 @@ void ui_export_command(const struct ui *ui, struct text *t)
         if (ui->scope == SCOPE_SHEET && c->charge)
             text_addf(t, " --charge %d", c->charge);
         add_choices(ui, t);
-    } else if (c->against) {
-        text_addf(t, " --against %s", c->against->provenance->id);
+    } else {
+        char label[SUBSHELL_TEXT_MAX];
+        if (c->n)
+            text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
+        if (c->against)
+            text_addf(t, " --against %s", c->against->provenance->id);
     }
     add_units(ui, t);
     text_add(t, " --format csv");

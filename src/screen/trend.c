@@ -15,15 +15,15 @@
 #define BAR 0x2502
 #define RULE_LEVEL 0x2500
 
-uint32_t trend_mark(int curve)
+uint32_t trend_mark(const struct model *model)
 {
     static const uint32_t marks[] = {0x25A0, 0x25B2, 0x25BC, 0x25C6, 0x25CF};
-    return marks[curve % (int)(sizeof marks / sizeof marks[0])];
+    return marks[model_index(model) % (int)(sizeof marks / sizeof marks[0])];
 }
 
-enum role trend_role(int curve)
+enum role trend_role(const struct model *model)
 {
-    return (enum role)(ROLE_CURVE_1 + curve % 5);
+    return (enum role)(ROLE_CURVE_1 + model_index(model) % 5);
 }
 
 bool trend_unmeasured(enum evidence evidence)
@@ -320,12 +320,12 @@ static void draw_stored(const struct plot *plot, const struct trend_set *set,
     }
 }
 
-static void draw_curve(const struct plot *plot, int curve,
+static void draw_curve(const struct plot *plot, const struct model *model,
                        const struct plot_point *points, int count)
 {
     /* The marks are the numbers; what joins them is thin. */
     struct plot_line line = {
-        trend_role(curve),
+        trend_role(model),
         plot->style == PLOT_BRAILLE ? PLOT_SOLID : PLOT_DOTTED, '.'};
     plot_curve(plot, line, points, count);
 }
@@ -367,14 +367,16 @@ static void draw_values(const struct ui *ui, struct canvas *canvas,
         for (int i = 0; i < n; i++)
             points[s][i] = (struct plot_point){i, t->series[s].values[i].value,
                                                t->series[s].values[i].there};
-        draw_curve(&plot, s, points[s], n);
+        draw_curve(&plot, t->series[s].model, points[s], n);
     }
     for (int s = 0; s < t->series_count; s++)
-        plot_marks(&plot, trend_role(s), trend_mark(s), points[s], n);
+        plot_marks(&plot, trend_role(t->series[s].model),
+                   trend_mark(t->series[s].model), points[s], n);
     for (int s = 0; s < t->set_count; s++)
         draw_stored(&plot, &t->sets[s], n);
     for (int s = 0; s < t->series_count; s++)
-        draw_name(&plot, trend_role(s), trend_mark(s), t->series[s].model->id,
+        draw_name(&plot, trend_role(t->series[s].model),
+                  trend_mark(t->series[s].model), t->series[s].model->id,
                   points[s], n);
     for (int s = 0; s < t->set_count; s++) {
         const struct trend_set *set = &t->sets[s];
@@ -423,10 +425,12 @@ static void draw_residuals(const struct ui *ui, struct canvas *canvas,
                 points[i].there = residual_of(&v[i], percent, &points[i].y);
             }
             if (pass == 0 && !sets)
-                draw_curve(&plot, s, points, n);
+                draw_curve(&plot, t->series[s].model, points, n);
             else if (pass == 1)
-                plot_marks(&plot, sets ? ROLE_HEADING : trend_role(s),
-                           sets ? MARK_SECOND : trend_mark(s), points, n);
+                plot_marks(&plot,
+                           sets ? ROLE_HEADING : trend_role(t->series[s].model),
+                           sets ? MARK_SECOND : trend_mark(t->series[s].model),
+                           points, n);
         }
     plot_level(&plot, ROLE_QUIET, 0.0);
     plot_upright(&plot, ROLE_QUIET, at);

@@ -25,12 +25,13 @@ void draw_trend_table(const struct ui *ui, struct canvas *canvas,
 void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
                       struct area area, int at);
 
-/* Mark and role of the i-th curve, marks of stored values. */
+/* Mark and role of a model, the same on every screen; marks of stored values.
+ */
 #define MARK_STORED 0x25CB     /* circle */
 #define MARK_UNMEASURED 0x25C7 /* diamond: extrapolated, theoretical … */
 #define MARK_SECOND 0x25A1     /* square: the second reference */
-uint32_t trend_mark(int curve);
-enum role trend_role(int curve);
+uint32_t trend_mark(const struct model *model);
+enum role trend_role(const struct model *model);
 
 /* Whether a stored value of this kind was not measured. */
 bool trend_unmeasured(enum evidence evidence);

@@ -47,8 +47,8 @@ static void draw_model(const struct ui *ui, struct canvas *canvas,
     struct row r;
     const struct model *model = ui->trend.series[curve].model;
     int column = a.column + 2 + NAME_COLUMNS;
-    canvas_put(canvas, row, a.column, trend_role(curve), trend_mark(curve));
-    canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1, trend_role(curve),
+    canvas_put(canvas, row, a.column, trend_role(model), trend_mark(model));
+    canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1, trend_role(model),
                 model->id);
     if (!row_at(ui, model, &r))
         return;
@@ -177,9 +177,10 @@ static void draw_along(const struct ui *ui, struct canvas *canvas,
                  "%s: mean size, %s", walk_words(t->walk.kind), t->unit->id);
     for (int s = 0; s < t->series_count && row < bottom; s++, row++) {
         struct summary sum = along(t, s);
-        canvas_put(canvas, row, a.column, trend_role(s), trend_mark(s));
-        canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1, trend_role(s),
-                    t->series[s].model->id);
+        canvas_put(canvas, row, a.column, trend_role(t->series[s].model),
+                   trend_mark(t->series[s].model));
+        canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1,
+                    trend_role(t->series[s].model), t->series[s].model->id);
         if (sum.count == 0) {
             canvas_textf(canvas, row, a.column + 3 + NAME_COLUMNS,
                          a.columns - 3 - NAME_COLUMNS, ROLE_GAP,
@@ -317,6 +318,7 @@ void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
             continue;
         text = text_over(buffer, sizeof buffer);
         entry_text(&r, t->series[s].model->id, &text);
-        put_entry(&l, trend_role(s), trend_mark(s), buffer);
+        put_entry(&l, trend_role(t->series[s].model),
+                  trend_mark(t->series[s].model), buffer);
     }
 }

@@ -192,6 +192,8 @@ static bool add_model(const struct study *study, const struct ask *asks,
             struct ask ask = asks[w];
             ask.model = model;
             ask.quantity = quantity;
+            if (!quantity_at(quantity)->per_subshell)
+                ask.n = ask.l = 0;
             line->readings[w] = reading_in_unit(
                 study_reading(study, &ask, &c->species[w], offer), line->unit);
         }
@@ -200,13 +202,16 @@ static bool add_model(const struct study *study, const struct ask *asks,
 }
 
 static bool add_reference(const struct reference *reference,
+                          const struct ask *asks,
                           const struct unit *const *units, struct comparison *c,
                           int *capacity)
 {
+    bool by_subshell = quantity_at(reference->quantity)->per_subshell;
     struct reading readings[COMPARISON_MAX];
     bool any = false;
     for (int w = 0; w < c->count; w++) {
-        readings[w] = reference_read(reference, &c->species[w], 0, 0);
+        readings[w] = reference_read(reference, &c->species[w],
+                                     by_subshell ? asks[w].n : 0, asks[w].l);
         any = any || readings[w].state == READING_OK;
     }
     if (!any)
@@ -232,7 +237,8 @@ static bool add_lines(struct study *study, const struct ask *asks,
                 return false;
         for (int i = 0; i < references->count; i++)
             if (references->items[i].quantity == (enum quantity_id)q &&
-                !add_reference(&references->items[i], units, c, &capacity))
+                !add_reference(&references->items[i], asks, units, c,
+                               &capacity))
                 return false;
     }
     return true;
@@ -280,7 +286,9 @@ bool study_compare(struct study *study, const struct ask *asks, int count,
     for (int w = 0; w < count; w++) {
         plain[w] = (struct ask){.z = asks[w].z,
                                 .charge = asks[w].charge,
-                                .configuration = asks[w].configuration};
+                                .configuration = asks[w].configuration,
+                                .n = asks[w].n,
+                                .l = asks[w].l};
         if (!study_species(study, &plain[w], &comparison->species[w], st) ||
             (solve && !solve_ask(study, &plain[w], st)))
             return false;

@@ -29,10 +29,10 @@ void study_fact(const struct study *study, const struct species *species,
 /* Everything known of count (1…COMPARISON_MAX) asks side by side: all
  * quantities, each by all models that offer it and all references that hold a
  * value for one of them. Models that iterate are solved here when `solve`,
- * else read as not solved yet. Only z, charge, configuration of the asks
- * count; units[dimension] where set replaces the base unit. The result is
- * released with comparison_clear. Fails with STATUS_MEMORY or as
- * study_species. */
+ * else read as not solved yet. Only z, charge, configuration and
+ * subshell of the asks count; units[dimension] where set replaces the base
+ * unit. The result is released with comparison_clear. Fails with STATUS_MEMORY
+ * or as study_species. */
 MUST_CHECK bool study_compare(struct study *study, const struct ask *asks,
                               int count, bool solve,
                               const struct unit *const *units,

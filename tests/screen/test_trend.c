@@ -220,8 +220,8 @@ START_TEST(a_gap_stays_a_gap_and_a_curve_can_be_turned_off)
     type("t");
     settle();
     ui_draw(&ui, &canvas);
-    ck_assert_int_eq(marks(trend_mark(2), 1, 18), 0);
-    ck_assert_int_gt(marks(trend_mark(1), 1, 18), 10);
+    ck_assert_int_eq(marks(trend_mark(model_find("clementi")), 1, 18), 0);
+    ck_assert_int_gt(marks(trend_mark(model_find("slater")), 1, 18), 10);
     ck_assert(shows("clementi outside-model"));
     choose("b", "[x] slater");
     key(KEY_CODE_ESCAPE);
