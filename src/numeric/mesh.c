@@ -48,8 +48,10 @@ bool mesh_init(struct mesh *mesh, double first, double last, double length,
     memset(mesh, 0, sizeof *mesh);
     lobatto_make(&mesh->rule);
     for (int j = 0; j <= P; j++)
-        for (int i = 0; i <= P; i++)
+        for (int i = 0; i <= P; i++) {
             mesh->running[j][i] = mesh->rule.cumulative[i][j];
+            mesh->rising[j][i] = mesh->rule.derivative[i][j];
+        }
     mesh->first = first;
     mesh->length = length;
     double t0 = mesh_t(first);
@@ -109,25 +111,38 @@ double mesh_value(const struct mesh *mesh, const double *f, double y)
     return sum;
 }
 
-static void apply(const double matrix[LOBATTO_POINTS][LOBATTO_POINTS],
-                  double factor, const double *f, int e, double *out)
+/* Two numbers at a time, anywhere in memory. */
+typedef double pair __attribute__((vector_size(16), aligned(8), may_alias));
+enum { PAIRS = (LOBATTO_POINTS + 1) / 2 };
+
+/* out = Σ_j column j × g[j], with the columns padded. */
+static void apply(const double column[LOBATTO_POINTS][LOBATTO_POINTS + 1],
+                  const double *g, double out[LOBATTO_POINTS + 1])
 {
-    f += e * P;
-    out += e * P;
-    for (int i = 0; i <= P; i++) {
-        double sum = 0.0;
-        for (int j = 0; j <= P; j++)
-            sum += matrix[i][j] * f[j];
-        out[i] = i == 0 && e > 0 ? 0.5 * (out[i] + factor * sum) : factor * sum;
+    pair total[PAIRS] = {{0}};
+    for (int j = 0; j <= P; j++) {
+        const pair *c = (const pair *)(const void *)column[j];
+        _Pragma("GCC unroll 8") for (int i = 0; i < PAIRS; i++)
+        {
+            total[i] += c[i] * g[j];
+        }
     }
+    for (int i = 0; i < PAIRS; i++)
+        ((pair *)(void *)out)[i] = total[i];
 }
 
 void mesh_derivative(const struct mesh *mesh, int elements, const double *f,
                      double *out)
 {
-    double factor = 2.0 / mesh->length;
-    for (int e = 0; e < elements; e++)
-        apply(mesh->rule.derivative, factor, f, e, out);
+    double factor = 2.0 / mesh->length, slope[LOBATTO_POINTS + 1];
+    out[0] = 0.0;
+    for (int e = 0; e < elements; e++) {
+        apply(mesh->rising, f + e * P, slope);
+        double *at = out + e * P;
+        at[0] = e > 0 ? 0.5 * (at[0] + factor * slope[0]) : factor * slope[0];
+        for (int i = 1; i <= P; i++)
+            at[i] = factor * slope[i];
+    }
 }
 
 double mesh_inner(const struct mesh *mesh, double value, double derivative,
@@ -141,9 +156,11 @@ double mesh_inner(const struct mesh *mesh, double value, double derivative,
            ((1.0 - b) / (power + 1.0) + b / (power + 2.0));
 }
 
-/* Two numbers at a time, anywhere in memory. */
-typedef double pair __attribute__((vector_size(16), aligned(8), may_alias));
-enum { PAIRS = (LOBATTO_POINTS + 1) / 2 };
+void mesh_running(const struct mesh *mesh, const double g[LOBATTO_POINTS],
+                  double sum[LOBATTO_POINTS + 1])
+{
+    apply(mesh->running, g, sum);
+}
 
 void mesh_cumulate(const struct mesh *mesh, int elements, const double *f,
                    double inner, double *out)
@@ -151,16 +168,12 @@ void mesh_cumulate(const struct mesh *mesh, int elements, const double *f,
     double total = inner;
     out[0] = inner;
     for (int e = 0; e < elements; e++) {
-        pair sum[PAIRS] = {{0}};
-        for (int j = 0; j <= P; j++) {
-            int at = e * P + j;
-            double g = 0.5 * mesh->length * mesh->slope[at] * f[at];
-            const pair *column = (const pair *)(const void *)mesh->running[j];
-            _Pragma("GCC unroll 8") for (int i = 0; i < PAIRS; i++) sum[i] +=
-                column[i] * g;
-        }
+        double g[LOBATTO_POINTS], sum[LOBATTO_POINTS + 1];
+        for (int j = 0; j <= P; j++)
+            g[j] = 0.5 * mesh->length * mesh->slope[e * P + j] * f[e * P + j];
+        mesh_running(mesh, g, sum);
         for (int i = 1; i <= P; i++)
-            out[e * P + i] = total + sum[i / 2][i % 2];
+            out[e * P + i] = total + sum[i];
         total = out[(e + 1) * P];
     }
 }

@@ -14,8 +14,9 @@
  * the points e*LOBATTO_ORDER … (e+1)*LOBATTO_ORDER. */
 struct mesh {
     struct lobatto rule;
-    double running[LOBATTO_POINTS][LOBATTO_POINTS + 1]; /* cumulative by
-                                                           column */
+    /* cumulative and derivative of the rule, by column and padded */
+    double running[LOBATTO_POINTS][LOBATTO_POINTS + 1];
+    double rising[LOBATTO_POINTS][LOBATTO_POINTS + 1];
     int elements, points;
     double first;  /* y of the first point */
     double length; /* of an element, in t */
@@ -57,5 +58,11 @@ double mesh_inner(const struct mesh *mesh, double value, double derivative,
 /* out[i] = inner + ∫ f dy from the first point to point i. */
 void mesh_cumulate(const struct mesh *mesh, int elements, const double *f,
                    double inner, double *out);
+
+/* The running integral within one element, of values g (integrand × dx) at
+ * its points: sum[i] = integral from its left end to point i. sum has room for
+ * one number more. */
+void mesh_running(const struct mesh *mesh, const double g[LOBATTO_POINTS],
+                  double sum[LOBATTO_POINTS + 1]);
 
 #endif

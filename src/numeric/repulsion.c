@@ -43,23 +43,19 @@ void repulsion_clear(struct repulsion *tables)
 double repulsion_integral(const struct repulsion *tables, int elements,
                           const double *a, const double *b, int k)
 {
-    const struct lobatto *rule = &tables->mesh->rule;
     const double *up = tables->up[k], *down = tables->down[k];
     double total = 0.0, sum = 0.0;
     for (int e = 0; e < elements; e++) {
-        double f[LOBATTO_POINTS], g[LOBATTO_POINTS], part = 0.0;
+        double f[LOBATTO_POINTS], g[LOBATTO_POINTS], part[LOBATTO_POINTS + 1];
         for (int j = 0; j <= P; j++) {
             int at = e * P + j;
             f[j] = a[at] * b[at];
             g[j] = f[j] * up[at];
         }
-        for (int i = 1; i <= P; i++) {
-            part = 0.0;
-            for (int j = 0; j <= P; j++)
-                part += rule->cumulative[i][j] * g[j];
-            sum += f[i] * down[e * P + i] * (total + part);
-        }
-        total += part;
+        mesh_running(tables->mesh, g, part);
+        for (int i = 1; i <= P; i++)
+            sum += f[i] * down[e * P + i] * (total + part[i]);
+        total += part[P];
     }
     return 2.0 * sum;
 }
