@@ -23,22 +23,25 @@ static const struct key_row rows[] = {
      ON_VALUES},
     {ACTION_MODEL, 'b', 0, "b", "model", "choose by which model", true,
      ON_MAP | ON_AUDIT},
-    {ACTION_MODELS, 'b', 0, "b", "curves", "choose which models have a curve",
-     true, ON_TREND},
+    {ACTION_MODELS, 'b', 0, "b", "curves",
+     "Trend: choose which models have a curve", true, ON_TREND},
     {ACTION_REFERENCE, 'r', 0, "r", "reference",
      "choose against which stored set, and which kinds of its values", true,
      ON_VALUES},
     {ACTION_WALK, 'z', 0, "z", "walk",
-     "along period, group, row of the block, charges, isoelectronic series",
+     "Trend: along period, group, row of the block, charges, isoelectronic "
+     "series",
      true, ON_TREND},
     {ACTION_WALK, 'z', 0, "", "", "", false, ON_MAP},
     {ACTION_PERCENT, 'v', 0, "v", "%",
-     "residuals in the unit or in per cent of the reference", true, ON_TREND},
+     "Trend: residuals in the unit or in per cent of the reference", true,
+     ON_TREND},
     {ACTION_TREND_AXIS, 'g', 0, "g", "axis",
-     "linear or logarithmic axis, or as the values ask for", true, ON_TREND},
+     "Trend: linear or logarithmic axis, or as the values ask for", true,
+     ON_TREND},
     {ACTION_STATISTIC, 'v', 0, "v", "figure",
-     "mean size, per cent, mean, root mean square, largest, or counts", true,
-     ON_AUDIT},
+     "Audit: mean size, per cent, mean, root mean square, largest, or counts",
+     true, ON_AUDIT},
     {ACTION_SHOWN, 'v', 0, "v", "show",
      "colour by the model's value, the reference, or the residual", true,
      ON_MAP},
@@ -100,8 +103,8 @@ static const struct key_row rows[] = {
     {ACTION_GROUP3, 'y', 0, "y", "group 3",
      "group 3 as Sc Y Lu Lr or as Sc Y La Ac", false, ON_MAP},
     {ACTION_OPEN, 0, KEY_CODE_ENTER, "Enter", "open",
-     "to the species of the part, then to the selected one on the map", true,
-     ON_AUDIT},
+     "Audit: to the species of the part, then to the selected one on the map",
+     true, ON_AUDIT},
     {ACTION_OPEN, 0, KEY_CODE_ENTER, "Enter", "details",
      "grid or pane, table or plots, where only one fits; goes on solving",
      false, ON_MAP | ON_ATOM},
@@ -198,6 +201,17 @@ static void draw(struct ui *ui, struct canvas *canvas)
         "from low to high; for residuals v - = + ^ from far below the "
         "reference to far above it. A hatched cell has no number, and the "
         "pane says why. A star marks a pin, brackets the selection.");
+    flow_blank(&flow);
+    flow_text(&flow, ROLE_HEADING, 0, "Trend and audit");
+    flow_text(
+        &flow, ROLE_TEXT, 0,
+        "Each model keeps its mark. A circle is a stored value, a diamond "
+        "one that is extrapolated, theoretical or estimated, a square a "
+        "second set; bars are one standard uncertainty. What joins the "
+        "marks is no value, and a gap is not bridged. In the audit a star "
+        "marks the model with the smallest residuals over the species "
+        "that all have; a model with less than half of the residuals "
+        "does not take part.");
     flow_blank(&flow);
     flow_text(&flow, ROLE_HEADING, 0, "The numbers");
     flow_text(&flow, ROLE_TEXT, 0,

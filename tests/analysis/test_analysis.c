@@ -4,6 +4,8 @@
 #include <stdio.h>
 #include <string.h>
 
+#include "analysis/audit.h"
+#include "analysis/order.h"
 #include "analysis/row.h"
 #include "analysis/summary.h"
 #include "support/near.h"
@@ -119,6 +121,108 @@ START_TEST(statistics_count_gaps_and_follow_their_definitions)
 }
 END_TEST
 
+START_TEST(two_sets_disagree_only_on_one_scale)
+{
+    struct row row =
+        row_of(QUANTITY_RADIUS, "angstrom",
+               reading_gap(QUANTITY_RADIUS, READING_MISSING, "none", NULL),
+               stored(QUANTITY_RADIUS, 132, 0, &same));
+    row_disagree(&row, stored(QUANTITY_RADIUS, 116, 0, &other));
+    ck_assert(row.disagrees);
+    near(row.disagreement.value, -0.16, 1e-12, 0, "in the row's unit");
+    near(row.disagreement_percent.value, -100.0 * 16 / 132, 1e-5, 0, "%%");
+    struct row sets = row_of_sets(&row);
+    ck_assert_int_eq(sets.state, ROW_OK);
+    ck_assert(!sets.like_with_like);
+    near(sets.residual.value, -0.16, 1e-12, 0, "as a residual");
+    row = row_of(
+        QUANTITY_ELECTRONEGATIVITY, "1",
+        reading_gap(QUANTITY_ELECTRONEGATIVITY, READING_MISSING, "none", NULL),
+        stored(QUANTITY_ELECTRONEGATIVITY, 1.83, 2, &same));
+    row_disagree(&row, stored(QUANTITY_ELECTRONEGATIVITY, 1.64, 2, &other));
+    ck_assert(!row.disagrees);
+    ck_assert_str_ne(row_of_sets(&row).reason, "");
+    row_disagree(&row, reading_gap(QUANTITY_ELECTRONEGATIVITY, READING_MISSING,
+                                   "why", &same));
+    ck_assert(!row.disagrees);
+    ck_assert_str_eq(row_of_sets(&row).reason, "why");
+}
+END_TEST
+
+START_TEST(rows_are_sorted_by_size_and_gaps_come_last)
+{
+    static const double residuals[] = {0.3, -0.5, 0, 0.5, 0.1};
+    static const int want[] = {2, 4, 1, 5, 3}; /* z; 3 has no residual */
+    struct row rows[5];
+    struct status st = status_ok();
+    for (int i = 0; i < 5; i++) {
+        rows[i] = row_of(
+            QUANTITY_RADIUS, "pm",
+            i == 2 ? reading_gap(QUANTITY_RADIUS, READING_OUTSIDE, "x", &rule)
+                   : reading_computed(QUANTITY_RADIUS, 2 + residuals[i], &rule),
+            stored(QUANTITY_RADIUS, 2, 0, &same));
+        rows[i].species.z = i + 1;
+    }
+    ck_assert(rows_sort(rows, 5, ROW_ORDER_RESIDUAL, &st));
+    for (int i = 0; i < 5; i++)
+        ck_assert_int_eq(rows[i].species.z, want[i]);
+    for (int o = 0; o < ROW_ORDER_COUNT; o++)
+        ck_assert(rows_sort(rows, 5, (enum row_order)o, &st));
+    ck_assert(rows_sort(rows, 0, ROW_ORDER_VALUE, &st));
+}
+END_TEST
+
+/* Adds model + residual against 2 for z = first … last. */
+static void add_run(struct audit *audit, const struct provenance *model,
+                    int first, int last, double residual)
+{
+    struct status st = status_ok();
+    for (int z = first; z <= last; z++) {
+        struct row row =
+            row_of(QUANTITY_RADIUS, "pm",
+                   reading_computed(QUANTITY_RADIUS, 2 + residual, model),
+                   stored(QUANTITY_RADIUS, 2, 0, &same));
+        row.species.z = z;
+        ck_assert(audit_add(audit, &row, &st));
+    }
+}
+
+START_TEST(an_audit_leaves_one_out_and_ranks_on_common_species)
+{
+    static const struct provenance good = {true,      "good", "",
+                                           "scale a", NULL,   0};
+    static const struct provenance few = {true, "few", "", "scale a", NULL, 0};
+    struct audit audit = {0};
+    struct audit_part all = {AUDIT_ALL, 0};
+    struct audit_part d = {AUDIT_BLOCK, 'd'};
+    add_run(&audit, &rule, 21, 30, 0.5);
+    add_run(&audit, &good, 25, 30, -0.25);
+    add_run(&audit, &few, 29, 30, 0.01);
+    ck_assert_int_eq(audit.count, 3);
+    struct summary s = audit_summary(&audit.series[0], d);
+    ck_assert_int_eq(s.count, 10);
+    ck_assert_int_eq(audit_summary_without(&audit.series[0], d, 26).count, 9);
+    ck_assert_int_eq(audit_summary_without(&audit.series[0], d, 40).count, 10);
+    struct audit_rank rank = audit_rank(&audit, QUANTITY_RADIUS, &same, all);
+    ck_assert_int_eq(rank.count, 2); /* two of ten are too few */
+    ck_assert_int_eq(rank.species, 6);
+    ck_assert_ptr_eq(audit.series[rank.series[0]].value, &good);
+    near(rank.mean_absolute[0], 0.25, 1e-12, 0, "best");
+    near(rank.mean_absolute[1], 0.5, 1e-12, 0, "second");
+    struct audit_part p = {AUDIT_GROUP, 12};
+    rank = audit_rank(&audit, QUANTITY_RADIUS, &same, p);
+    ck_assert_int_eq(rank.count, 3); /* in group 12 all have one */
+    ck_assert_ptr_eq(audit.series[rank.series[0]].value, &few);
+    ck_assert_int_eq(audit_rank(&audit, QUANTITY_RADIUS, &other, all).count, 0);
+    struct audit_part parts[AUDIT_PARTS_MAX];
+    ck_assert_int_eq(audit_parts(&audit, QUANTITY_RADIUS, 0, parts),
+                     1 + 1 + 1 + 10); /* all, d, period 4, groups 3 to 12 */
+    ck_assert_int_eq(audit_parts(&audit, QUANTITY_ZEFF, 0, parts), 1);
+    audit_clear(&audit);
+    audit_clear(&audit);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("analysis");
@@ -128,6 +232,9 @@ int main(void)
         rows, unlike_definitions_are_marked_and_unlike_scales_not_subtracted);
     tcase_add_test(rows, every_gap_gives_its_state_and_reason);
     tcase_add_test(rows, statistics_count_gaps_and_follow_their_definitions);
+    tcase_add_test(rows, two_sets_disagree_only_on_one_scale);
+    tcase_add_test(rows, rows_are_sorted_by_size_and_gaps_come_last);
+    tcase_add_test(rows, an_audit_leaves_one_out_and_ranks_on_common_species);
     suite_add_tcase(suite, rows);
     return run_suite(suite);
 }

@@ -5,6 +5,8 @@
 
 #include "element/configuration.h"
 #include "element/element.h"
+#include "element/evidence.h"
+#include "element/walk.h"
 #include "element/quantity.h"
 #include "element/reading.h"
 #include "element/selection.h"
@@ -282,6 +284,71 @@ START_TEST(a_reading_changes_its_unit_and_a_gap_stays_one)
 }
 END_TEST
 
+/* Every walk holds the species it goes through once, and no species twice. */
+START_TEST(walks_hold_their_species_once_in_order)
+{
+    for (int k = 0; k < WALK_COUNT; k++)
+        for (int z = 1; z <= Z_MAX; z++)
+            for (int charge = -1; charge <= (z < 3 ? z : 3); charge++) {
+                struct walk w;
+                walk_fill(&w, (enum walk_kind)k, z, charge);
+                int at = walk_place(&w, z, charge);
+                ck_assert_msg(at >= 0, "walk %d, Z %d, charge %d", k, z,
+                              charge);
+                ck_assert_int_ge(w.count, 1);
+                for (int i = 1; i < w.count; i++)
+                    ck_assert(w.steps[i].z > w.steps[i - 1].z ||
+                              w.steps[i].charge > w.steps[i - 1].charge);
+            }
+    ck_assert_str_eq(walk_id(WALK_GROUP), "group");
+    ck_assert_str_ne(walk_words(WALK_GROUP), "");
+}
+END_TEST
+
+/* The trade's own series (common practice, no source). */
+START_TEST(walks_are_those_of_the_trade)
+{
+    struct walk w;
+    walk_fill(&w, WALK_PERIOD, 26, 0);
+    ck_assert_int_eq(w.count, 18);
+    walk_fill(&w, WALK_GROUP, 30, 0); /* Zn Cd Hg Cn */
+    ck_assert_int_eq(w.count, 4);
+    ck_assert_int_eq(w.steps[3].z, 112);
+    walk_fill(&w, WALK_GROUP, 58, 0); /* Ce Th */
+    ck_assert_int_eq(w.count, 2);
+    ck_assert_int_eq(w.steps[1].z, 90);
+    walk_fill(&w, WALK_BLOCK, 64, 3); /* La3+ … Yb3+ */
+    ck_assert_int_eq(w.count, 14);
+    ck_assert_int_eq(w.steps[0].z, 57);
+    walk_fill(&w, WALK_CHARGES, 92, 0); /* U … U91+ */
+    ck_assert_int_eq(w.count, 92);
+    ck_assert_int_eq(w.steps[91].charge, 91);
+    walk_fill(&w, WALK_ISOELECTRONIC, 11, 1); /* N3- O2- F- Ne Na+ … */
+    ck_assert_int_eq(w.steps[0].z, 7);
+    ck_assert_int_eq(w.steps[0].charge, -3);
+    walk_fill(&w, WALK_ISOELECTRONIC, 1, 1); /* no electron: itself */
+    ck_assert_int_eq(w.count, 1);
+}
+END_TEST
+
+START_TEST(kinds_of_values_have_ids_and_can_be_chosen)
+{
+    for (int e = 0; e < EVIDENCE_COUNT; e++) {
+        enum evidence found;
+        ck_assert(evidence_find(evidence_id((enum evidence)e), &found));
+        ck_assert_int_eq((int)found, e);
+        ck_assert_str_ne(evidence_word(found), "");
+        ck_assert(evidence_chosen(0, found));
+        ck_assert(evidence_chosen(1u << e, found));
+        ck_assert(!evidence_chosen(~(1u << e), found));
+        ck_assert_ptr_nonnull(
+            strstr(evidence_left_out(found), evidence_word(found)));
+    }
+    enum evidence none;
+    ck_assert(!evidence_find("guessed", &none));
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("element");
@@ -301,6 +368,9 @@ int main(void)
     tcase_add_test(nouns, wrong_selections_are_refused_and_name_the_word);
     tcase_add_test(nouns, quantities_and_states_have_distinct_ids);
     tcase_add_test(nouns, a_reading_changes_its_unit_and_a_gap_stays_one);
+    tcase_add_test(nouns, walks_hold_their_species_once_in_order);
+    tcase_add_test(nouns, walks_are_those_of_the_trade);
+    tcase_add_test(nouns, kinds_of_values_have_ids_and_can_be_chosen);
     suite_add_tcase(suite, nouns);
     return run_suite(suite);
 }
