@@ -323,17 +323,15 @@ static void move_part(struct ui *ui, int by)
 
 static void move_model(struct ui *ui, int by)
 {
-    for (int i = 0; i < ui->audit.count; i++) {
-        int to = i + by;
-        if (&ui->audit.series[i] != audit_chosen(ui))
-            continue;
-        if (to < 0 || to >= ui->audit.count)
-            return;
-        ui->choice.model = model_find(ui->audit.series[to].value->id);
-        ui->stale = true;
-        ui->audit_point = 0;
+    const struct audit_series *chosen = audit_chosen(ui);
+    if (!chosen)
         return;
-    }
+    int to = (int)(chosen - ui->audit.series) + by;
+    if (to < 0 || to >= ui->audit.count)
+        return;
+    ui->choice.model = model_find(chosen[by].value->id);
+    ui->stale = true;
+    ui->audit_point = 0;
 }
 
 static void move_point(struct ui *ui, int by)

@@ -44,7 +44,9 @@ static char block_of(int z)
     int last = closed[p] - z;
     if (z - closed[p - 1] <= 2)
         return 's';
-    return last < 6 ? 'p' : last < 16 ? 'd' : 'f';
+    if (last < 6)
+        return 'p';
+    return last < 16 ? 'd' : 'f';
 }
 
 static bool in_scope(const struct csv *list, size_t row, const char *scope,
