@@ -69,7 +69,11 @@ bool ui_step(struct ui *ui, bool *changed)
     bool more = study_step(ui->study);
     struct study_progress after = study_progress(ui->study);
     *changed = after.done != before.done || (before.total > 0 && !more);
-    if (*changed)
-        ui->stale = ui->comparison_stale = true;
+    if (*changed) {
+        /* The map changes with its own model alone. */
+        const struct model *model = ui->choice.model;
+        ui->stale = ui->stale || (model && !model->closed);
+        ui->comparison_stale = ui->trend_stale = ui->audit_stale = true;
+    }
     return more;
 }
