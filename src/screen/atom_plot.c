@@ -176,10 +176,9 @@ static bool draw_shell(const struct ui *ui, struct canvas *canvas,
                        struct area area, const struct atom_report *report,
                        struct plot *plot)
 {
-    static struct samples none;
-    struct samples all = none;
-    struct samples one = none;
-    struct samples over = none;
+    struct samples all;
+    struct samples one;
+    struct samples over;
     char x_title[TITLE_MAX];
     char y_title[TITLE_MAX];
     char label[LEVEL_TEXT_MAX];
@@ -242,8 +241,7 @@ static bool draw_all(const struct ui *ui, struct canvas *canvas,
                      struct area area, const struct atom_report *report,
                      struct plot *plot)
 {
-    static struct samples none;
-    struct samples s = none;
+    struct samples s;
     char x_title[TITLE_MAX];
     char y_title[TITLE_MAX];
     int shell = atom_shell(ui, report);
@@ -273,8 +271,7 @@ static bool draw_charge(const struct ui *ui, struct canvas *canvas,
                         struct area area, const struct atom_report *report,
                         struct plot *plot)
 {
-    static struct samples none;
-    struct samples s = none;
+    struct samples s;
     char x_title[TITLE_MAX];
     char name[ATOM_LABEL_MAX];
     struct plot_axis x = atom_axis(ui, report);
