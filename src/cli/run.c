@@ -46,7 +46,7 @@ static bool check_has_screen(const struct call *call, struct status *st)
         return true;
     return status_fail(
         st, STATUS_USAGE,
-        "no command: expected list, compare, atom or sources; the "
+        "no command: expected list, compare, atom, audit or sources; the "
         "screens need a terminal on standard output");
 }
 
@@ -81,6 +81,10 @@ int cli_run(int argc, char *const *argv)
 {
     struct status st = status_ok();
     hold_standard_streams();
+#ifdef SIGXFSZ
+    /* a limit on the size of files is told like a full disk */
+    signal(SIGXFSZ, SIG_IGN);
+#endif
     struct call *call = malloc(sizeof *call);
     if (!call)
         status_fail(&st, STATUS_MEMORY, "out of memory");

@@ -5,11 +5,28 @@
 #include <sys/mman.h>
 #include <unistd.h>
 
-enum { NAMES_MAX = 8, CHUNK = 16384 };
+/* No cell needs more bytes than both colours, attributes and a move. */
+enum { NAMES_MAX = 8, CHUNK = 16384, CELL_BYTES = 64 };
+
+/* Room for a whole frame ahead of it: curses does not tell when a write fails,
+ * and on full shared memory the screen would stay blank. */
+static bool reserve(struct terminal *t)
+{
+    int rows;
+    int columns;
+    getmaxyx(stdscr, rows, columns);
+    off_t need = (off_t)(rows + 1) * (columns + 1) * CELL_BYTES;
+    if (need > t->stage_room && posix_fallocate(t->stage_fd, 0, need) != 0)
+        return false;
+    if (need > t->stage_room)
+        t->stage_room = need;
+    return true;
+}
 
 void frame_open(struct terminal *t)
 {
     t->stage_fd = -1;
+    t->stage_room = 0;
     for (int i = 0; i < NAMES_MAX && t->stage_fd < 0; i++) {
         char name[64];
         snprintf(name, sizeof name, "/frame-%ld-%d", (long)getpid(), i);
@@ -32,8 +49,7 @@ void frame_begin(struct terminal *t)
      * and size and must find it */
     if (t->stage_fd < 0 || isendwin())
         return;
-    if (ftruncate(t->stage_fd, 0) != 0 ||
-        lseek(t->stage_fd, 0, SEEK_SET) != 0 ||
+    if (!reserve(t) || lseek(t->stage_fd, 0, SEEK_SET) != 0 ||
         dup2(t->stage_fd, fileno(t->stream)) < 0)
         frame_close(t);
 }
@@ -53,6 +69,4 @@ void frame_end(struct terminal *t)
         terminal_send(t, chunk, (size_t)got);
         at += got;
     }
-    if (ftruncate(t->stage_fd, 0) != 0 || lseek(t->stage_fd, 0, SEEK_SET) != 0)
-        frame_close(t);
 }

@@ -6,6 +6,7 @@
 #include <curses.h>
 #include <stdbool.h>
 #include <stdio.h>
+#include <sys/types.h>
 #include <termios.h>
 
 #include "screen/canvas.h"
@@ -29,6 +30,7 @@ struct terminal {
     int input_fd, output_fd;
     FILE *stream;         /* what curses writes to: a duplicate of output */
     int stage_fd;         /* where it writes while a frame is made; -1: none */
+    off_t stage_room;     /* bytes set aside for a frame */
     struct termios modes; /* as found */
     bool has_modes;
     bool ascii;
