@@ -15,18 +15,21 @@ struct session {
     struct terminal *terminal;
     struct ui ui;
     bool changed; /* the picture moved on since it was drawn */
+    char data[UI_COMMAND_MAX];
 };
 
 static void write_export(struct ui *ui)
 {
     struct file_draft draft;
     struct status st = status_ok();
-    char command[UI_TEXT_MAX];
+    char command[UI_COMMAND_MAX];
     struct text t = text_over(command, sizeof command);
     if (!ui->replace && access(ui->path, F_OK) == 0) {
         ui_ask_overwrite(ui);
         return;
     }
+    if (!ui_export_ready(ui))
+        return;
     bool ok = file_draft_open(&draft, ui->path, ui->replace, &st);
     if (ok && ui_export(ui, draft.stream, &st))
         ok = file_draft_commit(&draft, &st);
@@ -35,8 +38,15 @@ static void write_export(struct ui *ui)
         ok = false;
     }
     ui_export_command(ui, &t);
-    if (ok)
+    if (ok && t.cut)
+        ui_report(ui, false, "%s written", ui->path);
+    else if (ok && command[0])
         ui_report(ui, false, "%s written; the same: %s", ui->path, command);
+    else if (ok)
+        ui_report(ui, false,
+                  "%s written; no one command prints the same, for the "
+                  "configuration of your own",
+                  ui->path);
     else
         ui_report(ui, true, "nothing written: %s", st.message);
 }
@@ -110,6 +120,24 @@ static bool run(struct session *s, const struct terminal_options *options,
     return ok;
 }
 
+/* `--data FILE …` as a shell reads it. */
+static void quote_data(const struct call *call, struct text *t)
+{
+    for (int i = 0; i < call->repeat_count; i++) {
+        if (call->repeats[i].id != OPTION_DATA)
+            continue;
+        text_add(t, t->length ? " --data " : "--data ");
+        const char *path = call->repeats[i].value;
+        bool plain =
+            path[strcspn(path, " \t\n\"'`$&|;<>()*?[]#~\\!{}")] == '\0';
+        text_add(t, plain ? "" : "'");
+        for (; *path; path++)
+            text_add_bytes(t, *path == '\'' ? "'\\''" : path,
+                           *path == '\'' ? 4 : 1);
+        text_add(t, plain ? "" : "'");
+    }
+}
+
 bool cli_screens(struct request *request, struct status *st)
 {
     int signal = 0;
@@ -118,6 +146,9 @@ bool cli_screens(struct request *request, struct status *st)
     if (!s)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     ui_init(&s->ui, request->study);
+    struct text data = text_over(s->data, sizeof s->data);
+    quote_data(request->call, &data);
+    s->ui.data_option = data.length ? s->data : NULL;
     view_recall(view);
     ui_load_view(&s->ui, view);
     struct terminal_options options = {

@@ -52,7 +52,7 @@ static bool add_second(struct ui *ui)
     return true;
 }
 
-static bool refresh(struct ui *ui)
+bool compare_refresh(struct ui *ui)
 {
     struct ask asks[COMPARISON_MAX];
     struct status st = status_ok();
@@ -190,7 +190,7 @@ static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
 
 static void draw(struct ui *ui, struct canvas *canvas)
 {
-    if (!refresh(ui))
+    if (!compare_refresh(ui))
         return;
     const struct comparison *c = &ui->comparison;
     int room = canvas->rows - 4;

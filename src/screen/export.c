@@ -145,16 +145,66 @@ static void add_units(const struct ui *ui, struct text *t)
     }
 }
 
+static void add_data(const struct ui *ui, struct text *t)
+{
+    if (ui->data_option)
+        text_addf(t, " %s", ui->data_option);
+    text_add(t, " --format csv");
+}
+
+/* Electrons of the user's own. */
+static void add_own(const struct ui *ui, struct text *t)
+{
+    char text[CONFIGURATION_TEXT_MAX];
+    configuration_print(&ui->choice.configuration, text);
+    text_addf(t, " --configuration '%s'", text);
+}
+
+static bool is_own(const struct choice *c, int z, int charge)
+{
+    return c->configuration.count > 0 && c->configured.z == z &&
+           c->configured.charge == charge;
+}
+
 static void atom_command(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
     text_add(t, "outershell atom");
     add_species(t, c->z, c->charge);
-    text_addf(t, " --functional %s --relativity %s --unit %s,%s --format csv",
+    if (is_own(c, c->z, c->charge))
+        add_own(ui, t);
+    text_addf(t, " --functional %s --relativity %s --unit %s,%s",
               functional_id(c->atom.method.functional),
               relativity_id(c->atom.method.relativity),
               ui_unit(ui, QUANTITY_RADIUS)->id,
               ui_unit(ui, QUANTITY_IONIZATION)->id);
+    add_data(ui, t);
+}
+
+/* How many species the export holds, 0 for many, and whether the configured
+ * one is among them. */
+static int count_species(const struct ui *ui, bool *own)
+{
+    const struct choice *c = &ui->choice;
+    *own = false;
+    if (ui->scope == SCOPE_AUDIT || ui->scope == SCOPE_ATOM)
+        return 0;
+    if (ui->scope == SCOPE_ROW ||
+        (ui->scope == SCOPE_COMPARE && c->pin_count == 0)) {
+        *own = is_own(c, c->z, c->charge);
+        return 1;
+    }
+    if (ui->scope == SCOPE_PINS || ui->scope == SCOPE_COMPARE) {
+        for (int i = 0; i < c->pin_count; i++)
+            *own = *own || is_own(c, c->pins[i].z, c->pins[i].charge);
+        return c->pin_count;
+    }
+    const struct walk *walk = &ui->trend.walk;
+    for (int i = 0; ui->scope == SCOPE_TREND && i < walk->count; i++)
+        *own = *own || is_own(c, walk->steps[i].z, walk->steps[i].charge);
+    if (ui->scope == SCOPE_SHEET)
+        *own = is_own(c, c->configured.z, c->charge);
+    return 0;
 }
 
 /* The choices that list and audit share. */
@@ -210,7 +260,7 @@ static void trend_command(const struct ui *ui, struct text *t)
                   ui->trend.series[s].model->id);
     add_choices(ui, t);
     add_units(ui, t);
-    text_add(t, " --format csv");
+    add_data(ui, t);
 }
 
 static void audit_command(const struct ui *ui, struct text *t)
@@ -221,12 +271,16 @@ static void audit_command(const struct ui *ui, struct text *t)
         text_addf(t, " --charge %d", ui->choice.charge);
     add_choices(ui, t);
     add_units(ui, t);
-    text_add(t, " --format csv");
+    add_data(ui, t);
 }
 
 void ui_export_command(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
+    bool own;
+    int species = count_species(ui, &own);
+    if (own && species != 1)
+        return;
     if (ui->scope == SCOPE_TREND || ui->scope == SCOPE_AUDIT) {
         if (ui->scope == SCOPE_TREND)
             trend_command(ui, t);
@@ -259,6 +313,8 @@ void ui_export_command(const struct ui *ui, struct text *t)
         if (c->against)
             text_addf(t, " --against %s", c->against->provenance->id);
     }
+    if (own)
+        add_own(ui, t);
     add_units(ui, t);
-    text_add(t, " --format csv");
+    add_data(ui, t);
 }

@@ -314,8 +314,13 @@ static void draw(struct ui *ui, struct canvas *canvas)
     if (l.form == FORM_WHOLE) {
         draw_facts(ui, canvas, l.side.rows ? l.side : gap_area(&l));
         draw_pane(ui, canvas, l.pane);
+        /* the cursor stays on the selected cell */
+        int row = canvas->cursor_row;
+        int column = canvas->cursor_column;
         if (l.trend.rows > 0)
             draw_trend(ui, canvas, l.trend);
+        canvas->cursor_row = row;
+        canvas->cursor_column = column;
     }
     bool shared = l.message_row == l.key_row;
     bool busy = ui->prompt.kind != PROMPT_NONE || ui->message[0] != '\0' ||

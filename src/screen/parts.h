@@ -116,6 +116,9 @@ const struct unit *ui_unit(const struct ui *ui, enum quantity_id quantity);
 /* Brings what is derived from the choice up to date. */
 void ui_refresh(struct ui *ui);
 
+/* The same for what Compare shows; false when there is nothing to show. */
+bool compare_refresh(struct ui *ui);
+
 /* Moves the selection; marks what depends on it. */
 void ui_select(struct ui *ui, int z);
 

@@ -431,8 +431,32 @@ static enum effect interrupt(struct ui *ui)
     return EFFECT_QUIT;
 }
 
+/* While an export waits for its atoms: the last tick writes it, a key gives it
+ * up, all else is as ever. */
+static bool await(struct ui *ui, const struct event *event, enum effect *effect)
+{
+    *effect = EFFECT_REDRAW;
+    if (event->kind == EVENT_RESIZE ||
+        (event->kind == EVENT_TICK && ui_has_work(ui)))
+        return false;
+    ui->awaiting = false;
+    if (event->kind == EVENT_TICK) {
+        *effect = EFFECT_WRITE;
+        return true;
+    }
+    if (event->kind == EVENT_INTERRUPT) {
+        study_stop(ui->study);
+        ui->stopped = ui->stale = true;
+    }
+    ui_report(ui, false, "%s: nothing written", ui->path);
+    return true;
+}
+
 static enum effect take_event(struct ui *ui, const struct event *event)
 {
+    enum effect effect;
+    if (ui->awaiting && await(ui, event, &effect))
+        return effect;
     if (event->kind == EVENT_RESIZE) {
         ui->rows = event->row;
         ui->columns = event->column;

@@ -20,6 +20,7 @@
 #include "study/trend.h"
 
 #define UI_TEXT_MAX 256
+#define UI_COMMAND_MAX 1024
 #define PIN_MAX COMPARISON_MAX
 
 /* Which screen is shown; order of screen_list in ui.c. */
@@ -204,7 +205,9 @@ struct ui {
     enum export_scope scope;
     char path[UI_TEXT_MAX];
     bool replace;
-    char message[UI_TEXT_MAX];
+    bool awaiting;           /* an export waits until its atoms are solved */
+    const char *data_option; /* `--data …` of the call, for commands; or NULL */
+    char message[UI_TEXT_MAX + UI_COMMAND_MAX];
     bool caution; /* the message is a failure or a caution */
     int rows, columns;
 
@@ -247,8 +250,14 @@ bool ui_has_work(const struct ui *ui);
  * the same choice prints it. */
 MUST_CHECK bool ui_export(const struct ui *ui, FILE *out, struct status *st);
 
-/* That command, as it would be typed. */
+/* That command, as it would be typed; nothing where no single command prints
+ * the same, since one species of several has electrons of the user's own. */
 void ui_export_command(const struct ui *ui, struct text *t);
+
+/* Makes ready what the export holds. False when atoms are to be solved first:
+ * they are queued, the last tick of the work comes back as EFFECT_WRITE, and
+ * any key gives the export up. */
+bool ui_export_ready(struct ui *ui);
 
 /* Result of an effect: a message for the message line. */
 void ui_report(struct ui *ui, bool caution, const char *format, ...)
