@@ -33,6 +33,10 @@ struct pty {
     size_t length, capacity;
     char term[64];
     char row[ROW_BYTES];
+    /* of a sequence that may be a repeat, and what it would repeat */
+    char held[16];
+    size_t held_length;
+    char last;
 };
 
 struct report {
@@ -267,6 +271,29 @@ void pty_free(struct pty *pty)
 
 /* ---- reading ---- */
 
+/* The emulator misplaces its cursor when a repeated character ends at the
+ * margin (REP, ECMA-48 8.3.103), so that it is given the characters. */
+static void feed(struct pty *pty, char byte)
+{
+    char *held = pty->held;
+    size_t n = pty->held_length;
+    held[n++] = byte;
+    bool digit = byte >= '0' && byte <= '9';
+    pty->held_length = n;
+    if ((n == 1 && byte == '\033') || (n == 2 && byte == '[') ||
+        (n > 2 && n < sizeof pty->held - 1 && digit))
+        return;
+    held[n] = '\0';
+    pty->held_length = 0;
+    if (n > 3 && byte == 'b') {
+        for (long left = strtol(held + 2, NULL, 10); left > 0; left--)
+            vterm_input_write(pty->vterm, &pty->last, 1);
+        return;
+    }
+    pty->last = byte;
+    vterm_input_write(pty->vterm, held, n);
+}
+
 static void keep_output(struct pty *pty, const char *bytes, size_t length)
 {
     while (pty->length + length + 1 > pty->capacity) {
@@ -277,7 +304,8 @@ static void keep_output(struct pty *pty, const char *bytes, size_t length)
     memcpy(pty->output + pty->length, bytes, length);
     pty->length += length;
     pty->output[pty->length] = '\0';
-    vterm_input_write(pty->vterm, bytes, length);
+    for (size_t i = 0; i < length; i++)
+        feed(pty, bytes[i]);
 }
 
 static void take_report(struct pty *pty)
@@ -319,8 +347,10 @@ static bool pump(struct pty *pty, int timeout_ms)
 static void give_up(struct pty *pty, const char *what, const char *detail)
 {
     char *screen = pty_screen(pty);
-    ck_abort_msg("waited in vain for %s '%s'%s; the screen is\n%s", what,
-                 detail, pty->ended ? " (the program has ended)" : "", screen);
+    /* Check's messages are short, a screen is not */
+    fprintf(stderr, "%s", screen);
+    ck_abort_msg("waited in vain for %s '%s'%s", what, detail,
+                 pty->ended ? " (the program has ended)" : "");
 }
 
 static void wait_text(struct pty *pty, const char *text, bool present)
@@ -341,6 +371,24 @@ void pty_expect(struct pty *pty, const char *text)
 void pty_expect_gone(struct pty *pty, const char *text)
 {
     wait_text(pty, text, false);
+}
+
+void pty_expect_cursor(struct pty *pty, int row, int column)
+{
+    long long deadline = now_ms() + DEADLINE_MS;
+    VTermPos place;
+    for (;;) {
+        vterm_state_get_cursorpos(vterm_obtain_state(pty->vterm), &place);
+        if (place.row == row && place.col == column)
+            return;
+        bool any = pump(pty, 50);
+        if ((!any && pty->ended) || now_ms() > deadline) {
+            char wanted[64];
+            snprintf(wanted, sizeof wanted, "row %d, column %d, not %d, %d",
+                     row, column, place.row, place.col);
+            give_up(pty, "the cursor", wanted);
+        }
+    }
 }
 
 void pty_settle(struct pty *pty, int quiet_ms)

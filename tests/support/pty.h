@@ -42,6 +42,9 @@ void pty_key(struct pty *pty, const char *capability);
 void pty_expect(struct pty *pty, const char *text);
 void pty_expect_gone(struct pty *pty, const char *text);
 
+/* Reads what comes until the cursor stands there. */
+void pty_expect_cursor(struct pty *pty, int row, int column);
+
 /* Reads until nothing has come for quiet_ms. */
 void pty_settle(struct pty *pty, int quiet_ms);
 
