@@ -213,6 +213,16 @@ static void draw(struct ui *ui, struct canvas *canvas)
         "that all have; a model with less than half of the residuals "
         "does not take part.");
     flow_blank(&flow);
+    flow_text(&flow, ROLE_HEADING, 0, "The atom");
+    flow_text(
+        &flow, ROLE_TEXT, 0,
+        "D(r) is the radial density, electrons per unit of length. Z_eff(r) is "
+        "Z less all electrons within r. In the table Z_eff follows from the "
+        "energy, n sqrt(-2E/hartree); from the size, hydrogen's mean radius "
+        "over this one's; by Gauss's law at max D, the outermost maximum. The "
+        "area is the subshell, the solid line all electrons, the broken line "
+        "what is laid over.");
+    flow_blank(&flow);
     flow_text(&flow, ROLE_HEADING, 0, "The numbers");
     flow_text(&flow, ROLE_TEXT, 0,
               "Residual = model - reference, in the unit shown and in per cent "
