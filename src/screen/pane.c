@@ -208,7 +208,7 @@ static int pane_rows(const struct ui *ui, enum quantity_id quantity,
         return 0;
     if (quantity != ask.quantity) {
         ask.quantity = quantity;
-        ask.reference = NULL;
+        ask.reference = ask.against = NULL;
         ask.n = quantity_at(quantity)->per_subshell ? ask.n : 0;
         ask.unit = ui_unit(ui, quantity);
     }

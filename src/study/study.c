@@ -308,6 +308,7 @@ struct row study_row(const struct study *study, const struct ask *ask)
         definition = reference->provenance->definition;
     row.unit = unit_of(ask, definition);
     row_compare(&row, value, chosen_kind(ask, stored));
+    assert(!ask->against || ask->against->quantity == ask->quantity);
     if (ask->against)
         row_disagree(&row,
                      chosen_kind(ask, reference_read(ask->against, &row.species,

@@ -20,7 +20,7 @@ struct ask {
     enum quantity_id quantity;
     const struct model *model;
     const struct reference *reference;
-    const struct reference *against; /* a second reference, or NULL */
+    const struct reference *against; /* a second one of the quantity, or NULL */
     unsigned evidence;               /* kinds of reference values; 0: all */
     int n, l;
     const struct unit *unit;
