@@ -20,12 +20,8 @@ static const char *const statistic_names[STATISTIC_KINDS] = {
     [STATISTIC_COUNTS] = "residuals/gaps",
 };
 
-void audit_refresh(struct ui *ui)
+bool audit_fill(const struct ui *ui, struct audit *audit, struct status *st)
 {
-    struct status st = status_ok();
-    if (!ui->audit_stale)
-        return;
-    audit_clear(&ui->audit);
     for (int m = 0; m < model_count(); m++) {
         if (model_offer_for(model_at(m), ui->choice.quantity, NULL) < 0)
             continue;
@@ -36,13 +32,23 @@ void audit_refresh(struct ui *ui)
             ask.model = model_at(m);
             ask.configuration = NULL; /* ground states alone are judged */
             struct row row = study_row(ui->study, &ask);
-            if (!audit_add(&ui->audit, &row, &st)) {
-                ui_report(ui, true, "%s", st.message);
-                return;
-            }
+            if (!audit_add(audit, &row, st))
+                return false;
         }
     }
-    ui->audit_stale = false;
+    return true;
+}
+
+void audit_refresh(struct ui *ui)
+{
+    struct status st = status_ok();
+    if (!ui->audit_stale)
+        return;
+    audit_clear(&ui->audit);
+    if (audit_fill(ui, &ui->audit, &st))
+        ui->audit_stale = false;
+    else
+        ui_report(ui, true, "%s", st.message);
 }
 
 const struct audit_series *audit_chosen(const struct ui *ui)

@@ -6,6 +6,11 @@
 
 #include "screen/parts.h"
 
+/* Adds all models over all elements at the chosen charge to an audit that is
+ * empty. Fails with STATUS_MEMORY. */
+MUST_CHECK bool audit_fill(const struct ui *ui, struct audit *audit,
+                           struct status *st);
+
 /* Brings ui->audit up to date with the choice. */
 void audit_refresh(struct ui *ui);
 

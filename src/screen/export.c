@@ -10,6 +10,7 @@
 #include "export/compare.h"
 #include "export/rows.h"
 #include "screen/atom.h"
+#include "screen/audit.h"
 #include "screen/parts.h"
 #include "study/facts.h"
 
@@ -111,11 +112,19 @@ static bool export_atom(const struct ui *ui, FILE *out, struct status *st)
     return true;
 }
 
+static bool export_audit(const struct ui *ui, FILE *out, struct status *st)
+{
+    struct audit audit = {0};
+    bool ok = audit_fill(ui, &audit, st) &&
+              audit_write(out, EXPORT_CSV, &audit, 0, st);
+    audit_clear(&audit);
+    return ok;
+}
+
 bool ui_export(const struct ui *ui, FILE *out, struct status *st)
 {
-    /* Up to date for the same reason. */
     if (ui->scope == SCOPE_AUDIT)
-        return audit_write(out, EXPORT_CSV, &ui->audit, 0, st);
+        return export_audit(ui, out, st);
     if (ui->scope == SCOPE_ATOM)
         return export_atom(ui, out, st);
     struct rows rows = {0};
