@@ -29,7 +29,7 @@ static const struct command commands[COMMAND_COUNT] = {
      "list Ti-Zn --quantity radius --model slater", cli_list},
     {COMMAND_COMPARE, "compare", "SELECTION...", 1, -1,
      "print elements or ions side by side",
-     "Prints two to twelve elements or ions side by side: all quantities, "
+     "Prints up to twelve elements or ions side by side: all quantities, "
      "each from every model and data set that has a value, with differences "
      "from the first. " SELECTION_ABOUT,
      "compare Fe3+ Al3+ Cr3+ --quantity radius", cli_compare},

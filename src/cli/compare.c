@@ -109,13 +109,9 @@ bool cli_compare(struct request *r, struct status *st)
 {
     struct ask asks[COMPARISON_MAX];
     struct comparison comparison;
-    if (r->atom_count < 2)
-        return status_fail(st, STATUS_USAGE,
-                           "compare: only one atom chosen; expected 2 to %d",
-                           COMPARISON_MAX);
     if (r->atom_count > COMPARISON_MAX)
         return status_fail(st, STATUS_USAGE,
-                           "compare: %d atoms chosen; expected 2 to %d",
+                           "compare: %d atoms chosen; expected 1 to %d",
                            r->atom_count, COMPARISON_MAX);
     for (int a = 0; a < r->atom_count; a++)
         asks[a] = request_ask(r, a, QUANTITY_ZEFF, NULL); /* by subshell */

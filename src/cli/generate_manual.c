@@ -122,7 +122,7 @@ static void put_models(FILE *out)
         const struct model *model = model_at(m);
         fprintf(out, ".It Cm %s\n", model->id);
         put_text(out, model->title);
-        fputs("Domain:\n", out);
+        fputs(".br\nDomain:\n", out);
         put_text(out, model->domain);
     }
 }
@@ -144,8 +144,11 @@ static void put_keys(FILE *out)
         const struct key_row *r = key_row_at(i);
         if (r->name[0] == '\0' || r->help[0] == '\0')
             continue;
+        char line[UI_TEXT_MAX];
+        struct text t = text_over(line, sizeof line);
+        key_explain(r, &t);
         put_key(out, r->name);
-        put_text(out, r->help);
+        put_text(out, line);
     }
 }
 

@@ -32,6 +32,7 @@ enum key {
     KEY_CODE_BACKTAB,
     KEY_CODE_ERASE, /* backspace, either code */
     KEY_CODE_DELETE,
+    KEY_CODE_CLEAR,  /* control-U */
     KEY_CODE_REPAINT /* control-L */
 };
 

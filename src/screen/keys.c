@@ -115,6 +115,8 @@ static const struct key_row rows[] = {
      ON_ALL},
     {ACTION_FORGET, 'f', 0, "f", "forget",
      "forget the remembered view and keep none from now on", false, ON_ALL},
+    {ACTION_NONE, 0, KEY_CODE_CLEAR, "Ctrl-U", "clear",
+     "empty the line that is being typed", false, ON_ALL},
     {ACTION_REPAINT, 0, KEY_CODE_REPAINT, "Ctrl-L", "repaint",
      "paint the screen anew", false, ON_ALL},
     {ACTION_UP, 0, KEY_CODE_UP, "arrows", "move",
@@ -160,6 +162,27 @@ enum action key_action(const struct event *event, enum screen_id screen)
     return ACTION_NONE;
 }
 
+/* Whether the same name stands for something else on another screen. */
+static bool has_namesake(const struct key_row *row)
+{
+    for (int i = 0; i < key_row_count(); i++)
+        if (&rows[i] != row && strcmp(rows[i].name, row->name) == 0)
+            return true;
+    return false;
+}
+
+void key_explain(const struct key_row *row, struct text *t)
+{
+    bool begun = false;
+    for (int s = 0; s <= SCREEN_KEYS && has_namesake(row); s++)
+        if (row->screens >> s & 1u) {
+            text_addf(t, "%s%s", begun ? ", " : "",
+                      ui_screen_name((enum screen_id)s));
+            begun = true;
+        }
+    text_addf(t, "%s%s", begun ? ": " : "", row->help);
+}
+
 void draw_keys(const struct ui *ui, struct canvas *canvas, int row)
 {
     int column = 0;
@@ -183,7 +206,6 @@ static void draw(struct ui *ui, struct canvas *canvas)
 {
     struct area area = {1, 1, canvas->rows - 3, canvas->columns - 2};
     struct flow flow = {canvas, area, ui->scroll[SCREEN_KEYS], 0};
-    flow_text(&flow, ROLE_HEADING, 0, "Keys");
     for (int i = 0; i < key_row_count(); i++) {
         const struct key_row *r = &rows[i];
         int row = area.row + flow.used - flow.skip;
@@ -191,7 +213,10 @@ static void draw(struct ui *ui, struct canvas *canvas)
             continue;
         if (row >= area.row && row < area.row + area.rows)
             canvas_text(canvas, row, area.column, 10, ROLE_KEY, r->name);
-        flow_text(&flow, ROLE_TEXT, 11, r->help);
+        char line[UI_TEXT_MAX];
+        struct text t = text_over(line, sizeof line);
+        key_explain(r, &t);
+        flow_text(&flow, ROLE_TEXT, 11, line);
     }
     flow_blank(&flow);
     flow_text(&flow, ROLE_HEADING, 0, "The map");

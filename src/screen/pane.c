@@ -268,9 +268,11 @@ static int draw_source(const struct ui *ui, struct canvas *canvas,
     const struct provenance *p = row.reference.provenance;
     if (!p)
         return 0;
-    text_addf(&t, "reference %s: %s", p->id, p->definition);
+    /* The coordination and spin come first: the rest may be cut off. */
+    text_addf(&t, "reference %s: ", p->id);
     if (row.reference.remark[0] != '\0')
-        text_addf(&t, "; %s", row.reference.remark);
+        text_addf(&t, "%s; ", row.reference.remark);
+    text_add(&t, p->definition);
     if (row.value.state == READING_OK && row.value.remark[0] != '\0')
         text_addf(&t, "; model: %s", row.value.remark);
     canvas_text(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT, buffer);

@@ -78,6 +78,9 @@ struct key_row {
 int key_row_count(void);
 const struct key_row *key_row_at(int i);
 
+/* What a key does; the screens in front where another does something else. */
+void key_explain(const struct key_row *row, struct text *t);
+
 /* Action of an event on a screen; ACTION_NONE when the key means nothing. */
 enum action key_action(const struct event *event, enum screen_id screen);
 

@@ -139,11 +139,30 @@ static void follow(struct ui *ui)
         ui_select(ui, e ? e->z : ui->prompt.from);
 }
 
+/* Behind a whole symbol or number a letter with which no element goes on is a
+ * key again: "Ni" and "p" pins nickel. Behind part of a name it is a slip. */
+static bool ends_jump(const struct prompt *p, const struct event *event)
+{
+    struct prompt longer = *p;
+    if (p->kind != PROMPT_JUMP || event->kind != EVENT_CHARACTER ||
+        event->character == ' ')
+        return false;
+    bool whole = element_by_symbol(p->text) ||
+                 (p->length > 0 && p->text[0] >= '1' && p->text[0] <= '9' &&
+                  element_find(p->text));
+    type(&longer, event->character);
+    return whole && !element_jump(longer.text);
+}
+
 enum effect prompt_update(struct ui *ui, const struct event *event)
 {
     struct prompt *p = &ui->prompt;
     if (p->kind == PROMPT_OVERWRITE)
         return answer_overwrite(ui, event);
+    if (ends_jump(p, event)) {
+        close_prompt(ui);
+        return ui_update(ui, event);
+    }
     if (event->kind == EVENT_CHARACTER || event->kind == EVENT_PASTE) {
         type(p, event->character);
         follow(ui);
@@ -153,6 +172,10 @@ enum effect prompt_update(struct ui *ui, const struct event *event)
         return EFFECT_NONE;
     if (event->key == KEY_CODE_ERASE || event->key == KEY_CODE_DELETE) {
         erase(p);
+        follow(ui);
+    } else if (event->key == KEY_CODE_CLEAR) {
+        p->length = 0;
+        p->text[0] = '\0';
         follow(ui);
     } else if (event->key == KEY_CODE_ESCAPE) {
         ui_select(ui, p->from);
@@ -179,7 +202,7 @@ void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
     int width = canvas->columns;
     if (ui->prompt.kind == PROMPT_OVERWRITE) {
         canvas_textf(canvas, row, 0, width, ROLE_CAUTION,
-                     "%s exists; overwrite it? y/n", ui->path);
+                     "overwrite? y/n  %s exists", ui->path);
         return;
     }
     int column =
@@ -198,6 +221,9 @@ void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
     if (ui->prompt.kind == PROMPT_JUMP && e)
         canvas_textf(canvas, row, column + 2, width - column - 2, ROLE_QUIET,
                      "%s %d %s", e->symbol, e->z, e->name);
+    else if (ui->prompt.kind == PROMPT_JUMP && ui->prompt.length > 0)
+        canvas_text(canvas, row, column + 2, width - column - 2, ROLE_CAUTION,
+                    "no such element");
 }
 
 void export_prompt(struct ui *ui, enum export_scope scope)

@@ -134,6 +134,8 @@ static struct event from_control(wint_t c)
         return key_event(KEY_CODE_TAB);
     if (c == 0x08 || c == 0x7F || (erase > 0 && c == (wint_t)erase))
         return key_event(KEY_CODE_ERASE);
+    if (c == 0x15)
+        return key_event(KEY_CODE_CLEAR);
     if (c == 0x0C)
         return key_event(KEY_CODE_REPAINT);
     return (struct event){.kind = EVENT_NONE};

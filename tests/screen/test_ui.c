@@ -329,7 +329,7 @@ START_TEST(an_existing_file_is_asked_about)
 {
     snprintf(ui.path, sizeof ui.path, "there.csv");
     ui_ask_overwrite(&ui);
-    ck_assert(shows("there.csv exists; overwrite it? y/n"));
+    ck_assert(shows("overwrite? y/n  "));
     ck_assert_int_eq(type("n"), EFFECT_REDRAW);
     ck_assert(shows("left as it was"));
     ui_ask_overwrite(&ui);
@@ -349,6 +349,67 @@ START_TEST(the_command_of_an_export_names_every_choice)
     ui_export_command(&ui, &t);
     ck_assert_str_eq(buffer, "outershell list --quantity zeff --model slater "
                              "--charge 2 --subshell 3d --format csv");
+}
+END_TEST
+
+START_TEST(a_key_behind_a_whole_symbol_ends_the_jump)
+{
+    type("Nip");
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
+    ck_assert_int_eq(ui.choice.z, 28);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    type("Cop"); /* copper */
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
+    ck_assert_int_eq(ui.choice.z, 29);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    key(KEY_CODE_ENTER);
+    type("Sodiux"); /* a slip does not drop the pins */
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    ck_assert(shows("no such element"));
+}
+END_TEST
+
+/* A long file name leaves neither the command nor the question cut off. */
+START_TEST(long_messages_are_read_whole)
+{
+    char path[181];
+    memset(path, 'd', sizeof path - 1);
+    path[sizeof path - 1] = '\0';
+    ui_report(&ui, false, "%s written; the same: outershell END", path);
+    ck_assert(shows("outershell END"));
+    ck_assert(shows("? keys"));
+    snprintf(ui.path, sizeof ui.path, "%s", path);
+    ui_ask_overwrite(&ui);
+    ck_assert(shows("overwrite? y/n"));
+}
+END_TEST
+
+/* The second set belongs to the chosen quantity: below it, where others are
+ * listed, it has no place, least of all in their units. */
+START_TEST(a_second_set_stays_with_its_quantity)
+{
+    ui.choice.quantity = QUANTITY_ELECTRONEGATIVITY;
+    ui.choice.against = reference_find(study_references(ui.study),
+                                       "electronegativity_allen_2000");
+    ck_assert_ptr_nonnull(ui.choice.against);
+    ui.choice.units[DIMENSION_ENERGY] = unit_find("cm-1");
+    resize(60, 200);
+    settle();
+    ck_assert(shows("I, cm-1"));
+}
+END_TEST
+
+START_TEST(a_coordination_is_never_cut_to_another)
+{
+    type("Co");
+    key(KEY_CODE_ENTER);
+    type("++");
+    ui.choice.quantity = QUANTITY_RADIUS;
+    ui.choice.reference = reference_find(study_references(ui.study),
+                                         "ionic_effective_shannon_1976");
+    settle();
+    ck_assert(shows("coordination VI; high spin"));
 }
 END_TEST
 
@@ -462,6 +523,10 @@ int main(void)
     tcase_add_test(use, exports_ask_for_a_file_and_hold_what_is_shown);
     tcase_add_test(use, an_existing_file_is_asked_about);
     tcase_add_test(use, the_command_of_an_export_names_every_choice);
+    tcase_add_test(use, a_key_behind_a_whole_symbol_ends_the_jump);
+    tcase_add_test(use, long_messages_are_read_whole);
+    tcase_add_test(use, a_second_set_stays_with_its_quantity);
+    tcase_add_test(use, a_coordination_is_never_cut_to_another);
     tcase_add_test(use, a_view_comes_back_as_it_was_left);
     tcase_add_test(use, a_broken_view_is_passed_over);
     tcase_add_test(use, twelve_pins_and_no_more);
