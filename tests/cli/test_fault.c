@@ -49,6 +49,11 @@ static const char *const calls[] = {
     "list Fe --model slater --ascii --output new",
     "compare Fe Cr --model slater --output new",
     "compare Fe Cr --model slater --format csv --output new",
+    "audit Li-Ne --model shells,slater --scope all,block --output new",
+    "audit Li-Ne --model slater --format json --output new",
+    "audit C N --against covalent_cordero_2008 --format csv --output new",
+    "list C N --against covalent_cordero_2008 --sort disagreement --output new",
+    "compare C N --model slater --against covalent_cordero_2008 --output new",
     "sources --output new",
 };
 
