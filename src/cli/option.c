@@ -36,7 +36,7 @@ static const struct option options[OPTION_COUNT] = {
      "electron configuration in place of the ground state, such as "
      "'[Ar] 3d6 4s2'"},
     {OPTION_TERM, "term", 't', "TERM", OPTION_VALUE, WORDS_TERM, false,
-     LIST | COMPARE | ATOM,
+     LIST | COMPARE,
      "for single-zeta: hund, the term of highest S, then highest L, or "
      "average, "
      "the average of the configuration (default: hund)"},
