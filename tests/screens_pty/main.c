@@ -1,4 +1,9 @@
 /* SPDX-License-Identifier: MIT */
+/* For realpath. */
+#ifndef _XOPEN_SOURCE
+#define _XOPEN_SOURCE 700
+#endif
+
 /* The finished program on a pseudo-terminal: screens OUTERSHELL. */
 #include <stdio.h>
 #include <stdlib.h>
@@ -12,7 +17,12 @@ int main(int argc, char **argv)
         fprintf(stderr, "usage: test_screens OUTERSHELL\n");
         return EXIT_FAILURE;
     }
-    outershell = argv[1];
+    static char path[4096]; /* the tests run in folders of their own */
+    if (!realpath(argv[1], path)) {
+        fprintf(stderr, "test_screens: %s: not there\n", argv[1]);
+        return EXIT_FAILURE;
+    }
+    outershell = path;
     /* the wide descriptions are in a package of their own */
     if (!pty_has_term("xterm-direct") || !pty_has_term("tmux-256color"))
         return 77;
