@@ -3,6 +3,7 @@
 
 #include <assert.h>
 #include <math.h>
+#include <stddef.h>
 #include <stdlib.h>
 #include <string.h>
 
@@ -379,12 +380,12 @@ static void new_potential(struct atom_solver *s, int channel)
     struct atom_space *space = s->now;
     const double *y = space->mesh.y, *v = space->v[channel];
     int points = s->elements * P + 1;
-    double Z = s->Z, *out = space->out + channel * points;
+    double Z = s->Z, *out = space->out + (ptrdiff_t)channel * points;
     for (int i = 0; i < points; i++)
         out[i] = -1.0 + space->field[i] / Z + y[i] * v[i] / (Z * Z);
     if (s->a2 <= 0.0)
         return;
-    out += s->channels * points;
+    out += (ptrdiff_t)s->channels * points;
     mesh_derivative(&space->mesh, s->elements, v, space->scratch);
     for (int i = 0; i < points; i++)
         out[i] =
@@ -398,9 +399,10 @@ static int cycle(struct atom_solver *s)
     struct atom_space *space = s->now;
     int points = s->elements * P + 1;
     for (int k = 0; k < s->channels; k++)
-        radial_potential(space->radial, k, space->q + k * points,
-                         s->a2 > 0.0 ? space->q + (s->channels + k) * points
-                                     : NULL);
+        radial_potential(space->radial, k, space->q + (ptrdiff_t)k * points,
+                         s->a2 > 0.0
+                             ? space->q + (ptrdiff_t)(s->channels + k) * points
+                             : NULL);
     int missing =
         s->found ? radial_update(space->radial) : radial_find(space->radial);
     s->found = true;
@@ -429,7 +431,7 @@ static enum atom_state judge(struct atom_solver *s)
         double most = 0.0;
         for (int k = 0; k <= s->elements * P; k++)
             most = d[k] > most ? d[k] : most;
-        bool far = d[(s->elements - 1) * P] > CHOICE.tail * most;
+        bool far = d[(ptrdiff_t)(s->elements - 1) * P] > CHOICE.tail * most;
         if (!far && energy < 0.0)
             continue;
         if (s->elements < space->mesh.elements)

@@ -2,6 +2,7 @@
 #include "atom/gradient.h"
 
 #include <math.h>
+#include <stddef.h>
 #include <stdlib.h>
 #include <string.h>
 #include <xc.h>
@@ -87,12 +88,12 @@ void gradient_density(struct gradient *gradient, double Z, int elements,
     g->points = elements * P + 1;
     for (int c = 0; c < 2; c++) {
         mesh_derivative(g->mesh, elements, rho[c], g->slope[c]);
-        for (int i = 0; i < g->points; i++) {
+        for (ptrdiff_t i = 0; i < g->points; i++) {
             g->slope[c][i] *= Z / g->mesh->slope[i];
             g->rho[2 * i + c] = rho[c][i] > 0.0 ? rho[c][i] : 0.0;
         }
     }
-    for (int i = 0; i < g->points; i++) {
+    for (ptrdiff_t i = 0; i < g->points; i++) {
         double a = g->slope[0][i], b = g->slope[1][i];
         g->grad2[3 * i] = a * a;
         g->grad2[3 * i + 1] = a * b;
@@ -119,12 +120,12 @@ static void channel_potential(struct gradient *g, int c, double *v)
     const double *by_rho = g->total[0], *by_grad2 = g->total[1];
     const double *y = g->mesh->y;
     double *flux = g->total[2];
-    for (int i = 0; i < g->points; i++)
+    for (ptrdiff_t i = 0; i < g->points; i++)
         flux[i] = y[i] * y[i] *
-                  (2.0 * by_grad2[3 * i + 2 * c] * g->slope[c][i] +
+                  (2.0 * by_grad2[3 * i + (ptrdiff_t)2 * c] * g->slope[c][i] +
                    by_grad2[3 * i + 1] * g->slope[1 - c][i]);
     mesh_derivative(g->mesh, g->elements, flux, v);
-    for (int i = 0; i < g->points; i++)
+    for (ptrdiff_t i = 0; i < g->points; i++)
         v[i] =
             by_rho[2 * i + c] - v[i] * g->Z / (g->mesh->slope[i] * y[i] * y[i]);
 }
@@ -156,7 +157,7 @@ void gradient_meta_correlation(struct gradient *gradient, const double *major,
                                const double *minor, double *energy)
 {
     struct gradient *g = gradient;
-    for (int i = 0; i < g->points; i++) {
+    for (ptrdiff_t i = 0; i < g->points; i++) {
         g->tau[2 * i] = major[i];
         g->tau[2 * i + 1] = minor[i];
     }

@@ -2,6 +2,7 @@
 #include "atom/shape.h"
 
 #include <math.h>
+#include <stddef.h>
 
 enum { P = LOBATTO_ORDER, ANGLES = 5 };
 
@@ -66,7 +67,8 @@ static void at_angle(const struct shape *s, const struct radial_part part[2],
     const struct mesh *mesh = s->mesh;
     double p2 = 1.5 * cosine * cosine - 0.5;
     double by_angle = -3.0 * cosine * sqrt(1.0 - cosine * cosine);
-    for (int i = 0; i <= s->elements * P; i++) {
+    const ptrdiff_t points = (ptrdiff_t)s->elements * P + 1;
+    for (ptrdiff_t i = 0; i < points; i++) {
         double radial[2], around[2];
         for (int c = 0; c < 2; c++) {
             double a = 2.0 * s->axial[c];
@@ -83,7 +85,8 @@ static void at_angle(const struct shape *s, const struct radial_part part[2],
         grad2[3 * i + 1] = radial[0] * radial[1] + around[0] * around[1];
         grad2[3 * i + 2] = radial[1] * radial[1] + around[1] * around[1];
         for (int c = 0; c < 2; c++) {
-            double least = tau_least(rho[2 * i + c], grad2[3 * i + 2 * c]);
+            double least =
+                tau_least(rho[2 * i + c], grad2[3 * i + (ptrdiff_t)2 * c]);
             tau[2 * i + c] = fmax(tau[2 * i + c], least);
         }
     }
@@ -93,13 +96,13 @@ void shape_change(const struct shape *shape, struct gradient *gradient,
                   double *exchange, double *correlation)
 {
     const struct mesh *mesh = shape->mesh;
-    int points = shape->elements * P + 1;
+    size_t points = (size_t)shape->elements * P + 1;
     double *work = shape->work;
     double *rho = work, *grad2 = work + 2 * points, *tau = work + 5 * points;
     double *ex = work + 7 * points, *ec = work + 8 * points;
     struct radial_part part[2];
     for (int c = 0; c < 2; c++) {
-        double *at = work + (9 + 5 * c) * points;
+        double *at = work + (size_t)(9 + 5 * c) * points;
         part[c] = (struct radial_part){at, at + points, at + 2 * points,
                                        at + 3 * points, at + 4 * points};
         fill(shape, c, &part[c], work + 19 * points);
@@ -111,9 +114,9 @@ void shape_change(const struct shape *shape, struct gradient *gradient,
     for (int k = -1; k < ANGLES; k++) {
         at_angle(k < 0 ? &round : shape, part, k < 0 ? 0.0 : COSINE[k], rho,
                  grad2, tau);
-        gradient_at(gradient, points, rho, grad2, tau, ex, ec);
+        gradient_at(gradient, (int)points, rho, grad2, tau, ex, ec);
         double weight = (k < 0 ? -1.0 : WEIGHT[k]) * 4.0 * PI / z3;
-        for (int i = 0; i < points; i++) {
+        for (size_t i = 0; i < points; i++) {
             double w = weight * mesh->weight_y[i] * mesh->y[i] * mesh->y[i] *
                        (rho[2 * i] + rho[2 * i + 1]);
             *exchange += w * ex[i];

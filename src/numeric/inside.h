@@ -21,16 +21,16 @@ struct search {
 };
 
 struct radial {
+    struct lane_group group[RADIAL_GROUPS];
     struct lane_work work;
     struct lane_channel channel[RADIAL_CHANNELS];
     const struct lane_kernel *kernel;
-    int elements, count, groups;
-    struct radial_level level[RADIAL_LEVELS_MAX];
-    struct search search[RADIAL_LEVELS_MAX];
-    int member[RADIAL_GROUPS][LANES_MAX]; /* level of each lane */
-    struct lane_group group[RADIAL_GROUPS];
     double *sum; /* densities of a channel by lane, points × width */
     double *block;
+    struct search search[RADIAL_LEVELS_MAX];
+    struct radial_level level[RADIAL_LEVELS_MAX];
+    int member[RADIAL_GROUPS][LANES_MAX]; /* level of each lane */
+    int elements, count, groups;
     int room; /* groups that have arrays */
 };
 

@@ -2,6 +2,7 @@
 #include "numeric/mesh.h"
 
 #include <math.h>
+#include <stddef.h>
 #include <stdlib.h>
 #include <string.h>
 
@@ -137,8 +138,8 @@ void mesh_derivative(const struct mesh *mesh, int elements, const double *f,
     double factor = 2.0 / mesh->length, slope[LOBATTO_POINTS + 1];
     out[0] = 0.0;
     for (int e = 0; e < elements; e++) {
-        apply(mesh->rising, f + e * P, slope);
-        double *at = out + e * P;
+        apply(mesh->rising, f + (ptrdiff_t)e * P, slope);
+        double *at = out + (ptrdiff_t)e * P;
         at[0] = e > 0 ? 0.5 * (at[0] + factor * slope[0]) : factor * slope[0];
         for (int i = 1; i <= P; i++)
             at[i] = factor * slope[i];
@@ -174,6 +175,6 @@ void mesh_cumulate(const struct mesh *mesh, int elements, const double *f,
         mesh_running(mesh, g, sum);
         for (int i = 1; i <= P; i++)
             out[e * P + i] = total + sum[i];
-        total = out[(e + 1) * P];
+        total = out[(ptrdiff_t)(e + 1) * P];
     }
 }

@@ -98,7 +98,7 @@ static void combine(struct mixer *m, int now, const double *part, double beta,
  * newest first; a direction that depends on earlier ones gets 0. */
 static void solve(int m, double a[H][H], double *b)
 {
-    bool used[H];
+    bool used[H] = {false};
     for (int k = 0; k < m; k++) {
         double before = a[k][k];
         for (int j = 0; j < k; j++) {

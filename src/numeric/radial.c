@@ -34,7 +34,7 @@ static size_t carve(struct radial *r, double *base)
     size_t factor = (size_t)r->work.mesh->elements * LANES_FACTOR;
     double *at = base;
     r->work.stiffness = take(&at, LANES_TRIANGLE * width);
-    r->work.derivative = take(&at, LOBATTO_POINTS * LOBATTO_POINTS);
+    r->work.derivative = take(&at, (size_t)LOBATTO_POINTS * LOBATTO_POINTS);
     r->work.schwarz = take(&at, n);
     r->work.mass = take(&at, n);
     r->work.centrifugal = take(&at, n);

@@ -118,13 +118,13 @@ static void evaluate(struct atom_solver *solver, struct hybrid *hybrid,
 START_TEST(only_open_p_subshells_have_a_shape)
 {
     static const struct {
-        int Z;
         const char *configuration;
+        int Z;
         bool open;
     } atom[] = {
-        {7, "[He] 2s2 2p3", false},  {10, "[He] 2s2 2p6", false},
-        {21, "[Ar] 3d1 4s2", false}, {8, "[He] 2s2 2p3.5", false},
-        {8, "[He] 2s2 2p4", true},   {81, "[Xe] 4f14 5d10 6s2 6p1", true}};
+        {"[He] 2s2 2p3", 7, false},  {"[He] 2s2 2p6", 10, false},
+        {"[Ar] 3d1 4s2", 21, false}, {"[He] 2s2 2p3.5", 8, false},
+        {"[He] 2s2 2p4", 8, true},   {"[Xe] 4f14 5d10 6s2 6p1", 81, true}};
     struct atom_solver *solver = case_solver();
     struct status st = status_ok();
     struct hybrid *hybrid = hybrid_new(&st);
@@ -234,6 +234,7 @@ END_TEST
 TCase *case_hybrid(void)
 {
     TCase *c = tcase_create("hybrid");
+    tcase_set_timeout(c, 20.0);
     tcase_add_test(c, three_j_symbols_are_the_tabulated_ones);
     tcase_add_test(c, exact_exchange_cancels_self_repulsion);
     tcase_add_test(c, p_shifts_have_both_coupling_limits);
