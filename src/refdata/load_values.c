@@ -211,10 +211,12 @@ static bool compose_remark(struct load *ld, const cJSON *object,
     add_part(&t, "coordination ",
              coordination_id((enum coordination)e->coordination));
     add_part(&t, "", spin_word((enum spin_state)e->spin));
-    if (e->evidence != set->evidence)
-        add_part(&t, "", evidence_word((enum evidence)e->evidence));
+    const char *kind = e->evidence != set->evidence
+                           ? evidence_word((enum evidence)e->evidence)
+                           : "";
+    add_part(&t, "", kind);
     for (int i = 0; i < set->mark_count; i++)
-        if (e->marks >> i & 1)
+        if (e->marks >> i & 1 && strcmp(set->marks[i].meaning, kind) != 0)
             add_part(&t, "", set->marks[i].meaning);
     add_part(&t, "", note ? note : "");
     return load_text(ld, object, "variant", &e->variant) &&

@@ -103,6 +103,23 @@ START_TEST(test_sites_are_found_by_coordination_and_spin)
     near(dataset_lookup_site(set, 26, 2, COORDINATION_VI, SPIN_NONE)
              ->value.value,
          78, 0, 0, "Fe2+ VI preferred");
+    /* Shannon 1976 marks low spin as most reliable for Co3+ and Ni3+; the
+     * cobalt of LiCoO2 is low spin (common practice, no source). */
+    near(dataset_lookup_site(set, 27, 3, COORDINATION_VI, SPIN_NONE)
+             ->value.value,
+         54.5, 0, 0, "Co3+ VI preferred");
+    near(dataset_lookup_site(set, 28, 3, COORDINATION_VI, SPIN_NONE)
+             ->value.value,
+         56, 0, 0, "Ni3+ VI preferred");
+    struct reading r = dataset_reading(set, 27, 3, 0, 0);
+    ck_assert_ptr_nonnull(strstr(r.remark, "low spin"));
+    ck_assert_ptr_nonnull(strstr(r.remark, "high spin: 61 pm"));
+    /* A mark that says what the kind says already stands once. */
+    ck_assert_str_eq(
+        dataset_text(set,
+                     dataset_lookup_site(set, 28, 3, COORDINATION_VI, SPIN_HIGH)
+                         ->remark),
+        "coordination VI; high spin; estimated");
     ck_assert_ptr_null(
         dataset_lookup_site(set, 13, 3, COORDINATION_XII, SPIN_NONE));
     ck_assert_int_eq(coordination_number(COORDINATION_IV_SQ), 4);
