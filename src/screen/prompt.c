@@ -190,6 +190,16 @@ enum effect prompt_update(struct ui *ui, const struct event *event)
     return EFFECT_REDRAW;
 }
 
+/* The end of a text, at most `columns` characters of it. */
+static const char *tail(const char *text, int columns)
+{
+    while ((int)utf8_length(text) > columns && *text) {
+        uint32_t code;
+        text += utf8_decode(text, strlen(text), &code);
+    }
+    return text;
+}
+
 void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
 {
     static const char *const asks[] = {
@@ -201,18 +211,16 @@ void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
     };
     int width = canvas->columns;
     if (ui->prompt.kind == PROMPT_OVERWRITE) {
-        canvas_textf(canvas, row, 0, width, ROLE_CAUTION,
-                     "overwrite? y/n  %s exists", ui->path);
+        static const char question[] = " exists; overwrite it? y/n";
+        const char *name = tail(ui->path, width - (int)sizeof question + 1);
+        canvas_textf(canvas, row, 0, width, ROLE_CAUTION, "%s%s", name,
+                     question);
         return;
     }
     int column =
         canvas_text(canvas, row, 0, width, ROLE_LABEL, asks[ui->prompt.kind]);
     /* The end of a long line is what is being typed. */
-    const char *text = ui->prompt.text;
-    while ((int)utf8_length(text) > width - column - 1 && *text) {
-        uint32_t code;
-        text += utf8_decode(text, strlen(text), &code);
-    }
+    const char *text = tail(ui->prompt.text, width - column - 1);
     column = canvas_text(canvas, row, column, width - column, ROLE_FIELD, text);
     canvas->cursor_row = row;
     canvas->cursor_column = column < width ? column : width - 1;

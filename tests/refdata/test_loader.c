@@ -221,7 +221,7 @@ START_TEST(test_a_file_keeps_everything_it_says)
     ck_assert_str_eq(dataset_text(set, e->note), "Grüße");
     ck_assert_int_eq(e->marks, 3);
     ck_assert_str_eq(dataset_text(set, e->remark),
-                     "estimated; most reliable; estimated; Grüße");
+                     "estimated; most reliable; Grüße");
     ck_assert_str_eq(dataset_reading(set, 1, 0, 0, 0).reason,
                      "never looked at");
     loaded_free(loaded);

@@ -329,7 +329,7 @@ START_TEST(an_existing_file_is_asked_about)
 {
     snprintf(ui.path, sizeof ui.path, "there.csv");
     ui_ask_overwrite(&ui);
-    ck_assert(shows("overwrite? y/n  "));
+    ck_assert(shows("there.csv exists; overwrite it? y/n"));
     ck_assert_int_eq(type("n"), EFFECT_REDRAW);
     ck_assert(shows("left as it was"));
     ui_ask_overwrite(&ui);
@@ -381,7 +381,7 @@ START_TEST(long_messages_are_read_whole)
     ck_assert(shows("? keys"));
     snprintf(ui.path, sizeof ui.path, "%s", path);
     ui_ask_overwrite(&ui);
-    ck_assert(shows("overwrite? y/n"));
+    ck_assert(shows("exists; overwrite it? y/n"));
 }
 END_TEST
 

@@ -23,9 +23,9 @@ struct demo {
 };
 
 static const char *const key_names[] = {
-    "none",    "up",      "down",      "left",   "right",  "home",
-    "end",     "page-up", "page-down", "enter",  "escape", "tab",
-    "backtab", "erase",   "delete",    "repaint"};
+    "none",    "up",      "down",      "left",  "right",  "home",
+    "end",     "page-up", "page-down", "enter", "escape", "tab",
+    "backtab", "erase",   "delete",    "clear", "repaint"};
 
 static void overflow(volatile int *depth)
 {

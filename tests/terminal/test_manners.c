@@ -628,6 +628,15 @@ START_TEST(idle_writes_nothing_and_takes_no_time)
 }
 END_TEST
 
+START_TEST(control_u_is_a_key)
+{
+    struct pty *p = start();
+    pty_type(p, "\025");
+    pty_expect(p, "last: key clear.");
+    quits(p);
+}
+END_TEST
+
 START_TEST(repaint_writes_everything_again)
 {
     struct pty *p = start();
@@ -766,6 +775,7 @@ static void add_input(TCase *tc)
     tcase_add_test(tc, a_selection_move_costs_few_bytes);
     tcase_add_test(tc, idle_writes_nothing_and_takes_no_time);
     tcase_add_test(tc, repaint_writes_everything_again);
+    tcase_add_test(tc, control_u_is_a_key);
     tcase_add_test(tc, the_mouse_is_taken_only_when_told);
     tcase_add_test(tc, schemes_set_both_colours_everywhere);
     tcase_add_loop_test(tc, any_mix_of_input_leaves_a_program_that_quits, 0, 5);
