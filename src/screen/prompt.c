@@ -217,8 +217,10 @@ void prompt_draw(const struct ui *ui, struct canvas *canvas, int row)
                      question);
         return;
     }
-    int column =
-        canvas_text(canvas, row, 0, width, ROLE_LABEL, asks[ui->prompt.kind]);
+    const char *ask = asks[ui->prompt.kind];
+    bool narrow = (int)strlen(ask) > width / 2; /* room for what is typed */
+    int column = canvas_text(canvas, row, 0, narrow ? width / 2 : width,
+                             ROLE_LABEL, ask);
     /* The end of a long line is what is being typed. */
     const char *text = tail(ui->prompt.text, width - column - 1);
     column = canvas_text(canvas, row, column, width - column, ROLE_FIELD, text);

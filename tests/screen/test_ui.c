@@ -385,6 +385,17 @@ START_TEST(long_messages_are_read_whole)
 }
 END_TEST
 
+START_TEST(a_narrow_prompt_shows_what_is_typed)
+{
+    resize(6, 30);
+    type(":");
+    key(KEY_CODE_CLEAR);
+    type("[Ar] 3d7");
+    ck_assert(shows("configuration"));
+    ck_assert(shows("[Ar] 3d7"));
+}
+END_TEST
+
 /* The second set belongs to the chosen quantity: below it, where others are
  * listed, it has no place, least of all in their units. */
 START_TEST(a_second_set_stays_with_its_quantity)
@@ -525,6 +536,7 @@ int main(void)
     tcase_add_test(use, the_command_of_an_export_names_every_choice);
     tcase_add_test(use, a_key_behind_a_whole_symbol_ends_the_jump);
     tcase_add_test(use, long_messages_are_read_whole);
+    tcase_add_test(use, a_narrow_prompt_shows_what_is_typed);
     tcase_add_test(use, a_second_set_stays_with_its_quantity);
     tcase_add_test(use, a_coordination_is_never_cut_to_another);
     tcase_add_test(use, a_view_comes_back_as_it_was_left);
