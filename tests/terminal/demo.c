@@ -23,9 +23,15 @@ struct demo {
 };
 
 static const char *const key_names[] = {
-    "none",    "up",      "down",      "left",  "right",  "home",
-    "end",     "page-up", "page-down", "enter", "escape", "tab",
-    "backtab", "erase",   "delete",    "clear", "repaint"};
+    [KEY_CODE_UP] = "up",           [KEY_CODE_DOWN] = "down",
+    [KEY_CODE_LEFT] = "left",       [KEY_CODE_RIGHT] = "right",
+    [KEY_CODE_HOME] = "home",       [KEY_CODE_END] = "end",
+    [KEY_CODE_PAGE_UP] = "page-up", [KEY_CODE_PAGE_DOWN] = "page-down",
+    [KEY_CODE_ENTER] = "enter",     [KEY_CODE_ESCAPE] = "escape",
+    [KEY_CODE_TAB] = "tab",         [KEY_CODE_BACKTAB] = "backtab",
+    [KEY_CODE_ERASE] = "erase",     [KEY_CODE_DELETE] = "delete",
+    [KEY_CODE_CLEAR] = "clear",     [KEY_CODE_REPAINT] = "repaint",
+};
 
 static void overflow(volatile int *depth)
 {
