@@ -212,6 +212,43 @@ START_TEST(unknown_sequences_run_no_commands)
 }
 END_TEST
 
+/* Any keys, parts of sequences, pastes and sizes in any order: it still quits,
+ * and the terminal is as found. */
+START_TEST(any_mix_of_input_leaves_a_program_that_quits)
+{
+    static const char *const pieces[] = {
+        "w",      "b",      "r",        "v",          "t",        "p",
+        "c",      "d",      "a",        "s",          "?",        "m",
+        "e",      "+",      "-",        "o",          "u",        "n",
+        "z",      "g",      "y",        ".",          ":",        "/",
+        "x",      "i",      "\t",       "\r",         "\r",       "\033",
+        "\033OA", "\033OB", "\033OC",   "\033OD",     "\033[H",   "\033[6~",
+        "Lu",     "118",    "\177",     "\025",       "\014",     "é",
+        "\xC3",   "\033[",  "\033]0;q", "\033[200~q", "\033[201~"};
+    unsigned seed = 71u + (unsigned)_i;
+    struct pty *p = session_map();
+    for (int i = 0; i < 300; i++) {
+        seed = seed * 1103515245u + 12345u;
+        unsigned pick = seed >> 16;
+        if (pick % 17 == 0)
+            pty_resize(p, 1 + (int)(pick / 17 % 50), 1 + (int)(pick % 150));
+        else
+            pty_type(p, pieces[pick % COUNT(pieces)]);
+    }
+    /* what is open is closed: sequences, a paste, lists, fields */
+    pty_resize(p, 24, 80);
+    pty_type(p, "\033\\\033[201~");
+    pty_settle(p, 600);
+    for (int i = 0; i < 3; i++) {
+        pty_type(p, "\033");
+        pty_settle(p, 100);
+    }
+    pty_type(p, "m");
+    pty_expect(p, "? keys  q quit");
+    session_quit(p);
+}
+END_TEST
+
 TCase *case_ends(void)
 {
     TCase *tc = tcase_create("ends");
@@ -230,5 +267,6 @@ TCase *case_ends(void)
     tcase_add_test(tc, pasted_text_goes_into_an_open_field_and_no_further);
     tcase_add_loop_test(tc, unknown_sequences_run_no_commands, 0,
                         COUNT(strange));
+    tcase_add_loop_test(tc, any_mix_of_input_leaves_a_program_that_quits, 0, 4);
     return tc;
 }
