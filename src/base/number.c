@@ -73,16 +73,29 @@ struct number number_subtract(struct number a, struct number b)
     return (struct number){snap(a.value - b.value, places), places};
 }
 
+/* Significant digits of a, counted from its own places. */
+static int digits_of(struct number a)
+{
+    return a.value == 0.0 ? 1
+                          : a.decimals + 1 + (int)floor(log10(fabs(a.value)));
+}
+
+static struct number scale_to(struct number a, double factor, int digits)
+{
+    double scaled = a.value * factor;
+    int places = clamp_places(places_for(scaled, digits));
+    return (struct number){snap(scaled, places), places};
+}
+
 struct number number_scale(struct number a, double factor)
 {
-    if (factor == 1.0)
-        return a;
-    double scaled = a.value * factor;
-    /* Significant digits of a, counted from its own places. */
-    int digits =
-        a.value == 0.0 ? 1 : a.decimals + 1 + (int)floor(log10(fabs(a.value)));
-    int places = clamp_places(places_for(scaled, digits + 1));
-    return (struct number){snap(scaled, places), places};
+    return factor == 1.0 ? a : scale_to(a, factor, digits_of(a) + 1);
+}
+
+struct number number_scale_uncertainty(struct number u, double factor)
+{
+    int digits = digits_of(u);
+    return factor == 1.0 ? u : scale_to(u, factor, digits < 2 ? 2 : digits);
 }
 
 const char *number_print(struct number n, char out[NUMBER_TEXT_MAX])

@@ -28,6 +28,10 @@ struct number number_subtract(struct number a, struct number b);
  * number of significant digits and one more. factor > 0. */
 struct number number_scale(struct number a, double factor);
 
+/* An uncertainty times a factor: as many significant digits as before, but
+ * two at least. */
+struct number number_scale_uncertainty(struct number u, double factor);
+
 /* Writes with exactly n.decimals places ("0.10"). Returns out. */
 const char *number_print(struct number n, char out[NUMBER_TEXT_MAX]);
 

@@ -114,7 +114,10 @@ size_t utf8_length(const char *s)
 
 bool utf8_is_control(uint32_t code)
 {
-    return code < 0x20 || (code >= 0x7F && code < 0xA0);
+    bool steering = (code >= 0x200B && code <= 0x200F) ||
+                    (code >= 0x202A && code <= 0x202E) ||
+                    (code >= 0x2060 && code <= 0x206F) || code == 0xFEFF;
+    return code < 0x20 || (code >= 0x7F && code < 0xA0) || steering;
 }
 
 static char ascii_lower(char c)

@@ -46,7 +46,8 @@ bool utf8_valid(const char *s, size_t len);
 /* Characters in a terminated string; an invalid byte counts one. */
 size_t utf8_length(const char *s);
 
-/* True for a control character: C0, DEL or C1. */
+/* True for a control character: C0, DEL or C1, and for what steers a text
+ * unseen: zero-width characters and marks of direction. */
 bool utf8_is_control(uint32_t code);
 
 /* ASCII case-insensitive comparison, independent of the locale. */

@@ -65,6 +65,6 @@ struct reading reading_in_unit(struct reading reading, const struct unit *unit)
         return reading;
     reading.value = number_scale(reading.value, unit->per_base);
     if (reading.has_u)
-        reading.u = number_scale(reading.u, unit->per_base);
+        reading.u = number_scale_uncertainty(reading.u, unit->per_base);
     return reading;
 }

@@ -173,15 +173,24 @@ static void begin(void *work, const struct question *question,
     w->phase = start(w, &w->question.species, &w->atom, PHASE_ATOM, DONE);
 }
 
+/* A configuration that the user gives comes without a level J: then neither
+ * the atom nor its ion is moved off the mean of its term. */
+static bool is_given(const struct species *species)
+{
+    return species->origin == ORIGIN_USER;
+}
+
 static void evaluate(struct work *w, const struct species *species,
                      struct half *half)
 {
     struct status st = status_ok();
     struct hybrid_energy energy;
     half->evaluated = hybrid_evaluate(w->hybrid, w->solver, &energy, &st);
-    if (half->evaluated)
-        half->energy =
-            energy.total + hybrid_spin_orbit(w->hybrid, &species->term);
+    if (!half->evaluated)
+        return;
+    half->energy = energy.total;
+    if (!is_given(&w->question.species))
+        half->energy += hybrid_spin_orbit(w->hybrid, &species->term);
 }
 
 /* Keeps what is read off the density of the atom. */
@@ -290,9 +299,13 @@ static struct reading read_ionization(const struct work *w)
     struct reading r =
         reading_computed(QUANTITY_IONIZATION, energy * HARTREE_EV,
                          &offers[OFFER_IONIZATION].provenance);
+    bool given = is_given(&w->question.species);
     double u = uncertainty_ev(&w->question.species);
-    r.has_u = u > 0.0;
+    r.has_u = u > 0.0 && !given;
     r.u = number_round(u, 2, 2);
+    if (given)
+        r.remark = "no level is given with a configuration: without "
+                   "spin-orbit shifts";
     if (energy < 0.0)
         r.remark = "negative: the ion lies lower in this model";
     return r;

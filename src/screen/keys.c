@@ -184,6 +184,11 @@ void key_explain(const struct key_row *row, struct text *t)
 void draw_keys(const struct ui *ui, struct canvas *canvas, int row)
 {
     int column = 0;
+    /* While a line is typed its error stands where no key is needed. */
+    if (ui->prompt.kind != PROMPT_NONE && ui->message[0] != '\0') {
+        canvas_text(canvas, row, 0, canvas->columns, ROLE_CAUTION, ui->message);
+        return;
+    }
     for (int i = 0; i < key_row_count(); i++) {
         const struct key_row *r = &rows[i];
         int need = (int)(strlen(r->name) + 1 + strlen(r->label));

@@ -95,7 +95,8 @@ void configuration_prompt(struct ui *ui)
     prompt_open(ui, PROMPT_CONFIGURATION, text);
 }
 
-/* An empty line gives the ground state back; a wrong one is kept and told. */
+/* An empty line gives the ground state back; a wrong one is told and stays to
+ * be mended. */
 static enum effect accept_configuration(struct ui *ui)
 {
     struct choice *c = &ui->choice;
@@ -107,7 +108,6 @@ static enum effect accept_configuration(struct ui *ui)
     if (!blank && (!configuration_parse(ui->prompt.text, &typed, &st) ||
                    !study_species(ui->study, &ask, &species, &st))) {
         ui_report(ui, true, "%s", st.message);
-        close_prompt(ui);
         return EFFECT_REDRAW;
     }
     bool own = !blank && species.origin == ORIGIN_USER;
@@ -164,6 +164,7 @@ enum effect prompt_update(struct ui *ui, const struct event *event)
         return ui_update(ui, event);
     }
     if (event->kind == EVENT_CHARACTER || event->kind == EVENT_PASTE) {
+        ui->message[0] = '\0';
         type(p, event->character);
         follow(ui);
         return EFFECT_REDRAW;

@@ -164,6 +164,10 @@ struct reading reference_read(const struct reference *reference,
         return reading_gap(reference->quantity, READING_MISSING,
                            "this set holds outermost subshells only",
                            reference->provenance);
+    if (reference->derived && species->origin == ORIGIN_USER)
+        return reading_gap(reference->quantity, READING_MISSING,
+                           "stored for the ground configuration only",
+                           reference->provenance);
     if (reference->derived)
         return zeff_from_ionization(reference, species);
     /* A set by subshells is asked for the very subshell. */
@@ -176,7 +180,15 @@ struct reading reference_read(const struct reference *reference,
     struct reading r =
         dataset_reading(reference->set, species->z, species->charge,
                         by_subshell ? n : 0, by_subshell ? l : 0);
-    if (r.state == READING_OK && species->origin == ORIGIN_USER)
-        r.remark = "stored for the ground configuration";
+    if (r.state != READING_OK || species->origin != ORIGIN_USER)
+        return r;
+    /* An energy belongs to the level that it was measured for; a size that was
+     * found in compounds does not know the configuration. */
+    if (reference->quantity != QUANTITY_RADIUS &&
+        reference->quantity != QUANTITY_ELECTRONEGATIVITY)
+        return reading_gap(reference->quantity, READING_MISSING,
+                           "stored for the ground configuration only",
+                           reference->provenance);
+    r.remark = "stored for the ground configuration";
     return r;
 }

@@ -83,6 +83,16 @@ START_TEST(utf8_round_trips_and_refuses_malformed_bytes)
 }
 END_TEST
 
+START_TEST(what_steers_a_text_unseen_is_a_control_character)
+{
+    /* Unicode 15, general category Cf: zero width, direction, byte mark. */
+    static const uint32_t unseen[] = {0x200B, 0x200F, 0x202E, 0x2066, 0xFEFF};
+    for (size_t i = 0; i < sizeof unseen / sizeof unseen[0]; i++)
+        ck_assert(utf8_is_control(unseen[i]));
+    ck_assert(!utf8_is_control(0x2026) && !utf8_is_control(0xE9));
+}
+END_TEST
+
 START_TEST(edit_distance_counts_edits)
 {
     ck_assert_uint_eq(text_edit_distance("zeff", "zef"), 1);
@@ -139,6 +149,9 @@ START_TEST(change_of_unit_keeps_significant_digits)
     /* 1 eV = 96.485332123 kJ/mol, CODATA 2022 (exact by definition). */
     struct number ev = {1.000000000, 9};
     near(number_scale(ev, EV_KJ_PER_MOL).value, 96.485332123, 1e-8, 0, "eV");
+    struct number u = {0.0000012, 7};
+    number_print(number_scale_uncertainty(u, EV_KJ_PER_MOL), out);
+    ck_assert_str_eq(out, "0.00012");
     near(EV_PER_CM, 8065.543937, 1e-6, 0, "eV in cm-1, CODATA 2022");
 }
 END_TEST
@@ -276,6 +289,7 @@ int main(void)
     tcase_add_test(plain, long_messages_end_in_whole_characters);
     tcase_add_test(plain, text_is_cut_between_characters);
     tcase_add_test(plain, utf8_round_trips_and_refuses_malformed_bytes);
+    tcase_add_test(plain, what_steers_a_text_unseen_is_a_control_character);
     tcase_add_test(plain, edit_distance_counts_edits);
     tcase_add_test(plain, integers_and_doubles_are_read_whole);
     tcase_add_test(plain, numbers_print_digit_for_digit);

@@ -255,6 +255,19 @@ START_TEST(charges_and_subshells_are_chosen)
 }
 END_TEST
 
+START_TEST(a_wrong_configuration_stays_to_be_mended)
+{
+    type(":x");
+    ck_assert_int_eq(key(KEY_CODE_ENTER), EFFECT_REDRAW);
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_CONFIGURATION);
+    ck_assert(shows("is no subshell"));
+    type("y");
+    ck_assert(!shows("is no subshell"));
+    key(KEY_CODE_ESCAPE);
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
+}
+END_TEST
+
 START_TEST(quantities_without_a_model_show_their_reference)
 {
     type("w");
@@ -529,6 +542,7 @@ int main(void)
     tcase_add_test(use, pasted_text_never_is_a_command);
     tcase_add_test(use, the_cursor_stands_on_the_selection);
     tcase_add_test(use, charges_and_subshells_are_chosen);
+    tcase_add_test(use, a_wrong_configuration_stays_to_be_mended);
     tcase_add_test(use, quantities_without_a_model_show_their_reference);
     tcase_add_test(use, a_chooser_goes_by_letter_and_can_be_left);
     tcase_add_test(use, exports_ask_for_a_file_and_hold_what_is_shown);

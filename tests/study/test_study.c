@@ -191,6 +191,24 @@ START_TEST(units_are_converted_and_a_scale_keeps_its_own)
 }
 END_TEST
 
+START_TEST(an_energy_is_stored_for_the_ground_configuration_only)
+{
+    struct status st = status_ok();
+    struct configuration excited;
+    ck_assert(configuration_parse("[Ar] 3d10 4s2 4p5 5s1", &excited, &st));
+    struct ask ask = {.z = 36,
+                      .quantity = QUANTITY_IONIZATION,
+                      .model = model_find("slater"),
+                      .configuration = &excited};
+    struct row row = study_row(study, &ask);
+    ck_assert_int_eq(row.state, ROW_NO_REFERENCE);
+    ck_assert_ptr_nonnull(strstr(row.reason, "ground configuration"));
+    ask.quantity = QUANTITY_ZEFF;
+    row = study_row(study, &ask);
+    ck_assert_int_eq(row.state, ROW_NO_REFERENCE);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("study");
@@ -206,6 +224,7 @@ int main(void)
         rows,
         the_ion_of_an_excited_configuration_is_that_configuration_less_one);
     tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
+    tcase_add_test(rows, an_energy_is_stored_for_the_ground_configuration_only);
     suite_add_tcase(suite, rows);
     return run_suite(suite);
 }
