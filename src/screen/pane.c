@@ -15,7 +15,8 @@
 #define BAR_RIGHT_HALF 0x2590
 #define AXIS 0x2502
 #define UNEQUAL 0x2260
-#define BAR_HALF_MAX 24
+#define BAR_HALF_MAX 16
+#define SET_COLUMNS_MIN 14 /* below this the sets are not named in the rows */
 #define MODELS_MAX 16
 
 /* Columns of the pane from the left; a width of 0 leaves one out. The bar takes
@@ -163,6 +164,24 @@ static void draw_reference(struct canvas *canvas, int row,
                      &r->reference);
 }
 
+/* Where the reference sets are named behind the bars; 0 where there is no
+ * room for them. */
+static int set_column(struct area a)
+{
+    int column = BAR + 2 * bar_half(a) + 3;
+    return a.columns - column >= SET_COLUMNS_MIN ? column : 0;
+}
+
+/* The set of a row, unless it is the one above. */
+static void draw_set(struct canvas *canvas, struct area a, int row,
+                     const struct row *r, const struct row *above)
+{
+    int column = set_column(a);
+    const struct provenance *p = r->reference.provenance;
+    if (column > 0 && p && (!above || above->reference.provenance != p))
+        canvas_text(canvas, row, column, a.columns - column, ROLE_QUIET, p->id);
+}
+
 static void draw_row(struct canvas *canvas, struct area a, int row,
                      const struct row *r, const struct row *above, bool chosen,
                      double full)
@@ -180,6 +199,8 @@ static void draw_row(struct canvas *canvas, struct area a, int row,
     if (r->reference.state == READING_OK &&
         (r->value.state == READING_OK || r->state == ROW_REFERENCE_ONLY))
         draw_reference(canvas, row, c, r, above);
+    if (r->state == ROW_OK || r->state == ROW_REFERENCE_ONLY)
+        draw_set(canvas, a, row, r, above);
     if (r->state == ROW_REFERENCE_ONLY)
         return;
     if (r->state != ROW_OK) {
@@ -335,6 +356,30 @@ static int draw_usual(const struct ui *ui, struct canvas *canvas, struct area a)
     return 1;
 }
 
+/* Models that stand against another set than the chosen one, where the rows
+ * do not name the sets; gives the rows used. */
+static int draw_other_sets(const struct ui *ui, struct canvas *canvas,
+                           struct area a)
+{
+    struct row rows[MODELS_MAX];
+    struct ask ask;
+    int used = 0;
+    if (set_column(a) > 0 || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        return 0;
+    struct row chosen = study_row(ui->study, &ask);
+    int count = pane_rows(ui, ui->choice.quantity, rows);
+    for (int i = 0; i < count && used < a.rows; i++) {
+        const struct provenance *p = rows[i].reference.provenance;
+        if (rows[i].state != ROW_OK || p == chosen.reference.provenance)
+            continue;
+        canvas_textf(canvas, a.row + used, NAME, a.columns - NAME, ROLE_TEXT,
+                     "%s: reference %s: %s", rows[i].value.provenance->id,
+                     p->id, p->definition);
+        used++;
+    }
+    return used;
+}
+
 void draw_pane(const struct ui *ui, struct canvas *canvas, struct area area)
 {
     struct area left = area;
@@ -346,6 +391,9 @@ void draw_pane(const struct ui *ui, struct canvas *canvas, struct area area)
     left.row += used;
     left.rows -= used;
     used = draw_usual(ui, canvas, left);
+    left.row += used;
+    left.rows -= used;
+    used = draw_other_sets(ui, canvas, left);
     left.row += used;
     left.rows -= used;
     /* Other quantities while there is room for a heading and a row. */
