@@ -172,7 +172,7 @@ END_TEST
 START_TEST(pasted_text_never_runs_commands)
 {
     struct pty *p = session_map();
-    pty_type(p, PASTE("qqd?\rLu\rpx\n\003\033[B"));
+    pty_type(p, PASTE("qqd?\rLu\rpx\n\033[B"));
     /* the next key finds the map as it was */
     pty_key(p, "kcuf1");
     pty_expect(p, "Co  27  cobalt");
