@@ -77,8 +77,9 @@ static void check_project_include(const char *folder, const char *file,
 
 static void check_line(const char *folder, const char *file, const char *line)
 {
-    if (strncmp(line, "#include \"", 10) == 0)
-        check_project_include(folder, file, line + 10);
+    const char *quote = strchr(line, '"');
+    if (quote && strncmp(line, "#include \"", 10) == 0)
+        check_project_include(folder, file, quote + 1);
     if (strncmp(line, "#include <", 10) == 0)
         for (size_t i = 0; i < sizeof rooms / sizeof rooms[0]; i++)
             if (strncmp(line + 9, rooms[i].header, strlen(rooms[i].header)) ==
