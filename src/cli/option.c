@@ -48,6 +48,14 @@ static const struct option options[OPTION_COUNT] = {
      LIST | COMPARE | AUDIT,
      "a second data set beside the reference, with how far it is from it; "
      "without --model and --quantity the two sets alone"},
+    {OPTION_COORDINATION, "coordination", 0, "CN", OPTION_VALUE,
+     WORDS_COORDINATION, false, LIST | COMPARE | AUDIT,
+     "coordination of the site, for sets of ionic radii: roman, with PY for "
+     "pyramidal and SQ for square (default: the set's own, VI)"},
+    {OPTION_SPIN, "spin", 0, "STATE", OPTION_VALUE, WORDS_SPIN, false,
+     LIST | COMPARE | AUDIT,
+     "low or high, the spin state of the ion, for sets of ionic radii "
+     "(default: the one that the set prefers)"},
     {OPTION_EVIDENCE, "evidence", 'e', "KINDS", OPTION_VALUE, WORDS_EVIDENCE,
      true, LIST | AUDIT,
      "kinds of reference values to take, parted by commas, such as measured "

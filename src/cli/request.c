@@ -427,6 +427,49 @@ static bool read_data(struct request *r, struct status *st)
     return r->study;
 }
 
+/* True when one of the sets that will be read tells sites apart. */
+static bool has_sites(const struct request *r)
+{
+    bool named = false;
+    for (int i = 0; i < r->set_count; i++)
+        if (reference_has_sites(r->sets[i]))
+            return true;
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        const struct reference *sets[] = {r->references[q], r->against[q]};
+        for (int i = 0; i < 2; i++) {
+            named = named || sets[i];
+            if (sets[i] && reference_has_sites(sets[i]))
+                return true;
+        }
+    }
+    /* compare takes every set where none is named. */
+    return r->call->command->id == COMMAND_COMPARE && !named &&
+           r->set_count == 0;
+}
+
+/* Coordination and spin of the site. */
+static bool read_site(struct request *r, struct status *st)
+{
+    int coordination = -1;
+    int spin = -1;
+    if (!read_choice(r, OPTION_COORDINATION, &coordination, st) ||
+        !read_choice(r, OPTION_SPIN, &spin, st))
+        return false;
+    /* The words leave out the first enumerators, which stand for none. */
+    r->site.coordination =
+        (enum coordination)(COORDINATION_NONE + 1 + coordination);
+    r->site.spin = (enum spin_state)(SPIN_NONE + 1 + spin);
+    if ((coordination < 0 && spin < 0) || has_sites(r))
+        return true;
+    return status_fail(
+        st, STATUS_USAGE,
+        "--%s %s: none of the sets taken tells sites apart; "
+        "expected --reference ionic_effective_shannon_1976 or "
+        "another set of ionic radii",
+        coordination >= 0 ? "coordination" : "spin",
+        given(r, coordination >= 0 ? OPTION_COORDINATION : OPTION_SPIN));
+}
+
 /* The term to solve for: one of the chosen models must know the choice. */
 static bool read_term(struct request *r, struct status *st)
 {
@@ -478,6 +521,7 @@ bool request_open(struct request *r, const struct call *call, struct status *st)
     return read_output(r, st) && read_data(r, st) && read_quantities(r, st) &&
            read_models(r, st) && read_units(r, st) && read_subshell(r, st) &&
            read_configuration(r, st) && read_references(r, st) &&
+           read_site(r, st) &&
            read_bits(r, OPTION_EVIDENCE, &r->evidence, st) &&
            read_bits(r, OPTION_SCOPE, &r->scopes, st) && read_order(r, st) &&
            read_term(r, st) && read_method(r, st) &&
@@ -501,6 +545,7 @@ struct ask request_ask(const struct request *r, int atom,
                       .reference = r->references[quantity],
                       .against = r->against[quantity],
                       .evidence = r->evidence,
+                      .site = r->site,
                       .unit = r->units[q->dimension]};
     if (r->has_configuration)
         ask.configuration = &r->configuration;

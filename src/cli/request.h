@@ -57,6 +57,7 @@ struct request {
     const struct unit *units[DIMENSION_COUNT];
     struct configuration configuration;
     int n, l;
+    struct site site;
     struct atom_method method;
     int atom_count;
     struct request_atom atoms[REQUEST_ATOM_MAX];

@@ -74,6 +74,14 @@ void words_fill(struct words *words, enum word_kind kind,
         for (int i = 0; references && i < references->count; i++)
             add(words, references->items[i].provenance->id);
         break;
+    case WORDS_COORDINATION:
+        for (int c = COORDINATION_NONE + 1; c < COORDINATION_COUNT; c++)
+            add(words, coordination_id((enum coordination)c));
+        break;
+    case WORDS_SPIN:
+        for (int s = SPIN_NONE + 1; s < SPIN_COUNT; s++)
+            add(words, spin_id((enum spin_state)s));
+        break;
     case WORDS_EVIDENCE:
         for (int e = 0; e < EVIDENCE_COUNT; e++)
             add(words, evidence_id((enum evidence)e));

@@ -211,7 +211,8 @@ static bool add_reference(const struct reference *reference,
     bool any = false;
     for (int w = 0; w < c->count; w++) {
         readings[w] = reference_read(reference, &c->species[w],
-                                     by_subshell ? asks[w].n : 0, asks[w].l);
+                                     by_subshell ? asks[w].n : 0, asks[w].l,
+                                     asks[w].site);
         any = any || readings[w].state == READING_OK;
     }
     if (!any)
@@ -288,7 +289,8 @@ bool study_compare(struct study *study, const struct ask *asks, int count,
                                 .charge = asks[w].charge,
                                 .configuration = asks[w].configuration,
                                 .n = asks[w].n,
-                                .l = asks[w].l};
+                                .l = asks[w].l,
+                                .site = asks[w].site};
         if (!study_species(study, &plain[w], &comparison->species[w], st) ||
             (solve && !solve_ask(study, &plain[w], st)))
             return false;

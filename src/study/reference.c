@@ -154,8 +154,38 @@ static struct reading zeff_from_ionization(const struct reference *reference,
     return r;
 }
 
+bool reference_has_sites(const struct reference *reference)
+{
+    return !reference->derived &&
+           reference->set->default_coordination != COORDINATION_NONE;
+}
+
+/* The entry of an ion at a site. Another site is never put in its place. */
+static struct reading read_at_site(const struct reference *reference,
+                                   const struct species *species,
+                                   struct site site)
+{
+    const struct dataset *set = reference->set;
+    enum coordination coordination = site.coordination != COORDINATION_NONE
+                                         ? site.coordination
+                                         : set->default_coordination;
+    const struct entry *entry = dataset_lookup_site(
+        set, species->z, species->charge, coordination, site.spin);
+    /* An ion with closed subshells has one radius, whatever the spin asked. */
+    if (!entry)
+        entry = dataset_lookup_site(set, species->z, species->charge,
+                                    coordination, SPIN_NONE);
+    if (entry && (entry->spin == SPIN_NONE || site.spin == SPIN_NONE ||
+                  entry->spin == site.spin))
+        return dataset_entry_reading(set, entry);
+    return reading_gap(reference->quantity, READING_MISSING,
+                       "nothing stored for this coordination and spin",
+                       reference->provenance);
+}
+
 struct reading reference_read(const struct reference *reference,
-                              const struct species *species, int n, int l)
+                              const struct species *species, int n, int l,
+                              struct site site)
 {
     const struct subshell *outer =
         configuration_outermost(&species->configuration);
@@ -177,9 +207,13 @@ struct reading reference_read(const struct reference *reference,
         n = outer->n;
         l = outer->l;
     }
+    bool at_site =
+        reference_has_sites(reference) &&
+        (site.coordination != COORDINATION_NONE || site.spin != SPIN_NONE);
     struct reading r =
-        dataset_reading(reference->set, species->z, species->charge,
-                        by_subshell ? n : 0, by_subshell ? l : 0);
+        at_site ? read_at_site(reference, species, site)
+                : dataset_reading(reference->set, species->z, species->charge,
+                                  by_subshell ? n : 0, by_subshell ? l : 0);
     if (r.state != READING_OK || species->origin != ORIGIN_USER)
         return r;
     /* An energy belongs to the level that it was measured for; a size that was

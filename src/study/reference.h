@@ -52,10 +52,21 @@ const struct reference *reference_default(const struct reference_list *list,
                                           enum quantity_id quantity,
                                           const char *definition, bool inner);
 
+/* The site of an ion, for sets that tell them apart: COORDINATION_NONE is the
+ * set's own default, SPIN_NONE the spin that its source prefers there. */
+struct site {
+    enum coordination coordination;
+    enum spin_state spin;
+};
+
+/* True when the set tells sites apart. */
+bool reference_has_sites(const struct reference *reference);
+
 /* Its value for a species, in base units; n = 0 asks for the outermost
  * subshell or for a quantity without subshells. Always a reading; a gap says
  * why. */
 struct reading reference_read(const struct reference *reference,
-                              const struct species *species, int n, int l);
+                              const struct species *species, int n, int l,
+                              struct site site);
 
 #endif

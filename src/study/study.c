@@ -301,18 +301,19 @@ struct row study_row(const struct study *study, const struct ask *ask)
         reference = reference_default(&study->references, ask->quantity,
                                       definition, is_inner(ask, &row.species));
     struct reading stored =
-        reference ? reference_read(reference, &row.species, ask->n, ask->l)
-                  : reading_gap(ask->quantity, READING_MISSING,
-                                "no reference set for this quantity", NULL);
+        reference
+            ? reference_read(reference, &row.species, ask->n, ask->l, ask->site)
+            : reading_gap(ask->quantity, READING_MISSING,
+                          "no reference set for this quantity", NULL);
     if (reference && !definition)
         definition = reference->provenance->definition;
     row.unit = unit_of(ask, definition);
     row_compare(&row, value, chosen_kind(ask, stored));
     assert(!ask->against || ask->against->quantity == ask->quantity);
     if (ask->against)
-        row_disagree(&row,
-                     chosen_kind(ask, reference_read(ask->against, &row.species,
-                                                     ask->n, ask->l)));
+        row_disagree(
+            &row, chosen_kind(ask, reference_read(ask->against, &row.species,
+                                                  ask->n, ask->l, ask->site)));
     return row;
 }
 

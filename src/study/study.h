@@ -23,6 +23,7 @@ struct ask {
     const struct reference *against; /* a second one of the quantity, or NULL */
     unsigned evidence;               /* kinds of reference values; 0: all */
     int n, l;
+    struct site site;
     const struct unit *unit;
 };
 

@@ -209,6 +209,42 @@ START_TEST(an_energy_is_stored_for_the_ground_configuration_only)
 }
 END_TEST
 
+START_TEST(an_ion_is_read_at_its_site_and_no_other)
+{
+    /* R. D. Shannon, Acta Cryst. A32, 751 (1976): effective ionic radii. */
+    static const struct {
+        int z, charge;
+        struct site site;
+        double radius_pm; /* 0: not in the table */
+    } sites[] = {
+        {31, 3, {COORDINATION_IV, SPIN_NONE}, 47.0},
+        {31, 3, {COORDINATION_NONE, SPIN_NONE}, 62.0},
+        {31, 3, {COORDINATION_XII, SPIN_NONE}, 0.0},
+        {26, 2, {COORDINATION_VI, SPIN_LOW}, 61.0},
+        {26, 2, {COORDINATION_NONE, SPIN_HIGH}, 78.0},
+        {26, 2, {COORDINATION_VIII, SPIN_LOW}, 0.0},
+        {31, 3, {COORDINATION_VI, SPIN_HIGH}, 62.0}, /* no spin to tell */
+    };
+    for (size_t i = 0; i < sizeof sites / sizeof sites[0]; i++) {
+        struct ask ask = {.z = sites[i].z,
+                          .charge = sites[i].charge,
+                          .quantity = QUANTITY_RADIUS,
+                          .site = sites[i].site};
+        ask.reference = reference_find(study_references(study),
+                                       "ionic_effective_shannon_1976");
+        ck_assert_ptr_nonnull(ask.reference);
+        struct row row = study_row(study, &ask);
+        if (sites[i].radius_pm > 0.0)
+            near(row.reference.value.value, sites[i].radius_pm, 1e-9, 0,
+                 "Z=%d, site %zu", sites[i].z, i);
+        else
+            ck_assert_msg(row.reference.state == READING_MISSING &&
+                              strstr(row.reference.reason, "coordination"),
+                          "site %zu", i);
+    }
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("study");
@@ -225,6 +261,7 @@ int main(void)
         the_ion_of_an_excited_configuration_is_that_configuration_less_one);
     tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
     tcase_add_test(rows, an_energy_is_stored_for_the_ground_configuration_only);
+    tcase_add_test(rows, an_ion_is_read_at_its_site_and_no_other);
     suite_add_tcase(suite, rows);
     return run_suite(suite);
 }
