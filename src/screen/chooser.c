@@ -54,6 +54,9 @@ static const struct {
     {"extrapolated alone", 1u << EVIDENCE_EXTRAPOLATED},
     {"theoretical alone", 1u << EVIDENCE_THEORETICAL},
 };
+/* The set whose sites are offered where the chosen one knows none. */
+#define SITE_SET "ionic_effective_shannon_1976"
+
 #define KINDS_FROM (-10) /* value of the first of them, and downwards */
 
 static void fill_references(struct ui *ui, struct chooser *c)
@@ -123,6 +126,31 @@ static void fill_subshells(struct ui *ui, struct chooser *c)
 }
 
 /* Units of the quantity, or of everything that the screen Atom shows. */
+/* The sites that the set holds for the selected ion, with their radii. */
+static void fill_sites(struct ui *ui, struct chooser *c)
+{
+    const struct choice *choice = &ui->choice;
+    const struct reference *r = choice->reference;
+    char out[NUMBER_TEXT_MAX];
+    if (!r || !reference_has_sites(r))
+        r = reference_find(study_references(ui->study), SITE_SET);
+    if (!r)
+        return;
+    const struct dataset *set = r->set;
+    add(c, 0, true, "%s, the default of %s",
+        coordination_id(set->default_coordination), r->provenance->id);
+    for (int i = set->first[choice->z]; i < set->first[choice->z + 1]; i++) {
+        const struct entry *e = &set->values[i];
+        bool here = choice->site.coordination == e->coordination &&
+                    choice->site.spin == e->spin;
+        if (e->charge == choice->charge && e->gap == GAP_NONE)
+            add(c, e->coordination * SPIN_COUNT + e->spin, here,
+                "%s%s%s  %s %s", coordination_id(e->coordination),
+                e->spin ? ", " : "", spin_word((enum spin_state)e->spin),
+                number_print(e->value, out), set->unit->id);
+    }
+}
+
 static void fill_units(struct ui *ui, struct chooser *c)
 {
     const struct unit *now = ui_unit(ui, ui->choice.quantity);
@@ -201,6 +229,7 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
         [CHOOSER_REFERENCE] = fill_references,
         [CHOOSER_SUBSHELL] = fill_subshells,
         [CHOOSER_UNIT] = fill_units,
+        [CHOOSER_SITE] = fill_sites,
         [CHOOSER_EXPORT] = fill_exports,
         [CHOOSER_METHOD] = fill_methods,
         [CHOOSER_OVERLAY] = fill_overlays,
@@ -250,6 +279,18 @@ static void take_overlay(struct ui *ui, int value)
         pin < PIN_MAX ? c->pins[pin] : (struct pin){c->z, c->charge + 1};
 }
 
+/* A site speaks of ionic radii: on the map they take the place of a set that
+ * knows none. */
+static void take_site_set(struct ui *ui)
+{
+    struct choice *c = &ui->choice;
+    const struct reference *r = c->reference;
+    if (ui->screen == SCREEN_COMPARE || c->quantity != QUANTITY_RADIUS ||
+        (r && reference_has_sites(r)))
+        return;
+    c->reference = reference_find(study_references(ui->study), SITE_SET);
+}
+
 static enum effect take(struct ui *ui)
 {
     struct chooser *c = &ui->chooser;
@@ -271,6 +312,10 @@ static enum effect take(struct ui *ui)
     } else if (kind == CHOOSER_SUBSHELL) {
         ui->choice.n = value / 8;
         ui->choice.l = value % 8;
+    } else if (kind == CHOOSER_SITE) {
+        ui->choice.site = (struct site){(enum coordination)(value / SPIN_COUNT),
+                                        (enum spin_state)(value % SPIN_COUNT)};
+        take_site_set(ui);
     } else if (kind == CHOOSER_UNIT) {
         const struct unit *unit = unit_at((size_t)value);
         ui->choice.units[unit->dimension] = unit;
@@ -382,6 +427,7 @@ void chooser_draw(const struct ui *ui, struct canvas *canvas)
         [CHOOSER_REFERENCE] = "Reference",
         [CHOOSER_SUBSHELL] = "Subshell",
         [CHOOSER_UNIT] = "Unit",
+        [CHOOSER_SITE] = "Site",
         [CHOOSER_EXPORT] = "Export",
         [CHOOSER_METHOD] = "Method",
         [CHOOSER_OVERLAY] = "Laid over",

@@ -28,6 +28,7 @@ static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
             asks[i].configuration = own.configuration;
         asks[i].n = c->n;
         asks[i].l = c->l;
+        asks[i].site = c->site;
     }
     return count;
 }

@@ -216,6 +216,15 @@ static int count_species(const struct ui *ui, bool *own)
     return 0;
 }
 
+static void add_site(const struct ui *ui, struct text *t)
+{
+    const struct site *site = &ui->choice.site;
+    if (site->coordination != COORDINATION_NONE)
+        text_addf(t, " --coordination %s", coordination_id(site->coordination));
+    if (site->spin != SPIN_NONE)
+        text_addf(t, " --spin %s", spin_id(site->spin));
+}
+
 /* The choices that list and audit share. */
 static void add_choices(const struct ui *ui, struct text *t)
 {
@@ -255,6 +264,8 @@ static void add_walk(const struct ui *ui, struct text *t)
     else
         for (int i = 0; i < ui->trend.walk.count; i++)
             text_addf(t, " %s", element_at(ui->trend.walk.steps[i].z)->symbol);
+    if (c->reference && reference_has_sites(c->reference))
+        add_site(ui, t);
     if (c->charge && c->walk < WALK_CHARGES)
         text_addf(t, " --charge %d", c->charge);
 }
@@ -321,6 +332,7 @@ void ui_export_command(const struct ui *ui, struct text *t)
             text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
         if (c->against)
             text_addf(t, " --against %s", c->against->provenance->id);
+        add_site(ui, t);
     }
     if (own)
         add_own(ui, t);

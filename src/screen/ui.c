@@ -81,6 +81,7 @@ bool ui_ask(const struct ui *ui, int z, int charge, struct ask *ask)
         .evidence = c->evidence,
         .n = c->n,
         .l = c->l,
+        .site = c->site,
         .unit = ui_unit(ui, c->quantity),
     };
     bool own = c->configuration.count > 0 && c->configured.z == z &&
@@ -264,6 +265,7 @@ static bool open_list(struct ui *ui, enum action action)
         {ACTION_REFERENCE, CHOOSER_REFERENCE},
         {ACTION_SUBSHELL, CHOOSER_SUBSHELL},
         {ACTION_UNIT, CHOOSER_UNIT},
+        {ACTION_SITE, CHOOSER_SITE},
         {ACTION_METHOD, CHOOSER_METHOD},
         {ACTION_OVERLAY, CHOOSER_OVERLAY},
         {ACTION_AGAINST, CHOOSER_AGAINST},

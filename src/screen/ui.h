@@ -115,6 +115,7 @@ enum chooser_kind {
     CHOOSER_REFERENCE,
     CHOOSER_SUBSHELL,
     CHOOSER_UNIT,
+    CHOOSER_SITE,
     CHOOSER_EXPORT,
     CHOOSER_METHOD,
     CHOOSER_OVERLAY,
@@ -167,7 +168,8 @@ struct choice {
     bool trend_percent; /* residuals of Trend in per cent */
     enum statistic statistic;
     enum shown shown;
-    int n, l;                                       /* n = 0: outermost */
+    int n, l;         /* n = 0: outermost */
+    struct site site; /* of ions, for sets that tell sites apart */
     const struct unit *units[DIMENSION_VOLUME + 1]; /* NULL: base unit */
     enum grid_width grid;
     enum grid_group3 group3;

@@ -44,6 +44,11 @@ void ui_save_view(const struct ui *ui, struct text *t)
     text_addf(t, "charge %d\n", c->charge);
     if (c->n)
         text_addf(t, "subshell %s\n", subshell_print(c->n, c->l, label));
+    if (c->site.coordination != COORDINATION_NONE)
+        text_addf(t, "coordination %s\n",
+                  coordination_id(c->site.coordination));
+    if (c->site.spin != SPIN_NONE)
+        text_addf(t, "spin %s\n", spin_id(c->site.spin));
     for (int d = 0; d <= DIMENSION_VOLUME; d++)
         if (c->units[d])
             text_addf(t, "unit %s\n", c->units[d]->id);
@@ -166,6 +171,20 @@ static void load_subshell(struct ui *ui, const char *value)
     }
 }
 
+static void load_coordination(struct ui *ui, const char *value)
+{
+    for (int i = COORDINATION_NONE + 1; i < COORDINATION_COUNT; i++)
+        if (strcmp(value, coordination_id((enum coordination)i)) == 0)
+            ui->choice.site.coordination = (enum coordination)i;
+}
+
+static void load_spin(struct ui *ui, const char *value)
+{
+    for (int i = SPIN_NONE + 1; i < SPIN_COUNT; i++)
+        if (strcmp(value, spin_id((enum spin_state)i)) == 0)
+            ui->choice.site.spin = (enum spin_state)i;
+}
+
 static void load_unit(struct ui *ui, const char *value)
 {
     const struct unit *unit = unit_find(value);
@@ -237,6 +256,8 @@ static const struct {
     {"charge", load_charge},
     {"subshell", load_subshell},
     {"unit", load_unit},
+    {"coordination", load_coordination},
+    {"spin", load_spin},
     {"columns", load_columns},
     {"group3", load_group3},
     {"pin", load_pin},

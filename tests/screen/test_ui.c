@@ -255,6 +255,33 @@ START_TEST(charges_and_subshells_are_chosen)
 }
 END_TEST
 
+START_TEST(a_site_is_chosen_with_its_radius_in_sight)
+{
+    char buffer[UI_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    ui_select(&ui, 31);
+    type("+++wr");
+    key(KEY_CODE_ENTER);
+    type("@");
+    /* R. D. Shannon, Acta Cryst. A32, 751 (1976): Ga3+ IV 47 pm, effective
+     * ionic radius. */
+    ck_assert(shows("IV  47 pm"));
+    key(KEY_CODE_DOWN);
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+    ck_assert(shows("coordination IV"));
+    ui.scope = SCOPE_ROW;
+    ui_export_command(&ui, &t);
+    ck_assert_ptr_nonnull(strstr(buffer, "--coordination IV"));
+    char view[2048];
+    t = text_over(view, sizeof view);
+    ui_save_view(&ui, &t);
+    ui_init(&ui, study);
+    ui_load_view(&ui, view);
+    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+}
+END_TEST
+
 START_TEST(a_wrong_configuration_stays_to_be_mended)
 {
     type(":x");
@@ -542,6 +569,7 @@ int main(void)
     tcase_add_test(use, pasted_text_never_is_a_command);
     tcase_add_test(use, the_cursor_stands_on_the_selection);
     tcase_add_test(use, charges_and_subshells_are_chosen);
+    tcase_add_test(use, a_site_is_chosen_with_its_radius_in_sight);
     tcase_add_test(use, a_wrong_configuration_stays_to_be_mended);
     tcase_add_test(use, quantities_without_a_model_show_their_reference);
     tcase_add_test(use, a_chooser_goes_by_letter_and_can_be_left);
