@@ -235,6 +235,8 @@ static void add_choices(const struct ui *ui, struct text *t)
         text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
     if (c->reference)
         text_addf(t, " --reference %s", c->reference->provenance->id);
+    if (c->reference && reference_has_sites(c->reference))
+        add_site(ui, t);
     if (c->against && ui->scope != SCOPE_AUDIT)
         text_addf(t, " --against %s", c->against->provenance->id);
     for (int e = 0; e < EVIDENCE_COUNT && c->evidence; e++)
@@ -264,8 +266,6 @@ static void add_walk(const struct ui *ui, struct text *t)
     else
         for (int i = 0; i < ui->trend.walk.count; i++)
             text_addf(t, " %s", element_at(ui->trend.walk.steps[i].z)->symbol);
-    if (c->reference && reference_has_sites(c->reference))
-        add_site(ui, t);
     if (c->charge && c->walk < WALK_CHARGES)
         text_addf(t, " --charge %d", c->charge);
 }
