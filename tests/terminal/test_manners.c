@@ -635,6 +635,7 @@ START_TEST(control_u_is_a_key)
     pty_type(p, "\025");
     pty_expect(p, "last: key clear.");
     quits(p);
+    pty_free(p);
 }
 END_TEST
 
