@@ -276,6 +276,7 @@ START_TEST(a_site_is_chosen_with_its_radius_in_sight)
     char view[2048];
     t = text_over(view, sizeof view);
     ui_save_view(&ui, &t);
+    ui_clear(&ui);
     ui_init(&ui, study);
     ui_load_view(&ui, view);
     ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
