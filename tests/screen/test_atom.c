@@ -5,31 +5,17 @@
 #include <string.h>
 
 #include "screen/atom.h"
+#include "screen/desk.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/near.h"
 #include "support/run.h"
 #include "test_plot.h"
 
-static struct study *study;
-static struct ui ui;
-static struct canvas canvas;
-
-static void open_ui(void)
+static void open_drawn(void)
 {
-    struct status st = status_ok();
-    study = study_new(catalogue_builtin(), &st);
-    ck_assert_ptr_nonnull(study);
-    ui_init(&ui, study);
-    ck_assert(canvas_init(&canvas, 24, 80, &st));
+    open_ui();
     ui_draw(&ui, &canvas);
-}
-
-static void close_ui(void)
-{
-    ui_clear(&ui);
-    study_free(study);
-    canvas_clear(&canvas);
 }
 
 static void resize(int rows, int columns)
@@ -434,7 +420,7 @@ int main(void)
 {
     Suite *suite = suite_create("atom screen");
     TCase *tc = tcase_create("screen");
-    tcase_add_checked_fixture(tc, open_ui, close_ui);
+    tcase_add_checked_fixture(tc, open_drawn, close_ui);
     tcase_add_test(tc, iron_at_80x24);
     tcase_add_test(tc, all_subshells_at_120x40);
     tcase_add_test(tc, uranium_at_200x60_from_the_nucleus_on);

@@ -7,53 +7,12 @@
 
 #include "screen/audit.h"
 #include "screen/trend.h"
+#include "screen/desk.h"
+#include "screen/desk_keys.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/near.h"
 #include "support/run.h"
-
-static struct study *study;
-static struct ui ui;
-static struct canvas canvas;
-
-static void open_ui(void)
-{
-    struct status st = status_ok();
-    study = study_new(catalogue_builtin(), &st);
-    ck_assert_ptr_nonnull(study);
-    ui_init(&ui, study);
-    ck_assert(canvas_init(&canvas, 24, 80, &st));
-}
-
-static void close_ui(void)
-{
-    ui_clear(&ui);
-    study_free(study);
-    canvas_clear(&canvas);
-}
-
-static void resize(int rows, int columns)
-{
-    struct status st = status_ok();
-    ck_assert(canvas_resize(&canvas, rows, columns, &st));
-    struct event event = {.kind = EVENT_RESIZE, .row = rows, .column = columns};
-    (void)ui_update(&ui, &event);
-}
-
-static enum effect key(enum key code)
-{
-    struct event event = {.kind = EVENT_KEY, .key = code};
-    return ui_update(&ui, &event);
-}
-
-static void type(const char *text)
-{
-    for (; *text; text++) {
-        struct event event = {.kind = EVENT_CHARACTER,
-                              .character = (unsigned char)*text};
-        (void)ui_update(&ui, &event);
-    }
-}
 
 /* Solves what the screen wants solved. */
 static void settle(void)
@@ -62,14 +21,6 @@ static void settle(void)
     ui_draw(&ui, &canvas);
     while (ui_has_work(&ui))
         ui_step(&ui, &changed);
-}
-
-static char *drawn(void)
-{
-    ui_draw(&ui, &canvas);
-    char *text = canvas_to_text(&canvas);
-    ck_assert_ptr_nonnull(text);
-    return text;
 }
 
 static void check_golden(const char *name)
