@@ -154,3 +154,13 @@ int number_places_of(const char *literal)
         places -= (int)strtol(exponent + 1, NULL, 10);
     return clamp_places(places);
 }
+
+const char *number_fit(double value, int places, int width,
+                       char out[NUMBER_TEXT_MAX])
+{
+    for (; places >= 0; places--)
+        if ((int)strlen(number_print_places(value, places, out)) <= width)
+            return out;
+    out[0] = '\0';
+    return out;
+}

@@ -42,6 +42,11 @@ const char *number_print_short(struct number n, char out[NUMBER_TEXT_MAX]);
 const char *number_print_places(double value, int places,
                                 char out[NUMBER_TEXT_MAX]);
 
+/* Writes with at most `places` places in at most `width` bytes, dropping places
+ * from the end; "" when even the whole number does not fit. Returns out. */
+const char *number_fit(double value, int places, int width,
+                       char out[NUMBER_TEXT_MAX]);
+
 /* Places behind the point of a decimal literal such as "13.60" (2); an
  * exponent shifts them ("1.5e-3": 4); never below 0. */
 int number_places_of(const char *literal);

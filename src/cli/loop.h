@@ -6,8 +6,8 @@
 #include <stdbool.h>
 
 #include "base/status.h"
-#include "screen/canvas.h"
-#include "screen/event.h"
+#include "canvas/canvas.h"
+#include "canvas/event.h"
 #include "terminal/terminal.h"
 
 enum loop_effect {

@@ -6,7 +6,7 @@
 #include <sys/stat.h>
 #include <unistd.h>
 
-#include "screen/glyph.h"
+#include "canvas/glyph.h"
 
 bool output_check(const struct request *request, struct status *st)
 {

@@ -4,7 +4,7 @@
 #define SCREEN_ATOM_H
 
 #include "screen/parts.h"
-#include "screen/plot.h"
+#include "canvas/plot.h"
 #include "study/atom_run.h"
 #include "study/orbital_run.h"
 

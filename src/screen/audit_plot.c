@@ -7,7 +7,7 @@
 
 #include "element/selection.h"
 #include "screen/audit.h"
-#include "screen/plot.h"
+#include "canvas/plot.h"
 #include "screen/trend.h"
 
 #define LOG_FROM 20.0

@@ -5,14 +5,11 @@
 
 #include <stdbool.h>
 
+#include "canvas/area.h"
 #include "element/element.h"
 
 #define NEEDED_ROWS 6 /* below this only a sentence fits */
 #define NEEDED_COLUMNS 24
-
-struct area {
-    int row, column, rows, columns;
-};
 
 enum map_form {
     FORM_SENTENCE, /* too small for anything but saying so */

@@ -4,6 +4,7 @@
 #ifndef SCREEN_PARTS_H
 #define SCREEN_PARTS_H
 
+#include "canvas/flow.h"
 #include "screen/layout.h"
 #include "screen/ui.h"
 
@@ -137,17 +138,6 @@ int ui_pin_place(const struct ui *ui, int z, int charge);
 void draw_message(const struct ui *ui, struct canvas *canvas, int row);
 void draw_keys(const struct ui *ui, struct canvas *canvas, int row);
 
-/* Text that flows down an area, wrapped at blanks; rows above `skip` are
- * passed over, `used` counts all. */
-struct flow {
-    struct canvas *canvas;
-    struct area area;
-    int skip;
-    int used;
-};
-void flow_text(struct flow *flow, enum role role, int indent, const char *text);
-void flow_blank(struct flow *flow);
-
 /* Facts of the selected element. */
 void draw_facts(const struct ui *ui, struct canvas *canvas, struct area area);
 
@@ -169,10 +159,5 @@ void configuration_prompt(struct ui *ui);
 
 /* Opens the line that asks for a file, with a name made from the choice. */
 void export_prompt(struct ui *ui, enum export_scope scope);
-
-/* A number in at most `width` columns with at most `places` places; "" when it
- * does not fit. Returns out. */
-const char *number_fit(double value, int places, int width,
-                       char out[NUMBER_TEXT_MAX]);
 
 #endif

@@ -8,7 +8,7 @@
 
 #include "base/text.h"
 #include "element/selection.h"
-#include "screen/plot.h"
+#include "canvas/plot.h"
 
 #define LOG_FROM 20.0 /* ratio of highest to lowest that asks for it */
 #define LABEL_MAX 16

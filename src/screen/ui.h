@@ -12,10 +12,10 @@
 #include "analysis/comparison.h"
 #include "base/text.h"
 #include "element/element.h"
-#include "screen/canvas.h"
-#include "screen/event.h"
+#include "canvas/canvas.h"
+#include "canvas/event.h"
 #include "element/selection.h"
-#include "screen/scale.h"
+#include "canvas/scale.h"
 #include "study/study.h"
 #include "study/trend.h"
 

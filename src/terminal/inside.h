@@ -9,8 +9,8 @@
 #include <sys/types.h>
 #include <termios.h>
 
-#include "screen/canvas.h"
-#include "screen/event.h"
+#include "canvas/canvas.h"
+#include "canvas/event.h"
 #include "terminal/guard.h"
 #include "terminal/palette.h"
 #include "terminal/sequence.h"

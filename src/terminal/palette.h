@@ -7,7 +7,7 @@
 #include <stdbool.h>
 #include <stdint.h>
 
-#include "screen/role.h"
+#include "canvas/role.h"
 
 /* What the terminal can do, poorest first. */
 enum color_tier {

@@ -9,8 +9,8 @@
 #include <stdio.h>
 
 #include "base/status.h"
-#include "screen/canvas.h"
-#include "screen/event.h"
+#include "canvas/canvas.h"
+#include "canvas/event.h"
 #include "terminal/palette.h"
 
 struct terminal_options {

@@ -10,7 +10,6 @@
 #include "support/golden.h"
 #include "support/near.h"
 #include "support/run.h"
-#include "test_plot.h"
 
 static void open_drawn(void)
 {
@@ -440,6 +439,5 @@ int main(void)
     tcase_add_test(tc, every_size_keeps_title_and_keys);
     tcase_add_test(tc, areas_stay_inside_and_apart);
     suite_add_tcase(suite, tc);
-    suite_add_tcase(suite, plot_cases());
     return run_suite(suite);
 }

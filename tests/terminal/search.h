@@ -6,7 +6,7 @@
 
 #include <stdint.h>
 
-#include "screen/role.h"
+#include "canvas/role.h"
 #include "support/oklab.h"
 
 /* 0xRRGGBB of an index 16 … 255, by a formula of its own. */

@@ -4,7 +4,7 @@
 #include <math.h>
 #include <stdlib.h>
 
-#include "screen/role.h"
+#include "canvas/role.h"
 #include "search.h"
 #include "support/near.h"
 #include "support/run.h"

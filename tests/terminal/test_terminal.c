@@ -6,7 +6,7 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screen/canvas.h"
+#include "canvas/canvas.h"
 #include "support/run.h"
 #include "terminal/sequence.h"
 #include "terminal/terminal.h"

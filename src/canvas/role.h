@@ -1,7 +1,7 @@
 /* SPDX-License-Identifier: MIT */
 /* What a cell of the canvas means; colours come later (terminal/palette.c). */
-#ifndef SCREEN_ROLE_H
-#define SCREEN_ROLE_H
+#ifndef CANVAS_ROLE_H
+#define CANVAS_ROLE_H
 
 /* Steps of the two colour scales. */
 #define RAMP_STEPS                                                             \

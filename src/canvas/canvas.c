@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-#include "screen/canvas.h"
+#include "canvas/canvas.h"
 
 #include <assert.h>
 #include <limits.h>

@@ -1,9 +1,10 @@
 /* SPDX-License-Identifier: MIT */
-#ifndef TESTS_SCREEN_TEST_PLOT_H
-#define TESTS_SCREEN_TEST_PLOT_H
+#ifndef TESTS_CANVAS_SUITES_H
+#define TESTS_CANVAS_SUITES_H
 
 #include <check.h>
 
 TCase *plot_cases(void);
+TCase *scale_case(void);
 
 #endif

@@ -1,8 +1,8 @@
 /* SPDX-License-Identifier: MIT */
 /* Everything that can happen to the screens, as plain values: a test is a list
  * of these. */
-#ifndef SCREEN_EVENT_H
-#define SCREEN_EVENT_H
+#ifndef CANVAS_EVENT_H
+#define CANVAS_EVENT_H
 
 #include <stdint.h>
 

@@ -2,11 +2,11 @@
 /* A plot on a part of the canvas: axes with ticks, then curves, filled areas,
  * marks and labels in the order of the calls. Every curve is drawn from the
  * same points in one of three ways: block elements, braille dots, or ASCII. */
-#ifndef SCREEN_PLOT_H
-#define SCREEN_PLOT_H
+#ifndef CANVAS_PLOT_H
+#define CANVAS_PLOT_H
 
-#include "screen/canvas.h"
-#include "screen/layout.h"
+#include "canvas/area.h"
+#include "canvas/canvas.h"
 
 /* PLOT_BLOCK: eighths and quarters of cells. On a canvas that is ASCII only
  * every style becomes PLOT_ASCII. */

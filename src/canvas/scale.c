@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-#include "screen/scale.h"
+#include "canvas/scale.h"
 
 #include <assert.h>
 #include <math.h>

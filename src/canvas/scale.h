@@ -1,12 +1,12 @@
 /* SPDX-License-Identifier: MIT */
 /* Classes of a coloured quantity: round bounds in the middle of the values,
  * open classes at both ends, so that one outlier does not flatten the rest. */
-#ifndef SCREEN_SCALE_H
-#define SCREEN_SCALE_H
+#ifndef CANVAS_SCALE_H
+#define CANVAS_SCALE_H
 
 #include <stdbool.h>
 
-#include "screen/role.h"
+#include "canvas/role.h"
 
 #define SCALE_CLASSES RAMP_STEPS
 

@@ -5,7 +5,8 @@
 #include <string.h>
 
 #include "base/text.h"
-#include "screen/canvas.h"
+#include "canvas/canvas.h"
+#include "canvas/suites.h"
 #include "support/run.h"
 
 static struct canvas fresh(int rows, int columns, bool ascii)
@@ -214,5 +215,7 @@ int main(void)
     tcase_add_test(tc, every_glyph_of_the_screens_has_its_twin);
     tcase_add_test(tc, twins_are_printable_ascii_and_ascii_is_its_own);
     suite_add_tcase(suite, tc);
+    suite_add_tcase(suite, plot_cases());
+    suite_add_tcase(suite, scale_case());
     return run_suite(suite);
 }

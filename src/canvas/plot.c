@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-#include "screen/plot.h"
+#include "canvas/plot.h"
 
 #include <assert.h>
 #include <math.h>

@@ -1,15 +1,15 @@
 /* SPDX-License-Identifier: MIT */
 /* What is drawn: rows and columns of one character and one role. No terminal
  * is needed to draw or to test it. */
-#ifndef SCREEN_CANVAS_H
-#define SCREEN_CANVAS_H
+#ifndef CANVAS_CANVAS_H
+#define CANVAS_CANVAS_H
 
 #include <stdbool.h>
 #include <stdint.h>
 
 #include "base/status.h"
-#include "screen/glyph.h"
-#include "screen/role.h"
+#include "canvas/glyph.h"
+#include "canvas/role.h"
 
 #define CANVAS_ROWS_MAX 1000
 #define CANVAS_COLUMNS_MAX 1000

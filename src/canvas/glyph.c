@@ -7,7 +7,7 @@
  * EastAsianWidth.txt) knows only narrow, neutral and ambiguous characters, less
  * the combining and the unassigned ones; ambiguous ones take one column on
  * terminals that are not set to an East Asian width. */
-#include "screen/glyph.h"
+#include "canvas/glyph.h"
 
 #include <stddef.h>
 

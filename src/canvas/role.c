@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-#include "screen/role.h"
+#include "canvas/role.h"
 
 #include <assert.h>
 

@@ -1,7 +1,7 @@
 /* SPDX-License-Identifier: MIT */
 /* Characters that may stand on a canvas. */
-#ifndef SCREEN_GLYPH_H
-#define SCREEN_GLYPH_H
+#ifndef CANVAS_GLYPH_H
+#define CANVAS_GLYPH_H
 
 #include <stdbool.h>
 #include <stdint.h>

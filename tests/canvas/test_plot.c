@@ -1,11 +1,10 @@
 /* SPDX-License-Identifier: MIT */
-#include "test_plot.h"
-
 #include <math.h>
 #include <stdlib.h>
 #include <string.h>
 
-#include "screen/plot.h"
+#include "canvas/plot.h"
+#include "canvas/suites.h"
 #include "support/near.h"
 
 #define POINTS 201
