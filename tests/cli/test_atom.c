@@ -95,11 +95,11 @@ static void nist_configuration(int z, int charge, char *out, size_t size)
 }
 
 static void check_nist(int z, int charge, const char *approximation,
-                       const char *options, int least)
+                       const char *options, int rows, int empty)
 {
     char line[512];
     char configuration[200];
-    int checked = 0;
+    int checked = 0, none = 0;
     nist_configuration(z, charge, configuration, sizeof configuration);
     snprintf(line, sizeof line,
              "atom %d --charge %d --configuration '%s' --format csv "
@@ -114,15 +114,20 @@ static void check_nist(int z, int charge, const char *approximation,
             strcmp(csv_cell(&want, i, "approximation"), approximation) != 0)
             continue;
         long row = find_nist(&got, label);
-        if (row < 0)
+        /* the table alone has minority levels without electrons */
+        if (row < 0 && strstr(label, "_up") != NULL) {
+            none++;
             continue;
+        }
+        ck_assert_msg(row >= 0, "Z=%d %s: no %s", z, approximation, label);
         near(csv_number(&got, (size_t)row, "value"),
              csv_number(&want, i, "value_hartree"), nist_tolerance(label), 0.0,
              "Z=%d charge %d %s %s", z, charge, approximation, label);
         ck_assert_str_eq(csv_cell(&got, (size_t)row, "unit"), "hartree");
         checked++;
     }
-    ck_assert_int_ge(checked, least);
+    ck_assert_int_eq(checked, rows);
+    ck_assert_int_eq(none, empty);
     csv_free(&got);
     csv_free(&want);
 }
@@ -130,14 +135,14 @@ static void check_nist(int z, int charge, const char *approximation,
 /* NIST SRD 141, see tests/atom/data/SOURCES.md. */
 START_TEST(the_energies_meet_the_nist_table)
 {
-    check_nist(7, 0, "LSD", "--functional lsd --relativity none", 10);
-    check_nist(10, 0, "LDA", "--functional lda --relativity none", 8);
-    check_nist(25, 0, "LSD", "--functional lsd --relativity none", 18);
-    check_nist(29, 1, "LDA", "--functional lda --relativity none", 11);
-    check_nist(47, 0, "RLDA", "--functional lda --relativity dirac", 20);
-    check_nist(54, 0, "LSD", "--functional lsd --relativity none", 27);
-    check_nist(92, 0, "LDA", "--functional lda --relativity none", 23);
-    check_nist(92, 1, "RLDA", "--functional lda --relativity dirac", 32);
+    check_nist(7, 0, "LSD", "--functional lsd --relativity none", 10, 1);
+    check_nist(10, 0, "LDA", "--functional lda --relativity none", 8, 0);
+    check_nist(25, 0, "LSD", "--functional lsd --relativity none", 18, 1);
+    check_nist(29, 1, "LDA", "--functional lda --relativity none", 11, 0);
+    check_nist(47, 0, "RLDA", "--functional lda --relativity dirac", 20, 0);
+    check_nist(54, 0, "LSD", "--functional lsd --relativity none", 27, 0);
+    check_nist(92, 0, "LDA", "--functional lda --relativity none", 23, 0);
+    check_nist(92, 1, "RLDA", "--functional lda --relativity dirac", 32, 0);
 }
 END_TEST
 
