@@ -79,7 +79,10 @@ START_TEST(slater_gives_every_published_example)
 }
 END_TEST
 
-START_TEST(clementi_gives_every_value_of_the_published_rules)
+/* zeff_from_rule is no printed value: another program evaluated the printed
+ * rules for the occupations named. test_rules.c has the printed coefficients
+ * and the printed table. */
+START_TEST(clementi_gives_what_another_evaluation_of_the_rules_gave)
 {
     struct csv csv = csv_read_file("data/clementi_rules_vs_table.csv");
     ck_assert_uint_eq(csv_rows(&csv), 95);
@@ -91,7 +94,7 @@ START_TEST(clementi_gives_every_value_of_the_published_rules)
         ck_assert(subshell_parse(csv_cell(&csv, i, "subshell"), &n, &l));
         struct reading r = ask(model_find("clementi"), &q, QUANTITY_ZEFF, n, l);
         ck_assert_int_eq(r.state, READING_OK);
-        /* The rows are printed with four places. */
+        /* The rows have four places. */
         near(r.value.value, csv_number(&csv, i, "zeff_from_rule"), 5.1e-5, 0,
              "Z=%d %s", z, csv_cell(&csv, i, "subshell"));
     }
@@ -283,7 +286,8 @@ int main(void)
     Suite *suite = suite_create("model");
     TCase *outside = tcase_create("outside values");
     tcase_add_test(outside, slater_gives_every_published_example);
-    tcase_add_test(outside, clementi_gives_every_value_of_the_published_rules);
+    tcase_add_test(outside,
+                   clementi_gives_what_another_evaluation_of_the_rules_gave);
     tcase_add_test(outside, allred_rochow_gives_the_printed_values);
     tcase_add_test(outside, shell_counting_of_the_second_period);
     suite_add_tcase(suite, outside);
