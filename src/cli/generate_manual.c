@@ -9,7 +9,7 @@
 #include "cli/command.h"
 #include "element/quantity.h"
 #include "model/registry.h"
-#include "screen/parts.h"
+#include "screens/parts.h"
 
 #define WIDTH 78 /* bytes of a line: the lint's limit is 80 */
 #define TEMPLATE_BYTES_MAX ((size_t)1 << 20)

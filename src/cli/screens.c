@@ -9,7 +9,7 @@
 #include "cli/commands.h"
 #include "cli/loop.h"
 #include "cli/remember.h"
-#include "screen/ui.h"
+#include "screens/ui.h"
 
 struct session {
     struct terminal *terminal;

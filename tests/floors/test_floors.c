@@ -19,7 +19,7 @@ static const struct {
 } floors[] = {
     {"base", 0},     {"numeric", 1}, {"element", 1}, {"atom", 2},
     {"zeta", 2},     {"refdata", 2}, {"canvas", 2},  {"analysis", 2},
-    {"model", 3},    {"export", 3},  {"study", 4},   {"screen", 5},
+    {"model", 3},    {"export", 3},  {"study", 4},   {"screens", 5},
     {"terminal", 6}, {"cli", 7},
 };
 #define FLOOR_COUNT (sizeof floors / sizeof floors[0])

@@ -11,7 +11,7 @@
 #include <unistd.h>
 
 #include "base/file.h"
-#include "screen/parts.h"
+#include "screens/parts.h"
 #include "support/run.h"
 
 static const char *readme_path;

@@ -1,0 +1,539 @@
+/* SPDX-License-Identifier: MIT */
+/* The screens as events in and a canvas out: no terminal. */
+#include "screens/test_ui.h"
+
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "export/rows.h"
+#include "screens/parts.h"
+#include "screens/desk.h"
+#include "screens/desk_keys.h"
+#include "support/csv.h"
+#include "support/golden.h"
+#include "support/run.h"
+
+/* Solves what the screen wants solved. */
+static void settle(void)
+{
+    bool changed;
+    while (ui_has_work(&ui))
+        ui_step(&ui, &changed);
+}
+
+static void check_golden(const char *name)
+{
+    settle();
+    char *text = drawn();
+    golden_check(name, text);
+    free(text);
+}
+
+/* True when the drawn characters hold the words. */
+static bool shows(const char *words)
+{
+    char *text = drawn();
+    char *roles = strstr(text, "\n==");
+    if (roles)
+        *roles = '\0';
+    bool found = strstr(text, words) != NULL;
+    free(text);
+    return found;
+}
+
+START_TEST(the_map_at_80x24)
+{
+    check_golden("map-80x24.txt");
+}
+END_TEST
+
+START_TEST(the_map_of_residuals_at_200x60)
+{
+    resize(60, 200);
+    type("vv");
+    check_golden("map-residual-200x60.txt");
+}
+END_TEST
+
+START_TEST(the_map_at_40x12_and_its_pane)
+{
+    resize(12, 40);
+    check_golden("map-40x12.txt");
+    key(KEY_CODE_ENTER);
+    check_golden("pane-40x12.txt");
+}
+END_TEST
+
+START_TEST(the_list_at_30x10)
+{
+    resize(10, 30);
+    check_golden("list-30x10.txt");
+}
+END_TEST
+
+START_TEST(three_species_compared_at_100x40)
+{
+    resize(40, 100);
+    static const int z[] = {40, 72, 22};
+    for (int i = 0; i < 3; i++) {
+        ui_select(&ui, z[i]);
+        type("p");
+    }
+    type("c");
+    check_golden("compare-100x40.txt");
+}
+END_TEST
+
+START_TEST(every_symbol_stands_on_the_map_at_80x24)
+{
+    char *text = drawn();
+    for (int z = 1; z <= Z_MAX; z++) {
+        struct map_layout l = layout_map(24, 80, GRID_18);
+        struct area a = layout_cell(&l, z, GRID_LU_LR);
+        const char *symbol = element_at(z)->symbol;
+        for (int i = 0; symbol[i]; i++)
+            ck_assert_msg(
+                canvas.cells[a.row * 80 + a.column + 1 + i].character ==
+                    (unsigned char)symbol[i],
+                "%s", symbol);
+    }
+    ck_assert_ptr_nonnull(strstr(text, "keys"));
+    ck_assert_ptr_nonnull(strstr(text, "quit"));
+    free(text);
+}
+END_TEST
+
+START_TEST(small_terminals_say_what_they_need)
+{
+    resize(5, 20);
+    ck_assert(shows("needs 24x6"));
+    ck_assert_int_eq(type("q"), EFFECT_QUIT);
+    resize(1, 1);
+    free(drawn());
+}
+END_TEST
+
+START_TEST(every_size_is_drawn_on_every_screen)
+{
+    static const char *const screens[] = {"m", "c", "s", "?"};
+    for (size_t s = 0; s < sizeof screens / sizeof screens[0]; s++) {
+        type(screens[s]);
+        for (int rows = 1; rows < 70; rows += 4)
+            for (int columns = 1; columns < 240; columns += 13) {
+                resize(rows, columns);
+                ui_draw(&ui, &canvas);
+                ck_assert_int_lt(canvas.cursor_row, rows);
+                ck_assert_int_lt(canvas.cursor_column, columns);
+            }
+        key(KEY_CODE_ESCAPE);
+    }
+}
+END_TEST
+
+START_TEST(a_capital_letter_jumps_and_arrows_move_on)
+{
+    type("Zr");
+    ck_assert_int_eq(ui.choice.z, 40);
+    key(KEY_CODE_RIGHT);
+    ck_assert_int_eq(ui.choice.z, 41);
+    type("/tung");
+    ck_assert(shows("element: tung"));
+    key(KEY_CODE_ESCAPE);
+    type("92");
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.z, 92);
+    type("/wolf");
+    key(KEY_CODE_ENTER);
+    ck_assert(shows("no element has this symbol, name or number"));
+    ck_assert_int_eq(ui.choice.z, 92);
+}
+END_TEST
+
+START_TEST(erasing_takes_whole_characters)
+{
+    struct event e = {.kind = EVENT_PASTE, .character = 0xE9};
+    type("/Z");
+    ui_update(&ui, &e);
+    key(KEY_CODE_ERASE);
+    ck_assert_str_eq(ui.prompt.text, "Z");
+    key(KEY_CODE_ERASE);
+    key(KEY_CODE_ERASE);
+    ck_assert_str_eq(ui.prompt.text, "");
+}
+END_TEST
+
+START_TEST(pasted_text_never_is_a_command)
+{
+    struct event e = {.kind = EVENT_PASTE, .character = 'q'};
+    ck_assert_int_eq(ui_update(&ui, &e), EFFECT_NONE);
+}
+END_TEST
+
+START_TEST(the_cursor_stands_on_the_selection)
+{
+    type("Og");
+    key(KEY_CODE_ENTER);
+    ui_draw(&ui, &canvas);
+    struct map_layout l = layout_map(24, 80, GRID_18);
+    struct area a = layout_cell(&l, 118, GRID_LU_LR);
+    ck_assert_int_eq(canvas.cursor_row, a.row);
+    ck_assert_int_eq(canvas.cursor_column, a.column + 1);
+}
+END_TEST
+
+START_TEST(charges_and_subshells_are_chosen)
+{
+    type("++");
+    ck_assert_int_eq(ui.choice.charge, 2);
+    ck_assert(shows("charge 2+"));
+    type("o");
+    ck_assert(shows("outermost"));
+    key(KEY_CODE_END);
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.n, 3);
+    ck_assert_int_eq(ui.choice.l, 2);
+    type("---");
+    ck_assert_int_eq(ui.choice.charge, -1);
+    type("He");
+    key(KEY_CODE_ENTER);
+    type("++++");
+    ck_assert(shows("has no charge"));
+}
+END_TEST
+
+START_TEST(a_site_is_chosen_with_its_radius_in_sight)
+{
+    char buffer[UI_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    ui_select(&ui, 31);
+    type("+++wr");
+    key(KEY_CODE_ENTER);
+    type("@");
+    /* R. D. Shannon, Acta Cryst. A32, 751 (1976): Ga3+ IV 47 pm, effective
+     * ionic radius. */
+    ck_assert(shows("IV  47 pm"));
+    key(KEY_CODE_DOWN);
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+    ck_assert(shows("coordination IV"));
+    ui.scope = SCOPE_ROW;
+    ui_export_command(&ui, &t);
+    ck_assert_ptr_nonnull(strstr(buffer, "--coordination IV"));
+    char view[2048];
+    t = text_over(view, sizeof view);
+    ui_save_view(&ui, &t);
+    ui_clear(&ui);
+    ui_init(&ui, study);
+    ui_load_view(&ui, view);
+    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+}
+END_TEST
+
+START_TEST(a_wrong_configuration_stays_to_be_mended)
+{
+    type(":x");
+    ck_assert_int_eq(key(KEY_CODE_ENTER), EFFECT_REDRAW);
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_CONFIGURATION);
+    ck_assert(shows("is no subshell"));
+    type("y");
+    ck_assert(!shows("is no subshell"));
+    key(KEY_CODE_ESCAPE);
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
+}
+END_TEST
+
+START_TEST(quantities_without_a_model_show_their_reference)
+{
+    type("w");
+    key(KEY_CODE_END);
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.quantity, QUANTITY_POLARIZABILITY);
+    ck_assert_int_eq(ui.choice.shown, SHOWN_REFERENCE);
+    type("v");
+    ck_assert(shows("no model computes"));
+    type("b");
+    ck_assert(shows("nothing to choose from"));
+}
+END_TEST
+
+START_TEST(a_chooser_goes_by_letter_and_can_be_left)
+{
+    type("w");
+    type("i");
+    key(KEY_CODE_ENTER);
+    ck_assert_int_eq(ui.choice.quantity, QUANTITY_IONIZATION);
+    type("w");
+    key(KEY_CODE_ESCAPE);
+    ck_assert_int_eq(ui.choice.quantity, QUANTITY_IONIZATION);
+    type("u");
+    type("k");
+    key(KEY_CODE_DOWN);
+    key(KEY_CODE_ENTER);
+    ck_assert(shows("kJ/mol"));
+}
+END_TEST
+
+/* What an export of this scope holds, as text. The caller frees it. */
+static char *exported(enum export_scope scope)
+{
+    struct status st = status_ok();
+    char *text = NULL;
+    size_t size = 0;
+    FILE *out = open_memstream(&text, &size);
+    ck_assert_ptr_nonnull(out);
+    ui.scope = scope;
+    ck_assert(ui_export(&ui, out, &st));
+    fclose(out);
+    return text;
+}
+
+START_TEST(exports_ask_for_a_file_and_hold_what_is_shown)
+{
+    type("e");
+    key(KEY_CODE_ENTER);
+    ck_assert(shows("write CSV to: Fe-zeff.csv"));
+    ck_assert_int_eq(key(KEY_CODE_ENTER), EFFECT_WRITE);
+    ck_assert_str_eq(ui.path, "Fe-zeff.csv");
+    ck_assert(!ui.replace);
+    char *row = exported(SCOPE_ROW);
+    struct csv csv = csv_read_text(row);
+    int offering = 0;
+    for (int m = 0; m < model_count(); m++)
+        offering += model_offer_for(model_at(m), QUANTITY_ZEFF, NULL) >= 0;
+    ck_assert_uint_eq(csv_rows(&csv), (size_t)offering);
+    ck_assert_str_eq(csv_cell(&csv, 0, "symbol"), "Fe");
+    csv_free(&csv);
+    free(row);
+    char *sheet = exported(SCOPE_SHEET);
+    csv = csv_read_text(sheet);
+    ck_assert_uint_eq(csv_rows(&csv), Z_MAX);
+    csv_free(&csv);
+    free(sheet);
+}
+END_TEST
+
+START_TEST(an_existing_file_is_asked_about)
+{
+    snprintf(ui.path, sizeof ui.path, "there.csv");
+    ui_ask_overwrite(&ui);
+    ck_assert(shows("there.csv exists; overwrite it? y/n"));
+    ck_assert_int_eq(type("n"), EFFECT_REDRAW);
+    ck_assert(shows("left as it was"));
+    ui_ask_overwrite(&ui);
+    ck_assert_int_eq(type("y"), EFFECT_WRITE);
+    ck_assert(ui.replace);
+}
+END_TEST
+
+START_TEST(the_command_of_an_export_names_every_choice)
+{
+    char buffer[UI_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    ui.choice.charge = 2;
+    ui.choice.n = 3;
+    ui.choice.l = 2;
+    ui.scope = SCOPE_SHEET;
+    ui_export_command(&ui, &t);
+    ck_assert_str_eq(buffer, "outershell list --quantity zeff --model slater "
+                             "--charge 2 --subshell 3d --format csv");
+}
+END_TEST
+
+START_TEST(a_key_behind_a_whole_symbol_ends_the_jump)
+{
+    type("Nip");
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
+    ck_assert_int_eq(ui.choice.z, 28);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    type("Cop"); /* copper */
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
+    ck_assert_int_eq(ui.choice.z, 29);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    key(KEY_CODE_ENTER);
+    type("Sodiux"); /* a slip does not drop the pins */
+    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
+    ck_assert_int_eq(ui.choice.pin_count, 1);
+    ck_assert(shows("no such element"));
+}
+END_TEST
+
+/* A long file name leaves neither the command nor the question cut off. */
+START_TEST(long_messages_are_read_whole)
+{
+    char path[181];
+    memset(path, 'd', sizeof path - 1);
+    path[sizeof path - 1] = '\0';
+    ui_report(&ui, false, "%s written; the same: outershell END", path);
+    ck_assert(shows("outershell END"));
+    ck_assert(shows("? keys"));
+    snprintf(ui.path, sizeof ui.path, "%s", path);
+    ui_ask_overwrite(&ui);
+    ck_assert(shows("exists; overwrite it? y/n"));
+}
+END_TEST
+
+START_TEST(a_narrow_prompt_shows_what_is_typed)
+{
+    resize(6, 30);
+    type(":");
+    key(KEY_CODE_CLEAR);
+    type("[Ar] 3d7");
+    ck_assert(shows("configuration"));
+    ck_assert(shows("[Ar] 3d7"));
+}
+END_TEST
+
+/* The second set belongs to the chosen quantity: below it, where others are
+ * listed, it has no place, least of all in their units. */
+START_TEST(a_second_set_stays_with_its_quantity)
+{
+    ui.choice.quantity = QUANTITY_ELECTRONEGATIVITY;
+    ui.choice.against = reference_find(study_references(ui.study),
+                                       "electronegativity_allen_2000");
+    ck_assert_ptr_nonnull(ui.choice.against);
+    ui.choice.units[DIMENSION_ENERGY] = unit_find("cm-1");
+    resize(60, 200);
+    settle();
+    ck_assert(shows("I, cm-1"));
+}
+END_TEST
+
+START_TEST(a_coordination_is_never_cut_to_another)
+{
+    type("Co");
+    key(KEY_CODE_ENTER);
+    type("++");
+    ui.choice.quantity = QUANTITY_RADIUS;
+    ui.choice.reference = reference_find(study_references(ui.study),
+                                         "ionic_effective_shannon_1976");
+    settle();
+    ck_assert(shows("coordination VI; high spin"));
+}
+END_TEST
+
+START_TEST(a_view_comes_back_as_it_was_left)
+{
+    char first[2048];
+    char second[2048];
+    struct text t = text_over(first, sizeof first);
+    type("v+");
+    type("p");
+    ui.choice.n = 3;
+    ui.choice.l = 1;
+    ui.choice.units[DIMENSION_LENGTH] = unit_find("bohr");
+    ui_save_view(&ui, &t);
+    ui_init(&ui, study);
+    ui_load_view(&ui, first);
+    t = text_over(second, sizeof second);
+    ui_save_view(&ui, &t);
+    ck_assert_str_eq(first, second);
+    ck_assert_ptr_nonnull(strstr(first, "pin Fe+"));
+}
+END_TEST
+
+START_TEST(a_broken_view_is_passed_over)
+{
+    ui_load_view(&ui, "quantity\nmodel none\nelement Xx\ncharge 999\n\n\nunit\n"
+                      "subshell 9z\npin Fe99+\npin \nreference nothing\n"
+                      "shown never\nnonsense of the past\ncolumns x");
+    ck_assert_int_eq(ui.choice.z, 26);
+    ck_assert_int_eq(ui.choice.charge, 0);
+    ck_assert_int_eq(ui.choice.pin_count, 0);
+    free(drawn());
+}
+END_TEST
+
+START_TEST(twelve_pins_and_no_more)
+{
+    for (int z = 1; z <= PIN_MAX + 1; z++) {
+        ui_select(&ui, z);
+        type("p");
+    }
+    ck_assert_int_eq(ui.choice.pin_count, PIN_MAX);
+    ck_assert(shows("not pinned"));
+    type("c");
+    key(KEY_CODE_RIGHT);
+    free(drawn());
+    type("x");
+    ck_assert_int_eq(ui.choice.pin_count, 0);
+}
+END_TEST
+
+START_TEST(keys_do_one_thing_on_each_screen)
+{
+    for (int screen = 0; screen <= SCREEN_KEYS; screen++)
+        for (int i = 0; i < key_row_count(); i++)
+            for (int k = 0; k < i; k++) {
+                const struct key_row *a = key_row_at(i);
+                const struct key_row *b = key_row_at(k);
+                bool both = a->screens >> screen & b->screens >> screen & 1;
+                ck_assert_msg(!both || a->character != b->character ||
+                                  a->key != b->key,
+                              "%s", a->name);
+            }
+}
+END_TEST
+
+START_TEST(random_keys_always_leave_something_to_draw)
+{
+    unsigned seed = 12345;
+    for (int i = 0; i < 3000; i++) {
+        seed = seed * 1103515245u + 12345u;
+        unsigned r = seed >> 16;
+        if (r % 3 == 0)
+            key((enum key)(1 + r / 3 % KEY_CODE_REPAINT));
+        else if (r % 97 == 1)
+            resize((int)(1 + r / 97 % 60), (int)(1 + r / 7 % 210));
+        else {
+            char c[2] = {(char)(' ' + r / 3 % 95), '\0'};
+            type(c);
+        }
+        if (i % 5 == 0)
+            ui_draw(&ui, &canvas);
+    }
+}
+END_TEST
+
+int main(void)
+{
+    Suite *suite = suite_create("screen");
+    suite_add_tcase(suite, layout_case());
+    TCase *golden = tcase_create("golden screens");
+    tcase_add_checked_fixture(golden, open_ui, close_ui);
+    tcase_add_test(golden, the_map_at_80x24);
+    tcase_add_test(golden, the_map_of_residuals_at_200x60);
+    tcase_add_test(golden, the_map_at_40x12_and_its_pane);
+    tcase_add_test(golden, the_list_at_30x10);
+    tcase_add_test(golden, three_species_compared_at_100x40);
+    suite_add_tcase(suite, golden);
+    TCase *use = tcase_create("use");
+    tcase_add_checked_fixture(use, open_ui, close_ui);
+    tcase_add_test(use, every_symbol_stands_on_the_map_at_80x24);
+    tcase_add_test(use, small_terminals_say_what_they_need);
+    tcase_add_test(use, every_size_is_drawn_on_every_screen);
+    tcase_add_test(use, a_capital_letter_jumps_and_arrows_move_on);
+    tcase_add_test(use, erasing_takes_whole_characters);
+    tcase_add_test(use, pasted_text_never_is_a_command);
+    tcase_add_test(use, the_cursor_stands_on_the_selection);
+    tcase_add_test(use, charges_and_subshells_are_chosen);
+    tcase_add_test(use, a_site_is_chosen_with_its_radius_in_sight);
+    tcase_add_test(use, a_wrong_configuration_stays_to_be_mended);
+    tcase_add_test(use, quantities_without_a_model_show_their_reference);
+    tcase_add_test(use, a_chooser_goes_by_letter_and_can_be_left);
+    tcase_add_test(use, exports_ask_for_a_file_and_hold_what_is_shown);
+    tcase_add_test(use, an_existing_file_is_asked_about);
+    tcase_add_test(use, the_command_of_an_export_names_every_choice);
+    tcase_add_test(use, a_key_behind_a_whole_symbol_ends_the_jump);
+    tcase_add_test(use, long_messages_are_read_whole);
+    tcase_add_test(use, a_narrow_prompt_shows_what_is_typed);
+    tcase_add_test(use, a_second_set_stays_with_its_quantity);
+    tcase_add_test(use, a_coordination_is_never_cut_to_another);
+    tcase_add_test(use, a_view_comes_back_as_it_was_left);
+    tcase_add_test(use, a_broken_view_is_passed_over);
+    tcase_add_test(use, twelve_pins_and_no_more);
+    tcase_add_test(use, keys_do_one_thing_on_each_screen);
+    tcase_add_test(use, random_keys_always_leave_something_to_draw);
+    suite_add_tcase(suite, use);
+    return run_suite(suite);
+}

@@ -1,0 +1,9 @@
+/* SPDX-License-Identifier: MIT */
+#ifndef TESTS_SCREENS_TEST_UI_H
+#define TESTS_SCREENS_TEST_UI_H
+
+#include <check.h>
+
+TCase *layout_case(void);
+
+#endif
