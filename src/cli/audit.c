@@ -60,6 +60,10 @@ bool cli_audit(struct request *r, struct status *st)
     struct output out;
     struct audit audit = {0};
     bool ok = output_check(r, st) && gather(r, &audit, st);
+    if (ok && audit.count == 0 && r->model_count == 0)
+        ok = status_fail(st, STATUS_USAGE,
+                         "audit: no model is asked; --against sets two data "
+                         "sets against each other");
     if (ok && audit.count == 0)
         ok = status_fail(st, STATUS_USAGE,
                          "audit: no model computes any of the quantities "

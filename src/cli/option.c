@@ -22,7 +22,9 @@ static const struct option options[OPTION_COUNT] = {
      "quantities to show, parted by commas (list and audit: "
      "zeff,radius,ionization; compare: all)"},
     {OPTION_MODEL, "model", 'm', "IDS", OPTION_VALUE, WORDS_MODEL, true,
-     LIST | COMPARE | AUDIT, "models to ask, parted by commas (default: all)"},
+     LIST | COMPARE | AUDIT,
+     "models to ask, parted by commas; none: stored values alone (default: "
+     "all)"},
     {OPTION_CHARGE, "charge", 'c', "N", OPTION_VALUE, WORDS_NONE, false,
      LIST | COMPARE | ATOM | AUDIT,
      "charge of every chosen element that carries none itself, such as 2 or "
@@ -50,8 +52,9 @@ static const struct option options[OPTION_COUNT] = {
      "without --model and --quantity the two sets alone"},
     {OPTION_COORDINATION, "coordination", 0, "CN", OPTION_VALUE,
      WORDS_COORDINATION, false, LIST | COMPARE | AUDIT,
-     "coordination of the site, for sets of ionic radii: roman, with PY for "
-     "pyramidal and SQ for square (default: the set's own, VI)"},
+     "coordination of the site, for sets of ionic radii: roman or a number, "
+     "such as VI, vi or 6, with PY for pyramidal and SQ for square (default: "
+     "the set's own, VI)"},
     {OPTION_SPIN, "spin", 0, "STATE", OPTION_VALUE, WORDS_SPIN, false,
      LIST | COMPARE | AUDIT,
      "low or high, the spin state of the ion, for sets of ionic radii "

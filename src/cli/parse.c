@@ -167,6 +167,11 @@ static bool unknown_command(const char *word, struct status *st)
         return status_fail(st, STATUS_USAGE,
                            "%s: no such command; did you mean list %s?", word,
                            word);
+    const struct element *element = element_nearest(word);
+    if (element)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: no such command; did you mean list %s?", word,
+                           element->symbol);
     return status_fail(st, STATUS_USAGE, "%.40s: no such command; expected %s",
                        word[0] ? word : "''", all);
 }

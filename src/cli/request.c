@@ -169,12 +169,19 @@ static bool read_models(struct request *r, struct status *st)
                       r->call->command->id != COMMAND_COMPARE;
     for (int m = 0; !list && !sets_alone && m < model_count(); m++)
         r->models[r->model_count++] = model_at(m);
+    if (list && strcmp(list, WORD_NO_MODEL) == 0)
+        return true;
     while (list) {
         if (!words_next(&list, word))
             return too_long(OPTION_MODEL, list, st);
         int m = place_of(r, OPTION_MODEL, word, st);
         if (m < 0)
             return false;
+        if (m >= model_count())
+            return status_fail(st, STATUS_USAGE,
+                               "--model %s: stands alone; expected it without "
+                               "a model beside it",
+                               WORD_NO_MODEL);
         for (int i = 0; i < r->model_count; i++)
             if (r->models[i] == model_at(m))
                 return twice(OPTION_MODEL, word, st);
@@ -447,27 +454,33 @@ static bool has_sites(const struct request *r)
            r->set_count == 0;
 }
 
+/* Roman in any case, or a number: more than the words that are offered. */
+static bool read_coordination(struct request *r, struct status *st)
+{
+    const char *word = given(r, OPTION_COORDINATION);
+    int place;
+    return !word || coordination_find(word, &r->site.coordination) ||
+           read_choice(r, OPTION_COORDINATION, &place, st);
+}
+
 /* Coordination and spin of the site. */
 static bool read_site(struct request *r, struct status *st)
 {
-    int coordination = -1;
     int spin = -1;
-    if (!read_choice(r, OPTION_COORDINATION, &coordination, st) ||
-        !read_choice(r, OPTION_SPIN, &spin, st))
+    if (!read_coordination(r, st) || !read_choice(r, OPTION_SPIN, &spin, st))
         return false;
-    /* The words leave out the first enumerators, which stand for none. */
-    r->site.coordination =
-        (enum coordination)(COORDINATION_NONE + 1 + coordination);
+    bool coordination = r->site.coordination != COORDINATION_NONE;
+    /* The words leave out the first enumerator, which stands for none. */
     r->site.spin = (enum spin_state)(SPIN_NONE + 1 + spin);
-    if ((coordination < 0 && spin < 0) || has_sites(r))
+    if ((!coordination && spin < 0) || has_sites(r))
         return true;
     return status_fail(
         st, STATUS_USAGE,
         "--%s %s: none of the sets taken tells sites apart; "
         "expected --reference ionic_effective_shannon_1976 or "
         "another set of ionic radii",
-        coordination >= 0 ? "coordination" : "spin",
-        given(r, coordination >= 0 ? OPTION_COORDINATION : OPTION_SPIN));
+        coordination ? "coordination" : "spin",
+        given(r, coordination ? OPTION_COORDINATION : OPTION_SPIN));
 }
 
 /* The term to solve for: one of the chosen models must know the choice. */

@@ -28,13 +28,20 @@ static const char *const subshells[] = {
     "4f", "5s", "5p", "5d", "5f", "6s", "6p", "6d", "6f",
     "7s", "7p", "7d", "7f", "8s", "8p", "8d", "8f"};
 
-static void add(struct words *words, const char *word)
+static void add_titled(struct words *words, const char *word, const char *title)
 {
     for (int i = 0; i < words->count; i++)
         if (strcmp(words->items[i], word) == 0)
             return;
-    if (words->count < WORD_MAX)
-        words->items[words->count++] = word;
+    if (words->count == WORD_MAX)
+        return;
+    words->titles[words->count] = title;
+    words->items[words->count++] = word;
+}
+
+static void add(struct words *words, const char *word)
+{
+    add_titled(words, word, "");
 }
 
 static void add_all(struct words *words, const char *const *items, size_t count)
@@ -53,7 +60,7 @@ static void add_units(struct words *words)
     for (size_t i = 0; i < unit_count(); i++) {
         enum dimension d = unit_at(i)->dimension;
         if (d == DIMENSION_LENGTH || d == DIMENSION_ENERGY)
-            add(words, unit_at(i)->id);
+            add_titled(words, unit_at(i)->id, unit_at(i)->title);
     }
 }
 
@@ -64,15 +71,18 @@ void words_fill(struct words *words, enum word_kind kind,
     switch (kind) {
     case WORDS_QUANTITY:
         for (int q = 0; q < QUANTITY_COUNT; q++)
-            add(words, quantity_at((enum quantity_id)q)->id);
+            add_titled(words, quantity_at((enum quantity_id)q)->id,
+                       quantity_at((enum quantity_id)q)->title);
         break;
     case WORDS_MODEL:
         for (int m = 0; m < model_count(); m++)
-            add(words, model_at(m)->id);
+            add_titled(words, model_at(m)->id, model_at(m)->title);
+        add(words, WORD_NO_MODEL);
         break;
     case WORDS_REFERENCE:
         for (int i = 0; references && i < references->count; i++)
-            add(words, references->items[i].provenance->id);
+            add_titled(words, references->items[i].provenance->id,
+                       references->items[i].provenance->title);
         break;
     case WORDS_COORDINATION:
         for (int c = COORDINATION_NONE + 1; c < COORDINATION_COUNT; c++)
@@ -80,11 +90,13 @@ void words_fill(struct words *words, enum word_kind kind,
         break;
     case WORDS_SPIN:
         for (int s = SPIN_NONE + 1; s < SPIN_COUNT; s++)
-            add(words, spin_id((enum spin_state)s));
+            add_titled(words, spin_id((enum spin_state)s),
+                       spin_word((enum spin_state)s));
         break;
     case WORDS_EVIDENCE:
         for (int e = 0; e < EVIDENCE_COUNT; e++)
-            add(words, evidence_id((enum evidence)e));
+            add_titled(words, evidence_id((enum evidence)e),
+                       evidence_word((enum evidence)e));
         break;
     case WORDS_SORT:
         for (int s = 0; s < ROW_ORDER_COUNT; s++)
@@ -105,11 +117,13 @@ void words_fill(struct words *words, enum word_kind kind,
         break;
     case WORDS_FUNCTIONAL:
         for (int f = 0; f < FUNCTIONAL_COUNT; f++)
-            add(words, functional_id((enum functional)f));
+            add_titled(words, functional_id((enum functional)f),
+                       functional_title((enum functional)f));
         break;
     case WORDS_RELATIVITY:
         for (int i = 0; i < RELATIVITY_COUNT; i++)
-            add(words, relativity_id((enum relativity)i));
+            add_titled(words, relativity_id((enum relativity)i),
+                       relativity_title((enum relativity)i));
         break;
     case WORDS_FORMAT:
         ADD_ARRAY(words, formats);
@@ -132,11 +146,14 @@ const char *word_nearest(const char *word, const char *const *items, int count)
     size_t least = SIZE_MAX;
     size_t length = strlen(word);
     for (int i = 0; i < count; i++) {
+        size_t other = strlen(items[i]);
+        size_t longer = other > length ? other : length;
+        size_t shorter = other > length ? length : other;
         size_t distance = text_edit_distance(word, items[i]);
-        size_t allowed = strlen(items[i]) / 3 + 1;
         if (length >= 2 && text_starts_ignoring_case(items[i], word))
             distance = 1;
-        if (distance <= allowed && distance < least && distance < length) {
+        if (distance <= longer / 4 + 1 && distance < least &&
+            distance < shorter) {
             least = distance;
             best = items[i];
         }
@@ -144,11 +161,49 @@ const char *word_nearest(const char *word, const char *const *items, int count)
     return best;
 }
 
+/* True when `part` stands somewhere in a text, in any case. */
+static bool holds(const char *text, const char *part)
+{
+    for (; *text; text++)
+        if (text_starts_ignoring_case(text, part))
+            return true;
+    return false;
+}
+
+int words_holding(const struct words *words, const char *part,
+                  const char *found[WORD_MAX])
+{
+    int count = 0;
+    size_t length = strlen(part);
+    for (int i = 0; i < words->count; i++)
+        if (text_same_ignoring_case(words->items[i], part)) {
+            found[0] = words->items[i];
+            return 1;
+        }
+    for (int i = 0; i < words->count && length >= 2; i++) {
+        bool any =
+            length > 2
+                ? holds(words->items[i], part) || holds(words->titles[i], part)
+                : text_starts_ignoring_case(words->items[i], part);
+        if (any)
+            found[count++] = words->items[i];
+    }
+    return count;
+}
+
 void words_join(struct text *t, const char *const *items, int count,
                 const char *conjunction)
 {
     for (int i = 0; i < count; i++) {
-        if (i > 0 && i == count - 1)
+        bool last = i == count - 1;
+        size_t more = last ? 0 : strlen(", ...");
+        size_t need = strlen(items[i]) + strlen(conjunction) + 2 + more;
+        if (t->length + need >= t->capacity) {
+            text_add(t, i > 0 ? ", ..." : "...");
+            t->cut = true;
+            return;
+        }
+        if (i > 0 && last)
             text_addf(t, " %s ", conjunction);
         else if (i > 0)
             text_add(t, ", ");
@@ -171,23 +226,31 @@ bool word_refuse(const struct option *option, const char *word,
                  const struct words *words, struct status *st)
 {
     char all[WORD_LIST_TEXT_MAX];
+    char meant[WORD_LIST_TEXT_MAX];
+    const char *near[WORD_MAX];
     struct text t = text_over(all, sizeof all);
-    const char *near = word_nearest(word, words->items, words->count);
+    struct text m = text_over(meant, sizeof meant);
+    int count = words_holding(words, word + strspn(word, " "), near);
+    /* Roman numbers a letter apart are other numbers: none is proposed. */
+    if (count == 0 && option->words != WORDS_COORDINATION) {
+        near[0] = word_nearest(word, words->items, words->count);
+        count = near[0] != NULL;
+    }
     words_join(&t, words->items, words->count, "or");
+    words_join(&m, near, count, "or");
     char shown[WORD_SHOWN_MAX];
     struct text w = text_over(shown, sizeof shown);
     text_add(&w, word[0] ? word : "an empty word");
     const char *rest = w.cut ? "..." : "";
-    if (near && t.cut)
+    if (count > 0 && (t.cut || t.length + m.length > WORD_LIST_TEXT_MAX - 50))
         return status_fail(st, STATUS_USAGE,
                            "--%s %s%s: not accepted; did you mean %s?",
-                           option->name, shown, rest, near);
-    if (near)
+                           option->name, shown, rest, meant);
+    if (count > 0)
         return status_fail(st, STATUS_USAGE,
                            "--%s %s%s: not accepted; did you mean %s? "
                            "(expected %s)",
-                           option->name, shown, rest, near, all);
-    return status_fail(st, STATUS_USAGE,
-                       "--%s %s%s: not accepted; expected %s%s", option->name,
-                       shown, rest, all, t.cut ? "..." : "");
+                           option->name, shown, rest, meant, all);
+    return status_fail(st, STATUS_USAGE, "--%s %s%s: not accepted; expected %s",
+                       option->name, shown, rest, all);
 }

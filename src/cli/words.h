@@ -12,10 +12,16 @@
 #define WORD_TEXT_MAX 64       /* one word of a list, terminator included */
 #define WORD_LIST_TEXT_MAX 400 /* what fits into a message */
 
-/* Words of a kind in their order of display; borrowed. */
+/* The word that stands for no model: stored values alone. The last one of its
+ * kind. */
+#define WORD_NO_MODEL "none"
+
+/* Words of a kind in their order of display, and what each stands for, ""
+ * where that is the word itself; borrowed. */
 struct words {
     int count;
     const char *items[WORD_MAX];
+    const char *titles[WORD_MAX];
 };
 
 /* All words of a kind; none for WORDS_NONE and WORDS_FILE. references may be
@@ -24,10 +30,18 @@ void words_fill(struct words *words, enum word_kind kind,
                 const struct reference_list *references);
 
 /* The one of items[count] that a misspelt word may have meant: it starts with
- * it or differs in at most a third of its letters. NULL when none is near. */
+ * it or differs in at most a quarter of the letters and one more, and in fewer
+ * than the shorter of the two has. NULL when none is near. */
 const char *word_nearest(const char *word, const char *const *items, int count);
 
-/* Writes "a, b or c" with the given last conjunction. */
+/* Those of the words whose id or title holds `part`, in any case; of two
+ * letters only the beginning of an id counts. One that is it in another case
+ * stands alone. found[WORD_MAX] gets them; gives how many. */
+int words_holding(const struct words *words, const char *part,
+                  const char *found[WORD_MAX]);
+
+/* Writes "a, b or c" with the given last conjunction; where not all fit, those
+ * that do and "...". */
 void words_join(struct text *t, const char *const *items, int count,
                 const char *conjunction);
 
@@ -35,8 +49,9 @@ void words_join(struct text *t, const char *const *items, int count,
  * the end. False when the word is longer than out. */
 bool words_next(const char **list, char out[WORD_TEXT_MAX]);
 
-/* Refuses a word that is none of its kind, naming option, word, the nearest
- * word, and all that are accepted as far as they fit. Returns false. */
+/* Refuses a word that is none of its kind, naming option, word, those that it
+ * is a part of or the nearest one, and all that are accepted as far as they
+ * fit. Returns false. */
 bool word_refuse(const struct option *option, const char *word,
                  const struct words *words, struct status *st);
 

@@ -185,16 +185,12 @@ const struct element *element_find(const char *text)
     return found ? found : by_name(text);
 }
 
-const struct element *element_nearest(const char *text)
+/* The element whose name differs least from a text, in at most one letter of a
+ * short one and two of a longer one. */
+static const struct element *nearest_name(const char *text)
 {
-    /* A wrong case is the commonest slip, and no edit at all. */
-    for (int z = 1; z <= Z_MAX; z++)
-        if (text_same_ignoring_case(elements[z - 1].symbol, text))
-            return &elements[z - 1];
-    if (strlen(text) < 4)
-        return NULL;
     const struct element *best = NULL;
-    size_t least = 3;
+    size_t least = strlen(text) > 4 ? 3 : 2;
     for (int z = 1; z <= Z_MAX; z++) {
         size_t d = text_edit_distance(elements[z - 1].name, text);
         if (d < least) {
@@ -203,6 +199,46 @@ const struct element *element_nearest(const char *text)
         }
     }
     return best;
+}
+
+/* The only one whose name begins with a text; NULL when there is none or there
+ * are several. */
+static const struct element *only_beginning(const char *text)
+{
+    const struct element *found = NULL;
+    for (int z = 1; z <= Z_MAX; z++) {
+        if (!text_starts_ignoring_case(elements[z - 1].name, text))
+            continue;
+        if (found)
+            return NULL;
+        found = &elements[z - 1];
+    }
+    return found;
+}
+
+const struct element *element_nearest(const char *text)
+{
+    size_t length = strlen(text);
+    /* A wrong case is the commonest slip, and no edit at all. */
+    for (int z = 1; z <= Z_MAX; z++)
+        if (text_same_ignoring_case(elements[z - 1].symbol, text))
+            return &elements[z - 1];
+    /* One letter wrong in a symbol makes another symbol as a rule: of so short
+     * a text nothing can be said. */
+    if (length < 3)
+        return NULL;
+    const struct element *near = nearest_name(text);
+    if (!near)
+        near = only_beginning(text);
+    /* A symbol with a letter too many. */
+    for (int z = 1; !near && length == 3 && z <= Z_MAX; z++) {
+        const struct element *e = &elements[z - 1];
+        if (strlen(e->symbol) == 2 &&
+            text_starts_ignoring_case(text, e->symbol) &&
+            strchr("abcdefghijklmnopqrstuvwxyz", text[2]))
+            near = e;
+    }
+    return near;
 }
 
 const struct element *element_jump(const char *text)

@@ -31,8 +31,9 @@ const struct element *element_by_symbol(const char *symbol);
  * cesium, sulfur and sulphur), or atomic number; NULL when there is none. */
 const struct element *element_find(const char *text);
 
-/* The element whose symbol or name is nearest to a misspelt text, for a
- * hint; NULL when nothing is near. */
+/* The element that a misspelt text may have meant, for a hint: its symbol in
+ * another case or with a letter too many ("Fee"), a name that differs in a
+ * letter or two, the beginning of one name alone. NULL when nothing is near. */
 const struct element *element_nearest(const char *text);
 
 /* What someone types to jump: an exact symbol first, then a number, a symbol

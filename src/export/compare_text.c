@@ -134,12 +134,13 @@ static void add_quantity(struct table *table,
         table_cell(table, "");
 }
 
-/* The numbers of atom 0 and of the atoms from … to - 1. */
+/* The numbers of atom 0 and of the atoms from … to - 1, which may be none. */
 static bool write_numbers(FILE *out, const struct comparison *c, int from,
                           int to, const struct table_style *style,
                           struct legend *legend, struct status *st)
 {
-    struct table table = table_new(to - from == 1 ? "llrrssl" : "llrrssrssl");
+    static const char *const aligned[] = {"llrl", "llrrssl", "llrrssrssl"};
+    struct table table = table_new(aligned[to - from]);
     add_heading(&table, c, from, to);
     for (int i = 0; i < c->line_count; i++) {
         const struct comparison_line *line = &c->lines[i];
@@ -171,14 +172,16 @@ bool compare_write_text(FILE *out, const struct comparison *comparison,
     struct legend legend = {0};
     bool ok = true;
     write_facts(out, comparison, style);
-    for (int from = 1; ok && from < comparison->count; from += OTHERS_MAX) {
+    int from = 1;
+    do {
         int to = from + OTHERS_MAX;
         if (to > comparison->count)
             to = comparison->count;
         if (from > 1)
             putc('\n', out);
         ok = write_numbers(out, comparison, from, to, style, &legend, st);
-    }
+        from += OTHERS_MAX;
+    } while (ok && from < comparison->count);
     if (ok && legend.failed)
         ok = status_fail(st, STATUS_MEMORY, "out of memory");
     if (ok)

@@ -2,6 +2,10 @@
 #include "refdata/dataset.h"
 
 #include <assert.h>
+#include <stdio.h>
+#include <string.h>
+
+#include "base/text.h"
 
 #define ID3(name, id, words) id,
 #define WORDS3(name, id, words) words,
@@ -47,6 +51,29 @@ int coordination_number(enum coordination coordination)
 {
     static const int numbers[] = {COORDINATION_LIST(WORDS3)};
     return numbers[coordination];
+}
+
+bool coordination_find(const char *text, enum coordination *found)
+{
+    size_t digits = strspn(text, "0123456789");
+    char number[4];
+    for (int c = COORDINATION_NONE + 1; c < COORDINATION_COUNT; c++) {
+        enum coordination coordination = (enum coordination)c;
+        const char *id = coordination_id(coordination);
+        const char *shape = id + strspn(id, "IVX");
+        snprintf(number, sizeof number, "%d",
+                 coordination_number(coordination));
+        bool same = digits > 0
+                        ? digits == strlen(number) &&
+                              strncmp(text, number, digits) == 0 &&
+                              text_same_ignoring_case(text + digits, shape)
+                        : text_same_ignoring_case(text, id);
+        if (!same)
+            continue;
+        *found = coordination;
+        return true;
+    }
+    return false;
 }
 
 const char *configuration_status_id(enum configuration_status status)

@@ -93,6 +93,11 @@ const char *spin_id(enum spin_state spin);
 const char *spin_word(enum spin_state spin);
 const char *coordination_id(enum coordination coordination);
 int coordination_number(enum coordination coordination); /* 0 for none */
+
+/* As someone types it: roman in any case or by its number, with the shape
+ * behind it: "VI", "vi", "6", "IVSQ", "4sq". False when there is none. */
+bool coordination_find(const char *text, enum coordination *found);
+
 const char *configuration_status_id(enum configuration_status status);
 const char *radioactive_id(enum radioactive radioactive);
 const char *radioactive_word(enum radioactive radioactive);

@@ -13,5 +13,6 @@ TCase *residual_cases(void);
 TCase *stream_cases(void);
 TCase *atom_cases(void);
 TCase *audit_cases(void);
+TCase *compare_cases(void);
 
 #endif

@@ -13,5 +13,6 @@ int main(void)
     suite_add_tcase(suite, stream_cases());
     suite_add_tcase(suite, atom_cases());
     suite_add_tcase(suite, audit_cases());
+    suite_add_tcase(suite, compare_cases());
     return run_suite(suite);
 }

@@ -33,7 +33,13 @@ START_TEST(every_element_is_found_by_symbol_name_and_number)
     ck_assert_str_eq(element_find("aluminum")->symbol, "Al");
     ck_assert_str_eq(element_nearest("CO")->symbol, "Co");
     ck_assert_str_eq(element_nearest("zirkonium")->symbol, "Zr");
-    ck_assert_ptr_null(element_nearest("xq"));
+    ck_assert_str_eq(element_nearest("Fee")->symbol, "Fe");
+    ck_assert_str_eq(element_nearest("Irn")->symbol, "Fe");
+    ck_assert_str_eq(element_nearest("Alu")->symbol, "Al");
+    /* a wrong letter in a symbol, the beginning of several names, no word */
+    static const char *const unclear[] = {"xq", "Xx", "Fe3", "colour"};
+    for (size_t i = 0; i < sizeof unclear / sizeof unclear[0]; i++)
+        ck_assert_msg(!element_nearest(unclear[i]), "%s", unclear[i]);
     ck_assert_str_eq(element_jump("ger")->symbol, "Ge");
 }
 END_TEST
