@@ -18,12 +18,14 @@ void atom_work_free(struct atom_work *work)
     free(work);
 }
 
+/* With the electrons of the user's own where they are this species'. */
 static bool species_of(const struct ui *ui, int z, int charge,
                        struct species *species)
 {
-    struct ask ask = {.z = z, .charge = charge};
+    struct ask ask;
     struct status st = status_ok();
-    return study_species(ui->study, &ask, species, &st);
+    return ui_ask(ui, z, charge, &ask) &&
+           study_species(ui->study, &ask, species, &st);
 }
 
 static bool same_species(const struct species *a, const struct species *b)

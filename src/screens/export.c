@@ -278,6 +278,9 @@ static void trend_command(const struct ui *ui, struct text *t)
     for (int s = 0; s < ui->trend.series_count; s++)
         text_addf(t, "%s%s", s ? "," : " --model ",
                   ui->trend.series[s].model->id);
+    if (ui->trend.series_count == 0 &&
+        quantity_at(ui->choice.quantity)->modelled)
+        text_add(t, " --model none");
     add_choices(ui, t);
     add_units(ui, t);
     add_data(ui, t);

@@ -82,7 +82,7 @@ static const struct key_row rows[] = {
      "choose a subshell, or the outermost", true, ON_VALUES},
     {ACTION_CONFIGURATION, ':', 0, ":", "configuration",
      "type electrons of your own for the selected species", true,
-     ON_MAP | ON_COMPARE | ON_TREND},
+     ON_MAP | ON_COMPARE | ON_TREND | ON_ATOM},
     {ACTION_SITE, '@', 0, "@", "site",
      "choose coordination and spin of the ion, for sets of ionic radii", false,
      ON_MAP | ON_COMPARE | ON_TREND},

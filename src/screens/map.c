@@ -16,17 +16,25 @@ static struct map_layout layout_of(const struct ui *ui)
     return layout_map(ui->rows, ui->columns, ui->choice.grid);
 }
 
+/* The set that the selected species is shown against; where it does not exist,
+ * the first one at this charge. NULL when there is none. */
+static const struct provenance *shown_set(const struct ui *ui)
+{
+    struct ask ask;
+    int z = ui->choice.z;
+    if (!ui_ask(ui, z, ui->choice.charge, &ask))
+        for (z = 1; z <= Z_MAX; z++)
+            if (ui_ask(ui, z, ui->choice.charge, &ask))
+                break;
+    return z > Z_MAX ? NULL : study_row(ui->study, &ask).reference.provenance;
+}
+
 /* What is shown, in words: "slater", "zeff_1963", "slater - zeff_1963". */
 static void shown_text(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
-    struct ask ask;
-    const char *reference = "no reference";
-    if (ui_ask(ui, c->z, 0, &ask)) {
-        struct row row = study_row(ui->study, &ask);
-        if (row.reference.provenance)
-            reference = row.reference.provenance->id;
-    }
+    const struct provenance *set = shown_set(ui);
+    const char *reference = set ? set->id : "no reference";
     const char *model = c->model ? c->model->id : "no model";
     if (c->shown == SHOWN_VALUE)
         text_add(t, model);

@@ -331,6 +331,38 @@ START_TEST(the_export_is_what_the_command_prints)
 }
 END_TEST
 
+/* Electrons of the user's own are those that are solved, shown, written and
+ * named: another total energy than the ground state's. */
+START_TEST(own_electrons_are_solved_and_named)
+{
+    char buffer[UI_TEXT_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    struct status st = status_ok();
+    type("a");
+    double ground = atom_solved(&ui, SLOT_CHOSEN)->etot;
+    type(":");
+    key(KEY_CODE_CLEAR);
+    type("[Ar] 3d7 4s1");
+    key(KEY_CODE_ENTER);
+    const struct atom_report *own = atom_solved(&ui, SLOT_CHOSEN);
+    ck_assert_ptr_nonnull(own);
+    ck_assert(shows("[Ar] 3d7 4s1"));
+    struct atom_run *run = atom_run_new(&st);
+    ck_assert_ptr_nonnull(run);
+    struct species species = own->species;
+    ck_assert(configuration_parse("[Ar] 3d7 4s1", &species.configuration, &st));
+    ck_assert(atom_run_begin(run, &species, &atom_method_default, &st));
+    while (atom_run_step(run))
+        ;
+    near(own->etot, atom_run_report(run)->etot, 1e-9, 0.0, "etot as asked");
+    ck_assert(own->etot > ground + 1e-3 || own->etot < ground - 1e-3);
+    atom_run_free(run);
+    ui.scope = SCOPE_ATOM;
+    ui_export_command(&ui, &t);
+    ck_assert_ptr_nonnull(strstr(buffer, "--configuration '[Ar] 3d7 4s1'"));
+}
+END_TEST
+
 START_TEST(the_view_is_remembered)
 {
     char buffer[4096];
@@ -434,6 +466,7 @@ int main(void)
     tcase_add_test(tc, every_overlay_is_drawn_and_named);
     tcase_add_test(tc, methods_are_chosen_from_a_list);
     tcase_add_test(tc, the_export_is_what_the_command_prints);
+    tcase_add_test(tc, own_electrons_are_solved_and_named);
     tcase_add_test(tc, the_view_is_remembered);
     tcase_add_test(tc, a_click_chooses_a_subshell_or_moves_the_cursor);
     tcase_add_test(tc, every_size_keeps_title_and_keys);

@@ -5,5 +5,6 @@
 #include <check.h>
 
 TCase *layout_case(void);
+TCase *agree_case(void);
 
 #endif

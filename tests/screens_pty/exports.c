@@ -49,6 +49,10 @@ static const struct {
      {"yttrium", "Y pinned", "lutetium", "Lu pinned", "4f14", "write CSV"},
      "compare.csv"},
     {{"t", "e"}, {"along the period", "write CSV"}, "trend-zeff.csv"},
+    {{"t", "b\r", "j\rj\rj\rj\r", "q", "e"},
+     {"along the period", "[ ] shells", "[ ] scf", "no residual along",
+      "write CSV"},
+     "trend-zeff.csv"},
     {{"d", "e"}, {"Audit", "write CSV"}, "audit-zeff.csv"},
 };
 

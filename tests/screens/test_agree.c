@@ -1,0 +1,78 @@
+/* SPDX-License-Identifier: MIT */
+/* What two places say of the same thing agrees: title and row, screen and
+ * command. */
+#include <stdio.h>
+#include <stdlib.h>
+#include <string.h>
+
+#include "screens/desk.h"
+#include "screens/desk_keys.h"
+#include "screens/parts.h"
+#include "screens/test_ui.h"
+
+/* The first line of the screen. */
+static char *title(void)
+{
+    char *text = drawn();
+    *strchr(text, '\n') = '\0';
+    return text;
+}
+
+/* The title of the map names the set of the selected row, at every charge, for
+ * inner subshells and for what does not exist. */
+START_TEST(the_title_of_the_map_names_the_set_of_its_row)
+{
+    static const int elements[] = {1, 8, 26, 58};
+    int named = 0;
+    resize(60, 200);
+    ui.choice.shown = SHOWN_REFERENCE;
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        for (size_t i = 0; i < sizeof elements / sizeof elements[0]; i++)
+            for (int charge = -1; charge <= 4; charge++)
+                for (int n = 0; n <= 2; n += 2) {
+                    struct ask ask;
+                    ui.choice.quantity = (enum quantity_id)q;
+                    ui.choice.z = elements[i];
+                    ui.choice.charge = charge;
+                    ui.choice.n =
+                        quantity_at(ui.choice.quantity)->per_subshell ? n : 0;
+                    ui.stale = true;
+                    if (!ui_ask(&ui, elements[i], charge, &ask))
+                        continue;
+                    struct row row = study_row(study, &ask);
+                    const struct provenance *p = row.reference.provenance;
+                    char *line = title();
+                    ck_assert_msg(strstr(line, p ? p->id : "no reference"),
+                                  "%s does not name %s", line,
+                                  p ? p->id : "no reference");
+                    free(line);
+                    named += p != NULL;
+                }
+    ck_assert_int_ge(named, 100);
+}
+END_TEST
+
+/* Without a curve an export holds the stored values alone, and its command
+ * says so. */
+START_TEST(a_trend_without_curves_names_no_model)
+{
+    char buffer[UI_COMMAND_MAX];
+    struct text t = text_over(buffer, sizeof buffer);
+    type("t");
+    ui.choice.hidden_curves = ~0u;
+    ui.trend_stale = true;
+    free(drawn());
+    ui.scope = SCOPE_TREND;
+    ui_export_command(&ui, &t);
+    ck_assert_ptr_nonnull(strstr(buffer, " --model none"));
+}
+END_TEST
+
+TCase *agree_case(void)
+{
+    TCase *tc = tcase_create("agree");
+    tcase_add_checked_fixture(tc, open_ui, close_ui);
+    tcase_add_test(tc, the_title_of_the_map_names_the_set_of_its_row);
+    tcase_add_test(tc, a_trend_without_curves_names_no_model);
+    return tc;
+}
