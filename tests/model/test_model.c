@@ -125,6 +125,8 @@ START_TEST(allred_rochow_gives_the_printed_values)
     int seen = 0;
     for (size_t i = 0; i < csv_rows(&csv); i++) {
         const char *inputs = csv_cell(&csv, i, "inputs");
+        if (strcmp(csv_cell(&csv, i, "method"), "allred_rochow") != 0)
+            continue;
         for (size_t a = 0; a < sizeof atoms / sizeof atoms[0]; a++) {
             if (strncmp(inputs, atoms[a].symbol, strlen(atoms[a].symbol)) != 0)
                 continue;
