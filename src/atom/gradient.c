@@ -153,23 +153,52 @@ void gradient_potential(struct gradient *gradient, bool vwn, double *energy,
     channel_potential(g, 1, minor);
 }
 
+/* No kinetic energy density is below |∇ρ|²/8ρ (C. F. von Weizsäcker, Z. Phys.
+ * 96, 431 (1935)). Where one orbital is all there is, as in the tail of a
+ * channel whose outermost subshell is s, the two are equal, and tau, which is
+ * made of large components alone, falls short of it by the small ones and by
+ * rounding. libxc then lowers |∇ρ_c|² to 8ρτ but leaves ∇ρ_a·∇ρ_b as it was,
+ * |∇ζ|² made from the three turns negative, and with it the denominator
+ * (1 + ξ²[(1+ζ)^-4/3 + (1-ζ)^-4/3]/2)⁴ of C(ζ, ξ) passes through zero: one
+ * point of the mesh is enough for any energy. tau is raised to its bound
+ * instead, and a channel too thin to count is emptied whole. */
+static void make_consistent(ptrdiff_t n, double *rho, double *grad2,
+                            double *tau)
+{
+    for (ptrdiff_t i = 0; i < n; i++)
+        for (ptrdiff_t c = 0; c < 2; c++) {
+            double *of_c = &rho[2 * i + c], *tau_c = &tau[2 * i + c];
+            if (*of_c < RHO_MIN) {
+                *of_c = *tau_c = 0.0;
+                grad2[3 * i + 1] = grad2[3 * i + 2 * c] = 0.0;
+            } else {
+                *tau_c = fmax(*tau_c, grad2[3 * i + 2 * c] / (8.0 * *of_c));
+            }
+        }
+}
+
 void gradient_meta_correlation(struct gradient *gradient, const double *major,
                                const double *minor, double *energy)
 {
     struct gradient *g = gradient;
-    for (ptrdiff_t i = 0; i < g->points; i++) {
+    size_t n = (size_t)g->points;
+    double *rho = g->by_rho, *grad2 = g->by_grad2;
+    memcpy(rho, g->rho, 2 * n * sizeof *rho);
+    memcpy(grad2, g->grad2, 3 * n * sizeof *grad2);
+    for (size_t i = 0; i < n; i++) {
         g->tau[2 * i] = major[i];
         g->tau[2 * i + 1] = minor[i];
     }
-    xc_mgga_exc(&g->functional[META], (size_t)g->points, g->rho, g->grad2,
-                g->laplacian, g->tau, energy);
+    make_consistent(g->points, rho, grad2, g->tau);
+    xc_mgga_exc(&g->functional[META], n, rho, grad2, g->laplacian, g->tau,
+                energy);
 }
 
-void gradient_at(struct gradient *gradient, int n, const double *rho,
-                 const double *grad2, const double *tau, double *exchange,
-                 double *correlation)
+void gradient_at(struct gradient *gradient, int n, double *rho, double *grad2,
+                 double *tau, double *exchange, double *correlation)
 {
     struct gradient *g = gradient;
+    make_consistent(n, rho, grad2, tau);
     xc_gga_exc(&g->functional[EXCHANGE], (size_t)n, rho, grad2, exchange);
     xc_mgga_exc(&g->functional[META], (size_t)n, rho, grad2, g->laplacian, tau,
                 correlation);

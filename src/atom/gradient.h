@@ -36,16 +36,17 @@ void gradient_potential(struct gradient *gradient, bool vwn, double *energy,
 
 /* Correlation of revised TPSS: J. P. Perdew et al., Phys. Rev. Lett. 103,
  * 026403 (2009), doi 10.1103/PhysRevLett.103.026403. tau: kinetic energy
- * densities of the channels, ½ Σ |∇φ|², hartree/bohr³. */
+ * densities of the channels, ½ Σ |∇φ|², hartree/bohr³; where rounding has put
+ * one below |∇ρ|²/8ρ it counts as that. */
 void gradient_meta_correlation(struct gradient *gradient, const double *major,
                                const double *minor, double *energy);
 
 /* PBE exchange and revised TPSS correlation, energies per electron, at points
  * that are given directly: rho[2n] spin densities, grad2[3n] products of their
  * gradients (aa, ab, bb), tau[2n] kinetic energy densities; n at most the
- * points of the mesh. */
-void gradient_at(struct gradient *gradient, int n, const double *rho,
-                 const double *grad2, const double *tau, double *exchange,
-                 double *correlation);
+ * points of the mesh. What they cannot be together is mended in place, as in
+ * gradient_meta_correlation. */
+void gradient_at(struct gradient *gradient, int n, double *rho, double *grad2,
+                 double *tau, double *exchange, double *correlation);
 
 #endif

@@ -16,6 +16,11 @@ enum { P = LOBATTO_ORDER, SHELLS = 2 * SUBSHELL_MAX, SHAPE_ARRAYS = 20 };
 /* Part of exact exchange. */
 static const double QUARTER = 0.25;
 
+/* Bounds of E_c[revTPSS]/E_c[PBE], wider than what atoms and ions reach, and
+ * hartree for rounding. */
+static const double RATIO_LEAST = 0.99, RATIO_MOST = 1.25,
+                    RATIO_ROUNDING = 1e-9;
+
 /* A subshell in one spin channel: its electrons and large component, averaged
  * over j by 2j+1 and normalised. */
 struct shell {
@@ -247,11 +252,12 @@ static const double *shell_function(const struct hybrid *h, int n, int l,
 
 /* ΔP of all open p subshells. p_z against p_x and p_y: the multipole that
  * repels itself is 2/5 F² wide, ½ (2/5)² F² = 0.08 F². */
-static double shape_shift(struct hybrid *h)
+static double shape_shift(struct hybrid *h, double *of_correlation)
 {
     const struct atom_solver *s = h->solver;
     const struct configuration *c = &s->configuration;
     double sum = 0.0;
+    *of_correlation = 0.0;
     memset(h->one, 0, (size_t)h->points * sizeof *h->one);
     for (int i = 0; i < c->count; i++) {
         const struct subshell *p = &c->shells[i];
@@ -273,10 +279,39 @@ static double shape_shift(struct hybrid *h)
         double exchange, correlation;
         shape_change(&shape, s->now->gradient, &exchange, &correlation);
         sum +=
-            (1.0 - QUARTER) * (0.08 * hybrid_slater(h, p->n, 1, 2) + exchange) +
-            correlation;
+            (1.0 - QUARTER) * (0.08 * hybrid_slater(h, p->n, 1, 2) + exchange);
+        *of_correlation += correlation;
     }
-    return sum;
+    return sum + *of_correlation;
+}
+
+bool hybrid_correlation_sound(double correlation, double correlation_pbe,
+                              bool one_spin)
+{
+    double least = one_spin ? 0.0 : RATIO_LEAST;
+    return isfinite(correlation) &&
+           correlation <= least * correlation_pbe + RATIO_ROUNDING &&
+           correlation >= RATIO_MOST * correlation_pbe - RATIO_ROUNDING;
+}
+
+/* Sums up, with and without the correlation that may not be sound. */
+static void add_up(const struct hybrid *h, struct hybrid_energy *energy,
+                   double of_shape)
+{
+    bool one_spin = true;
+    for (int i = 0; i < h->count; i++)
+        one_spin = one_spin && h->shell[i].spin == h->shell[0].spin;
+    energy->sound = hybrid_correlation_sound(energy->correlation,
+                                             energy->correlation_pbe, one_spin);
+    double rest = h->solver->result.total - h->solver->result.xc;
+    energy->lsd = h->solver->result.total;
+    energy->pbe = rest + energy->exchange_pbe + energy->correlation_pbe;
+    energy->total = rest + (1.0 - QUARTER) * energy->exchange_pbe +
+                    QUARTER * (energy->exchange_exact + energy->term) +
+                    energy->correlation + energy->shape;
+    energy->with_pbe = rest + (1.0 - QUARTER) * energy->exchange_pbe +
+                       QUARTER * (energy->exchange_exact + energy->term) +
+                       energy->correlation_pbe + (energy->shape - of_shape);
 }
 
 static double weigh(const struct hybrid *h, const double *energy)
@@ -311,12 +346,8 @@ bool hybrid_evaluate(struct hybrid *hybrid, struct atom_solver *solver,
     energy->correlation = weigh(h, h->one);
     energy->exchange_exact = exact_exchange(h);
     energy->term = term_shift(h);
-    energy->shape = shape_shift(h);
-    double rest = solver->result.total - solver->result.xc;
-    energy->lsd = solver->result.total;
-    energy->pbe = rest + energy->exchange_pbe + energy->correlation_pbe;
-    energy->total = rest + (1.0 - QUARTER) * energy->exchange_pbe +
-                    QUARTER * (energy->exchange_exact + energy->term) +
-                    energy->correlation + energy->shape;
+    double of_shape;
+    energy->shape = shape_shift(h, &of_shape);
+    add_up(h, energy, of_shape);
     return true;
 }

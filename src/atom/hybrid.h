@@ -18,6 +18,9 @@
 
 struct hybrid_energy {
     double total;
+    bool sound;             /* the correlation is what it must look like */
+    double with_pbe;        /* the same with E_c[PBE] in place of E_c[revTPSS],
+                               to be taken when it is not sound */
     double lsd, pbe;        /* totals on the same density */
     double exchange_pbe;    /* E_x[PBE] */
     double exchange_exact;  /* E_x of spherically averaged shells */
@@ -39,6 +42,13 @@ MUST_CHECK bool hybrid_evaluate(struct hybrid *hybrid,
                                 struct atom_solver *solver,
                                 struct hybrid_energy *energy,
                                 struct status *st);
+
+/* Whether a revTPSS correlation energy can be one: over all atoms and ions of
+ * all elements in their ground configurations it is 1.004 to 1.18 times that
+ * of PBE. Where all electrons have one spin (one_spin) it may be any part of
+ * it: revTPSS knows that an electron does not repel itself, PBE does not. */
+bool hybrid_correlation_sound(double correlation, double correlation_pbe,
+                              bool one_spin);
 
 /* Slater integral F^k of one subshell of the atom evaluated last, for the
  * average of its spins by occupation; hartree. 0 when it is not occupied. */

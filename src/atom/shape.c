@@ -6,9 +6,6 @@
 
 enum { P = LOBATTO_ORDER, ANGLES = 5 };
 
-/* Density (electrons/bohr³) below which nothing is left of any energy. */
-static const double RHO_MIN = 1e-12;
-
 static const double PI = 3.14159265358979323846;
 
 /* Gauss's rule of 10 points for cos θ, its upper half (Abramowitz, Stegun,
@@ -49,14 +46,6 @@ static void fill(const struct shape *s, int c, struct radial_part *part,
     }
 }
 
-/* No kinetic energy density is below |∇ρ|²/8ρ (C. F. von Weizsäcker, Z. Phys.
- * 96, 431 (1935)); where a difference of two nearly equal densities is left,
- * rounding would put it there, and the functional has a pole. */
-static double tau_least(double rho, double grad2)
-{
-    return rho > RHO_MIN ? grad2 / (8.0 * rho) : 0.0;
-}
-
 /* Arrays for libxc at one angle. One electron in p_z has the density
  * p (1 + 2 P2(cos θ)) and, with |∇_Ω Y|² = 2|Y|² + ½∇²_Ω|Y|², the kinetic
  * energy density [(dR/dr)² (1 + 2 P2) + (R/r)² (2 - 2 P2)]/8π; what is short
@@ -84,11 +73,6 @@ static void at_angle(const struct shape *s, const struct radial_part part[2],
         grad2[3 * i] = radial[0] * radial[0] + around[0] * around[0];
         grad2[3 * i + 1] = radial[0] * radial[1] + around[0] * around[1];
         grad2[3 * i + 2] = radial[1] * radial[1] + around[1] * around[1];
-        for (int c = 0; c < 2; c++) {
-            double least =
-                tau_least(rho[2 * i + c], grad2[3 * i + (ptrdiff_t)2 * c]);
-            tau[2 * i + c] = fmax(tau[2 * i + c], least);
-        }
     }
 }
 

@@ -103,8 +103,10 @@ static double uncertainty_ev(const struct species *species)
 /* One of the two solutions. */
 struct half {
     enum atom_state state;
-    bool evaluated; /* energy holds the hybrid energy with its shift */
-    double energy;  /* hartree */
+    bool evaluated;  /* energy holds the hybrid energy with its shift */
+    bool unsound;    /* its correlation cannot be right (hybrid.h) */
+    double energy;   /* hartree */
+    double with_pbe; /* the same with PBE correlation */
 };
 
 enum phase { PHASE_ATOM, PHASE_ATOM_ENERGY, PHASE_ION, PHASE_ION_ENERGY, DONE };
@@ -188,9 +190,12 @@ static void evaluate(struct work *w, const struct species *species,
     half->evaluated = hybrid_evaluate(w->hybrid, w->solver, &energy, &st);
     if (!half->evaluated)
         return;
-    half->energy = energy.total;
-    if (!is_given(&w->question.species))
-        half->energy += hybrid_spin_orbit(w->hybrid, &species->term);
+    double shift = is_given(&w->question.species)
+                       ? 0.0
+                       : hybrid_spin_orbit(w->hybrid, &species->term);
+    half->unsound = !energy.sound;
+    half->energy = energy.total + shift;
+    half->with_pbe = energy.with_pbe + shift;
 }
 
 /* Keeps what is read off the density of the atom. */
@@ -284,6 +289,8 @@ static bool ionization(const struct work *w, int offer, double *energy,
     else if (!w->atom.evaluated || !w->ion.evaluated)
         *none = gap(offer, READING_NOT_CONVERGED,
                     "the hybrid energy could not be evaluated");
+    else if (w->atom.unsound || w->ion.unsound)
+        *energy = w->ion.with_pbe - w->atom.with_pbe;
     else
         *energy = w->ion.energy - w->atom.energy;
     return w->question.has_cation && w->ion.state == ATOM_CONVERGED &&
@@ -306,6 +313,8 @@ static struct reading read_ionization(const struct work *w)
     if (given)
         r.remark = "no level is given with a configuration: without "
                    "spin-orbit shifts";
+    if (w->atom.unsound || w->ion.unsound)
+        r.remark = "with PBE correlation: that of revTPSS cannot be right here";
     if (energy < 0.0)
         r.remark = "negative: the ion lies lower in this model";
     return r;

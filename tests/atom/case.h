@@ -30,5 +30,6 @@ TCase *case_nist(void);
 TCase *case_states(void);
 TCase *case_functionals(void);
 TCase *case_hybrid(void);
+TCase *case_correlation(void);
 
 #endif
