@@ -67,13 +67,16 @@ void json_string(FILE *out, const char *text)
 
 void citation_text(struct text *t, const struct citation *c)
 {
-    text_add(t, c->authors ? c->authors : c->title);
+    const char *first = c->authors ? c->authors : c->title;
+    /* A container may stand alone: "Journal 1, 2". */
+    if (first)
+        text_add(t, first);
     /* An article is found by its journal; anything else by its title. */
     if (c->authors && c->title && c->container &&
         strcmp(c->kind, "article") != 0)
         text_addf(t, ", %s", c->title);
     if (c->container)
-        text_addf(t, ", %s", c->container);
+        text_addf(t, first ? ", %s" : "%s", c->container);
     if (c->volume)
         text_addf(t, " %s", c->volume);
     if (c->pages)

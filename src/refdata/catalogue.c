@@ -27,6 +27,12 @@ const struct dataset *catalogue_at(const struct catalogue *catalogue, size_t i)
     return &catalogue->added[i - refdata_builtin_count]->set;
 }
 
+bool catalogue_is_added(const struct catalogue *catalogue, size_t i)
+{
+    assert(i < catalogue_count(catalogue));
+    return i >= refdata_builtin_count;
+}
+
 const struct dataset *catalogue_find(const struct catalogue *catalogue,
                                      const char *id)
 {
@@ -42,7 +48,8 @@ const struct dataset *catalogue_find(const struct catalogue *catalogue,
 static int rank_of(const struct catalogue *catalogue, size_t i)
 {
     const struct dataset *set = catalogue_at(catalogue, i);
-    return i < refdata_builtin_count && set->rank > 0 ? set->rank : INT_MAX;
+    return !catalogue_is_added(catalogue, i) && set->rank > 0 ? set->rank
+                                                              : INT_MAX;
 }
 
 size_t catalogue_references(const struct catalogue *catalogue,
@@ -91,7 +98,8 @@ static bool check_joins(const struct catalogue *catalogue,
         return status_fail(st, STATUS_DATA,
                            "set %s: kind %s cannot be added; expected values",
                            id, dataset_kind_id(set->kind));
-    if (catalogue_find(catalogue, id))
+    if (catalogue_find(catalogue, id) ||
+        strcmp(id, CATALOGUE_ZEFF_FROM_IONIZATION) == 0)
         return status_fail(st, STATUS_DATA,
                            "set %s: there is a set with this id already", id);
     return true;

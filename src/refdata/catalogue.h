@@ -11,6 +11,10 @@
 
 #define CATALOGUE_ADDED_MAX 32
 
+/* The set of effective charges that follows from the built-in ionization
+ * energies has this id, so that no added set may take it. */
+#define CATALOGUE_ZEFF_FROM_IONIZATION "zeff_from_ionization"
+
 struct loaded;
 
 /* A catalogue starts as {0}: the built-in sets alone. It owns the added ones;
@@ -35,6 +39,9 @@ void catalogue_clear(struct catalogue *catalogue);
 /* All sets: the built-in ones by id, then the added ones in order. */
 size_t catalogue_count(const struct catalogue *catalogue);
 const struct dataset *catalogue_at(const struct catalogue *catalogue, size_t i);
+
+/* Whether the i-th is one that the user added. */
+bool catalogue_is_added(const struct catalogue *catalogue, size_t i);
 
 /* By id; NULL when there is none. */
 const struct dataset *catalogue_find(const struct catalogue *catalogue,

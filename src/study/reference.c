@@ -60,10 +60,17 @@ static void insert(struct reference_list *list, struct reference item)
     list->items[i] = item;
 }
 
-/* A set without a rank stands behind all that have one. */
-static int rank_of(const struct dataset *set)
+/* A set without a rank stands behind all that have one, one that the user
+ * added behind all built-in ones. */
+#define RANK_NONE 1000
+#define RANK_ADDED 1001
+
+static int rank_of(const struct catalogue *catalogue, size_t i)
 {
-    return set->rank > 0 ? set->rank : 1000;
+    const struct dataset *set = catalogue_at(catalogue, i);
+    if (catalogue_is_added(catalogue, i))
+        return RANK_ADDED;
+    return set->rank > 0 ? set->rank : RANK_NONE;
 }
 
 static bool is_outermost_only(const struct dataset *set)
@@ -84,11 +91,10 @@ void reference_list_fill(struct reference_list *list,
         const struct dataset *set = catalogue_at(catalogue, i);
         if (set->kind != DATASET_VALUES)
             continue;
-        insert(list,
-               (struct reference){&set->provenance, set->quantity, set,
-                                  rank_of(set), false, is_outermost_only(set)});
-        if (set->quantity != QUANTITY_IONIZATION ||
-            rank_of(set) != IONIZATION_RANK)
+        int rank = rank_of(catalogue, i);
+        insert(list, (struct reference){&set->provenance, set->quantity, set,
+                                        rank, false, is_outermost_only(set)});
+        if (set->quantity != QUANTITY_IONIZATION || rank != IONIZATION_RANK)
             continue;
         set_derived(list, &set->provenance);
         insert(list, (struct reference){&list->derived, QUANTITY_ZEFF, set, 0,

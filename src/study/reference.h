@@ -8,14 +8,18 @@
 #include "element/species.h"
 #include "refdata/catalogue.h"
 
-/* Z_eff = n sqrt(I/Ry) from the measured ionization energy I. */
-#define REFERENCE_ZEFF_FROM_IONIZATION "zeff_from_ionization"
+/* Z_eff = n sqrt(I/Ry) from the built-in ionization energies I. A set that
+ * the user adds has no such companion: what is cited for one id never depends
+ * on what else was loaded. Effective charges of the user's own are a set of
+ * their own, with the definition "from the energy, n sqrt(E/Ry)". */
+#define REFERENCE_ZEFF_FROM_IONIZATION CATALOGUE_ZEFF_FROM_IONIZATION
 
 #define REFERENCE_MAX 128
 
 /* One reference for one quantity. set: the stored set it is or follows from.
- * rank: order among the references of its quantity, 1 first. outermost_only:
- * it says nothing of inner subshells. */
+ * rank: order among the references of its quantity, 1 first; sets that the user
+ * added stand behind the built-in ones, whatever rank they claim.
+ * outermost_only: it says nothing of inner subshells. */
 struct reference {
     const struct provenance *provenance;
     enum quantity_id quantity;

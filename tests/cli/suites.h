@@ -14,5 +14,6 @@ TCase *stream_cases(void);
 TCase *atom_cases(void);
 TCase *audit_cases(void);
 TCase *compare_cases(void);
+TCase *source_cases(void);
 
 #endif
