@@ -249,23 +249,6 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
     }
 }
 
-static void take_quantity(struct ui *ui, enum quantity_id quantity)
-{
-    struct choice *c = &ui->choice;
-    c->quantity = quantity;
-    c->reference = c->against = NULL;
-    if (!quantity_at(quantity)->per_subshell)
-        c->n = c->l = 0;
-    if (c->model && model_offer_for(c->model, quantity, NULL) >= 0)
-        return;
-    c->model = NULL;
-    for (int m = 0; m < model_count() && !c->model; m++)
-        if (model_offer_for(model_at(m), quantity, NULL) >= 0)
-            c->model = model_at(m);
-    if (!c->model)
-        c->shown = SHOWN_REFERENCE;
-}
-
 static void take_overlay(struct ui *ui, int value)
 {
     struct choice *c = &ui->choice;
@@ -299,7 +282,7 @@ static enum effect take(struct ui *ui)
     c->kind = CHOOSER_NONE;
     ui->stale = ui->comparison_stale = true;
     if (kind == CHOOSER_QUANTITY) {
-        take_quantity(ui, (enum quantity_id)value);
+        ui_select_quantity(ui, (enum quantity_id)value);
     } else if (kind == CHOOSER_MODEL) {
         ui->choice.model = model_at(value);
         if (ui->choice.shown == SHOWN_REFERENCE)

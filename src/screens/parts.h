@@ -131,6 +131,10 @@ void ui_select(struct ui *ui, int z);
  * walk. */
 void ui_select_species(struct ui *ui, int z, int charge, bool along);
 
+/* Chooses a quantity. What spoke of the one before goes: references, a
+ * subshell where the new one has none, a model that does not offer it. */
+void ui_select_quantity(struct ui *ui, enum quantity_id quantity);
+
 /* Place of a pin, or -1. */
 int ui_pin_place(const struct ui *ui, int z, int charge);
 

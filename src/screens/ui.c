@@ -164,6 +164,23 @@ void ui_select_species(struct ui *ui, int z, int charge, bool along)
     ui->trend_keeps = along && fresh;
 }
 
+void ui_select_quantity(struct ui *ui, enum quantity_id quantity)
+{
+    struct choice *c = &ui->choice;
+    c->quantity = quantity;
+    c->reference = c->against = NULL;
+    if (!quantity_at(quantity)->per_subshell)
+        c->n = c->l = 0;
+    if (c->model && model_offer_for(c->model, quantity, NULL) >= 0)
+        return;
+    c->model = NULL;
+    for (int m = 0; m < model_count() && !c->model; m++)
+        if (model_offer_for(model_at(m), quantity, NULL) >= 0)
+            c->model = model_at(m);
+    if (!c->model)
+        c->shown = SHOWN_REFERENCE;
+}
+
 int ui_pin_place(const struct ui *ui, int z, int charge)
 {
     for (int i = 0; i < ui->choice.pin_count; i++)

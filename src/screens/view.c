@@ -126,17 +126,8 @@ static void load_model(struct ui *ui, const char *value)
 static void load_quantity(struct ui *ui, const char *value)
 {
     enum quantity_id q;
-    if (!quantity_find(value, &q))
-        return;
-    ui->choice.quantity = q;
-    ui->choice.reference = NULL;
-    if (model_offer_for(ui->choice.model, q, NULL) < 0)
-        ui->choice.model = NULL;
-    for (int m = 0; m < model_count() && !ui->choice.model; m++)
-        if (model_offer_for(model_at(m), q, NULL) >= 0)
-            ui->choice.model = model_at(m);
-    if (!ui->choice.model)
-        ui->choice.shown = SHOWN_REFERENCE;
+    if (quantity_find(value, &q))
+        ui_select_quantity(ui, q);
 }
 
 static void load_shown(struct ui *ui, const char *value)
@@ -155,9 +146,8 @@ static void load_element(struct ui *ui, const char *value)
 
 static void load_charge(struct ui *ui, const char *value)
 {
-    struct ask ask;
     int charge;
-    if (text_to_int(value, &charge) && ui_ask(ui, ui->choice.z, charge, &ask))
+    if (text_to_int(value, &charge))
         ui->choice.charge = charge;
 }
 
@@ -238,8 +228,9 @@ static void load_dots(struct ui *ui, const char *value)
     ui->choice.atom.braille = strcmp(value, "on") == 0;
 }
 
-/* In the order in which they are written: a model is judged by the quantity
- * before it. */
+/* In the order in which they are written. A model, a reference and a subshell
+ * are judged by the quantity before them, and go with it when another one
+ * follows; a charge is judged when the element is known (settle). */
 static const struct {
     const char *key;
     void (*load)(struct ui *ui, const char *value);
@@ -284,6 +275,14 @@ static void load_line(struct ui *ui, const char *line, size_t length)
     }
 }
 
+/* What only the whole view can tell: lines may come in any order. */
+static void settle(struct ui *ui)
+{
+    struct ask ask;
+    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+        ui->choice.charge = 0;
+}
+
 void ui_load_view(struct ui *ui, const char *text)
 {
     while (*text) {
@@ -291,5 +290,6 @@ void ui_load_view(struct ui *ui, const char *text)
         load_line(ui, text, length);
         text += length + (text[length] == '\n');
     }
+    settle(ui);
     ui->stale = ui->comparison_stale = true;
 }
