@@ -67,7 +67,10 @@ bool view_keep(const char *text, struct status *st)
     struct file_draft draft;
     if (!view_path(path))
         return true;
-    if (!make_folders(path, st) || !file_draft_open(&draft, path, true, st))
+    if (!make_folders(path, st))
+        return false;
+    file_draft_sweep(path);
+    if (!file_draft_open(&draft, path, true, st))
         return false;
     fputs(text, draft.stream);
     return file_draft_commit(&draft, st);
