@@ -116,7 +116,7 @@ END_TEST
 
 START_TEST(every_size_is_drawn_on_every_screen)
 {
-    static const char *const screens[] = {"m", "c", "s", "?"};
+    static const char *const screens[] = {"m", "c", "t", "d", "a", "s", "?"};
     for (size_t s = 0; s < sizeof screens / sizeof screens[0]; s++) {
         type(screens[s]);
         for (int rows = 1; rows < 70; rows += 4)
@@ -163,10 +163,23 @@ START_TEST(erasing_takes_whole_characters)
 }
 END_TEST
 
+/* On every screen, every character: nothing is done and nothing changes. */
 START_TEST(pasted_text_never_is_a_command)
 {
-    struct event e = {.kind = EVENT_PASTE, .character = 'q'};
-    ck_assert_int_eq(ui_update(&ui, &e), EFFECT_NONE);
+    static const char *const screens[] = {"m", "c", "t", "d", "a", "s", "?"};
+    for (size_t s = 0; s < sizeof screens / sizeof screens[0]; s++) {
+        type(screens[s]);
+        char *before = drawn();
+        for (uint32_t c = ' '; c < 127; c++) {
+            struct event e = {.kind = EVENT_PASTE, .character = c};
+            ck_assert_int_eq(ui_update(&ui, &e), EFFECT_NONE);
+        }
+        char *after = drawn();
+        ck_assert_str_eq(after, before);
+        free(after);
+        free(before);
+        key(KEY_CODE_ESCAPE);
+    }
 }
 END_TEST
 
@@ -475,9 +488,44 @@ START_TEST(keys_do_one_thing_on_each_screen)
 }
 END_TEST
 
+/* A picture: something in it unless there is hardly a place, the cursor
+ * within, no control character; and drawn again it is the same. */
+static void check_picture(int turn)
+{
+    char *text = drawn();
+    int written = 0, places = canvas.rows * canvas.columns;
+    for (int i = 0; i < places; i++) {
+        if (canvas.cells[i].character < ' ')
+            ck_abort_msg("turn %d: a control character", turn);
+        written += canvas.cells[i].character != ' ';
+    }
+    ck_assert_msg(written > 0 || places < 24 * 6, "turn %d: %dx%d is blank",
+                  turn, canvas.columns, canvas.rows);
+    ck_assert(canvas.cursor_row >= 0 && canvas.cursor_row < canvas.rows);
+    ck_assert(canvas.cursor_column >= 0 &&
+              canvas.cursor_column < canvas.columns);
+    char *again = drawn();
+    ck_assert_str_eq(again, text);
+    free(again);
+    free(text);
+}
+
+/* What every function behind the keys takes for granted. */
+static void check_choice(int turn)
+{
+    const struct choice *c = &ui.choice;
+    ck_assert_msg(c->z >= 1 && c->z <= Z_MAX, "turn %d: Z=%d", turn, c->z);
+    ck_assert_msg(c->charge <= Z_MAX, "turn %d: Z=%d charge %d", turn, c->z,
+                  c->charge);
+    ck_assert(c->pin_count >= 0 && c->pin_count <= PIN_MAX);
+    ck_assert(c->quantity < QUANTITY_COUNT && c->shown < SHOWN_COUNT);
+    ck_assert(ui.screen <= SCREEN_KEYS);
+    ck_assert_uint_lt(strlen(ui.prompt.text), sizeof ui.prompt.text);
+}
+
 START_TEST(random_keys_always_leave_something_to_draw)
 {
-    unsigned seed = 12345;
+    unsigned seed = 12345, screens = 0;
     for (int i = 0; i < 3000; i++) {
         seed = seed * 1103515245u + 12345u;
         unsigned r = seed >> 16;
@@ -489,9 +537,16 @@ START_TEST(random_keys_always_leave_something_to_draw)
             char c[2] = {(char)(' ' + r / 3 % 95), '\0'};
             type(c);
         }
+        check_choice(i);
+        screens |= 1u << ui.screen;
         if (i % 5 == 0)
-            ui_draw(&ui, &canvas);
+            check_picture(i);
     }
+    ck_assert_uint_eq(screens, (2u << SCREEN_KEYS) - 1); /* all were seen */
+    /* and whatever is open, it can be left */
+    for (int i = 0; i < 4; i++)
+        key(KEY_CODE_ESCAPE);
+    ck_assert_int_eq(type("q"), EFFECT_QUIT);
 }
 END_TEST
 
