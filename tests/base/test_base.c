@@ -156,6 +156,30 @@ START_TEST(change_of_unit_keeps_significant_digits)
 }
 END_TEST
 
+/* The Rydberg constant, 10 973 731.568 157(12) per metre (CODATA 2022, value
+ * from memory), and the constants that the SI defines give all others: Ry =
+ * R h c / e, hartree = 2 Ry, bohr = alpha / 4 pi R. The Faraday constant and
+ * the wavenumber of one electronvolt are exact as well: 96 485.332 12… C/mol,
+ * 8065.543 937… per cm (SI brochure, 9th edition, value from memory). */
+START_TEST(constants_agree_with_the_rydberg_constant_and_the_si)
+{
+    const double rydberg = 10973731.568157, h = 6.62607015e-34;
+    const double e = 1.602176634e-19, c = 299792458.0;
+    near(RYDBERG_EV, rydberg * h * c / e, 0.0, 2e-12, "rydberg");
+    near(HARTREE_EV, 2.0 * rydberg * h * c / e, 0.0, 2e-12, "hartree");
+    near(BOHR_PM * SPEED_OF_LIGHT_AU,
+         1e12 / (4.0 * 3.14159265358979324) / rydberg, 0.0, 2e-11,
+         "bohr and the fine-structure constant");
+    /* 1/alpha apart from bohr: CODATA 2022, value from memory */
+    near(SPEED_OF_LIGHT_AU, 137.035999177, 0.0, 1e-13, "1/alpha");
+    near(unit_find("kJ/mol")->per_base, 96.4853321233, 0.0, 1e-11, "kJ/mol");
+    near(unit_find("cm-1")->per_base, 8065.54393735, 0.0, 1e-11, "cm-1");
+    near(unit_find("hartree")->per_base * HARTREE_EV, 1.0, 0.0, 1e-14, "eV");
+    near(unit_find("bohr")->per_base * BOHR_PM, 1.0, 0.0, 1e-14, "pm");
+    near(unit_find("angstrom")->per_base, 0.01, 0.0, 1e-14, "angstrom");
+}
+END_TEST
+
 START_TEST(units_are_unique_and_have_a_base)
 {
     for (size_t i = 0; i < unit_count(); i++) {
@@ -296,6 +320,7 @@ int main(void)
     tcase_add_test(plain, numbers_round_and_print_as_printf_does);
     tcase_add_test(plain, differences_are_exact_in_decimal);
     tcase_add_test(plain, change_of_unit_keeps_significant_digits);
+    tcase_add_test(plain, constants_agree_with_the_rydberg_constant_and_the_si);
     tcase_add_test(plain, units_are_unique_and_have_a_base);
     suite_add_tcase(suite, plain);
     TCase *files = tcase_create("files");

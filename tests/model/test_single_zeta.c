@@ -33,8 +33,9 @@ static struct reading ask(int z, const char *text, enum quantity_id quantity,
 
 static const char iron[] = "[Ar] 3d6 4s2";
 
-/* Iron and its ion as a trial of this method gave them; the printed value of
- * 1963 for iron 4s is 5.434 (Clementi and Raimondi, from memory). */
+/* Iron 4s: the printed value of 1963 (Clementi and Raimondi), value from
+ * memory. Iron 3+: from a trial of this calculation, not an outside source.
+ * Printed values with their source are in test_rules.c and in tests/zeta. */
 START_TEST(exponents_come_out_as_effective_charges)
 {
     struct reading r = ask(26, iron, QUANTITY_ZEFF, 0, 0, false);
