@@ -72,7 +72,8 @@ static struct audit_series *series_of(struct audit *audit,
                                .unit = row->unit,
                                .value = row->value.provenance,
                                .reference = row->reference.provenance,
-                               .like_with_like = row->like_with_like};
+                               .like_with_like = row->like_with_like,
+                               .repeats = row->repeats};
     return s;
 }
 
@@ -286,6 +287,10 @@ struct audit_rank audit_rank(const struct audit *audit,
     for (int i = 0; i < audit->count && models < AUDIT_RANK_MAX; i++) {
         const struct audit_series *s = &audit->series[i];
         if (s->quantity != quantity || s->reference != reference)
+            continue;
+        rank.unlike += !s->like_with_like;
+        rank.repeats += s->like_with_like && s->repeats;
+        if (!s->like_with_like || s->repeats)
             continue;
         counts[models] = count_compared(s, part);
         most = counts[models] > most ? counts[models] : most;

@@ -54,6 +54,7 @@ struct audit_series {
     const struct provenance *value;
     const struct provenance *reference;
     bool like_with_like;
+    bool repeats; /* as in struct row */
     int count, capacity;
     struct audit_point *points;
 };
@@ -91,13 +92,17 @@ int audit_parts(const struct audit *audit, enum quantity_id quantity,
 
 /* The models against one reference set in order of their mean absolute
  * residual over the species of a part for which all of them have one. A model
- * that has less than half as many residuals in the part as the one with the
- * most does not take part: the others would be judged on a few species. series:
- * indices into audit->series, best first; species: how many were compared. */
+ * that gives another thing than the set holds does not take part: its residual
+ * is no error; nor does one whose calculation the set is; nor one that has less
+ * than half as many residuals in the part as the one with the most: the others
+ * would be judged on a few species. series: indices into audit->series, best
+ * first; species: how many were compared; unlike, repeats: how many were left
+ * out because of the definition, or as the same calculation. */
 #define AUDIT_RANK_MAX 24
 struct audit_rank {
     int count;
     int species;
+    int unlike, repeats;
     int series[AUDIT_RANK_MAX];
     double mean_absolute[AUDIT_RANK_MAX];
 };

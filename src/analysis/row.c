@@ -55,7 +55,7 @@ void row_compare(struct row *row, struct reading value,
     row->reference = reading_in_unit(reference, row->unit);
     row->like_with_like =
         same_definition(value.provenance, reference.provenance);
-    row->has_percent = false;
+    row->has_percent = row->repeats = false;
     row->disagrees = row->has_disagreement_percent = false;
     row->against = (struct reading){.reason = "", .remark = ""};
     row->reason = "";
@@ -103,6 +103,7 @@ struct row row_of_sets(const struct row *row)
     sets.value = row->against;
     sets.like_with_like =
         same_definition(row->against.provenance, row->reference.provenance);
+    sets.repeats = false;
     sets.residual = row->disagreement;
     sets.has_percent = row->has_disagreement_percent;
     sets.percent = row->disagreement_percent;

@@ -33,7 +33,8 @@ const char *row_state_id(enum row_state state);
  * offers the quantity; reference.provenance is NULL when no set was chosen.
  * residual = value - reference, exact in decimal, and in per cent of the
  * reference, only in ROW_OK (percent only where the reference is not zero).
- * like_with_like: both have the same definition. reason: "" in ROW_OK, else one
+ * like_with_like: both have the same definition. repeats: the reference is the
+ * model's own calculation, published. reason: "" in ROW_OK, else one
  * clause that says why there is no residual; borrowed. */
 struct row {
     struct species species;
@@ -44,6 +45,7 @@ struct row {
     struct reading reference;
     enum row_state state;
     bool like_with_like;
+    bool repeats;
     bool has_percent;
     struct number residual;
     struct number percent;

@@ -4,6 +4,7 @@
 #include <string.h>
 
 #include "element/selection.h"
+#include "refdata/catalogue.h"
 
 #define FIELD_TEXT_MAX 1024
 #define DIGITS 12 /* of a statistic: more than the residuals have */
@@ -95,6 +96,58 @@ static void put_largest_symbol(const struct record *r, struct text *t)
             t, ion_print(r->summary.largest_z, r->summary.largest_charge, ion));
 }
 
+/* "measured 82, extrapolated 18": the kinds of the stored values taken. */
+static void put_evidence(const struct record *r, struct text *t)
+{
+    int counts[EVIDENCE_COUNT] = {0};
+    for (int i = 0; i < r->series->count; i++) {
+        const struct audit_point *p = &r->series->points[i];
+        if (p->state == ROW_OK && audit_holds(r->part, p))
+            counts[p->evidence]++;
+    }
+    for (int e = 0; e < EVIDENCE_COUNT; e++)
+        if (counts[e] > 0)
+            text_addf(t, "%s%s %d", t->length ? ", " : "",
+                      evidence_id((enum evidence)e), counts[e]);
+}
+
+/* Symbols of the elements in the part that `tagged` is true of. */
+static void put_elements(const struct record *r,
+                         bool (*tagged)(const struct availability *a),
+                         struct text *t)
+{
+    const struct dataset *set = catalogue_availability();
+    bool there[Z_MAX + 1] = {false};
+    for (int i = 0; i < r->series->count; i++)
+        if (audit_holds(r->part, &r->series->points[i]))
+            there[r->series->points[i].z] = true;
+    for (int z = 1; z <= Z_MAX; z++) {
+        const struct availability *a = dataset_availability(set, z);
+        if (there[z] && a && tagged(a))
+            text_addf(t, "%s%s", t->length ? " " : "", element_at(z)->symbol);
+    }
+}
+
+static bool has_caution(const struct availability *a)
+{
+    return a->radioactive != RADIOACTIVE_NO || a->hazards != 0;
+}
+
+static bool is_critical(const struct availability *a)
+{
+    return a->critical != 0;
+}
+
+static void put_cautions(const struct record *r, struct text *t)
+{
+    put_elements(r, has_caution, t);
+}
+
+static void put_critical(const struct record *r, struct text *t)
+{
+    put_elements(r, is_critical, t);
+}
+
 static void put_percent(const struct record *r, struct text *t)
 {
     if (r->summary.percent_count > 0)
@@ -148,6 +201,9 @@ static const struct {
     {"rms", put_rms, true, false},
     {"largest", put_largest, true, false},
     {"largest_symbol", put_largest_symbol, false, false},
+    {"evidence", put_evidence, false, false},
+    {"cautions", put_cautions, false, false},
+    {"critical", put_critical, false, false},
     {"mean_absolute_percent", put_percent, true, true},
     {"model_definition", put_model_definition, false, true},
     {"reference_definition", put_set_definition, false, true},

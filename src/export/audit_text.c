@@ -68,6 +68,7 @@ static void add_line(struct table *table, struct legend *legend,
     const struct note notes[] = {
         {"not like with like; the model gives: ",
          s->like_with_like || !s->reference ? "" : s->value->definition},
+        {"", s->repeats ? "the set is the same calculation, published" : ""},
         {"", s->reference ? "" : "no reference set for this quantity"},
     };
     legend_notes(legend, notes, sizeof notes / sizeof notes[0], &t);
@@ -116,6 +117,54 @@ static void add_place(struct table *table, const struct audit *audit,
     table_cellf(table, "%s %s", s->value->id,
                 number_print_places(rank->mean_absolute[place],
                                     s->unit->decimals, out));
+}
+
+/* Models that a ranking leaves out, as "shells and slater". */
+static void left_out(const struct audit *audit, const struct audit_series *one,
+                     bool unlike, struct text *t)
+{
+    const char *name = NULL;
+    bool begun = false;
+    for (int i = 0; i <= audit->count; i++) {
+        const struct audit_series *s = &audit->series[i];
+        bool end = i == audit->count;
+        if (!end &&
+            (s->quantity != one->quantity || s->reference != one->reference ||
+             (unlike ? s->like_with_like : !s->repeats || !s->like_with_like)))
+            continue;
+        if (name)
+            text_addf(t, "%s%s", !begun ? "" : end ? " and " : ", ", name);
+        begun = begun || name;
+        name = end ? NULL : s->value->id;
+    }
+}
+
+/* Why models have no place: a residual against another thing is no error, and
+ * one against the same calculation no test. */
+static void write_left_out(FILE *out, const struct audit *audit,
+                           struct legend *legend)
+{
+    bool any = false;
+    for (int i = 0; i < audit->count; i++) {
+        const struct audit_series *s = &audit->series[i];
+        char letter[CELL_TEXT_MAX];
+        char names[CELL_TEXT_MAX];
+        struct text l = text_over(letter, sizeof letter);
+        if (!s->reference || !is_first(audit, i))
+            continue;
+        legend_set(legend, s->reference, &l);
+        for (int unlike = 1; unlike >= 0; unlike--) {
+            struct text t = text_over(names, sizeof names);
+            left_out(audit, s, unlike, &t);
+            if (t.length == 0)
+                continue;
+            fprintf(out, "%s%s, set %s: %s not ranked: %s\n", any ? "" : "\n",
+                    quantity_at(s->quantity)->id, letter, names,
+                    unlike ? "not like with like, a residual is no error"
+                           : "the set is the same calculation");
+            any = true;
+        }
+    }
 }
 
 static int add_best(struct table *table, const struct audit *audit,
@@ -173,6 +222,8 @@ bool audit_write_text(FILE *out, const struct audit *audit, unsigned scopes,
     struct legend legend = {0};
     bool ok = write_lines(out, audit, scopes, &legend, style, st) &&
               write_best(out, audit, scopes, &legend, style, st);
+    if (ok)
+        write_left_out(out, audit, &legend);
     if (ok && legend.failed)
         ok = status_fail(st, STATUS_MEMORY, "out of memory");
     if (ok)

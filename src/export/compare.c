@@ -1,6 +1,8 @@
 /* SPDX-License-Identifier: MIT */
 #include "export/compare.h"
 
+#include <string.h>
+
 #define FIELD_TEXT_MAX 1024
 
 static void put_number(bool there, struct number n, struct text *t)
@@ -111,6 +113,36 @@ static void put_remark(const struct record *r, struct text *t)
                                                 : r->reading->reason);
 }
 
+static void put_evidence(const struct record *r, struct text *t)
+{
+    if (!r->line->provenance->computed && r->reading->state == READING_OK)
+        text_add(t, evidence_id(r->reading->evidence));
+}
+
+/* A fact of the record's atom by its label. */
+static void put_fact(const struct record *r, const char *label, struct text *t)
+{
+    const struct comparison *c = r->comparison;
+    for (int f = 0; f < c->fact_count; f++)
+        if (strcmp(c->facts[f].label, label) == 0)
+            text_add(t, c->facts[f].text[r->which]);
+}
+
+static void put_caution(const struct record *r, struct text *t)
+{
+    put_fact(r, "caution", t);
+}
+
+static void put_supply(const struct record *r, struct text *t)
+{
+    put_fact(r, "supply", t);
+}
+
+static void put_abundance(const struct record *r, struct text *t)
+{
+    put_fact(r, "abundance", t);
+}
+
 static void put_citation(const struct record *r, struct text *t)
 {
     provenance_text(t, r->line->provenance);
@@ -139,10 +171,14 @@ static const struct {
     {"subshell", put_subshell, false},
     {"value", put_value, true},
     {"uncertainty", put_uncertainty, true},
+    {"evidence", put_evidence, false},
     {"difference", put_difference, true},
     {"difference_percent", put_percent, true},
     {"state", put_state, false},
     {"remark", put_remark, false},
+    {"caution", put_caution, false},
+    {"supply", put_supply, false},
+    {"abundance", put_abundance, false},
     {"source", put_citation, false},
     {"version", put_version, false},
 };

@@ -67,6 +67,9 @@ static void add_notes(struct table *table, struct legend *legend,
         {"", row->value.remark},
         {"not like with like; the reference is: ",
          unlike ? row->reference.provenance->definition : ""},
+        {"", row->state == ROW_OK && row->repeats
+                 ? "the reference is the same calculation, published"
+                 : ""},
         {"reference: ", stored ? row->reference.remark : ""},
         {"second: ",
          row->against.provenance && !second ? row->against.reason : ""},

@@ -175,8 +175,8 @@ static struct reading read_ionization(const struct model_offer *offer,
         w->result.state == ZETA_UNBOUND
             ? "one-electron estimate (Koopmans), and an inner subshell is not "
               "bound in this minimal basis"
-            : "one-electron estimate (Koopmans): 1 to 3 eV too small on "
-              "average";
+            : "one-electron estimate (Koopmans); audit with --charge and "
+              "--scope block says how far off";
     return r;
 }
 
@@ -208,12 +208,17 @@ static struct reading read(const void *work, int offer, int n, int l)
     return r;
 }
 
+/* The tables of 1963 and 1967 are this calculation, printed. */
+static const char *const repeats[] = {"zeff_clementi_1963",
+                                      "calculated_clementi_1967", NULL};
+
 const struct model model_single_zeta = {
     .id = "single-zeta",
     .title = "single-zeta Hartree-Fock, solved live",
     .domain = "H to Lr, any valence configuration",
     .closed = false,
     .takes_term = true,
+    .repeats = repeats,
     .offers = offers,
     .offer_count = OFFER_COUNT,
     .work_size = sizeof(struct work),

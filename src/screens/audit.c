@@ -232,8 +232,14 @@ static void rank_text(const struct ui *ui, const struct audit_series *s,
     char number[NUMBER_TEXT_MAX];
     struct audit_rank rank =
         audit_rank(&ui->audit, s->quantity, s->reference, ui->audit_part);
-    if (rank.count < 2)
+    if (rank.unlike > 0)
+        text_add(t, "not ranked: not like with like, where \xE2\x89\xA0; ");
+    if (rank.repeats > 0)
+        text_add(t, "not ranked: the set is the same calculation; ");
+    if (rank.count < 2) {
+        text_add(t, "no best is named");
         return;
+    }
     text_addf(t, "best * on the %d that all have: ", rank.species);
     for (int i = 0; i < rank.count; i++)
         text_addf(t, "%s%s %s", i ? ", " : "",

@@ -241,8 +241,9 @@ static void draw(struct ui *ui, struct canvas *canvas)
         "second set; bars are one standard uncertainty. What joins the "
         "marks is no value, and a gap is not bridged. In the audit a star "
         "marks the model with the smallest residuals over the species "
-        "that all have; a model with less than half of the residuals "
-        "does not take part.");
+        "that all have; a model that gives another thing than the set "
+        "holds, one whose calculation the set is, and one with less than "
+        "half of the residuals do not take part.");
     flow_blank(&flow);
     flow_text(&flow, ROLE_HEADING, 0, "The atom");
     flow_text(

@@ -437,7 +437,7 @@ void draw_facts(const struct ui *ui, struct canvas *canvas, struct area area)
     /* What someone must see comes first: the rest may be cut off. */
     static const enum fact_id order[] = {
         FACT_CONFIGURATION, FACT_CAUTION,   FACT_CATEGORY, FACT_PLACE,
-        FACT_WEIGHT,        FACT_OXIDATION, FACT_SUPPLY};
+        FACT_WEIGHT,        FACT_OXIDATION, FACT_SUPPLY,   FACT_ABUNDANCE};
     const struct element *e = element_at(ui->choice.z);
     struct flow flow = {canvas, area, 0, 0};
     char line[UI_TEXT_MAX];

@@ -18,6 +18,7 @@ static const char *const labels[FACT_COUNT] = {
     [FACT_OXIDATION] = "oxidation states",
     [FACT_CAUTION] = "caution",
     [FACT_SUPPLY] = "supply",
+    [FACT_ABUNDANCE] = "abundance",
 };
 
 const char *fact_label(enum fact_id id)
@@ -111,6 +112,21 @@ static void put_supply(int z, struct text *t)
         text_add(t, dataset_text(set, a->critical));
 }
 
+/* Both stored estimates, each with its book or list. */
+static void put_abundance(int z, struct text *t)
+{
+    const struct dataset *set = catalogue_availability();
+    const struct availability *a = dataset_availability(set, z);
+    char out[NUMBER_TEXT_MAX];
+    if (a && a->has_abundance)
+        text_addf(t, "%s mg/kg in the crust (2016)",
+                  number_print(a->abundance, out));
+    if (a && a->has_abundance_2014)
+        text_addf(t, "%s%s mg/kg in the bulk continental crust (2014)",
+                  a->has_abundance ? "; " : "",
+                  number_print(a->abundance_2014, out));
+}
+
 void study_fact(const struct study *study, const struct species *species,
                 enum fact_id id, struct text *t)
 {
@@ -140,6 +156,9 @@ void study_fact(const struct study *study, const struct species *species,
         break;
     case FACT_SUPPLY:
         put_supply(species->z, t);
+        break;
+    case FACT_ABUNDANCE:
+        put_abundance(species->z, t);
         break;
     case FACT_COUNT:
         break;

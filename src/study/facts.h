@@ -17,6 +17,7 @@ enum fact_id {
     FACT_OXIDATION,     /* common oxidation states */
     FACT_CAUTION,       /* "no stable isotope", tags; safety data sheet */
     FACT_SUPPLY,        /* lists of critical materials with their year */
+    FACT_ABUNDANCE,     /* "56300 mg/kg in the crust" */
     FACT_COUNT
 };
 

@@ -273,6 +273,16 @@ static struct reading chosen_kind(const struct ask *ask, struct reading stored)
     return gap;
 }
 
+/* Whether a set holds the model's own calculation. */
+static bool is_repeated(const struct model *model,
+                        const struct reference *reference)
+{
+    const char *const *ids = model->repeats;
+    while (ids && *ids && strcmp(*ids, reference->provenance->id) != 0)
+        ids++;
+    return ids && *ids;
+}
+
 struct row study_row(const struct study *study, const struct ask *ask)
 {
     struct row row = {.quantity = ask->quantity};
@@ -309,6 +319,7 @@ struct row study_row(const struct study *study, const struct ask *ask)
         definition = reference->provenance->definition;
     row.unit = unit_of(ask, definition);
     row_compare(&row, value, chosen_kind(ask, stored));
+    row.repeats = reference && offer >= 0 && is_repeated(ask->model, reference);
     assert(!ask->against || ask->against->quantity == ask->quantity);
     if (ask->against)
         row_disagree(

@@ -223,6 +223,36 @@ START_TEST(an_audit_leaves_one_out_and_ranks_on_common_species)
 }
 END_TEST
 
+/* A residual against another thing is no error, one against the model's own
+ * calculation no test: neither makes a model best. */
+START_TEST(no_model_is_best_across_unlike_definitions)
+{
+    static const struct provenance near_by = {true,      "near", "",
+                                              "scale b", NULL,   0};
+    static const struct provenance copy = {true,      "copy", "",
+                                           "scale a", NULL,   0};
+    struct audit audit = {0};
+    struct audit_part all = {AUDIT_ALL, 0};
+    struct status st = status_ok();
+    add_run(&audit, &rule, 21, 30, 0.5);
+    add_run(&audit, &near_by, 21, 30, 0.01);
+    for (int z = 21; z <= 30; z++) {
+        struct row row = row_of(QUANTITY_RADIUS, "pm",
+                                reading_computed(QUANTITY_RADIUS, 2, &copy),
+                                stored(QUANTITY_RADIUS, 2, 0, &same));
+        row.species.z = z;
+        row.repeats = true;
+        ck_assert(audit_add(&audit, &row, &st));
+    }
+    struct audit_rank rank = audit_rank(&audit, QUANTITY_RADIUS, &same, all);
+    ck_assert_int_eq(rank.count, 1);
+    ck_assert_ptr_eq(audit.series[rank.series[0]].value, &rule);
+    ck_assert_int_eq(rank.unlike, 1);
+    ck_assert_int_eq(rank.repeats, 1);
+    audit_clear(&audit);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("analysis");
@@ -234,6 +264,7 @@ int main(void)
     tcase_add_test(rows, statistics_count_gaps_and_follow_their_definitions);
     tcase_add_test(rows, two_sets_disagree_only_on_one_scale);
     tcase_add_test(rows, rows_are_sorted_by_size_and_gaps_come_last);
+    tcase_add_test(rows, no_model_is_best_across_unlike_definitions);
     tcase_add_test(rows, an_audit_leaves_one_out_and_ranks_on_common_species);
     suite_add_tcase(suite, rows);
     return run_suite(suite);

@@ -12,7 +12,7 @@ static const struct {
     const char *key, *shows, *also;
 } screens[] = {
     {"c", "Compare", "configuration"},  {"t", "Trend", "along the period"},
-    {"d", "Audit", "best * on the"},    {"a", "Atom", "total energy"},
+    {"d", "Audit", "no best is named"}, {"a", "Atom", "total energy"},
     {"s", "Sources", "Slater's rules"}, {"?", "Keys", "what every key does"},
 };
 
@@ -38,7 +38,7 @@ START_TEST(tab_goes_through_all_screens)
 {
     struct pty *p = session_map();
     static const char *const order[] = {
-        "pin species on the map", "along the period", "best * on",
+        "pin species on the map", "along the period", "no best is named",
         "total energy",           "model for zeff",   "what every key does"};
     for (int i = 0; i < COUNT(order); i++) {
         pty_type(p, "\t");
