@@ -17,9 +17,49 @@ struct text text_over(char *data, size_t capacity)
     return (struct text){.data = data, .capacity = capacity};
 }
 
+/* What a growing text holds before it has grown, or where it cannot. */
+static char nothing[1];
+
+struct text text_growing(void)
+{
+    return (struct text){.data = nothing, .capacity = 1, .grows = true};
+}
+
+void text_free(struct text *t)
+{
+    if (t->grows && t->data != nothing)
+        free(t->data);
+    *t = text_growing();
+}
+
+void text_empty(struct text *t)
+{
+    t->length = 0;
+    t->cut = false;
+    t->data[0] = '\0';
+}
+
+/* Room for n bytes more; false where memory is short. */
+static bool grow(struct text *t, size_t n)
+{
+    size_t needed = t->length + n + 1;
+    size_t capacity = t->capacity < 128 ? 128 : t->capacity;
+    while (capacity < needed)
+        capacity *= 2;
+    char *data = t->data == nothing ? NULL : t->data;
+    data = realloc(data, capacity);
+    if (!data)
+        return false;
+    t->data = data;
+    t->capacity = capacity;
+    return true;
+}
+
 void text_add_bytes(struct text *t, const char *s, size_t n)
 {
     size_t room = t->capacity - 1 - t->length;
+    if (n > room && t->grows && grow(t, n))
+        room = n;
     if (n > room) {
         t->cut = true;
         n = room;

@@ -9,17 +9,27 @@
 
 #include "base/status.h"
 
-/* A text that grows in a fixed buffer; `cut` says that something was left
- * out. Always terminated, never ends in half a character. */
+/* A text in a fixed buffer, or in one that grows; `cut` says that something
+ * was left out: the buffer was full, or memory was short. Always terminated,
+ * never ends in half a character. */
 struct text {
     char *data;
     size_t capacity; /* bytes in data, terminator included; >= 1 */
     size_t length;
     bool cut;
+    bool grows; /* data is owned */
 };
 
 /* An empty text over data[capacity]. */
 struct text text_over(char *data, size_t capacity);
+
+/* An empty text that grows as needed; text_free releases it. Where memory is
+ * short it stays empty and cut. */
+struct text text_growing(void);
+void text_free(struct text *t);
+
+/* Makes it empty again, keeping its buffer. */
+void text_empty(struct text *t);
 
 /* Appends a terminated string. */
 void text_add(struct text *t, const char *s);

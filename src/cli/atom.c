@@ -3,7 +3,7 @@
 #include "cli/commands.h"
 #include "cli/output.h"
 #include "element/selection.h"
-#include "export/atom.h"
+#include "report/solved.h"
 #include "study/atom_run.h"
 
 static const struct unit *unit_for(const struct request *r,
@@ -13,21 +13,18 @@ static const struct unit *unit_for(const struct request *r,
     return unit ? unit : unit_find(usual);
 }
 
-static bool write(const struct request *r, const struct atom_report *report,
+static bool write(const struct request *r, const struct atom_report *atom,
                   struct status *st)
 {
-    struct output out;
-    const struct unit *energy = unit_for(r, DIMENSION_ENERGY, "hartree");
-    const struct unit *length = unit_for(r, DIMENSION_LENGTH, "pm");
-    bool ok = output_open(&out, r, st);
-    if (!ok)
-        return false;
-    if (r->format == EXPORT_TEXT)
-        ok =
-            atom_write_text(out.stream, report, energy, length, &out.style, st);
-    else
-        atom_write(out.stream, r->format, report, energy, length);
-    return output_close(&out, ok, st);
+    struct report report;
+    report_begin(&report);
+    solved_report(&report, r->format->uses, atom,
+                  atom_run_source(r->method.functional),
+                  unit_for(r, DIMENSION_ENERGY, "hartree"),
+                  unit_for(r, DIMENSION_LENGTH, "pm"));
+    bool ok = output_report(r, &report, st);
+    report_clear(&report);
+    return ok;
 }
 
 /* Solves to the end; an atom that has no result is a failure with its reason.

@@ -2,7 +2,7 @@
 /* `audit`: how far each model can be trusted where. */
 #include "cli/commands.h"
 #include "cli/output.h"
-#include "export/audit.h"
+#include "report/audit.h"
 
 /* All chosen atoms under one model and reference; model NULL: the second set
  * in the place of the model. */
@@ -57,8 +57,8 @@ static bool gather(struct request *r, struct audit *audit, struct status *st)
 
 bool cli_audit(struct request *r, struct status *st)
 {
-    struct output out;
     struct audit audit = {0};
+    struct report report;
     bool ok = output_check(r, st) && gather(r, &audit, st);
     if (ok && audit.count == 0 && r->model_count == 0)
         ok = status_fail(st, STATUS_USAGE,
@@ -69,14 +69,12 @@ bool cli_audit(struct request *r, struct status *st)
                          "audit: no model computes any of the quantities "
                          "asked for; --against sets two data sets against "
                          "each other");
-    ok = ok && output_open(&out, r, st);
+    report_begin(&report);
     if (ok) {
-        ok = r->format == EXPORT_TEXT
-                 ? audit_write_text(out.stream, &audit, r->scopes, &out.style,
-                                    st)
-                 : audit_write(out.stream, r->format, &audit, r->scopes, st);
-        ok = output_close(&out, ok, st);
+        audit_report(&report, r->format->uses, &audit, r->scopes);
+        ok = output_report(r, &report, st);
     }
+    report_clear(&report);
     audit_clear(&audit);
     return ok;
 }

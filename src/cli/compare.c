@@ -4,7 +4,7 @@
 
 #include "cli/commands.h"
 #include "cli/output.h"
-#include "export/compare.h"
+#include "report/comparison.h"
 #include "study/facts.h"
 
 /* All sets, or those that were named. */
@@ -96,13 +96,12 @@ static bool add_disagreements(const struct request *r, struct comparison *c,
 static bool write(const struct request *r, const struct comparison *c,
                   struct status *st)
 {
-    struct output out;
-    if (!output_open(&out, r, st))
-        return false;
-    bool ok = r->format == EXPORT_TEXT
-                  ? compare_write_text(out.stream, c, &out.style, st)
-                  : compare_write(out.stream, r->format, c, st);
-    return output_close(&out, ok, st);
+    struct report report;
+    report_begin(&report);
+    comparison_report(&report, r->format->uses, c);
+    bool ok = output_report(r, &report, st);
+    report_clear(&report);
+    return ok;
 }
 
 bool cli_compare(struct request *r, struct status *st)

@@ -5,8 +5,7 @@
 
 #include "cli/commands.h"
 #include "cli/output.h"
-#include "export/rows.h"
-#include "export/rows_text.h"
+#include "report/rows.h"
 
 /* Rows being gathered, in the order of the output. */
 struct gathered {
@@ -63,21 +62,20 @@ static bool gather_all(struct request *r, struct gathered *g, struct status *st)
 
 bool cli_list(struct request *r, struct status *st)
 {
-    struct output out;
+    struct report report;
     size_t wanted = rows_wanted(r);
     assert(wanted > 0); /* at least one atom and one quantity are chosen */
     struct gathered g = {calloc(wanted, sizeof *g.rows), 0};
     if (!g.rows)
         return status_fail(st, STATUS_MEMORY, "out of memory");
+    report_begin(&report);
     bool ok = output_check(r, st) && gather_all(r, &g, st) &&
-              (!r->has_order || rows_sort(g.rows, g.count, r->order, st)) &&
-              output_open(&out, r, st);
+              (!r->has_order || rows_sort(g.rows, g.count, r->order, st));
     if (ok) {
-        ok = r->format == EXPORT_TEXT
-                 ? rows_write_text(out.stream, g.rows, g.count, &out.style, st)
-                 : rows_write(out.stream, r->format, g.rows, g.count, st);
-        ok = output_close(&out, ok, st);
+        rows_report(&report, r->format->uses, g.rows, g.count);
+        ok = output_report(r, &report, st);
     }
+    report_clear(&report);
     free(g.rows);
     return ok;
 }

@@ -92,7 +92,7 @@ static const struct option options[OPTION_COUNT] = {
      "repeated"},
     {OPTION_FORMAT, "format", 'f', "FORMAT", OPTION_VALUE, WORDS_FORMAT, false,
      ANY_COMMAND,
-     "text, csv or json; sources also writes bibtex (default: text)"},
+     "text, csv, json or bibtex, the sources alone (default: text)"},
     {OPTION_OUTPUT, "output", 'o', "FILE", OPTION_VALUE, WORDS_FILE, false,
      ANY_COMMAND,
      "write to a new file, whole or not at all (default, or with -: standard "

@@ -59,7 +59,7 @@ static void choose_style(struct output *o, const struct request *r)
 {
     const char *term = getenv("TERM");
     bool shown = !o->to_file && isatty(STDOUT_FILENO) && has_marks(term);
-    o->style = table_plain;
+    o->style = write_plain;
     if (r->color == COLOR_NEVER || (r->color == COLOR_AUTO && !shown))
         return;
     enum color_tier tier = tier_of(r, term);
@@ -120,4 +120,14 @@ bool output_close(struct output *output, bool ok, struct status *st)
     if (output->to_file)
         return file_draft_commit(&output->draft, st);
     return file_flush(stdout, "standard output", st);
+}
+
+bool output_report(const struct request *request, const struct report *report,
+                   struct status *st)
+{
+    struct output out;
+    if (!report_whole(report, st) || !output_open(&out, request, st))
+        return false;
+    bool ok = format_write(request->format, out.stream, report, &out.style, st);
+    return output_close(&out, ok, st);
 }

@@ -6,7 +6,7 @@
 
 #include "base/file.h"
 #include "cli/request.h"
-#include "export/table.h"
+#include "write/format.h"
 
 #define OUTPUT_MARK_MAX 32
 
@@ -19,7 +19,7 @@ struct output {
     bool to_file;
     char *memory;
     size_t size;
-    struct table_style style;
+    struct write_style style;
     char marks[4][OUTPUT_MARK_MAX];
 };
 
@@ -36,5 +36,9 @@ MUST_CHECK bool output_open(struct output *output,
  * flushed and every write error reported (STATUS_FILE); without, the file is
  * dropped and st stays as it is. Gives whether all went well. */
 MUST_CHECK bool output_close(struct output *output, bool ok, struct status *st);
+
+/* A whole report to the request's output in its format. */
+MUST_CHECK bool output_report(const struct request *request,
+                              const struct report *report, struct status *st);
 
 #endif

@@ -384,7 +384,7 @@ static bool read_choice(const struct request *r, enum option_id id, int *choice,
 
 static bool read_output(struct request *r, struct status *st)
 {
-    int format = EXPORT_TEXT;
+    int format = 0;
     int color = COLOR_AUTO;
     int scheme = SCHEME_TERMINAL;
     if (!read_choice(r, OPTION_FORMAT, &format, st) ||
@@ -392,15 +392,10 @@ static bool read_output(struct request *r, struct status *st)
         !read_choice(r, OPTION_BACKGROUND, &scheme, st))
         return false;
     r->scheme = (enum scheme)scheme;
-    r->bibtex = format > EXPORT_JSON;
-    r->format = r->bibtex ? EXPORT_TEXT : (enum export_format)format;
-    if (r->bibtex && r->call->command->id != COMMAND_SOURCES)
-        return status_fail(st, STATUS_USAGE,
-                           "--format bibtex: only sources writes it; expected "
-                           "text, csv or json");
+    r->format = format_list[format];
     r->color = (enum color_option)color;
     r->ascii = given(r, OPTION_ASCII) != NULL;
-    if (r->ascii && r->format != EXPORT_TEXT)
+    if (r->ascii && !r->format->for_people)
         return status_fail(st, STATUS_USAGE,
                            "--ascii: %s is always UTF-8; expected it with "
                            "--format text or bibtex",

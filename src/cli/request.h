@@ -11,11 +11,11 @@
 #include "cli/parse.h"
 #include "element/configuration.h"
 #include "element/selection.h"
-#include "export/format.h"
 #include "model/registry.h"
 #include "refdata/ground.h"
 #include "study/study.h"
 #include "terminal/palette.h"
+#include "write/format.h"
 
 #define REQUEST_MODEL_MAX 16
 /* Every element at every charge, from the lowest anion to the bare nucleus. */
@@ -62,8 +62,7 @@ struct request {
     int atom_count;
     struct request_atom atoms[REQUEST_ATOM_MAX];
     short place[Z_MAX + 1][REQUEST_CHARGES]; /* in atoms, plus 1 */
-    enum export_format format;
-    bool bibtex;
+    const struct format *format;
     const char *output;
     bool force;
     enum color_option color; /* words in the order of the enumerators */

@@ -11,13 +11,13 @@
 #include "element/quantity.h"
 #include "element/subshell.h"
 #include "model/registry.h"
+#include "write/format.h"
 
 /* In the order of model_options.average_term: false, true. */
 static const char *const terms[] = {"hund", "average"};
 /* Bytes of a refused word that a message shows. */
 #define WORD_SHOWN_MAX 41
 
-static const char *const formats[] = {"text", "csv", "json", "bibtex"};
 static const char *const colors[] = {"auto", "always", "never"};
 /* In the order of enum scheme; colors in that of enum color_option. */
 static const char *const backgrounds[] = {"terminal", "light", "dark",
@@ -126,7 +126,8 @@ void words_fill(struct words *words, enum word_kind kind,
                        relativity_title((enum relativity)i));
         break;
     case WORDS_FORMAT:
-        ADD_ARRAY(words, formats);
+        for (int f = 0; f < format_list_count; f++)
+            add(words, format_list[f]->id);
         break;
     case WORDS_COLOR:
         ADD_ARRAY(words, colors);

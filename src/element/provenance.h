@@ -5,6 +5,8 @@
 
 #include <stdbool.h>
 
+#include "base/text.h"
+
 /* A bibliographic record. Fields that do not apply are NULL or 0. key is a
  * BibTeX key; kind a BibTeX entry type: "article", "book", "misc", … */
 struct citation {
@@ -31,5 +33,11 @@ struct provenance {
     const struct citation *citations; /* citations[citation_count] */
     int citation_count;
 };
+
+/* Appends "E. Author, Journal 36, 57 (1930), doi 10.…". */
+void citation_text(struct text *t, const struct citation *citation);
+
+/* Appends all citations of a source joined by "; ", nothing for NULL. */
+void provenance_text(struct text *t, const struct provenance *provenance);
 
 #endif

@@ -68,3 +68,20 @@ struct reading reading_in_unit(struct reading reading, const struct unit *unit)
         reading.u = number_scale_uncertainty(reading.u, unit->per_base);
     return reading;
 }
+
+void reading_text(struct text *t, const struct reading *reading)
+{
+    char value[NUMBER_TEXT_MAX];
+    char u[NUMBER_TEXT_MAX];
+    if (!reading->has_u || reading->u.decimals > reading->value.decimals) {
+        text_add(t, number_print(reading->value, value));
+        if (reading->has_u)
+            text_addf(t, " +- %s", number_print(reading->u, u));
+        return;
+    }
+    /* A derived value may have more places than its uncertainty. */
+    int places = reading->u.decimals;
+    double last = reading->u.value * pow(10, places);
+    text_addf(t, "%s(%.0f)",
+              number_print_places(reading->value.value, places, value), last);
+}

@@ -60,6 +60,10 @@ struct reading reading_gap(enum quantity_id quantity, enum reading_state state,
 /* The same reading in another unit of its dimension. */
 struct reading reading_in_unit(struct reading reading, const struct unit *unit);
 
+/* Appends a number in the concise form of tables, "6.634126(5)"; "31 +- 0.5"
+ * where the uncertainty has finer digits than the value. */
+void reading_text(struct text *t, const struct reading *reading);
+
 /* One quantity from one source for all elements; readings[z], z = 1…Z_MAX,
  * [0] unused. */
 struct sheet {

@@ -65,3 +65,11 @@ bool term_parse(const char *text, struct term *term)
     term->twice_j = parse_j(j);
     return term->twice_j >= 0;
 }
+
+void species_configuration_text(struct text *t, const struct species *species)
+{
+    char out[CONFIGURATION_TEXT_MAX];
+    text_add(t, configuration_print(&species->configuration, out));
+    if (species->origin == ORIGIN_PREDICTED || species->origin == ORIGIN_RULE)
+        text_addf(t, " (%s)", configuration_origin_text(species->origin));
+}

@@ -5,6 +5,7 @@
 
 #include <stdbool.h>
 
+#include "base/text.h"
 #include "element/configuration.h"
 
 /* Where a configuration comes from. */
@@ -40,5 +41,9 @@ struct species {
     enum configuration_origin origin;
     struct term term;
 };
+
+/* Appends a configuration with where it comes from when that is not a table:
+ * "[Ar] 3d6 (by rule)". */
+void species_configuration_text(struct text *t, const struct species *species);
 
 #endif

@@ -11,4 +11,8 @@ extern const struct model model_clementi;
 extern const struct model model_single_zeta;
 extern const struct model model_scf;
 
+/* All of them, in the order in which they are shown. */
+extern const struct model *const model_list[];
+extern const int model_list_count;
+
 #endif

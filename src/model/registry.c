@@ -6,34 +6,29 @@
 
 #include "model/models.h"
 
-static const struct model *const models[] = {
-    &model_shells,      &model_slater, &model_clementi,
-    &model_single_zeta, &model_scf,
-};
-
 int model_count(void)
 {
-    return (int)(sizeof models / sizeof models[0]);
+    return model_list_count;
 }
 
 const struct model *model_at(int i)
 {
     assert(i >= 0 && i < model_count());
-    return models[i];
+    return model_list[i];
 }
 
 const struct model *model_find(const char *id)
 {
     for (int i = 0; i < model_count(); i++)
-        if (strcmp(models[i]->id, id) == 0)
-            return models[i];
+        if (strcmp(model_list[i]->id, id) == 0)
+            return model_list[i];
     return NULL;
 }
 
 int model_index(const struct model *model)
 {
     int i = 0;
-    while (models[i] != model)
+    while (model_list[i] != model)
         i++;
     return i;
 }

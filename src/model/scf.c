@@ -9,6 +9,7 @@
 #include "atom/result.h"
 #include "base/units.h"
 #include "model/models.h"
+#include "model/scf.h"
 #include "model/rule.h"
 
 #define ISODENSITY 0.001 /* electrons/bohr^3, as the reference sets */
@@ -50,7 +51,20 @@ static const struct citation citations[] = {
     {                                                                          \
         true, "scf", "self-consistent Kohn-Sham atom", what, citations, count  \
     }
-enum { SOURCES_DENSITY = 3, SOURCES_ENERGY = 6, SOURCES_ALLEN = 7 };
+enum {
+    SOURCES_DENSITY = 3,
+    SOURCES_GRADIENT = 4,
+    SOURCES_ENERGY = 6,
+    SOURCES_ALLEN = 7
+};
+
+const struct provenance *scf_atom_source(bool gradient)
+{
+    static const struct provenance sources[] = {
+        PROVENANCE("self-consistent atom", SOURCES_DENSITY),
+        PROVENANCE("self-consistent atom", SOURCES_GRADIENT)};
+    return &sources[gradient];
+}
 
 enum {
     OFFER_ZEFF,

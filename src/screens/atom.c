@@ -7,7 +7,6 @@
 #include <string.h>
 
 #include "base/text.h"
-#include "export/format.h"
 
 #define LEVELS_HEAD 7 /* rows of the energies and the blank below them */
 

@@ -3,16 +3,18 @@
  * command that prints them. */
 #include <stdlib.h>
 
+#include "base/array.h"
 #include "base/text.h"
 #include "element/subshell.h"
-#include "export/atom.h"
-#include "export/audit.h"
-#include "export/compare.h"
-#include "export/rows.h"
+#include "report/audit.h"
+#include "report/comparison.h"
+#include "report/rows.h"
+#include "report/solved.h"
 #include "screens/atom.h"
 #include "screens/audit.h"
 #include "screens/parts.h"
 #include "study/facts.h"
+#include "write/format.h"
 
 /* Rows of some species under all models, or under the chosen one. */
 struct rows {
@@ -23,14 +25,9 @@ struct rows {
 static bool add_row(const struct ui *ui, struct rows *rows,
                     const struct ask *ask, struct status *st)
 {
-    if (rows->count == rows->capacity) {
-        size_t capacity = rows->capacity ? 2 * rows->capacity : 128;
-        struct row *more = realloc(rows->items, capacity * sizeof *more);
-        if (!more)
-            return status_fail(st, STATUS_MEMORY, "out of memory");
-        rows->items = more;
-        rows->capacity = capacity;
-    }
+    if (!array_grow(&rows->items, rows->count, &rows->capacity,
+                    sizeof *rows->items))
+        return status_fail(st, STATUS_MEMORY, "out of memory");
     rows->items[rows->count++] = study_row(ui->study, ask);
     return true;
 }
@@ -96,28 +93,61 @@ static bool collect(const struct ui *ui, struct rows *rows, struct status *st)
     return true;
 }
 
+/* Writes a report that was filled with records. */
+static bool write(struct report *report, FILE *out, struct status *st)
+{
+    bool ok = format_write(&format_csv, out, report, &write_plain, st);
+    report_clear(report);
+    return ok;
+}
+
 static bool export_comparison(const struct ui *ui, FILE *out, struct status *st)
 {
     /* The comparison on screen is up to date: it was drawn before. */
-    return compare_write(out, EXPORT_CSV, &ui->comparison, st);
+    struct report report;
+    report_begin(&report);
+    comparison_report(&report, REPORT_RECORDS, &ui->comparison);
+    return write(&report, out, st);
 }
 
 static bool export_atom(const struct ui *ui, FILE *out, struct status *st)
 {
-    const struct atom_report *report = atom_solved(ui, SLOT_CHOSEN);
-    if (!report)
+    struct report report;
+    const struct atom_report *atom = atom_solved(ui, SLOT_CHOSEN);
+    if (!atom)
         return status_fail(st, STATUS_CONVERGENCE, "the atom is not solved");
-    atom_write(out, EXPORT_CSV, report, ui_unit(ui, QUANTITY_IONIZATION),
-               ui_unit(ui, QUANTITY_RADIUS));
-    return true;
+    report_begin(&report);
+    solved_report(
+        &report, REPORT_RECORDS, atom, atom_run_source(atom->method.functional),
+        ui_unit(ui, QUANTITY_IONIZATION), ui_unit(ui, QUANTITY_RADIUS));
+    return write(&report, out, st);
 }
 
 static bool export_audit(const struct ui *ui, FILE *out, struct status *st)
 {
     struct audit audit = {0};
-    bool ok = audit_fill(ui, &audit, st) &&
-              audit_write(out, EXPORT_CSV, &audit, 0, st);
+    struct report report;
+    bool ok = audit_fill(ui, &audit, st);
+    report_begin(&report);
+    if (ok) {
+        audit_report(&report, REPORT_RECORDS, &audit, 0);
+        ok = write(&report, out, st);
+    }
     audit_clear(&audit);
+    return ok;
+}
+
+static bool export_rows(const struct ui *ui, FILE *out, struct status *st)
+{
+    struct rows rows = {0};
+    struct report report;
+    bool ok = collect(ui, &rows, st);
+    report_begin(&report);
+    if (ok) {
+        rows_report(&report, REPORT_RECORDS, rows.items, rows.count);
+        ok = write(&report, out, st);
+    }
+    free(rows.items);
     return ok;
 }
 
@@ -127,13 +157,9 @@ bool ui_export(const struct ui *ui, FILE *out, struct status *st)
         return export_audit(ui, out, st);
     if (ui->scope == SCOPE_ATOM)
         return export_atom(ui, out, st);
-    struct rows rows = {0};
     if (ui->scope == SCOPE_COMPARE)
         return export_comparison(ui, out, st);
-    bool ok = collect(ui, &rows, st) &&
-              rows_write(out, EXPORT_CSV, rows.items, rows.count, st);
-    free(rows.items);
-    return ok;
+    return export_rows(ui, out, st);
 }
 
 static void add_species(struct text *t, int z, int charge)

@@ -6,7 +6,6 @@
 #include <string.h>
 
 #include "base/text.h"
-#include "export/format.h"
 #include "screens/parts.h"
 #include "study/facts.h"
 

@@ -6,7 +6,6 @@
 
 #include "base/text.h"
 #include "element/selection.h"
-#include "export/format.h"
 #include "screens/trend.h"
 
 #define UNEQUAL 0x2260

@@ -6,8 +6,6 @@
 #include <stdio.h>
 #include <string.h>
 
-#include "export/compare.h"
-#include "export/rows.h"
 #include "screens/atom.h"
 #include "screens/parts.h"
 

@@ -8,6 +8,7 @@
 #include "atom/result.h"
 #include "base/text.h"
 #include "base/units.h"
+#include "model/scf.h"
 
 struct atom_run {
     struct atom_solver *solver;
@@ -172,4 +173,9 @@ double atom_run_extent(const struct atom_run *run, double electrons)
 {
     assert(run->report.state == REPORT_SOLVED);
     return atom_extent(run->solver, electrons);
+}
+
+const struct provenance *atom_run_source(enum functional functional)
+{
+    return scf_atom_source(functional == FUNCTIONAL_PBE);
 }

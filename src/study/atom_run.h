@@ -22,6 +22,9 @@ MUST_CHECK bool atom_run_begin(struct atom_run *run,
                                const struct atom_method *method,
                                struct status *st);
 
+/* What an atom solved with a functional rests on. */
+const struct provenance *atom_run_source(enum functional functional);
+
 /* One self-consistency cycle; true while there is more to do. */
 bool atom_run_step(struct atom_run *run);
 

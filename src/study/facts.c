@@ -349,7 +349,7 @@ static int model_sources(const struct model *model, struct source *sources,
                                  .domain = model->domain};
         }
         struct text t = {s->quantity, sizeof s->quantity, strlen(s->quantity),
-                         false};
+                         false, false};
         if (!strstr(s->quantity, id))
             text_addf(&t, t.length ? " %s" : "%s", id);
     }

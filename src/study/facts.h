@@ -5,7 +5,7 @@
 #define STUDY_FACTS_H
 
 #include "analysis/comparison.h"
-#include "export/sources.h"
+#include "analysis/source.h"
 #include "study/study.h"
 
 /* The facts shown of a species, in order: what stands for each. */

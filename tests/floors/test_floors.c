@@ -17,10 +17,10 @@ static const struct {
     const char *folder;
     int floor;
 } floors[] = {
-    {"base", 0},     {"numeric", 1}, {"element", 1}, {"atom", 2},
-    {"zeta", 2},     {"refdata", 2}, {"canvas", 2},  {"analysis", 2},
-    {"model", 3},    {"export", 3},  {"study", 4},   {"screens", 5},
-    {"terminal", 6}, {"cli", 7},
+    {"base", 0},    {"numeric", 1},  {"element", 1}, {"atom", 2},
+    {"zeta", 2},    {"refdata", 2},  {"canvas", 2},  {"analysis", 2},
+    {"model", 3},   {"report", 3},   {"write", 4},   {"study", 4},
+    {"screens", 5}, {"terminal", 6}, {"cli", 7},
 };
 #define FLOOR_COUNT (sizeof floors / sizeof floors[0])
 

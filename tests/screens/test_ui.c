@@ -6,7 +6,6 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "export/rows.h"
 #include "screens/parts.h"
 #include "screens/desk.h"
 #include "screens/desk_keys.h"

@@ -1,9 +1,9 @@
 /* SPDX-License-Identifier: MIT */
-/* What every number rests on: models and data sets with their citations. */
-#ifndef EXPORT_SOURCES_H
-#define EXPORT_SOURCES_H
+/* A model or data set as something that numbers rest on. */
+#ifndef ANALYSIS_SOURCE_H
+#define ANALYSIS_SOURCE_H
 
-#include "export/format.h"
+#include "element/provenance.h"
 
 #define SOURCE_QUANTITY_MAX 96
 
@@ -17,12 +17,5 @@ struct source {
     int note_count;
     int count; /* stored values; 0 for a model */
 };
-
-MUST_CHECK bool sources_write(FILE *out, enum export_format format,
-                              const struct source *sources, int count,
-                              struct status *st);
-
-/* BibTeX, one entry per citation, each key once. */
-void sources_write_bibtex(FILE *out, const struct source *sources, int count);
 
 #endif
