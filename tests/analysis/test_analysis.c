@@ -5,6 +5,7 @@
 #include <string.h>
 
 #include "analysis/audit.h"
+#include "analysis/comparison.h"
 #include "analysis/order.h"
 #include "analysis/row.h"
 #include "analysis/summary.h"
@@ -166,9 +167,75 @@ START_TEST(rows_are_sorted_by_size_and_gaps_come_last)
     ck_assert(rows_sort(rows, 5, ROW_ORDER_RESIDUAL, &st));
     for (int i = 0; i < 5; i++)
         ck_assert_int_eq(rows[i].species.z, want[i]);
-    for (int o = 0; o < ROW_ORDER_COUNT; o++)
-        ck_assert(rows_sort(rows, 5, (enum row_order)o, &st));
     ck_assert(rows_sort(rows, 0, ROW_ORDER_VALUE, &st));
+}
+END_TEST
+
+/* Five rows whose order is another one by each number; the fourth has no model
+ * value, the fifth no second set. */
+START_TEST(every_order_is_by_its_own_number)
+{
+    static const double value[] = {10, 30, 20, 0, 25};
+    static const double reference[] = {8, 33, 19, 7, 26};
+    static const double against[] = {8.5, 30, 12, 9, 0};
+    static const int want[ROW_ORDER_COUNT][5] = {
+        [ROW_ORDER_VALUE] = {2, 5, 3, 1, 4},
+        [ROW_ORDER_RESIDUAL] = {2, 1, 3, 5, 4},             /* 2 -3 1 -1 */
+        [ROW_ORDER_PERCENT] = {1, 2, 3, 5, 4},              /* 25 -9 5 -4 */
+        [ROW_ORDER_DISAGREEMENT] = {3, 2, 4, 1, 5},         /* .5 -3 -7 2 */
+        [ROW_ORDER_DISAGREEMENT_PERCENT] = {3, 4, 2, 1, 5}, /* 6 -9 -37 29 */
+    };
+    struct status st = status_ok();
+    for (int o = 0; o < ROW_ORDER_COUNT; o++) {
+        struct row rows[5];
+        for (int i = 0; i < 5; i++) {
+            rows[i] = row_of(
+                QUANTITY_RADIUS, "pm",
+                i == 3
+                    ? reading_gap(QUANTITY_RADIUS, READING_OUTSIDE, "x", &rule)
+                    : reading_computed(QUANTITY_RADIUS, value[i], &rule),
+                stored(QUANTITY_RADIUS, reference[i], 0, &same));
+            rows[i].species.z = i + 1;
+            row_disagree(
+                &rows[i],
+                i == 4
+                    ? reading_gap(QUANTITY_RADIUS, READING_MISSING, "y", &other)
+                    : stored(QUANTITY_RADIUS, against[i], 1, &other));
+        }
+        ck_assert(rows_sort(rows, 5, (enum row_order)o, &st));
+        for (int i = 0; i < 5; i++)
+            ck_assert_msg(rows[i].species.z == want[o][i], "%s, place %d: %d",
+                          row_order_id((enum row_order)o), i,
+                          rows[i].species.z);
+    }
+}
+END_TEST
+
+/* Another less the first, in per cent of the first. */
+START_TEST(differences_are_against_the_first)
+{
+    struct comparison_line line = {.quantity = QUANTITY_RADIUS};
+    struct difference d;
+    line.readings[0] = stored(QUANTITY_RADIUS, 132, 0, &same);
+    line.readings[1] = stored(QUANTITY_RADIUS, 116.5, 1, &same);
+    line.readings[2] =
+        reading_gap(QUANTITY_RADIUS, READING_MISSING, "none", &same);
+    line.readings[3] = stored(QUANTITY_RADIUS, 140, 0, &same);
+    ck_assert(comparison_difference(&line, 1, &d));
+    near(d.value.value, -15.5, 1e-12, 0, "second");
+    ck_assert(d.has_percent);
+    near(d.percent.value, -100.0 * 15.5 / 132.0, 0, 1e-6, "second, %%");
+    ck_assert(comparison_difference(&line, 3, &d));
+    near(d.value.value, 8.0, 1e-12, 0, "fourth");
+    near(d.percent.value, 100.0 * 8.0 / 132.0, 0, 1e-6, "fourth, %%");
+    ck_assert(!comparison_difference(&line, 0, &d));
+    ck_assert(!comparison_difference(&line, 2, &d));
+    /* of a negative first value per cent are of its size, of zero none */
+    line.readings[0] = stored(QUANTITY_RADIUS, -40, 0, &same);
+    ck_assert(comparison_difference(&line, 3, &d));
+    near(d.percent.value, 450.0, 1e-9, 0, "of a negative one");
+    line.readings[0] = stored(QUANTITY_RADIUS, 0, 0, &same);
+    ck_assert(comparison_difference(&line, 3, &d) && !d.has_percent);
 }
 END_TEST
 
@@ -265,6 +332,8 @@ int main(void)
     tcase_add_test(rows, two_sets_disagree_only_on_one_scale);
     tcase_add_test(rows, rows_are_sorted_by_size_and_gaps_come_last);
     tcase_add_test(rows, no_model_is_best_across_unlike_definitions);
+    tcase_add_test(rows, every_order_is_by_its_own_number);
+    tcase_add_test(rows, differences_are_against_the_first);
     tcase_add_test(rows, an_audit_leaves_one_out_and_ranks_on_common_species);
     suite_add_tcase(suite, rows);
     return run_suite(suite);

@@ -30,6 +30,7 @@ TCase *case_nist(void);
 TCase *case_states(void);
 TCase *case_functionals(void);
 TCase *case_hybrid(void);
+TCase *case_term(void);
 TCase *case_correlation(void);
 
 #endif

@@ -9,6 +9,7 @@ int main(void)
     suite_add_tcase(suite, case_states());
     suite_add_tcase(suite, case_functionals());
     suite_add_tcase(suite, case_hybrid());
+    suite_add_tcase(suite, case_term());
     suite_add_tcase(suite, case_correlation());
     return run_suite(suite);
 }

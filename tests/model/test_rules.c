@@ -357,6 +357,68 @@ START_TEST(single_zeta_gives_the_worked_examples_of_1963)
 }
 END_TEST
 
+/* The number behind `key` in a text. */
+static double number_behind(const char *text, const char *key)
+{
+    const char *at = strstr(text, key);
+    ck_assert_msg(at != NULL, "'%s' in '%s'", key, text);
+    return strtod(at + strlen(key), NULL);
+}
+
+/* Both constants of the scale of 1958, as the worked examples print its
+ * formula (their column "output"), for every element; 0.35 is what the
+ * electron at the surface screens. */
+START_TEST(allred_rochow_has_its_printed_constants)
+{
+    struct csv csv = csv_read_file("data/worked_examples_screening.csv");
+    const char *formula = csv_cell(&csv, 0, "output");
+    ck_assert_str_eq(csv_cell(&csv, 0, "method"), "allred_rochow");
+    double factor = number_behind(formula, "chi = ");
+    double constant = number_behind(formula, "+ ");
+    for (size_t i = 0; i < csv_rows(&species_list); i++) {
+        struct species s = species_at(i);
+        if (s.charge != 0)
+            continue;
+        double r = 0.31 + 0.017 * s.z; /* angstrom, any */
+        const struct subshell *last = configuration_outermost(&s.configuration);
+        struct question q = {.species = s,
+                             .has_covalent_radius = true,
+                             .covalent_radius_pm = 100.0 * r};
+        double z = zeff("slater", &s, last->n, last->l) - 0.35;
+        near(ask("slater", &q, QUANTITY_ELECTRONEGATIVITY, 0, 0).value.value,
+             factor * z / (r * r) + constant, 0.0, 1e-7, "Z=%d", s.z);
+    }
+    csv_free(&csv);
+}
+END_TEST
+
+/* Ry (Z_eff/n)² of the outermost subshell: one electron in the field of
+ * Z_eff, Bohr's formula. */
+START_TEST(one_electron_estimates_follow_from_the_charge)
+{
+    static const char *const models[] = {"shells", "clementi"};
+    int seen[2] = {0};
+    for (int m = 0; m < 2; m++)
+        for (size_t i = 0; i < csv_rows(&species_list); i++) {
+            struct species s = species_at(i);
+            struct question q = {.species = s};
+            const struct subshell *o =
+                configuration_outermost(&s.configuration);
+            struct reading r = ask(models[m], &q, QUANTITY_IONIZATION, 0, 0);
+            if (r.state != READING_OK) {
+                ck_assert_msg(m == 1 && s.z > 36, "Z=%d", s.z);
+                continue;
+            }
+            seen[m]++;
+            double ratio = zeff(models[m], &s, o->n, o->l) / o->n;
+            near(r.value.value, 13.605693122990 * ratio * ratio, 0.0, 1e-7,
+                 "%s Z=%d+%d", models[m], s.z, s.charge);
+        }
+    ck_assert_uint_eq((size_t)seen[0], csv_rows(&species_list));
+    ck_assert_int_ge(seen[1], 138); /* all up to Kr */
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("model rules");
@@ -368,6 +430,8 @@ int main(void)
                    clementi_lies_as_far_from_the_printed_table_as_the_rules_do);
     tcase_add_test(c, slater_gives_the_worked_examples);
     tcase_add_test(c, single_zeta_gives_the_worked_examples_of_1963);
+    tcase_add_test(c, allred_rochow_has_its_printed_constants);
+    tcase_add_test(c, one_electron_estimates_follow_from_the_charge);
     suite_add_tcase(suite, c);
     return run_suite(suite);
 }
