@@ -13,5 +13,6 @@ TCase *builtin_case(void);
 TCase *lookup_case(void);
 TCase *ground_case(void);
 TCase *loader_case(void);
+TCase *worked_case(void);
 
 #endif

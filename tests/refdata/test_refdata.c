@@ -9,5 +9,6 @@ int main(void)
     suite_add_tcase(suite, lookup_case());
     suite_add_tcase(suite, ground_case());
     suite_add_tcase(suite, loader_case());
+    suite_add_tcase(suite, worked_case());
     return run_suite(suite);
 }

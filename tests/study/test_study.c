@@ -2,10 +2,12 @@
 #include <check.h>
 #include <math.h>
 #include <stdio.h>
+#include <stdlib.h>
 #include <string.h>
 
 #include "refdata/ground.h"
 #include "study/study.h"
+#include "study/trend.h"
 #include "support/near.h"
 #include "support/run.h"
 
@@ -245,6 +247,75 @@ START_TEST(an_ion_is_read_at_its_site_and_no_other)
 }
 END_TEST
 
+/* Along a period, with a second set: what each step holds is what the row of
+ * the same ask says, the uncertainty of the stored value included. */
+START_TEST(a_trend_holds_what_its_rows_say)
+{
+    struct trend *trend = calloc(1, sizeof *trend);
+    ck_assert_ptr_nonnull(trend);
+    const struct model *models[] = {model_find("slater"), model_find("shells")};
+    struct ask ask = {.z = 26, .quantity = QUANTITY_IONIZATION};
+    int with_u = 0;
+    walk_fill(&trend->walk, WALK_PERIOD, 26, 0);
+    trend_fill(trend, study, &ask, models, 2);
+    ck_assert_int_eq(trend->walk.count, 18);
+    ck_assert_int_eq(trend->series_count, 2);
+    ck_assert_int_eq(trend->set_count, 1);
+    for (int i = 0; i < trend->walk.count; i++) {
+        ask.z = trend->walk.steps[i].z;
+        ck_assert_int_eq(ask.z, 19 + i);
+        for (int m = 0; m < 2; m++) {
+            const struct trend_value *v = &trend->series[m].values[i];
+            ask.model = models[m];
+            struct row row = study_row(study, &ask);
+            ck_assert(v->there && v->has_residual && v->has_percent);
+            near(v->value, row.value.value.value, 0, 0, "Z=%d", ask.z);
+            near(v->residual, row.residual.value, 0, 0, "Z=%d", ask.z);
+            near(v->percent, row.percent.value, 0, 0, "Z=%d", ask.z);
+            const struct trend_stored *s = &trend->sets[0].values[i];
+            ck_assert(s->there && s->has_u == row.reference.has_u);
+            near(s->value, row.reference.value.value, 0, 0, "Z=%d", ask.z);
+            near(s->u, row.reference.has_u ? row.reference.u.value : 0.0, 0, 0,
+                 "Z=%d", ask.z);
+            with_u += s->has_u;
+        }
+    }
+    ck_assert_int_eq(with_u, 2 * 18);
+    free(trend);
+}
+END_TEST
+
+/* u of Z_eff = n sqrt(I/Ry) is half of it times the relative uncertainty of
+ * I; by the difference quotient, from the stored energies themselves. */
+START_TEST(z_eff_from_an_energy_has_its_uncertainty)
+{
+    struct ask ask = {.quantity = QUANTITY_ZEFF,
+                      .reference =
+                          reference_find(study_references(study),
+                                         REFERENCE_ZEFF_FROM_IONIZATION)};
+    struct ask energy = {.quantity = QUANTITY_IONIZATION};
+    int seen = 0;
+    for (int z = 1; z <= 103; z++) {
+        ask.z = energy.z = z;
+        struct row row = study_row(study, &ask), of = study_row(study, &energy);
+        if (row.reference.state != READING_OK || !row.reference.has_u)
+            continue;
+        double ev = of.reference.value.value, u = of.reference.u.value;
+        double slope = (sqrt((ev + u) / 13.605693122990) -
+                        sqrt((ev - u) / 13.605693122990)) /
+                       2.0;
+        near(row.reference.value.value,
+             row.reference.n * sqrt(ev / 13.605693122990), 0, 2e-6, "Z=%d", z);
+        /* two significant digits are kept */
+        if (u > 1e-7 * ev)
+            near(row.reference.u.value, row.reference.n * slope, 0, 0.051,
+                 "Z=%d, u", z);
+        seen++;
+    }
+    ck_assert_int_ge(seen, 95);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("study");
@@ -262,6 +333,8 @@ int main(void)
     tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
     tcase_add_test(rows, an_energy_is_stored_for_the_ground_configuration_only);
     tcase_add_test(rows, an_ion_is_read_at_its_site_and_no_other);
+    tcase_add_test(rows, a_trend_holds_what_its_rows_say);
+    tcase_add_test(rows, z_eff_from_an_energy_has_its_uncertainty);
     suite_add_tcase(suite, rows);
     return run_suite(suite);
 }
