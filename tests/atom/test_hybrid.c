@@ -195,6 +195,41 @@ START_TEST(ionization_energies_are_as_good_as_claimed)
 }
 END_TEST
 
+/* A quarter of exact exchange with its term: J. P. Perdew, M. Ernzerhof, K.
+ * Burke, J. Chem. Phys. 105, 9982 (1996), doi 10.1063/1.472933. The energy is
+ * put together from the parts that stand beside it. */
+START_TEST(the_hybrid_energy_is_made_of_its_parts)
+{
+    static const struct {
+        int Z;
+        const char *configuration;
+    } atom[] = {{8, "[He] 2s2 2p4"},
+                {23, "[Ar] 3d3 4s2"},
+                {54, "[Kr] 4d10 5s2 5p6"},
+                {60, "[Xe] 4f4 6s2"}};
+    struct atom_solver *solver = case_solver();
+    struct status st = status_ok();
+    struct hybrid *hybrid = hybrid_new(&st);
+    for (size_t i = 0; i < sizeof atom / sizeof *atom; i++) {
+        struct hybrid_energy e;
+        case_solve(solver, atom[i].Z, atom[i].configuration, &DIRAC,
+                   ATOM_CONVERGED);
+        ck_assert(hybrid_evaluate(hybrid, solver, &e, &st));
+        struct atom_energy a = atom_energies(solver);
+        double rest = a.kinetic + a.nuclear + a.coulomb;
+        near(e.lsd, a.total, 1e-9, 0.0, "Z=%d lsd", atom[i].Z);
+        near(e.pbe, rest + e.exchange_pbe + e.correlation_pbe, 1e-9, 0.0,
+             "Z=%d pbe", atom[i].Z);
+        near(e.total,
+             rest + 0.75 * e.exchange_pbe + 0.25 * (e.exchange_exact + e.term) +
+                 e.correlation + e.shape,
+             1e-9, 0.0, "Z=%d hybrid", atom[i].Z);
+    }
+    hybrid_free(hybrid);
+    atom_solver_free(solver);
+}
+END_TEST
+
 static int ascending(const void *a, const void *b)
 {
     double x = *(const double *)a, y = *(const double *)b;
@@ -244,6 +279,7 @@ TCase *case_hybrid(void)
     tcase_add_test(c, p_shifts_have_both_coupling_limits);
     tcase_add_test(c, d_and_f_shifts_follow_the_interval_rule);
     tcase_add_test(c, hund_shifts_have_their_closed_values);
+    tcase_add_test(c, the_hybrid_energy_is_made_of_its_parts);
     tcase_add_test(c, only_open_p_subshells_have_a_shape);
     tcase_add_test(c, ionization_energies_are_as_good_as_claimed);
     tcase_add_test(c, isodensity_radii_are_as_good_as_claimed);

@@ -5,7 +5,9 @@
 #include <math.h>
 #include <stdlib.h>
 
+#include "atom/hybrid.h"
 #include "atom/term.h"
+#include "base/units.h"
 #include "case.h"
 #include "support/near.h"
 
@@ -224,11 +226,57 @@ START_TEST(hund_shifts_are_those_of_the_stretched_determinant)
 }
 END_TEST
 
+/* Interval between the levels j = l ± ½ of one electron: (l + ½) ζ (Condon,
+ * Shortley, section 5⁴); of the orbitals as they were solved, exactly, and of
+ * the ground terms ²P measured in Al, Ga, In, Tl (NIST ASD: 112.06, 826.19,
+ * 2212.60, 7792.7 per cm; values from memory), which a local potential gives a
+ * tenth to a fifth too wide. */
+START_TEST(spin_orbit_parameters_are_those_of_the_intervals)
+{
+    static const struct {
+        const char *configuration;
+        int Z, n, l;
+        double interval, ratio; /* 1/cm, 0: not compared; computed / it */
+    } atom[] = {
+        {"[Ne] 3s2 3p1", 13, 3, 1, 112.06, 1.22},
+        {"[Ar] 3d10 4s2 4p1", 31, 4, 1, 826.19, 1.19},
+        {"[Kr] 4d10 5s2 5p1", 49, 5, 1, 2212.60, 1.15},
+        {"[Xe] 4f14 5d10 6s2 6p1", 81, 6, 1, 7792.7, 1.11},
+        {"[Xe] 4f14 5d10 6s2 6p1", 81, 5, 2, 0.0, 0.0},
+        {"[Xe] 4f14 5d10 6s2 6p1", 81, 4, 3, 0.0, 0.0},
+    };
+    struct atom_options dirac = {.functional = ATOM_LDA,
+                                 .relativity = ATOM_DIRAC};
+    struct atom_solver *solver = case_solver();
+    for (size_t i = 0; i < sizeof atom / sizeof *atom; i++) {
+        double upper = 0.0, lower = 0.0;
+        int n = atom[i].n, l = atom[i].l;
+        case_solve(solver, atom[i].Z, atom[i].configuration, &dirac,
+                   ATOM_CONVERGED);
+        for (int k = 0; k < atom_level_count(solver); k++) {
+            struct atom_level level = atom_level_at(solver, k);
+            if (level.n == n && level.l == l && level.twice_j == 2 * l + 1)
+                upper = level.energy;
+            if (level.n == n && level.l == l && level.twice_j == 2 * l - 1)
+                lower = level.energy;
+        }
+        double zeta = atom_zeta(solver, n, l);
+        near((l + 0.5) * zeta, upper - lower, 0.0, 1e-12, "Z=%d %d %d",
+             atom[i].Z, n, l);
+        if (atom[i].interval > 0.0)
+            near((l + 0.5) * zeta * HARTREE_EV * EV_PER_CM / atom[i].interval,
+                 atom[i].ratio, 0.01, 0.0, "Z=%d interval", atom[i].Z);
+    }
+    atom_solver_free(solver);
+}
+END_TEST
+
 TCase *case_term(void)
 {
     TCase *c = tcase_create("term");
     tcase_set_timeout(c, 20.0);
     tcase_add_test(c, p_shifts_are_those_of_all_determinants);
     tcase_add_test(c, hund_shifts_are_those_of_the_stretched_determinant);
+    tcase_add_test(c, spin_orbit_parameters_are_those_of_the_intervals);
     return c;
 }
