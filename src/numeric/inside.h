@@ -9,7 +9,7 @@
 
 #include "numeric/lanes.h"
 
-enum { RADIAL_GROUPS = RADIAL_LEVELS_MAX / 2 + RADIAL_CHANNELS };
+enum { RADIAL_GROUPS = RADIAL_LEVELS_MAX / LANES_MAX + RADIAL_CHANNELS };
 
 /* Search of one level. Energies lo and hi with at most, and more than `nodes`
  * levels below. */
@@ -25,7 +25,7 @@ struct radial {
     struct lane_work work;
     struct lane_channel channel[RADIAL_CHANNELS];
     const struct lane_kernel *kernel;
-    double *sum; /* densities of a channel by lane, points × width */
+    double *sum; /* densities of a channel by lane, points × LANES_MAX */
     double *block;
     struct search search[RADIAL_LEVELS_MAX];
     struct radial_level level[RADIAL_LEVELS_MAX];

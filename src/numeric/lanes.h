@@ -8,7 +8,8 @@
 
 enum { LANES_MAX = 4, LANES_ALIGN = 32 };
 
-/* Levels that share a potential; arrays of points × width, lane fastest. */
+/* Levels that share a potential; arrays of points × LANES_MAX,
+ * lane fastest. */
 struct lane_group {
     int channel, used; /* lanes in use; the others repeat the last one */
     int elements;      /* of the mesh, as far as these levels reach */
@@ -60,7 +61,7 @@ enum {
 };
 
 struct lane_kernel {
-    int width;
+    int width; /* lanes worked on at a time: the stride of lane_work's arrays */
     /* Elements that the group needs at its energies, at most `limit`. */
     int (*reach)(const struct lane_work *, const struct lane_channel *,
                  const struct lane_group *, int limit);
@@ -75,8 +76,8 @@ struct lane_kernel {
     /* Normalises chi, fills density. */
     void (*density)(const struct lane_work *, const struct lane_channel *,
                     struct lane_group *);
-    /* Adds weight[lane] × density to sum, points × width; the first time sum
-     * is set. */
+    /* Adds weight[lane] × density to sum, points × LANES_MAX; the first time
+     * sum is set. */
     void (*add)(const struct lane_group *, const double *weight, bool first,
                 int points, double *sum);
     /* First-order change of the energies, into shift[]. */
@@ -85,7 +86,8 @@ struct lane_kernel {
 };
 
 /* Two lanes in portable code; four where the processor has them. Results are
- * the same to the last bit: each lane does the same operations. */
+ * the same to the last bit: levels are grouped in the same way, and each lane
+ * does the same operations. */
 extern const struct lane_kernel lanes_two;
 #if defined(__x86_64__)
 extern const struct lane_kernel lanes_four;

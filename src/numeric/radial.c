@@ -42,7 +42,7 @@ static size_t carve(struct radial *r, double *base)
     r->work.factor = take(&at, factor * width);
     r->work.norm = take(&at, n * width);
     r->work.right = take(&at, n * width);
-    r->sum = take(&at, n * width);
+    r->sum = take(&at, n * LANES_MAX);
     r->work.origin = take(&at, n);
     for (int c = 0; c < RADIAL_CHANNELS; c++) {
         struct lane_channel *ch = &r->channel[c];
@@ -52,8 +52,8 @@ static size_t carve(struct radial *r, double *base)
             *array[k] = take(&at, n);
     }
     for (int g = 0; g < r->room; g++) {
-        r->group[g].chi = take(&at, n * width);
-        r->group[g].density = take(&at, n * width);
+        r->group[g].chi = take(&at, n * LANES_MAX);
+        r->group[g].density = take(&at, n * LANES_MAX);
     }
     return (size_t)(at - base);
 }
@@ -106,8 +106,8 @@ struct radial *radial_new(const struct mesh *mesh, int width, struct status *st)
     memset(r, 0, sizeof *r);
     r->work.mesh = mesh;
     r->kernel = choose_kernel(width);
-    r->room = (RADIAL_LEVELS_MAX + r->kernel->width - 1) / r->kernel->width +
-              RADIAL_CHANNELS - 1;
+    r->room =
+        (RADIAL_LEVELS_MAX + LANES_MAX - 1) / LANES_MAX + RADIAL_CHANNELS - 1;
     static double nothing[1];
     size_t total = carve(r, nothing) + LANES_ALIGN / sizeof(double);
     /* calloc: memory that is not touched costs nothing */
@@ -135,14 +135,13 @@ void radial_free(struct radial *radial)
 /* Lanes are filled in the order of the list, one channel after the other. */
 static void make_groups(struct radial *r)
 {
-    int width = r->kernel->width;
     r->groups = 0;
     for (int c = 0; c < RADIAL_CHANNELS; c++) {
         struct lane_group *g = NULL;
         for (int i = 0; i < r->count; i++) {
             if (r->level[i].channel != c)
                 continue;
-            if (!g || g->used == width) {
+            if (!g || g->used == LANES_MAX) {
                 assert(r->groups < r->room);
                 g = &r->group[r->groups++];
                 g->channel = c;
@@ -156,7 +155,7 @@ static void make_groups(struct radial *r)
     }
     for (int k = 0; k < r->groups; k++) {
         struct lane_group *g = &r->group[k];
-        for (int lane = 0; lane < width; lane++) {
+        for (int lane = 0; lane < LANES_MAX; lane++) {
             int from = lane < g->used ? lane : g->used - 1;
             r->member[k][lane] = r->member[k][from];
             double kappa = r->level[r->member[k][lane]].kappa;
@@ -265,10 +264,10 @@ static void set_boundary(const struct radial *r, struct lane_group *g, int lane)
 void inside_step(struct radial *r, struct lane_group *g)
 {
     const struct lane_channel *c = &r->channel[g->channel];
-    for (int lane = 0; lane < r->kernel->width; lane++)
+    for (int lane = 0; lane < LANES_MAX; lane++)
         set_boundary(r, g, lane);
     double highest = g->energy[0];
-    for (int lane = 1; lane < r->kernel->width; lane++)
+    for (int lane = 1; lane < LANES_MAX; lane++)
         highest = fmax(highest, g->energy[lane]);
     /* looked up again when the highest level has moved */
     if (fabs(highest - g->reached) > REACH_KEPT * fabs(highest)) {

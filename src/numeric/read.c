@@ -33,11 +33,11 @@ double radial_energy(const struct radial *radial, int i)
 
 void radial_density(const struct radial *radial, int i, double *density)
 {
-    int lane, width = radial->kernel->width;
+    int lane;
     const struct lane_group *g = locate(radial, i, &lane);
     memset(density, 0, (size_t)radial->work.mesh->points * sizeof *density);
     for (int k = 0; k <= g->filled * P; k++)
-        density[k] = g->density[k * width + lane];
+        density[k] = g->density[k * LANES_MAX + lane];
 }
 
 double radial_power(const struct radial *radial, int i)
@@ -48,14 +48,14 @@ double radial_power(const struct radial *radial, int i)
 
 void radial_functions(const struct radial *radial, int i, double *p, double *q)
 {
-    int lane, width = radial->kernel->width;
+    int lane;
     const struct lane_group *g = locate(radial, i, &lane);
     const struct mesh *mesh = radial->work.mesh;
     const struct lane_channel *c = &radial->channel[g->channel];
     double a2 = radial->work.a2;
     memset(p, 0, (size_t)mesh->points * sizeof *p);
     for (int k = 0; k <= g->filled * P; k++)
-        p[k] = g->chi[k * width + lane];
+        p[k] = g->chi[k * LANES_MAX + lane];
     if (q) {
         memset(q, 0, (size_t)mesh->points * sizeof *q);
         mesh_derivative(mesh, g->filled, p, q);
@@ -74,7 +74,7 @@ void radial_functions(const struct radial *radial, int i, double *p, double *q)
 
 void radial_total(const struct radial *radial, int channel, double *density)
 {
-    int width = radial->kernel->width, points = radial->elements * P + 1;
+    int points = radial->elements * P + 1;
     const double *sum = radial->sum;
     bool first = true;
     for (int k = 0; k < radial->groups; k++) {
@@ -87,9 +87,9 @@ void radial_total(const struct radial *radial, int channel, double *density)
         radial->kernel->add(g, weight, first, points, radial->sum);
         first = false;
     }
-    for (int i = 0; i < points; i++, sum += width) {
+    for (int i = 0; i < points; i++, sum += LANES_MAX) {
         density[i] = first ? 0.0 : sum[0];
-        for (int lane = 1; lane < width && !first; lane++)
+        for (int lane = 1; lane < LANES_MAX && !first; lane++)
             density[i] += sum[lane];
     }
 }

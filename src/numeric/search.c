@@ -43,8 +43,7 @@ static void guess(struct radial *r, int k)
     const struct lane_channel *c = &r->channel[g->channel];
     const double pi = acos(-1.0);
     double lo[LANES_MAX], hi[LANES_MAX], goal[LANES_MAX], kept[LANES_MAX];
-    int width = r->kernel->width;
-    for (int lane = 0; lane < width; lane++) {
+    for (int lane = 0; lane < LANES_MAX; lane++) {
         const struct radial_level *level = &r->level[r->member[k][lane]];
         struct search *s = &r->search[r->member[k][lane]];
         kept[lane] = g->energy[lane];
@@ -57,10 +56,10 @@ static void guess(struct radial *r, int k)
         goal[lane] = (level->nodes + 0.5) * pi;
     }
     for (int step = 0; step < BISECTIONS; step++) {
-        for (int lane = 0; lane < width; lane++)
+        for (int lane = 0; lane < LANES_MAX; lane++)
             g->energy[lane] = -exp(0.5 * (lo[lane] + hi[lane]));
         r->kernel->phase(&r->work, c, g, r->elements);
-        for (int lane = 0; lane < width; lane++) {
+        for (int lane = 0; lane < LANES_MAX; lane++) {
             double middle = 0.5 * (lo[lane] + hi[lane]);
             if (g->below[lane] < goal[lane])
                 lo[lane] = middle;
@@ -68,7 +67,7 @@ static void guess(struct radial *r, int k)
                 hi[lane] = middle;
         }
     }
-    for (int lane = 0; lane < width; lane++)
+    for (int lane = 0; lane < LANES_MAX; lane++)
         g->energy[lane] = r->search[r->member[k][lane]].lost
                               ? -exp(0.5 * (lo[lane] + hi[lane]))
                               : kept[lane];
@@ -132,7 +131,7 @@ static bool any_lost(const struct radial *r, int k)
 static int find_group(struct radial *r, int k)
 {
     struct lane_group *g = &r->group[k];
-    int width = r->kernel->width, missing = 0;
+    int missing = 0;
     for (int turn = 0; turn < FIND_MAX && any_lost(r, k); turn++) {
         inside_step(r, g);
         if (turn % RESCALE == RESCALE - 1)
@@ -145,7 +144,7 @@ static int find_group(struct radial *r, int k)
                 judge(&r->search[i], r->level[i].nodes, g->energy[lane],
                       g->below[lane], g->shift[lane]);
         }
-        for (int lane = g->used; lane < width; lane++)
+        for (int lane = g->used; lane < LANES_MAX; lane++)
             g->energy[lane] = g->energy[g->used - 1];
     }
     for (int lane = 0; lane < g->used; lane++)
@@ -159,7 +158,7 @@ int radial_find(struct radial *radial)
     int missing = 0;
     for (int k = 0; k < radial->groups; k++) {
         struct lane_group *g = &radial->group[k];
-        int n = (radial->elements * P + 1) * radial->kernel->width;
+        int n = (radial->elements * P + 1) * LANES_MAX;
         for (int i = 0; i < n; i++)
             g->chi[i] = 1.0;
         g->filled = radial->elements;
@@ -199,7 +198,7 @@ static int update_group(struct radial *r, int k)
         if (good)
             g->energy[lane] += g->shift[lane];
     }
-    for (int lane = g->used; lane < r->kernel->width; lane++)
+    for (int lane = g->used; lane < LANES_MAX; lane++)
         g->energy[lane] = g->energy[g->used - 1];
     if (lost) {
         guess(r, k);
@@ -215,7 +214,7 @@ int radial_update(struct radial *radial)
     for (int k = 0; k < radial->groups; k++) {
         struct lane_group *g = &radial->group[k];
         radial->kernel->moved(&radial->work, &radial->channel[g->channel], g);
-        for (int lane = 0; lane < radial->kernel->width; lane++) {
+        for (int lane = 0; lane < LANES_MAX; lane++) {
             double most = SHIFT_MAX * fabs(g->energy[lane]);
             double shift = g->shift[lane];
             g->energy[lane] += shift > most    ? most
