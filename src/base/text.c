@@ -39,6 +39,13 @@ void text_empty(struct text *t)
     t->data[0] = '\0';
 }
 
+void text_truncate(struct text *t, size_t length)
+{
+    assert(length <= t->length);
+    t->length = length;
+    t->data[length] = '\0';
+}
+
 /* Room for n bytes more; false where memory is short. */
 static bool grow(struct text *t, size_t n)
 {

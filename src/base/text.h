@@ -28,8 +28,10 @@ struct text text_over(char *data, size_t capacity);
 struct text text_growing(void);
 void text_free(struct text *t);
 
-/* Makes it empty again, keeping its buffer. */
+/* Makes it empty again, keeping its buffer; or as long as it was at an earlier
+ * length. */
 void text_empty(struct text *t);
+void text_truncate(struct text *t, size_t length);
 
 /* Appends a terminated string. */
 void text_add(struct text *t, const char *s);

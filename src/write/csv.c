@@ -6,16 +6,16 @@
 #include "write/format.h"
 
 /* Quoted where it holds a comma, a quote or a line break. */
-static void encode(struct text *t, const struct report_column *column,
-                   const char *field)
+static void encode(struct text *t, size_t start, struct text *scratch)
 {
-    (void)column;
-    if (field[strcspn(field, ",\"\r\n")] == '\0') {
-        text_add(t, field);
+    const char *field = t->data + start;
+    if (field[strcspn(field, ",\"\r\n")] == '\0')
         return;
-    }
+    text_empty(scratch);
+    text_add(scratch, field);
+    text_truncate(t, start);
     text_add_bytes(t, "\"", 1);
-    while (*field) {
+    for (field = scratch->data; *field;) {
         size_t plain = strcspn(field, "\"");
         text_add_bytes(t, field, plain);
         field += plain;
@@ -35,14 +35,16 @@ static void write_line(FILE *out, struct text *line)
 }
 
 static void write_heading(FILE *out, const struct report_records *r,
-                          struct text *line)
+                          struct text *line, struct text *scratch)
 {
     for (int c = 0; c < r->column_count; c++) {
         if (r->columns[c].json_only)
             continue;
         if (line->length)
             text_add_bytes(line, ",", 1);
-        encode(line, &r->columns[c], r->columns[c].id);
+        size_t start = line->length;
+        text_add(line, r->columns[c].id);
+        encode(line, start, scratch);
     }
     write_line(out, line);
 }
@@ -53,10 +55,12 @@ static bool write_csv(FILE *out, const struct report *report,
     const struct report_records *r = &report->records;
     struct fields *fields = fields_open(r, encode, st);
     struct text line = text_growing();
+    struct text scratch = text_growing();
     (void)style;
     if (!fields)
         return false;
-    write_heading(out, r, &line);
+    write_heading(out, r, &line, &scratch);
+    text_free(&scratch);
     for (size_t i = 0; i < r->count; i++) {
         bool first = true;
         fields_record(fields, i);

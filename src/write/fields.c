@@ -14,10 +14,10 @@ struct kept_source {
 struct fields {
     const struct report_records *records;
     fields_encode *encode;
-    const void *record;  /* the present one */
-    int turn;            /* which room holds it */
-    void *room[2];       /* the present record and the one before */
-    struct text plain;   /* one field before it is encoded */
+    const void *record; /* the present one */
+    int turn;           /* which room holds it */
+    void *room[2];      /* the present record and the one before */
+    struct text scratch;
     struct text *shared; /* shared[column_count]: of columns that repeat */
     struct kept_source sources[SOURCES_KEPT];
     int source_count, source_next;
@@ -30,7 +30,7 @@ static void fields_free(struct fields *f)
         text_free(&f->shared[c]);
     for (int i = 0; i < f->source_count; i++)
         text_free(&f->sources[i].encoded);
-    text_free(&f->plain);
+    text_free(&f->scratch);
     free(f->shared);
     free(f->room[0]);
     free(f->room[1]);
@@ -46,7 +46,7 @@ struct fields *fields_open(const struct report_records *records,
     if (f) {
         f->records = records;
         f->encode = encode;
-        f->plain = text_growing();
+        f->scratch = text_growing();
         f->shared = calloc(columns, sizeof *f->shared);
         f->room[0] = malloc(room);
         f->room[1] = malloc(room);
@@ -61,25 +61,15 @@ struct fields *fields_open(const struct report_records *records,
     return NULL;
 }
 
-static void encode(struct fields *f, const struct report_column *column,
-                   struct text *out)
-{
-    f->failed = f->failed || f->plain.cut;
-    if (column->kind == COLUMN_TEXT)
-        f->encode(out, column, f->plain.data);
-    else if (f->plain.length)
-        text_add_bytes(out, f->plain.data, f->plain.length);
-    else
-        f->encode(out, column, "");
-    f->failed = f->failed || out->cut;
-}
-
+/* Puts the field of a column at the end of a text, encoded. A number or a truth
+ * value is one in every format; an empty field is the format's. */
 static void fill(struct fields *f, const struct report_column *column,
                  struct text *out)
 {
-    text_empty(&f->plain);
-    column->put(f->record, &f->plain);
-    encode(f, column, out);
+    size_t start = out->length;
+    column->put(f->record, out);
+    if (column->kind == COLUMN_TEXT || out->length == start)
+        f->encode(out, start, &f->scratch);
 }
 
 void fields_record(struct fields *f, size_t i)
@@ -94,12 +84,12 @@ void fields_record(struct fields *f, size_t i)
         if (r->columns[c].repeats) {
             text_empty(&f->shared[c]);
             fill(f, &r->columns[c], &f->shared[c]);
+            f->failed = f->failed || f->shared[c].cut;
         }
 }
 
 /* The citations of a source, encoded. */
 static const struct text *source_text(struct fields *f,
-                                      const struct report_column *column,
                                       const struct provenance *source)
 {
     for (int i = 0; i < f->source_count; i++)
@@ -113,30 +103,31 @@ static const struct text *source_text(struct fields *f,
     f->source_next = (f->source_next + 1) % SOURCES_KEPT;
     kept->source = source;
     text_empty(&kept->encoded);
-    text_empty(&f->plain);
-    provenance_text(&f->plain, source);
-    encode(f, column, &kept->encoded);
+    provenance_text(&kept->encoded, source);
+    f->encode(&kept->encoded, 0, &f->scratch);
+    f->failed = f->failed || kept->encoded.cut;
     return &kept->encoded;
 }
 
 void fields_append(struct fields *f, int column, struct text *line)
 {
     const struct report_column *c = &f->records->columns[column];
-    const struct provenance *source = c->source ? c->source(f->record) : NULL;
     const struct text *made = NULL;
     assert(f->record);
-    if (source)
-        made = source_text(f, c, source);
-    else if (c->repeats)
+    if (c->repeats) {
         made = &f->shared[column];
-    if (made) {
-        text_add_bytes(line, made->data, made->length);
     } else if (c->source) {
-        f->encode(line, c, "");
+        const struct provenance *source = c->source(f->record);
+        if (source)
+            made = source_text(f, source);
+        else
+            f->encode(line, line->length, &f->scratch);
     } else {
         fill(f, c, line);
     }
-    f->failed = f->failed || line->cut;
+    if (made)
+        text_add_bytes(line, made->data, made->length);
+    f->failed = f->failed || f->scratch.cut || line->cut;
 }
 
 bool fields_close(struct fields *f, struct status *st)

@@ -5,9 +5,10 @@
 
 #include "report/report.h"
 
-/* How a format writes the text of one field; appends to t. */
-typedef void fields_encode(struct text *t, const struct report_column *column,
-                           const char *field);
+/* How a format writes the text of one field: it stands at the end of t, from
+ * `start` on, as the column put it, and is replaced where the format has it
+ * otherwise. scratch is for copies. */
+typedef void fields_encode(struct text *t, size_t start, struct text *scratch);
 
 /* What is made once and used again: citations by their source, and the fields
  * that neighbouring records share. */

@@ -26,14 +26,16 @@ static void add_string(struct text *t, const char *text)
     text_add_bytes(t, "\"", 1);
 }
 
-static void encode(struct text *t, const struct report_column *column,
-                   const char *field)
+static void encode(struct text *t, size_t start, struct text *scratch)
 {
-    (void)column;
-    if (field[0])
-        add_string(t, field);
-    else
+    if (t->length == start) {
         text_add(t, "null");
+        return;
+    }
+    text_empty(scratch);
+    text_add(scratch, t->data + start);
+    text_truncate(t, start);
+    add_string(t, scratch->data);
 }
 
 static void add_key(struct text *t, const char *key)
