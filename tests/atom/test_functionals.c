@@ -4,6 +4,7 @@
 #include <string.h>
 #include <xc.h>
 
+#include "atom/hybrid.h"
 #include "atom/result.h"
 #include "atom/uniform.h"
 #include "case.h"
@@ -213,6 +214,53 @@ START_TEST(the_virial_relation_holds)
 }
 END_TEST
 
+/* Correlation of revTPSS in a closed-shell ion without nodes, 1s2 2p6, from its
+ * curves alone: R = √(D/f)/r, the kinetic energy density Σ f/8π (R'² + l(l+1)
+ * R²/r²), libxc, Simpson's rule. */
+START_TEST(meta_correlation_is_that_of_the_orbitals)
+{
+    static double r[GRID], d[2][GRID], R[2][GRID], f[GRID];
+    static const double electrons[2] = {2.0, 6.0};
+    struct atom_solver *solver = case_solver();
+    struct status st = status_ok();
+    struct hybrid *hybrid = hybrid_new(&st);
+    struct hybrid_energy e;
+    xc_func_type meta;
+    case_solve(solver, 12, "1s2 2p6",
+               &(struct atom_options){.functional = ATOM_LSD}, ATOM_CONVERGED);
+    ck_assert(hybrid_evaluate(hybrid, solver, &e, &st));
+    log_grid(r, 1e-6, 25.0);
+    for (int s = 0; s < 2; s++) {
+        atom_curve_at(solver, ATOM_CURVE_DENSITY, s, GRID, r, d[s]);
+        for (int i = 0; i < GRID; i++)
+            R[s][i] = sqrt(d[s][i] / electrons[s]) / r[i];
+    }
+    ck_assert_int_eq(xc_func_init(&meta, XC_MGGA_C_REVTPSS, XC_POLARIZED), 0);
+    double step = log(r[1] / r[0]), pi = acos(-1.0);
+    for (int i = 1; i < GRID - 1; i++) {
+        double rho = 0.0, slope = 0.0, tau = 0.0, zero[2] = {0.0}, ec = 0.0;
+        for (int s = 0; s < 2; s++) { /* of one spin */
+            double by_r = (R[s][i + 1] - R[s][i - 1]) / (2.0 * step * r[i]);
+            double part = 0.5 * electrons[s] / (4.0 * pi),
+                   over = R[s][i] / r[i];
+            rho += part * R[s][i] * R[s][i];
+            slope += 2.0 * part * R[s][i] * by_r;
+            tau += 0.5 * part * (by_r * by_r + (s == 1) * 2.0 * over * over);
+        }
+        double n[2] = {rho, rho}, t[2] = {tau, tau};
+        double g[3] = {slope * slope, slope * slope, slope * slope};
+        if (rho > 1e-12)
+            xc_mgga_exc(&meta, 1, n, g, zero, t, &ec);
+        f[i] = (d[0][i] + d[1][i]) * ec;
+    }
+    f[0] = f[GRID - 1] = 0.0;
+    near(e.correlation, integrate(r, f), 0.0, 2e-5, "Mg4+, 1s2 2p6");
+    xc_func_end(&meta);
+    hybrid_free(hybrid);
+    atom_solver_free(solver);
+}
+END_TEST
+
 TCase *case_functionals(void)
 {
     TCase *c = tcase_create("functionals");
@@ -223,5 +271,6 @@ TCase *case_functionals(void)
     tcase_add_test(c, gradient_totals_meet_the_published_ones);
     tcase_add_test(c, the_density_integrates_to_the_electron_count);
     tcase_add_test(c, the_virial_relation_holds);
+    tcase_add_test(c, meta_correlation_is_that_of_the_orbitals);
     return c;
 }
