@@ -102,6 +102,7 @@ END_TEST
 START_TEST(gradient_totals_meet_the_published_ones)
 {
     struct csv csv = csv_read_file(DATA_DIR "/gga_total.csv");
+    ck_assert_uint_eq(csv_rows(&csv), 17);
     struct atom_solver *solver = case_solver();
     double largest = 0.0;
     for (size_t i = 0; i < csv_rows(&csv); i++) {

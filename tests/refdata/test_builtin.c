@@ -319,6 +319,7 @@ START_TEST(test_affinities_and_polarizabilities_are_the_source)
     const struct dataset *affinity = need("affinity_compiled_2024");
     const struct dataset *anions = need("anions_ning_lu_2022");
     struct csv csv = read_source("electron_affinity.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 118);
     for (int i = 0; i < (int)csv_rows(&csv); i++) {
         int z = cell_int(&csv, i, "z");
         const char *status = cell(&csv, i, "status");
@@ -340,6 +341,7 @@ START_TEST(test_affinities_and_polarizabilities_are_the_source)
     csv_free(&csv);
     const struct dataset *alpha = need("polarizability_schwerdtfeger_2019");
     csv = read_source("polarizability.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 118);
     ck_assert_int_eq((int)csv_rows(&csv), 118);
     for (int i = 0; i < (int)csv_rows(&csv); i++)
         same_entry(alpha, dataset_lookup(alpha, i + 1, 0, 0, 0), i + 1,
@@ -447,6 +449,7 @@ START_TEST(test_oxidation_states_and_availability_are_the_source)
     csv_free(&csv);
     set = catalogue_availability();
     csv = read_source("availability.csv");
+    ck_assert_int_eq((int)csv_rows(&csv), 118);
     for (int i = 0; i < (int)csv_rows(&csv); i++) {
         const struct availability *a = dataset_availability(set, i + 1);
         const char *crust = cell(&csv, i, "crustal_abundance_mg_per_kg");

@@ -119,6 +119,7 @@ START_TEST(totals_of_1967_are_reproduced_within_their_reading)
 {
     struct zeta *work = work_space();
     struct csv csv = csv_read_file("data/single_zeta_totals.csv");
+    ck_assert_uint_eq(csv_rows(&csv), 6);
     for (size_t i = 0; i < csv_rows(&csv); i++) {
         int z = (int)csv_number(&csv, i, "z");
         double want = csv_number(&csv, i, "etot_hartree");
