@@ -45,7 +45,8 @@ static const struct option options[OPTION_COUNT] = {
     {OPTION_REFERENCE, "reference", 'r', "SETS", OPTION_VALUE, WORDS_REFERENCE,
      true, LIST | COMPARE | AUDIT,
      "stored data sets to compare with, in list at most one per quantity "
-     "(default: the first with the model's own definition; compare: all)"},
+     "(default: for an ion's radius the effective ionic one, else the first "
+     "with the model's own definition; compare: all)"},
     {OPTION_AGAINST, "against", 0, "SETS", OPTION_VALUE, WORDS_REFERENCE, true,
      LIST | COMPARE | AUDIT,
      "a second data set beside the reference, with how far it is from it; "

@@ -429,24 +429,32 @@ static bool read_data(struct request *r, struct status *st)
     return r->study;
 }
 
+static bool has_ion(const struct request *r)
+{
+    for (int i = 0; i < r->atom_count; i++)
+        if (r->atoms[i].charge != 0)
+            return true;
+    return false;
+}
+
 /* True when one of the sets that will be read tells sites apart. */
 static bool has_sites(const struct request *r)
 {
-    bool named = false;
+    /* An ion's radius stands against such a set where none is named. */
+    if (is_chosen(r, QUANTITY_RADIUS) && !r->references[QUANTITY_RADIUS] &&
+        has_ion(r))
+        return true;
     for (int i = 0; i < r->set_count; i++)
         if (reference_has_sites(r->sets[i]))
             return true;
     for (int q = 0; q < QUANTITY_COUNT; q++) {
         const struct reference *sets[] = {r->references[q], r->against[q]};
-        for (int i = 0; i < 2; i++) {
-            named = named || sets[i];
+        for (int i = 0; i < 2; i++)
             if (sets[i] && reference_has_sites(sets[i]))
                 return true;
-        }
     }
     /* compare takes every set where none is named. */
-    return r->call->command->id == COMMAND_COMPARE && !named &&
-           r->set_count == 0;
+    return r->call->command->id == COMMAND_COMPARE && r->set_count == 0;
 }
 
 /* Roman in any case, or a number: more than the words that are offered. */
@@ -464,10 +472,16 @@ static bool read_site(struct request *r, struct status *st)
     int spin = -1;
     if (!read_coordination(r, st) || !read_choice(r, OPTION_SPIN, &spin, st))
         return false;
-    bool coordination = r->site.coordination != COORDINATION_NONE;
     /* The words leave out the first enumerator, which stands for none. */
     r->site.spin = (enum spin_state)(SPIN_NONE + 1 + spin);
-    if ((!coordination && spin < 0) || has_sites(r))
+    return true;
+}
+
+/* A site is no idle word: some set that is read must know it. */
+static bool check_site(const struct request *r, struct status *st)
+{
+    bool coordination = r->site.coordination != COORDINATION_NONE;
+    if ((!coordination && r->site.spin == SPIN_NONE) || has_sites(r))
         return true;
     return status_fail(
         st, STATUS_USAGE,
@@ -533,7 +547,7 @@ bool request_open(struct request *r, const struct call *call, struct status *st)
            read_bits(r, OPTION_EVIDENCE, &r->evidence, st) &&
            read_bits(r, OPTION_SCOPE, &r->scopes, st) && read_order(r, st) &&
            read_term(r, st) && read_method(r, st) &&
-           (!chooses || choose_atoms(r, st));
+           (!chooses || (choose_atoms(r, st) && check_site(r, st)));
 }
 
 void request_close(struct request *r)

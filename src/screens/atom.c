@@ -431,11 +431,20 @@ static bool change_view(struct ui *ui, enum action action)
         a->root = !a->root;
     else if (action == ACTION_WHOLE)
         a->whole = !a->whole;
-    else if (action == ACTION_DOTS)
-        a->braille = !a->braille;
     else
         return false;
     return true;
+}
+
+/* Goes on with what was stopped; else from table to plots and back, where only
+ * one of them fits. */
+static void open_other(struct ui *ui)
+{
+    bool went_on = atom_resume(ui);
+    if (layout_of(ui).form != FORM_WHOLE)
+        ui->detail = !ui->detail;
+    else if (!went_on)
+        ui_report(ui, false, "table and plots are both in sight");
 }
 
 static enum effect update(struct ui *ui, enum action action)
@@ -451,8 +460,7 @@ static enum effect update(struct ui *ui, enum action action)
     } else if (action == ACTION_PAGE_UP || action == ACTION_PAGE_DOWN) {
         step_element(ui, action == ACTION_PAGE_UP ? -1 : 1);
     } else if (action == ACTION_OPEN) {
-        ui->detail = !ui->detail;
-        atom_resume(ui);
+        open_other(ui);
     } else {
         return EFFECT_NONE;
     }

@@ -40,8 +40,8 @@ bool atom_pending(const struct ui *ui);
 void atom_step_work(struct ui *ui, bool *changed);
 /* Interrupt: stops what runs; false when nothing does. */
 bool atom_stop(struct ui *ui);
-/* Takes up again what was stopped. */
-void atom_resume(struct ui *ui);
+/* Takes up again what was stopped; false when nothing was. */
+bool atom_resume(struct ui *ui);
 void atom_work_free(struct atom_work *work);
 
 /* Report of a slot that is solved for what the choice asks, else NULL. */

@@ -212,10 +212,14 @@ bool atom_stop(struct ui *ui)
     return any;
 }
 
-void atom_resume(struct ui *ui)
+bool atom_resume(struct ui *ui)
 {
-    for (int s = 0; ui->atom && s < SLOT_COUNT; s++)
+    bool any = false;
+    for (int s = 0; ui->atom && s < SLOT_COUNT; s++) {
+        any = any || ui->atom->slots[s].stopped;
         ui->atom->slots[s].stopped = false;
+    }
+    return any;
 }
 
 const struct atom_slot *atom_slot_now(const struct ui *ui, int s)

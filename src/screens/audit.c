@@ -292,8 +292,10 @@ static void draw_title(const struct ui *ui, struct canvas *canvas)
         for (int e = 0; e < EVIDENCE_COUNT; e++)
             if (c->evidence >> e & 1u)
                 text_addf(&t, "%s alone   ", evidence_id((enum evidence)e));
-    if (s && s->reference)
+    if (s && s->reference) {
         text_add(&t, s->reference->id);
+        add_asked_site(ui, s->reference, &t);
+    }
     canvas_text(canvas, 0, 0, canvas->columns, ROLE_TITLE, text);
 }
 

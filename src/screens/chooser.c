@@ -63,7 +63,8 @@ static void fill_references(struct ui *ui, struct chooser *c)
 {
     const struct reference_list *list = study_references(ui->study);
     add(c, -1, ui->choice.reference == NULL,
-        "default: the set with the model's own definition");
+        "default: the set with the model's own definition; of ions' radii the "
+        "ionic one");
     for (int r = 0; r < list->count; r++) {
         const struct reference *ref = &list->items[r];
         if (ref->quantity == ui->choice.quantity)
@@ -125,32 +126,61 @@ static void fill_subshells(struct ui *ui, struct chooser *c)
     }
 }
 
-/* Units of the quantity, or of everything that the screen Atom shows. */
-/* The sites that the set holds for the selected ion, with their radii. */
-static void fill_sites(struct ui *ui, struct chooser *c)
+static bool is_offered(const struct chooser *c, int value)
 {
-    const struct choice *choice = &ui->choice;
-    const struct reference *r = choice->reference;
+    for (int i = 0; i < c->count; i++)
+        if (c->values[i] == value)
+            return true;
+    return false;
+}
+
+/* The sites that a set holds for one ion, each once, with its radius; named
+ * where there are several ions. */
+static void add_sites(const struct ui *ui, struct chooser *c,
+                      const struct dataset *set, struct pin of, bool named)
+{
+    const struct site *now = &ui->choice.site;
     char out[NUMBER_TEXT_MAX];
-    if (!r || !reference_has_sites(r))
-        r = reference_find(study_references(ui->study), SITE_SET);
-    if (!r)
-        return;
-    const struct dataset *set = r->set;
-    add(c, 0, true, "%s, the default of %s",
-        coordination_id(set->default_coordination), r->provenance->id);
-    for (int i = set->first[choice->z]; i < set->first[choice->z + 1]; i++) {
+    char ion[ION_TEXT_MAX];
+    for (int i = set->first[of.z]; i < set->first[of.z + 1]; i++) {
         const struct entry *e = &set->values[i];
-        bool here = choice->site.coordination == e->coordination &&
-                    choice->site.spin == e->spin;
-        if (e->charge == choice->charge && e->gap == GAP_NONE)
-            add(c, e->coordination * SPIN_COUNT + e->spin, here,
-                "%s%s%s  %s %s", coordination_id(e->coordination),
-                e->spin ? ", " : "", spin_word((enum spin_state)e->spin),
+        int value = e->coordination * SPIN_COUNT + e->spin;
+        bool here =
+            now->coordination == e->coordination && now->spin == e->spin;
+        if (e->charge == of.charge && e->gap == GAP_NONE &&
+            !is_offered(c, value))
+            add(c, value, here, "%s%s%s  %s%s%s %s",
+                coordination_id(e->coordination), e->spin ? ", " : "",
+                spin_word((enum spin_state)e->spin),
+                named ? ion_print(of.z, of.charge, ion) : "", named ? " " : "",
                 number_print(e->value, out), set->unit->id);
     }
 }
 
+/* The sites of the selected ion, on Compare of all that are compared. Without
+ * any there is nothing to choose, but the way back to the default. */
+static void fill_sites(struct ui *ui, struct chooser *c)
+{
+    const struct choice *choice = &ui->choice;
+    const struct reference *r = choice->reference;
+    bool pins = ui->screen == SCREEN_COMPARE && choice->pin_count > 0;
+    struct pin one = {choice->z, choice->charge};
+    if (!r || !reference_has_sites(r))
+        r = reference_find(study_references(ui->study), SITE_SET);
+    if (!r)
+        return;
+    add(c, 0, true, "%s, the default of %s",
+        coordination_id(r->set->default_coordination), r->provenance->id);
+    for (int i = 0; pins && i < choice->pin_count; i++)
+        add_sites(ui, c, r->set, choice->pins[i], choice->pin_count > 1);
+    if (!pins)
+        add_sites(ui, c, r->set, one, false);
+    if (c->count == 1 && choice->site.coordination == COORDINATION_NONE &&
+        choice->site.spin == SPIN_NONE)
+        c->count = 0;
+}
+
+/* Units of the quantity, or of everything that the screen Atom shows. */
 static void fill_units(struct ui *ui, struct chooser *c)
 {
     const struct unit *now = ui_unit(ui, ui->choice.quantity);
@@ -242,7 +272,12 @@ void chooser_open(struct ui *ui, enum chooser_kind kind)
     fill[kind](ui, &ui->chooser);
     if (kind == CHOOSER_CURVES)
         ui_report(ui, false, "Enter turns a curve on or off; Esc ends");
-    if (ui->chooser.count == 0) {
+    if (ui->chooser.count == 0 && kind == CHOOSER_SITE) {
+        ui->chooser.kind = CHOOSER_NONE;
+        ui_report(ui, false,
+                  "no ion with stored radii here, so no site to choose; + and "
+                  "- change the charge");
+    } else if (ui->chooser.count == 0) {
         ui->chooser.kind = CHOOSER_NONE;
         ui_report(ui, false, "nothing to choose from: no model computes %s",
                   quantity_at(ui->choice.quantity)->id);
@@ -269,9 +304,21 @@ static void take_site_set(struct ui *ui)
     struct choice *c = &ui->choice;
     const struct reference *r = c->reference;
     if (ui->screen == SCREEN_COMPARE || c->quantity != QUANTITY_RADIUS ||
-        (r && reference_has_sites(r)))
+        (r ? reference_has_sites(r) : c->charge != 0))
         return;
     c->reference = reference_find(study_references(ui->study), SITE_SET);
+}
+
+/* What was chosen, since the radii may be out of sight. */
+static void report_site(struct ui *ui)
+{
+    const struct reference *r =
+        reference_find(study_references(ui->study), SITE_SET);
+    char site[UI_TEXT_MAX];
+    struct text t = text_over(site, sizeof site);
+    if (r)
+        reference_asked_site(r, ui->choice.site, &t);
+    ui_report(ui, false, "site %s, for the stored radii of ions", site);
 }
 
 static enum effect take(struct ui *ui)
@@ -299,6 +346,7 @@ static enum effect take(struct ui *ui)
         ui->choice.site = (struct site){(enum coordination)(value / SPIN_COUNT),
                                         (enum spin_state)(value % SPIN_COUNT)};
         take_site_set(ui);
+        report_site(ui);
     } else if (kind == CHOOSER_UNIT) {
         const struct unit *unit = unit_at((size_t)value);
         ui->choice.units[unit->dimension] = unit;

@@ -88,8 +88,22 @@ static int atom_at(const struct ui *ui, int i)
     return i == 0 ? 0 : i + ui->column_scroll;
 }
 
-static void draw_value(struct canvas *canvas, int row, int column,
-                       const struct comparison_line *line, int which)
+/* The spin that a stored radius stands for; its coordination is in the label
+ * of the line. */
+static void add_spin(const struct ui *ui, const struct species *species,
+                     const struct reading *stored, struct text *t)
+{
+    char site[UI_TEXT_MAX];
+    struct text s = text_over(site, sizeof site);
+    stored_site_text(ui, species, stored, &s);
+    for (int spin = SPIN_NONE + 1; spin < SPIN_COUNT; spin++)
+        if (strstr(site, spin_word((enum spin_state)spin)))
+            text_addf(t, " %s", spin_id((enum spin_state)spin));
+}
+
+static void draw_value(const struct ui *ui, struct canvas *canvas, int row,
+                       int column, const struct comparison_line *line,
+                       int which)
 {
     char buffer[UI_TEXT_MAX];
     char out[NUMBER_TEXT_MAX];
@@ -102,6 +116,8 @@ static void draw_value(struct canvas *canvas, int row, int column,
     }
     if (!line->provenance->computed)
         reading_text(&t, r);
+    if (!line->provenance->computed)
+        add_spin(ui, &ui->comparison.species[which], r, &t);
     if (t.length == 0 || t.length > VALUE_COLUMNS)
         snprintf(buffer, sizeof buffer, "%s",
                  number_fit(r->value.value, line->unit->decimals, VALUE_COLUMNS,
@@ -127,6 +143,7 @@ static const char *short_label(const struct ui *ui, int line,
     const char *quantity = quantity_at(ui->comparison.lines[line].quantity)->id;
     size_t n = strlen(quantity);
     comparison_label(&ui->comparison, line, &t);
+    add_asked_site(ui, ui->comparison.lines[line].provenance, &t);
     return strncmp(out, quantity, n) == 0 && out[n] == '_' ? out + n + 1 : out;
 }
 
@@ -143,8 +160,8 @@ static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(ui, i);
         if (which < ui->comparison.count)
-            draw_value(canvas, row, label_columns(ui) + i * ATOM_COLUMNS, line,
-                       which);
+            draw_value(ui, canvas, row, label_columns(ui) + i * ATOM_COLUMNS,
+                       line, which);
     }
 }
 

@@ -242,6 +242,35 @@ static int count_species(const struct ui *ui, bool *own)
     return 0;
 }
 
+/* Whether what is exported holds an ion. */
+static bool has_ion(const struct ui *ui)
+{
+    const struct choice *c = &ui->choice;
+    const struct walk *walk = &ui->trend.walk;
+    if (ui->scope == SCOPE_PINS || (ui->scope == SCOPE_COMPARE && c->pin_count))
+        for (int i = 0; i < c->pin_count; i++)
+            if (c->pins[i].charge != 0)
+                return true;
+    if (ui->scope == SCOPE_TREND)
+        for (int i = 0; i < walk->count; i++)
+            if (walk->steps[i].charge != 0)
+                return true;
+    bool one_charge = ui->scope == SCOPE_ROW || ui->scope == SCOPE_SHEET ||
+                      ui->scope == SCOPE_AUDIT;
+    return one_charge && c->charge != 0;
+}
+
+/* Whether a set that tells sites apart is read: the chosen one, or the default
+ * one of an ion's radius. */
+static bool reads_sites(const struct ui *ui)
+{
+    const struct choice *c = &ui->choice;
+    if (c->against && reference_has_sites(c->against))
+        return true;
+    return c->reference ? reference_has_sites(c->reference)
+                        : c->quantity == QUANTITY_RADIUS && has_ion(ui);
+}
+
 static void add_site(const struct ui *ui, struct text *t)
 {
     const struct site *site = &ui->choice.site;
@@ -261,7 +290,7 @@ static void add_choices(const struct ui *ui, struct text *t)
         text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
     if (c->reference)
         text_addf(t, " --reference %s", c->reference->provenance->id);
-    if (c->reference && reference_has_sites(c->reference))
+    if (reads_sites(ui))
         add_site(ui, t);
     if (c->against && ui->scope != SCOPE_AUDIT)
         text_addf(t, " --against %s", c->against->provenance->id);

@@ -123,12 +123,13 @@ static const struct key_row rows[] = {
     {ACTION_UP, 0, KEY_CODE_UP, "arrows", "move",
      "move the selection, or scroll", false, ON_ALL},
     {ACTION_DOWN, 0, KEY_CODE_DOWN, "", "", "", false, ON_ALL},
-    {ACTION_LEFT, 0, KEY_CODE_LEFT, "", "", "", false, ON_ALL},
-    {ACTION_RIGHT, 0, KEY_CODE_RIGHT, "", "", "", false, ON_ALL},
-    {ACTION_LEFT, 'h', 0, "h j k l", "move", "the same", false, ON_ALL},
+    {ACTION_LEFT, 0, KEY_CODE_LEFT, "", "", "", false, ON_DATA | ON_AUDIT},
+    {ACTION_RIGHT, 0, KEY_CODE_RIGHT, "", "", "", false, ON_DATA | ON_AUDIT},
+    {ACTION_LEFT, 'h', 0, "h j k l", "move", "the same", false,
+     ON_DATA | ON_AUDIT},
     {ACTION_DOWN, 'j', 0, "", "", "", false, ON_ALL},
     {ACTION_UP, 'k', 0, "", "", "", false, ON_ALL},
-    {ACTION_RIGHT, 'l', 0, "", "", "", false, ON_ALL},
+    {ACTION_RIGHT, 'l', 0, "", "", "", false, ON_DATA | ON_AUDIT},
     {ACTION_HOME, 0, KEY_CODE_HOME, "Home End", "ends",
      "first or last element, top or bottom", false, ON_ALL},
     {ACTION_END, 0, KEY_CODE_END, "", "", "", false, ON_ALL},
@@ -161,6 +162,22 @@ enum action key_action(const struct event *event, enum screen_id screen)
             return r->action;
     }
     return ACTION_NONE;
+}
+
+void key_refuse(struct ui *ui, const struct event *event)
+{
+    char name[8] = "";
+    for (int i = 0; i < key_row_count(); i++)
+        if (event->kind == EVENT_KEY && rows[i].character == 0 &&
+            rows[i].key == event->key && rows[i].name[0] != '\0') {
+            ui_report(ui, false, "%s does nothing on %s; ? lists the keys",
+                      rows[i].name, ui_screen_name(ui->screen));
+            return;
+        }
+    if (event->kind == EVENT_CHARACTER)
+        name[utf8_encode(event->character, name)] = '\0';
+    ui_report(ui, false, "%s does nothing on %s; ? lists the keys",
+              name[0] ? name : "this key", ui_screen_name(ui->screen));
 }
 
 /* Whether the same name stands for something else on another screen. */

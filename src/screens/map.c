@@ -34,7 +34,11 @@ static void shown_text(const struct ui *ui, struct text *t)
 {
     const struct choice *c = &ui->choice;
     const struct provenance *set = shown_set(ui);
-    const char *reference = set ? set->id : "no reference";
+    char reference[UI_TEXT_MAX];
+    struct text r = text_over(reference, sizeof reference);
+    text_add(&r, set ? set->id : "no reference");
+    if (set)
+        add_asked_site(ui, set, &r);
     const char *model = c->model ? c->model->id : "no model";
     if (c->shown == SHOWN_VALUE)
         text_add(t, model);
@@ -361,8 +365,12 @@ static enum effect update(struct ui *ui, enum action action)
         return step_by_z(ui, z + dx + dy);
     if (dx || dy)
         ui_select(ui, element_neighbour(z, dx, dy, l.width, ui->choice.group3));
+    else if (action == ACTION_OPEN && l.form == FORM_WHOLE)
+        ui_report(ui, false, "grid and pane are both in sight");
     else if (action == ACTION_OPEN)
         ui->detail = !ui->detail;
+    else if (action == ACTION_BACK && (!ui->detail || l.form == FORM_WHOLE))
+        ui_report(ui, false, "this is the map; q quits");
     else if (action == ACTION_BACK)
         ui->detail = false;
     else

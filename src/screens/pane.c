@@ -181,6 +181,46 @@ static void draw_set(struct canvas *canvas, struct area a, int row,
         canvas_text(canvas, row, column, a.columns - column, ROLE_QUIET, p->id);
 }
 
+void add_asked_site(const struct ui *ui, const struct provenance *set,
+                    struct text *t)
+{
+    const struct reference *reference =
+        reference_find(study_references(ui->study), set->id);
+    if (!reference || !reference_has_sites(reference))
+        return;
+    text_add(t, " at ");
+    reference_asked_site(reference, ui->choice.site, t);
+}
+
+void stored_site_text(const struct ui *ui, const struct species *species,
+                      const struct reading *stored, struct text *t)
+{
+    if (stored->state != READING_OK || !stored->provenance)
+        return;
+    const struct reference *reference =
+        reference_find(study_references(ui->study), stored->provenance->id);
+    if (reference)
+        reference_site_text(reference, species, ui->choice.site, t);
+}
+
+/* The site that a stored radius stands for, in a line of its own below the
+ * rows; gives the rows used. */
+static int draw_site(const struct ui *ui, struct canvas *canvas, struct area a,
+                     const struct row *rows, int count)
+{
+    char site[UI_TEXT_MAX];
+    for (int i = 0; i < count && a.rows > 0; i++) {
+        struct text t = text_over(site, sizeof site);
+        stored_site_text(ui, &rows[i].species, &rows[i].reference, &t);
+        if (t.length == 0)
+            continue;
+        canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
+                     "stored at coordination %s", site);
+        return 1;
+    }
+    return 0;
+}
+
 static void draw_row(struct canvas *canvas, struct area a, int row,
                      const struct row *r, const struct row *above, bool chosen,
                      double full)
@@ -272,7 +312,12 @@ static int draw_group(const struct ui *ui, struct canvas *canvas, struct area a,
         draw_row(canvas, a, a.row + 1 + i, &rows[i], i ? &rows[i - 1] : NULL,
                  chosen, full);
     }
-    return count + 1 < a.rows ? count + 1 : a.rows;
+    int used = count + 1 < a.rows ? count + 1 : a.rows;
+    struct area below = {a.row + used, a.column, a.rows - used, a.columns};
+    /* Of the chosen quantity the line of the source says it. */
+    return quantity == ui->choice.quantity
+               ? used
+               : used + draw_site(ui, canvas, below, rows, count);
 }
 
 /* The set, what it holds, and what its source says of this value. */
@@ -372,8 +417,9 @@ static int draw_other_sets(const struct ui *ui, struct canvas *canvas,
         if (rows[i].state != ROW_OK || p == chosen.reference.provenance)
             continue;
         canvas_textf(canvas, a.row + used, NAME, a.columns - NAME, ROLE_TEXT,
-                     "%s: reference %s: %s", rows[i].value.provenance->id,
-                     p->id, p->definition);
+                     "%s: reference %s: %s%s%s", rows[i].value.provenance->id,
+                     p->id, rows[i].reference.remark,
+                     rows[i].reference.remark[0] ? "; " : "", p->definition);
         used++;
     }
     return used;

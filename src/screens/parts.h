@@ -86,6 +86,9 @@ void key_explain(const struct key_row *row, struct text *t);
 /* Action of an event on a screen; ACTION_NONE when the key means nothing. */
 enum action key_action(const struct event *event, enum screen_id screen);
 
+/* Says that a key means nothing on the screen that is shown. */
+void key_refuse(struct ui *ui, const struct event *event);
+
 /* One screen. update takes what the ui has not taken itself. */
 struct screen_ops {
     const char *name; /* in the title and in the help */
@@ -117,6 +120,15 @@ bool ui_ask(const struct ui *ui, int z, int charge, struct ask *ask);
 
 /* The unit in which a quantity is shown. */
 const struct unit *ui_unit(const struct ui *ui, enum quantity_id quantity);
+
+/* Behind the id of a set: the site asked of it, where it tells sites apart. */
+void add_asked_site(const struct ui *ui, const struct provenance *set,
+                    struct text *t);
+
+/* Writes the site of a stored value of a species, "VI, high spin"; nothing
+ * where its set tells none apart or holds no value. */
+void stored_site_text(const struct ui *ui, const struct species *species,
+                      const struct reading *stored, struct text *t);
 
 /* Brings what is derived from the choice up to date. */
 void ui_refresh(struct ui *ui);

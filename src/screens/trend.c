@@ -468,9 +468,11 @@ static void draw_title(const struct ui *ui, struct canvas *canvas)
     if (q->per_subshell)
         text_addf(&t, "   %s",
                   c->n ? subshell_print(c->n, c->l, label) : "outermost");
-    for (int s = 0; s < ui->trend.set_count; s++)
+    for (int s = 0; s < ui->trend.set_count; s++) {
         text_addf(&t, "%s%s", s ? ", " : "   ",
                   ui->trend.sets[s].provenance->id);
+        add_asked_site(ui, ui->trend.sets[s].provenance, &t);
+    }
     canvas_text(canvas, 0, 0, canvas->columns, ROLE_TITLE, buffer);
 }
 

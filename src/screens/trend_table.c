@@ -79,7 +79,8 @@ static void draw_model(const struct ui *ui, struct canvas *canvas,
 
 /* A stored value with its set and kind. */
 static int draw_stored(struct canvas *canvas, struct area a, int row,
-                       const struct reading *stored, bool second)
+                       const struct reading *stored, const char *site,
+                       bool second)
 {
     char buffer[UI_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
@@ -96,23 +97,31 @@ static int draw_stored(struct canvas *canvas, struct area a, int row,
         return 2;
     }
     reading_text(&t, stored);
+    if (site[0] != '\0')
+        text_addf(&t, " at %s", site);
     text_addf(&t, ", %s", evidence_word(stored->evidence));
     canvas_text(canvas, row + 1, a.column + 2, a.columns - 2, ROLE_TEXT,
                 buffer);
     return 2;
 }
 
-static int draw_stored_pair(struct canvas *canvas, struct area a, int row,
-                            const struct row *r)
+static int draw_stored_pair(const struct ui *ui, struct canvas *canvas,
+                            struct area a, int row, const struct row *r)
 {
+    char first[UI_TEXT_MAX];
+    char second[UI_TEXT_MAX];
+    struct text f = text_over(first, sizeof first);
+    struct text s = text_over(second, sizeof second);
+    stored_site_text(ui, &r->species, &r->reference, &f);
+    stored_site_text(ui, &r->species, &r->against, &s);
     char text[NUMBER_TEXT_MAX + 4];
     char percent[NUMBER_TEXT_MAX + 4];
     int used = 0;
     if (r->reference.provenance)
-        used += draw_stored(canvas, a, row, &r->reference, false);
+        used += draw_stored(canvas, a, row, &r->reference, first, false);
     if (!r->against.provenance)
         return used;
-    used += draw_stored(canvas, a, row + used, &r->against, true);
+    used += draw_stored(canvas, a, row + used, &r->against, second, true);
     if (!r->disagrees)
         return used;
     signed_text(r->disagreement.value, r->unit->decimals, text, sizeof text);
@@ -212,7 +221,7 @@ void draw_trend_table(const struct ui *ui, struct canvas *canvas,
         return;
     }
     draw_head(ui, canvas, area, &r);
-    row += draw_stored_pair(canvas, area, row, &r) + 1;
+    row += draw_stored_pair(ui, canvas, area, row, &r) + 1;
     if (t->series_count > 0 && row < bottom) {
         int column = area.column + 2 + NAME_COLUMNS;
         canvas_textf(canvas, row, area.column, NAME_COLUMNS, ROLE_HEADING,
@@ -294,6 +303,11 @@ void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
         reading_text(&text, &r.reference);
     else
         text_add(&text, r.reference.reason);
+    char site[UI_TEXT_MAX];
+    struct text where = text_over(site, sizeof site);
+    stored_site_text(ui, &r.species, &r.reference, &where);
+    if (where.length > 0)
+        text_addf(&text, " at %s", site);
     bool measured = !trend_unmeasured(r.reference.evidence);
     if (!measured)
         text_addf(&text, " (%s)", evidence_id(r.reference.evidence));

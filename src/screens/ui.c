@@ -240,8 +240,10 @@ static enum effect go(struct ui *ui, enum screen_id screen)
 {
     if (screen == SCREEN_KEYS && ui->screen != SCREEN_KEYS)
         ui->before_keys = ui->screen;
-    ui->screen = screen;
     ui->message[0] = '\0';
+    if (screen == ui->screen)
+        ui_report(ui, false, "%s is in front already", ui_screen_name(screen));
+    ui->screen = screen;
     return EFFECT_REDRAW;
 }
 
@@ -322,6 +324,34 @@ static bool open_screen(struct ui *ui, enum action action)
     return true;
 }
 
+/* Told in words too: where the values leave no choice nothing is seen. */
+static void next_axis(struct ui *ui)
+{
+    static const char *const words[TREND_AXIS_COUNT] = {
+        [TREND_AXIS_AUTO] = "as the values ask for",
+        [TREND_AXIS_LINEAR] = "linear",
+        [TREND_AXIS_LOG] = "logarithmic where all values are above zero",
+    };
+    struct choice *c = &ui->choice;
+    c->trend_axis = (enum trend_axis)((c->trend_axis + 1) % TREND_AXIS_COUNT);
+    ui_report(ui, false, "axis: %s", words[c->trend_axis]);
+}
+
+static void change_dots(struct ui *ui)
+{
+    ui->choice.atom.braille = !ui->choice.atom.braille;
+    ui_report(ui, false, "curves in %s",
+              ui->choice.atom.braille ? "braille dots" : "blocks");
+}
+
+static void change_grid(struct ui *ui)
+{
+    struct choice *c = &ui->choice;
+    c->grid = c->grid == GRID_18 ? GRID_32 : GRID_18;
+    if (layout_map(ui->rows, ui->columns, c->grid).width != c->grid)
+        ui_report(ui, false, "32 columns, where the terminal is wide enough");
+}
+
 /* Actions that change how Trend and Audit show it. */
 static bool change_view(struct ui *ui, enum action action)
 {
@@ -329,12 +359,11 @@ static bool change_view(struct ui *ui, enum action action)
     if (action == ACTION_PERCENT)
         c->trend_percent = !c->trend_percent;
     else if (action == ACTION_TREND_AXIS)
-        c->trend_axis =
-            (enum trend_axis)((c->trend_axis + 1) % TREND_AXIS_COUNT);
+        next_axis(ui);
     else if (action == ACTION_STATISTIC)
         c->statistic = (enum statistic)((c->statistic + 1) % STATISTIC_KINDS);
-    else if (action == ACTION_DOTS && ui->screen != SCREEN_ATOM)
-        c->atom.braille = !c->atom.braille;
+    else if (action == ACTION_DOTS)
+        change_dots(ui);
     else
         return false;
     return true;
@@ -355,7 +384,7 @@ static bool change_choice(struct ui *ui, enum action action)
         ui->comparison_stale = true;
         ui_report(ui, false, "no species pinned");
     } else if (action == ACTION_GRID) {
-        c->grid = c->grid == GRID_18 ? GRID_32 : GRID_18;
+        change_grid(ui);
     } else if (action == ACTION_GROUP3) {
         c->group3 = c->group3 == GRID_LU_LR ? GRID_LA_AC : GRID_LU_LR;
     } else {
@@ -495,7 +524,12 @@ static enum effect take_event(struct ui *ui, const struct event *event)
         return prompt_update(ui, event);
     }
     enum action action = key_action(event, ui->screen);
-    return action == ACTION_NONE ? EFFECT_NONE : act(ui, action);
+    if (action != ACTION_NONE)
+        return act(ui, action);
+    if (event->kind != EVENT_KEY && event->kind != EVENT_CHARACTER)
+        return EFFECT_NONE;
+    key_refuse(ui, event);
+    return EFFECT_REDRAW;
 }
 
 enum effect ui_update(struct ui *ui, const struct event *event)

@@ -112,10 +112,16 @@ const struct reference *reference_find(const struct reference_list *list,
 }
 
 const struct reference *reference_default(const struct reference_list *list,
-                                          enum quantity_id quantity,
+                                          enum quantity_id quantity, int charge,
                                           const char *definition, bool inner)
 {
     const struct reference *first = NULL;
+    for (int i = 0; i < list->count && charge != 0 && !inner &&
+                    quantity == QUANTITY_RADIUS;
+         i++)
+        if (list->items[i].quantity == quantity &&
+            reference_has_sites(&list->items[i]))
+            return &list->items[i];
     for (int i = 0; i < list->count; i++) {
         const struct reference *r = &list->items[i];
         if (r->quantity != quantity || (inner && r->outermost_only))
@@ -126,7 +132,7 @@ const struct reference *reference_default(const struct reference_list *list,
             return r;
     }
     if (!first && inner)
-        return reference_default(list, quantity, definition, false);
+        return reference_default(list, quantity, charge, definition, false);
     return first;
 }
 
@@ -166,10 +172,11 @@ bool reference_has_sites(const struct reference *reference)
            reference->set->default_coordination != COORDINATION_NONE;
 }
 
-/* The entry of an ion at a site. Another site is never put in its place. */
-static struct reading read_at_site(const struct reference *reference,
-                                   const struct species *species,
-                                   struct site site)
+/* The entry of an ion at a site, NULL when there is none. Another site is
+ * never put in its place. */
+static const struct entry *entry_at_site(const struct reference *reference,
+                                         const struct species *species,
+                                         struct site site)
 {
     const struct dataset *set = reference->set;
     enum coordination coordination = site.coordination != COORDINATION_NONE
@@ -181,12 +188,51 @@ static struct reading read_at_site(const struct reference *reference,
     if (!entry)
         entry = dataset_lookup_site(set, species->z, species->charge,
                                     coordination, SPIN_NONE);
-    if (entry && (entry->spin == SPIN_NONE || site.spin == SPIN_NONE ||
-                  entry->spin == site.spin))
-        return dataset_entry_reading(set, entry);
+    bool fits = entry && (entry->spin == SPIN_NONE || site.spin == SPIN_NONE ||
+                          entry->spin == site.spin);
+    return fits ? entry : NULL;
+}
+
+static struct reading read_at_site(const struct reference *reference,
+                                   const struct species *species,
+                                   struct site site)
+{
+    const struct entry *entry = entry_at_site(reference, species, site);
+    if (entry)
+        return dataset_entry_reading(reference->set, entry);
     return reading_gap(reference->quantity, READING_MISSING,
                        "nothing stored for this coordination and spin",
                        reference->provenance);
+}
+
+static void add_site(enum coordination coordination, enum spin_state spin,
+                     struct text *t)
+{
+    text_add(t, coordination_id(coordination));
+    if (spin != SPIN_NONE)
+        text_addf(t, ", %s", spin_word(spin));
+}
+
+void reference_site_text(const struct reference *reference,
+                         const struct species *species, struct site site,
+                         struct text *t)
+{
+    if (!reference_has_sites(reference))
+        return;
+    const struct entry *entry = entry_at_site(reference, species, site);
+    if (entry && entry->gap == GAP_NONE)
+        add_site((enum coordination)entry->coordination,
+                 (enum spin_state)entry->spin, t);
+}
+
+void reference_asked_site(const struct reference *reference, struct site site,
+                          struct text *t)
+{
+    if (reference_has_sites(reference))
+        add_site(site.coordination != COORDINATION_NONE
+                     ? site.coordination
+                     : reference->set->default_coordination,
+                 site.spin, t);
 }
 
 struct reading reference_read(const struct reference *reference,

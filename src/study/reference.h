@@ -4,6 +4,7 @@
 #ifndef STUDY_REFERENCE_H
 #define STUDY_REFERENCE_H
 
+#include "base/text.h"
 #include "element/reading.h"
 #include "element/species.h"
 #include "refdata/catalogue.h"
@@ -48,12 +49,13 @@ void reference_list_fill(struct reference_list *list,
 const struct reference *reference_find(const struct reference_list *list,
                                        const char *id);
 
-/* The reference that a row takes when none was chosen: the first with the
- * model's own definition, else the first of the quantity that covers such a
- * subshell; NULL when the quantity has none. definition may be NULL; inner:
- * the subshell asked about is not the outermost. */
+/* The reference that a row takes when none was chosen. The radius of an ion:
+ * the first set that tells sites apart, since no other holds ions. Else the
+ * first with the model's own definition, else the first of the quantity that
+ * covers such a subshell; NULL when the quantity has none. definition may be
+ * NULL; inner: the subshell asked about is not the outermost. */
 const struct reference *reference_default(const struct reference_list *list,
-                                          enum quantity_id quantity,
+                                          enum quantity_id quantity, int charge,
                                           const char *definition, bool inner);
 
 /* The site of an ion, for sets that tell them apart: COORDINATION_NONE is the
@@ -65,6 +67,17 @@ struct site {
 
 /* True when the set tells sites apart. */
 bool reference_has_sites(const struct reference *reference);
+
+/* Writes the site of the value that reference_read gives, "VI, high spin";
+ * nothing when the set knows none or holds no value there. */
+void reference_site_text(const struct reference *reference,
+                         const struct species *species, struct site site,
+                         struct text *t);
+
+/* Writes the site that is asked of a set, whatever the ion: "VI", and the spin
+ * where one was chosen; nothing when it knows none. */
+void reference_asked_site(const struct reference *reference, struct site site,
+                          struct text *t);
 
 /* Its value for a species, in base units; n = 0 asks for the outermost
  * subshell or for a quantity without subshells. Always a reading; a gap says

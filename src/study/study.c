@@ -308,8 +308,9 @@ struct row study_row(const struct study *study, const struct ask *ask)
         definition = ask->model->offers[offer].provenance.definition;
     }
     if (!reference)
-        reference = reference_default(&study->references, ask->quantity,
-                                      definition, is_inner(ask, &row.species));
+        reference =
+            reference_default(&study->references, ask->quantity, ask->charge,
+                              definition, is_inner(ask, &row.species));
     struct reading stored =
         reference
             ? reference_read(reference, &row.species, ask->n, ask->l, ask->site)

@@ -164,6 +164,41 @@ START_TEST(no_note_states_an_error_that_ions_do_not_have)
 }
 END_TEST
 
+/* An ion's radius stands against Shannon's effective ionic radius at its
+ * default site (Acta Cryst. A32, 751 (1976): Fe3+ VI high spin 64.5, IV 49 pm,
+ * O2- VI 140 pm), an atom's against the like definition. */
+START_TEST(the_radius_of_an_ion_stands_against_an_ionic_one)
+{
+    static const struct {
+        const char *call, *set, *radius;
+    } cases[] = {
+        {"Fe3+", "ionic_effective_shannon_1976", "64.5"},
+        {"Fe3+ --coordination 4", "ionic_effective_shannon_1976", "49"},
+        {"Fe3+ --spin low", "ionic_effective_shannon_1976", "55"},
+        {"O2-", "ionic_effective_shannon_1976", "140"},
+        {"Fe", "calculated_clementi_1967", "156"},
+    };
+    for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
+        char call[256];
+        snprintf(call, sizeof call,
+                 "list %s --quantity radius --model slater --format csv",
+                 cases[i].call);
+        char *out = printed(call);
+        struct csv csv = csv_read_text(out);
+        ck_assert_str_eq(csv_cell(&csv, 0, "reference_set"), cases[i].set);
+        ck_assert_msg(csv_number(&csv, 0, "reference_value") ==
+                          strtod(cases[i].radius, NULL),
+                      "%s", call);
+        csv_free(&csv);
+        free(out);
+    }
+    char *out = printed("list --charge 3 --quantity radius --model slater");
+    ck_assert_ptr_nonnull(strstr(out, "not like with like"));
+    ck_assert_ptr_nonnull(strstr(out, "coordination VI; high spin"));
+    free(out);
+}
+END_TEST
+
 TCase *compare_cases(void)
 {
     TCase *c = tcase_create("compare");
@@ -174,5 +209,6 @@ TCase *compare_cases(void)
     tcase_add_test(c, exports_carry_evidence_cautions_supply_and_abundance);
     tcase_add_test(c, an_audit_names_no_best_across_unlike_definitions);
     tcase_add_test(c, no_note_states_an_error_that_ions_do_not_have);
+    tcase_add_test(c, the_radius_of_an_ion_stands_against_an_ionic_one);
     return c;
 }

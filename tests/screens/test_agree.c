@@ -68,11 +68,46 @@ START_TEST(a_trend_without_curves_names_no_model)
 }
 END_TEST
 
+/* Shannon's radius of Fe3+ is 64.5 pm at VI, high spin, 55 pm low spin, and
+ * 49 pm at IV (Acta Cryst. A32, 751 (1976)); wherever it stands its site stands
+ * beside it. */
+START_TEST(a_stored_radius_stands_with_its_site)
+{
+    static const struct {
+        const char *keys;
+        int rows, columns;
+        bool radius;
+    } places[] = {
+        {"", 24, 80, true},   {"", 60, 200, true},  {"", 60, 200, false},
+        {"", 50, 100, false}, {"c", 60, 200, true}, {"t", 60, 200, true},
+        {"t", 24, 80, true},  {"d", 24, 120, true},
+    };
+    for (size_t i = 0; i < sizeof places / sizeof places[0]; i++) {
+        ui_clear(&ui);
+        ui_init(&ui, study);
+        resize(places[i].rows, places[i].columns);
+        ui.choice.charge = 3;
+        if (places[i].radius)
+            ui.choice.quantity = QUANTITY_RADIUS;
+        type(places[i].keys);
+        char *text = drawn();
+        bool audit = places[i].keys[0] == 'd';
+        bool whole = strstr(text, "VI") &&
+                     (audit || (strstr(text, "64.5") && strstr(text, "high")));
+        if (!whole)
+            fputs(text, stderr);
+        ck_assert_msg(whole, "place %zu", i);
+        free(text);
+    }
+}
+END_TEST
+
 TCase *agree_case(void)
 {
     TCase *tc = tcase_create("agree");
     tcase_add_checked_fixture(tc, open_ui, close_ui);
     tcase_add_test(tc, the_title_of_the_map_names_the_set_of_its_row);
     tcase_add_test(tc, a_trend_without_curves_names_no_model);
+    tcase_add_test(tc, a_stored_radius_stands_with_its_site);
     return tc;
 }

@@ -554,6 +554,7 @@ int main(void)
     Suite *suite = suite_create("screen");
     suite_add_tcase(suite, layout_case());
     suite_add_tcase(suite, agree_case());
+    suite_add_tcase(suite, keys_case());
     TCase *golden = tcase_create("golden screens");
     tcase_add_checked_fixture(golden, open_ui, close_ui);
     tcase_add_test(golden, the_map_at_80x24);

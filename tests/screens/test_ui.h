@@ -6,5 +6,6 @@
 
 TCase *layout_case(void);
 TCase *agree_case(void);
+TCase *keys_case(void);
 
 #endif
