@@ -247,6 +247,25 @@ START_TEST(an_ion_is_read_at_its_site_and_no_other)
 }
 END_TEST
 
+/* By quantity, then by rank, which every built-in set has. */
+START_TEST(references_stand_in_the_order_of_their_ranks)
+{
+    const struct reference_list *list = study_references(study);
+    int pairs = 0;
+    for (int i = 1; i < list->count; i++) {
+        const struct reference *r = &list->items[i], *before = r - 1;
+        ck_assert_int_le(before->quantity, r->quantity);
+        ck_assert(r->derived || r->set->rank > 0);
+        if (before->quantity != r->quantity || before->derived || r->derived)
+            continue;
+        ck_assert_msg(before->set->rank < r->set->rank, "%s before %s",
+                      before->provenance->id, r->provenance->id);
+        pairs++;
+    }
+    ck_assert_int_gt(pairs, 10);
+}
+END_TEST
+
 /* Along a period, with a second set: what each step holds is what the row of
  * the same ask says, the uncertainty of the stored value included. */
 START_TEST(a_trend_holds_what_its_rows_say)
@@ -333,6 +352,7 @@ int main(void)
     tcase_add_test(rows, units_are_converted_and_a_scale_keeps_its_own);
     tcase_add_test(rows, an_energy_is_stored_for_the_ground_configuration_only);
     tcase_add_test(rows, an_ion_is_read_at_its_site_and_no_other);
+    tcase_add_test(rows, references_stand_in_the_order_of_their_ranks);
     tcase_add_test(rows, a_trend_holds_what_its_rows_say);
     tcase_add_test(rows, z_eff_from_an_energy_has_its_uncertainty);
     suite_add_tcase(suite, rows);
