@@ -176,14 +176,14 @@ END_TEST
 START_TEST(every_order_is_by_its_own_number)
 {
     static const double value[] = {10, 30, 20, 0, 25};
-    static const double reference[] = {8, 33, 19, 7, 26};
-    static const double against[] = {8.5, 30, 12, 9, 0};
+    static const double reference[] = {8, 33, 19, 9, 26};
+    static const double against[] = {8.5, 30, 12, 11.5, 0};
     static const int want[ROW_ORDER_COUNT][5] = {
         [ROW_ORDER_VALUE] = {2, 5, 3, 1, 4},
         [ROW_ORDER_RESIDUAL] = {2, 1, 3, 5, 4},             /* 2 -3 1 -1 */
         [ROW_ORDER_PERCENT] = {1, 2, 3, 5, 4},              /* 25 -9 5 -4 */
-        [ROW_ORDER_DISAGREEMENT] = {3, 2, 4, 1, 5},         /* .5 -3 -7 2 */
-        [ROW_ORDER_DISAGREEMENT_PERCENT] = {3, 4, 2, 1, 5}, /* 6 -9 -37 29 */
+        [ROW_ORDER_DISAGREEMENT] = {3, 2, 4, 1, 5},         /* .5 -3 -7 2.5 */
+        [ROW_ORDER_DISAGREEMENT_PERCENT] = {3, 4, 2, 1, 5}, /* 6 -9 -37 28 */
     };
     struct status st = status_ok();
     for (int o = 0; o < ROW_ORDER_COUNT; o++) {
