@@ -32,7 +32,7 @@ static struct look look_of(const char *const *env, const char *option)
     struct pty *pty = pty_start(&options);
     size_t length;
     pty_expect(pty, "Reference sets");
-    pty_settle(pty, 50);
+    pty_end(pty);
     const char *bytes = pty_output(pty, &length);
     struct look look = {has(bytes, length, "\033[1m"),
                         has(bytes, length, "\033[38;5;")};

@@ -45,7 +45,8 @@ START_TEST(a_signal_is_seen_by_the_parent_and_the_view_is_kept)
     struct pty *p = session_map();
     pty_type(p, "Lu\r");
     pty_expect(p, "Lu  71  lutetium");
-    pty_expect_gone(p, "solving ");
+    pty_expect(p, "8.802"); /* both models that are solved have their value */
+    pty_expect(p, "3.830");
     pty_signal(p, deaths[_i]);
     int status = pty_end(p);
     ck_assert_msg(WIFSIGNALED(status) && WTERMSIG(status) == deaths[_i],
@@ -147,7 +148,6 @@ START_TEST(a_resize_storm_during_the_solving_loses_nothing)
     pty_resize(p, 24, 80);
     pty_expect(p, "effective nuclear charge, e   scf");
     pty_expect(p, "Cu  29  copper");
-    pty_expect_gone(p, "solving ");
     pty_expect(p, "118/118");
     pty_expect(p, ">scf");
     session_quit(p);

@@ -15,7 +15,8 @@
 #include <unistd.h>
 #include <vterm.h>
 
-enum { DEADLINE_MS = 10000, ROW_BYTES = 4 * 1024, ENV_MAX = 64 };
+/* The deadline is for what never comes: a loaded machine is slow, not wrong. */
+enum { DEADLINE_MS = 120000, ROW_BYTES = 4 * 1024, ENV_MAX = 64 };
 
 struct pty {
     int master, slave;
@@ -37,6 +38,7 @@ struct pty {
     char held[16];
     size_t held_length;
     char last;
+    int marks; /* of the harness that have come through */
 };
 
 struct report {
@@ -67,12 +69,24 @@ static void report(int to, int pid, int status)
         _exit(125);
 }
 
+/* How the tests themselves were started, by a script in the background or
+ * one that ignores hang-ups, must not reach the program. */
+static void default_signals(void)
+{
+    static const int signals[] = {SIGHUP,  SIGINT,  SIGQUIT, SIGTERM, SIGTSTP,
+                                  SIGCONT, SIGTTIN, SIGTTOU, SIGPIPE, SIGCHLD};
+    sigset_t none;
+    for (size_t i = 0; i < sizeof signals / sizeof signals[0]; i++)
+        signal(signals[i], SIG_DFL);
+    sigemptyset(&none);
+    sigprocmask(SIG_SETMASK, &none, NULL);
+}
+
 static void run_job(const struct pty_options *options, char **environment)
 {
     setpgid(0, 0);
     tcsetpgrp(STDIN_FILENO, getpgrp());
-    signal(SIGTTOU, SIG_DFL);
-    signal(SIGHUP, SIG_DFL);
+    default_signals();
     if (options->ignore_stop)
         signal(SIGTSTP, SIG_IGN);
     if (options->directory != NULL && chdir(options->directory) != 0)
@@ -88,7 +102,9 @@ static void run_job(const struct pty_options *options, char **environment)
 static void parent_main(const struct pty_options *options, char **environment,
                         int reports, int commands)
 {
+    default_signals();
     signal(SIGTTOU, SIG_IGN);
+    signal(SIGINT, SIG_IGN); /* of its own group only, before the job's */
     signal(SIGHUP, options->keep_hangup ? SIG_IGN : pass_hangup);
     pid_t job = fork();
     if (job == 0) {
@@ -294,6 +310,21 @@ static void feed(struct pty *pty, char byte)
     vterm_input_write(pty->vterm, held, n);
 }
 
+/* The harness's own mark in the stream; no program writes this character. */
+static const char MARK = '\035';
+
+static size_t without_marks(struct pty *pty, char *bytes, size_t length)
+{
+    size_t kept = 0;
+    for (size_t i = 0; i < length; i++) {
+        if (bytes[i] == MARK)
+            pty->marks++;
+        else
+            bytes[kept++] = bytes[i];
+    }
+    return kept;
+}
+
 static void keep_output(struct pty *pty, const char *bytes, size_t length)
 {
     while (pty->length + length + 1 > pty->capacity) {
@@ -333,7 +364,7 @@ static bool pump(struct pty *pty, int timeout_ms)
         char bytes[8192];
         ssize_t got = read(pty->master, bytes, sizeof bytes);
         if (got > 0) {
-            keep_output(pty, bytes, (size_t)got);
+            keep_output(pty, bytes, without_marks(pty, bytes, (size_t)got));
             any = true;
         }
     }
@@ -397,6 +428,50 @@ void pty_settle(struct pty *pty, int quiet_ms)
     while (pump(pty, quiet_ms))
         if (now_ms() > deadline)
             give_up(pty, "quiet", "");
+}
+
+void pty_drain(struct pty *pty)
+{
+    long long deadline = now_ms() + DEADLINE_MS;
+    int wanted = pty->marks + 1;
+    while (pump(pty, 0)) /* makes room, so that the write does not block */
+        ;
+    ck_assert_int_eq(write(pty->slave, &MARK, 1), 1);
+    while (pty->marks < wanted) {
+        pump(pty, 50);
+        if (now_ms() > deadline)
+            give_up(pty, "what was written", "");
+    }
+}
+
+void pty_expect_mode(struct pty *pty, int mode, bool on)
+{
+    long long deadline = now_ms() + DEADLINE_MS;
+    while (pty_mode(pty, mode) != on) {
+        bool any = pump(pty, 50);
+        if ((!any && pty->ended) || now_ms() > deadline)
+            give_up(pty, "a private mode", "");
+    }
+}
+
+void pty_expect_output(struct pty *pty, size_t from, const char *text)
+{
+    long long deadline = now_ms() + DEADLINE_MS;
+    while (!pty->output || !strstr(pty->output + from, text)) {
+        bool any = pump(pty, 50);
+        if ((!any && pty->ended) || now_ms() > deadline)
+            give_up(pty, "an output", "");
+    }
+}
+
+void pty_expect_full_screen(struct pty *pty)
+{
+    long long deadline = now_ms() + DEADLINE_MS;
+    while (!pty->full_screen) {
+        bool any = pump(pty, 50);
+        if ((!any && pty->ended) || now_ms() > deadline)
+            give_up(pty, "the second screen", "");
+    }
 }
 
 /* ---- the screen ---- */
@@ -590,7 +665,7 @@ void pty_expect_stopped(struct pty *pty)
         if (pty->ended || now_ms() > deadline)
             give_up(pty, "a stop", "");
     }
-    pty_settle(pty, 20);
+    pty_drain(pty);
 }
 
 void pty_continue(struct pty *pty)
@@ -614,7 +689,7 @@ int pty_end(struct pty *pty)
             give_up(pty, "the end", "");
     }
     if (pty->master >= 0)
-        pty_settle(pty, 20);
+        pty_drain(pty);
     return pty->status;
 }
 

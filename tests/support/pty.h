@@ -38,12 +38,27 @@ void pty_type(struct pty *pty, const char *text);
 /* What the terminal's description says that a key sends ("kcuu1"). */
 void pty_key(struct pty *pty, const char *capability);
 
-/* Reads what comes until the screen holds the text, or no longer does. */
+/* Reads what comes until the screen holds the text, or no longer does. Only a
+ * text that was expected before may be expected to go: otherwise its absence
+ * may come before it. */
 void pty_expect(struct pty *pty, const char *text);
 void pty_expect_gone(struct pty *pty, const char *text);
 
 /* Reads what comes until the cursor stands there. */
 void pty_expect_cursor(struct pty *pty, int row, int column);
+
+/* Reads all that has been written to the terminal until now. */
+void pty_drain(struct pty *pty);
+
+/* Reads what comes until the program has switched a private mode on or off. */
+void pty_expect_mode(struct pty *pty, int mode, bool on);
+
+/* Reads what comes until the bytes written after the first `from` (as by
+ * pty_count) hold the text. */
+void pty_expect_output(struct pty *pty, size_t from, const char *text);
+
+/* Reads what comes until the program shows the second screen. */
+void pty_expect_full_screen(struct pty *pty);
 
 /* Reads until nothing has come for quiet_ms. */
 void pty_settle(struct pty *pty, int quiet_ms);
