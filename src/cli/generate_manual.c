@@ -9,7 +9,8 @@
 #include "cli/command.h"
 #include "element/quantity.h"
 #include "model/registry.h"
-#include "screens/parts.h"
+#include "screens/list.h"
+#include "session/keys.h"
 
 #define WIDTH 78 /* bytes of a line: the lint's limit is 80 */
 #define TEMPLATE_BYTES_MAX ((size_t)1 << 20)
@@ -140,14 +141,13 @@ static void put_key(FILE *out, const char *name)
 
 static void put_keys(FILE *out)
 {
-    for (int i = 0; i < key_row_count(); i++) {
-        const struct key_row *r = key_row_at(i);
-        if (r->name[0] == '\0' || r->help[0] == '\0')
-            continue;
-        char line[UI_TEXT_MAX];
+    struct key_help help[KEY_ROWS_MAX];
+    int count = session_key_help(screen_list, screen_list_count, help);
+    for (int i = 0; i < count; i++) {
+        char line[SESSION_TEXT_MAX];
         struct text t = text_over(line, sizeof line);
-        key_explain(r, &t);
-        put_key(out, r->name);
+        session_key_explain(screen_list, screen_list_count, help, count, i, &t);
+        put_key(out, help[i].row->name);
         put_text(out, line);
     }
 }

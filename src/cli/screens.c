@@ -9,107 +9,101 @@
 #include "cli/commands.h"
 #include "cli/loop.h"
 #include "cli/remember.h"
-#include "screens/ui.h"
+#include "app/app.h"
 
-struct session {
+struct shown_app {
     struct terminal *terminal;
-    struct ui ui;
+    struct app app;
     bool changed; /* the picture moved on since it was drawn */
-    char data[UI_COMMAND_MAX];
+    char data[SESSION_COMMAND_MAX];
 };
 
-static void write_export(struct ui *ui)
+static void write_export(struct app *app)
 {
     struct file_draft draft;
     struct status st = status_ok();
-    char command[UI_COMMAND_MAX];
+    char command[SESSION_COMMAND_MAX];
     struct text t = text_over(command, sizeof command);
-    if (!ui->replace && access(ui->path, F_OK) == 0) {
-        ui_ask_overwrite(ui);
+    if (!app->replace && access(app->path, F_OK) == 0) {
+        app_ask_overwrite(app);
         return;
     }
-    if (!ui_export_ready(ui))
+    if (!app_export_ready(app))
         return;
-    bool ok = file_draft_open(&draft, ui->path, ui->replace, &st);
-    if (ok && ui_export(ui, draft.stream, &st))
+    bool ok = file_draft_open(&draft, app->path, app->replace, &st);
+    if (ok && app_export(app, draft.stream, &st))
         ok = file_draft_commit(&draft, &st);
     else if (ok) {
         file_draft_discard(&draft);
         ok = false;
     }
-    ui_export_command(ui, &t);
+    app_export_command(app, &t);
     if (ok && t.cut)
-        ui_report(ui, false, "%s written", ui->path);
+        session_report(&app->session, false, "%s written", app->path);
     else if (ok && command[0])
-        ui_report(ui, false, "%s written; the same: %s", ui->path, command);
+        session_report(&app->session, false, "%s written; the same: %s",
+                       app->path, command);
     else if (ok)
-        ui_report(ui, false,
-                  "%s written; no one command prints the same, for the "
-                  "configuration of your own",
-                  ui->path);
+        session_report(&app->session, false,
+                       "%s written; no one command prints the same, for the "
+                       "configuration of your own",
+                       app->path);
     else
-        ui_report(ui, true, "nothing written: %s", st.message);
+        session_report(&app->session, true, "nothing written: %s", st.message);
 }
 
 static enum loop_effect update(void *state, const struct event *event)
 {
-    struct session *s = state;
+    struct shown_app *s = state;
     struct status st = status_ok();
-    switch (ui_update(&s->ui, event)) {
-    case EFFECT_NONE:
+    enum effect effect = app_update(&s->app, event);
+    if (effect == EFFECT_NONE)
         return LOOP_NOTHING;
-    case EFFECT_REDRAW:
-        return LOOP_REDRAW;
-    case EFFECT_REPAINT:
+    if (effect == EFFECT_REPAINT)
         return LOOP_REPAINT;
-    case EFFECT_QUIT:
+    if (effect == EFFECT_QUIT)
         return LOOP_QUIT;
-    case EFFECT_WRITE:
-        write_export(&s->ui);
-        return LOOP_REDRAW;
-    case EFFECT_FORGET:
-        if (!view_forget(&st))
-            ui_report(&s->ui, true, "%s", st.message);
-        return LOOP_REDRAW;
-    case EFFECT_MOUSE:
-        terminal_mouse(s->terminal, s->ui.mouse);
-        return LOOP_REDRAW;
-    }
-    return LOOP_NOTHING;
+    if (effect == EFFECT_WRITE)
+        write_export(&s->app);
+    else if (effect == EFFECT_FORGET && !view_forget(&st))
+        session_report(&s->app.session, true, "%s", st.message);
+    else if (effect == EFFECT_MOUSE)
+        terminal_mouse(s->terminal, s->app.session.mouse);
+    return LOOP_REDRAW;
 }
 
 static void draw(void *state, struct canvas *canvas)
 {
-    struct session *s = state;
+    struct shown_app *s = state;
     canvas->ascii = terminal_ascii(s->terminal);
-    ui_draw(&s->ui, canvas);
+    app_draw(&s->app, canvas);
 }
 
 static bool has_work(void *state)
 {
-    return ui_has_work(&((struct session *)state)->ui);
+    return app_has_work(&((struct shown_app *)state)->app);
 }
 
 static void step(void *state)
 {
-    struct session *s = state;
+    struct shown_app *s = state;
     bool changed;
-    ui_step(&s->ui, &changed);
+    app_step(&s->app, &changed);
     s->changed = s->changed || changed;
 }
 
-static bool keep_view(const struct ui *ui, struct status *st)
+static bool keep_view(const struct app *app, struct status *st)
 {
     char view[VIEW_BYTES_MAX];
     struct text t = text_over(view, sizeof view);
-    if (ui->forgotten)
+    if (app->session.forgotten)
         return true;
-    ui_save_view(ui, &t);
+    app_save_view(app, &t);
     return view_keep(view, st) ||
            status_context(st, "the view is not remembered");
 }
 
-static bool run(struct session *s, const struct terminal_options *options,
+static bool run(struct shown_app *s, const struct terminal_options *options,
                 int *signal, struct status *st)
 {
     const struct loop_client client = {s, update, draw, has_work, step, 8};
@@ -142,23 +136,26 @@ bool cli_screens(struct request *request, struct status *st)
 {
     int signal = 0;
     char view[VIEW_BYTES_MAX];
-    struct session *s = calloc(1, sizeof *s);
+    struct shown_app *s = calloc(1, sizeof *s);
     if (!s)
         return status_fail(st, STATUS_MEMORY, "out of memory");
-    ui_init(&s->ui, request->study);
+    if (!app_init(&s->app, request->study, st)) {
+        free(s);
+        return false;
+    }
     struct text data = text_over(s->data, sizeof s->data);
     quote_data(request->call, &data);
-    s->ui.data_option = data.length ? s->data : NULL;
+    s->app.session.data_option = data.length ? s->data : NULL;
     view_recall(view);
-    ui_load_view(&s->ui, view);
+    app_load_view(&s->app, view);
     struct terminal_options options = {
         .color = request->color,
         .scheme = request->scheme,
         .ascii = request->ascii,
-        .mouse = s->ui.mouse,
+        .mouse = s->app.session.mouse,
     };
-    bool ok = run(s, &options, &signal, st) && keep_view(&s->ui, st);
-    ui_clear(&s->ui);
+    bool ok = run(s, &options, &signal, st) && keep_view(&s->app, st);
+    app_clear(&s->app);
     free(s);
     if (signal)
         terminal_die(signal);

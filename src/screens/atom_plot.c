@@ -4,7 +4,7 @@
 #include <stdio.h>
 
 #include "base/text.h"
-#include "screens/atom.h"
+#include "screens/atom_internal.h"
 
 #define SAMPLES_MAX 600
 #define TITLE_MAX 80
@@ -26,66 +26,68 @@ struct samples {
     struct plot_point points[SAMPLES_MAX];
 };
 
-double atom_length(const struct ui *ui)
+double screen_atom_length(const struct session *session)
 {
-    return BOHR_PM * ui_unit(ui, QUANTITY_RADIUS)->per_base;
+    return BOHR_PM * session_unit(session, QUANTITY_RADIUS)->per_base;
 }
 
-enum role atom_role(int l)
+enum role screen_atom_role(int l)
 {
     return (enum role)(ROLE_CURVE_1 + l);
 }
 
-enum role atom_overlay_role(int l)
+enum role screen_atom_overlay_role(int l)
 {
     return l == 3 ? ROLE_CURVE_2 : ROLE_CURVE_4;
 }
 
-double atom_radius(const struct ui *ui, const struct atom_report *report)
+double screen_atom_radius(const struct atom_state *own,
+                          const struct atom_report *report)
 {
-    int shell = atom_shell(ui, report);
-    if (ui->choice.atom.radius > 0.0)
-        return ui->choice.atom.radius;
+    int shell = screen_atom_shell(own, report);
+    if (own->radius > 0.0)
+        return own->radius;
     return report->subshells[shell < 0 ? report->subshell_count - 1 : shell]
         .peak_radius;
 }
 
-struct plot_axis atom_axis(const struct ui *ui,
-                           const struct atom_report *report)
+struct plot_axis screen_atom_axis(const struct session *session,
+                                  const struct atom_state *own,
+                                  const struct atom_report *report)
 {
-    const struct atom_choice *a = &ui->choice.atom;
-    int shell = atom_shell(ui, report);
+    int shell = screen_atom_shell(own, report);
     double first = FIRST_PART / report->species.z;
-    double last = atom_run_extent(ui->atom->slots[SLOT_CHOSEN].run, LEFT_OUT);
-    if (atom_solved(ui, SLOT_OVER))
-        last = fmax(last,
-                    atom_run_extent(ui->atom->slots[SLOT_OVER].run, LEFT_OUT));
-    if (!a->whole && shell >= 0)
+    double last = atom_run_extent(own->slots[SLOT_CHOSEN].run, LEFT_OUT);
+    if (screen_atom_solved(session, own, SLOT_OVER))
+        last = fmax(last, atom_run_extent(own->slots[SLOT_OVER].run, LEFT_OUT));
+    if (!own->whole && shell >= 0)
         first = NEAR_PART * report->subshells[shell].peak_radius;
-    else if (a->root)
+    else if (own->root)
         first = 0.0;
-    double unit = atom_length(ui);
+    double unit = screen_atom_length(session);
     return (struct plot_axis){
         .title = "",
-        .scale = a->root ? PLOT_SQRT : PLOT_LOG,
+        .scale = own->root ? PLOT_SQRT : PLOT_LOG,
         .low = first * unit,
         .high = plot_round_up(last * unit),
     };
 }
 
-static void sample_radii(const struct ui *ui, const struct plot_axis *axis,
-                         int columns, struct samples *s)
+static void sample_radii(const struct session *session,
+                         const struct plot_axis *axis, int columns,
+                         struct samples *s)
 {
     s->count = 2 * columns + 1 < SAMPLES_MAX ? 2 * columns + 1 : SAMPLES_MAX;
     for (int i = 0; i < s->count; i++)
-        s->r[i] =
-            plot_value(axis, (double)i / (s->count - 1)) / atom_length(ui);
+        s->r[i] = plot_value(axis, (double)i / (s->count - 1)) /
+                  screen_atom_length(session);
 }
 
 /* Values to points; those of a density are per unit of length. */
-static void to_points(const struct ui *ui, struct samples *s, bool density)
+static void to_points(const struct session *session, struct samples *s,
+                      bool density)
 {
-    double unit = atom_length(ui);
+    double unit = screen_atom_length(session);
     for (int i = 0; i < s->count; i++)
         s->points[i] = (struct plot_point){
             s->r[i] * unit, density ? s->value[i] / unit : s->value[i], true};
@@ -99,47 +101,53 @@ static double largest(const struct samples *s)
     return most;
 }
 
-static void sample(const struct ui *ui, int slot, enum atom_run_curve curve,
-                   int shell, struct samples *s)
+static void sample(const struct session *session, const struct atom_state *own,
+                   int slot, enum atom_run_curve curve, int shell,
+                   struct samples *s)
 {
-    atom_run_curve(ui->atom->slots[slot].run, curve, shell, s->count, s->r,
+    atom_run_curve(own->slots[slot].run, curve, shell, s->count, s->r,
                    s->value);
-    to_points(ui, s, curve == RUN_DENSITY);
+    to_points(session, s, curve == RUN_DENSITY);
 }
 
 /* The density of the overlay that belongs to the chosen subshell (or to all
  * electrons): false when there is none (yet). */
-static bool sample_overlay(const struct ui *ui,
+static bool sample_overlay(const struct session *session,
+                           const struct atom_state *own,
                            const struct atom_report *report, struct samples *s)
 {
-    int shell = atom_shell(ui, report);
-    const struct atom_report *over = atom_solved(ui, SLOT_OVER);
-    const struct orbital_run *orbitals = atom_orbitals(ui);
+    int shell = screen_atom_shell(own, report);
+    const struct atom_report *over =
+        screen_atom_solved(session, own, SLOT_OVER);
+    const struct orbital_run *orbitals = screen_atom_orbitals(session, own);
     if (orbitals) {
         orbital_run_density(orbitals, shell, s->count, s->r, s->value);
-        to_points(ui, s, true);
+        to_points(session, s, true);
         return true;
     }
-    int other = over ? atom_other_shell(report, shell, over) : -2;
+    int other = over ? screen_atom_other_shell(report, shell, over) : -2;
     if (other == -2)
         return false;
-    sample(ui, SLOT_OVER, RUN_DENSITY, other, s);
+    sample(session, own, SLOT_OVER, RUN_DENSITY, other, s);
     return true;
 }
 
-static void name_axis(const struct ui *ui, struct plot_axis *axis,
+static void name_axis(const struct session *session, struct plot_axis *axis,
                       char title[TITLE_MAX])
 {
-    snprintf(title, TITLE_MAX, "r, %s", ui_unit(ui, QUANTITY_RADIUS)->id);
+    snprintf(title, TITLE_MAX, "r, %s",
+             session_unit(session, QUANTITY_RADIUS)->id);
     axis->title = title;
 }
 
 /* The cursor: a dotted line, and a mark on the axis. */
-static void draw_cursor_line(const struct ui *ui, const struct plot *plot,
+static void draw_cursor_line(const struct session *session,
+                             const struct atom_state *own,
+                             const struct plot *plot,
                              const struct atom_report *report)
 {
     int column;
-    double r = atom_radius(ui, report) * atom_length(ui);
+    double r = screen_atom_radius(own, report) * screen_atom_length(session);
     plot_upright(plot, ROLE_TITLE, r);
     if (plot_column(plot, r, &column))
         canvas_put(plot->canvas, plot->inside.row + plot->inside.rows, column,
@@ -165,14 +173,15 @@ static void draw_curve(const struct plot *plot, enum role role,
                s->count);
 }
 
-static enum plot_style style_of(const struct ui *ui)
+static enum plot_style style_of(const struct session *session)
 {
-    return ui->choice.atom.braille ? PLOT_BRAILLE : PLOT_BLOCK;
+    return session->choice.braille ? PLOT_BRAILLE : PLOT_BLOCK;
 }
 
 /* The chosen subshell as an area, to whose height the axis is fitted; all
  * electrons as a curve, which may leave it; the overlay dashed. */
-static bool draw_shell(const struct ui *ui, struct canvas *canvas,
+static bool draw_shell(const struct session *session,
+                       const struct atom_state *own, struct canvas *canvas,
                        struct area area, const struct atom_report *report,
                        struct plot *plot)
 {
@@ -183,26 +192,26 @@ static bool draw_shell(const struct ui *ui, struct canvas *canvas,
     char y_title[TITLE_MAX];
     char label[LEVEL_TEXT_MAX];
     char name[ATOM_LABEL_MAX];
-    int shell = atom_shell(ui, report);
-    struct plot_axis x = atom_axis(ui, report);
-    name_axis(ui, &x, x_title);
-    sample_radii(ui, &x, area.columns, &all);
-    sample_radii(ui, &x, area.columns, &one);
-    sample_radii(ui, &x, area.columns, &over);
-    sample(ui, SLOT_CHOSEN, RUN_DENSITY, -1, &all);
-    sample(ui, SLOT_CHOSEN, RUN_DENSITY, shell, &one);
-    bool has_over = sample_overlay(ui, report, &over);
+    int shell = screen_atom_shell(own, report);
+    struct plot_axis x = screen_atom_axis(session, own, report);
+    name_axis(session, &x, x_title);
+    sample_radii(session, &x, area.columns, &all);
+    sample_radii(session, &x, area.columns, &one);
+    sample_radii(session, &x, area.columns, &over);
+    sample(session, own, SLOT_CHOSEN, RUN_DENSITY, -1, &all);
+    sample(session, own, SLOT_CHOSEN, RUN_DENSITY, shell, &one);
+    bool has_over = sample_overlay(session, own, report, &over);
     double high = fmax(largest(&one), has_over ? largest(&over) : 0.0);
     snprintf(y_title, sizeof y_title, "D(r), e/%s",
-             ui_unit(ui, QUANTITY_RADIUS)->id);
+             session_unit(session, QUANTITY_RADIUS)->id);
     struct plot_axis y = {.title = y_title,
                           .high = plot_round_up(HEADROOM * high)};
-    if (!plot_open(plot, canvas, area, style_of(ui), x, y))
+    if (!plot_open(plot, canvas, area, style_of(session), x, y))
         return false;
     const struct report_level *level =
         shell < 0 ? NULL : &report->subshells[shell];
-    enum role over_role = atom_overlay_role(level ? level->l : -1);
-    enum role role = level ? atom_role(level->l) : ROLE_CURVE_5;
+    enum role over_role = screen_atom_overlay_role(level ? level->l : -1);
+    enum role role = level ? screen_atom_role(level->l) : ROLE_CURVE_5;
     plot_fill(plot, role, one.points, one.count);
     if (level)
         draw_curve(plot, ROLE_CURVE_5, PLOT_SOLID, '*', &all);
@@ -210,119 +219,128 @@ static bool draw_shell(const struct ui *ui, struct canvas *canvas,
         draw_curve(plot, over_role, PLOT_DASHED, 'o', &over);
     label_top(plot, role, &one, level ? level_print(level, label) : "all");
     if (has_over)
-        label_top(plot, over_role, &over, atom_overlay_name(ui, report, name));
+        label_top(plot, over_role, &over,
+                  screen_atom_overlay_name(session, own, report, name));
     return true;
 }
 
 /* Curves first, so that none runs over a label. */
-static void draw_shells(const struct ui *ui, const struct plot *plot,
+static void draw_shells(const struct session *session,
+                        const struct atom_state *own, const struct plot *plot,
                         const struct atom_report *report, struct samples *s)
 {
     char label[LEVEL_TEXT_MAX];
     int count = report->subshell_count;
     for (int i = count - 1; i >= 0; i--) {
         int l = report->subshells[i].l;
-        sample(ui, SLOT_CHOSEN, RUN_DENSITY, i, s);
-        draw_curve(plot, atom_role(l), (enum plot_pattern)(l % 3),
+        sample(session, own, SLOT_CHOSEN, RUN_DENSITY, i, s);
+        draw_curve(plot, screen_atom_role(l), (enum plot_pattern)(l % 3),
                    subshell_letter(l), s);
     }
-    sample(ui, SLOT_CHOSEN, RUN_DENSITY, -1, s);
+    sample(session, own, SLOT_CHOSEN, RUN_DENSITY, -1, s);
     draw_curve(plot, ROLE_CURVE_5, PLOT_SOLID, '*', s);
     for (int i = count - 1; i >= 0; i--) {
         const struct report_level *level = &report->subshells[i];
-        sample(ui, SLOT_CHOSEN, RUN_DENSITY, i, s);
-        label_top(plot, atom_role(level->l), s, level_print(level, label));
+        sample(session, own, SLOT_CHOSEN, RUN_DENSITY, i, s);
+        label_top(plot, screen_atom_role(level->l), s,
+                  level_print(level, label));
     }
 }
 
 /* Every subshell and all electrons as curves, the chosen subshell as an area
  * as well; on a square-root axis so that outer ones can be seen. */
-static bool draw_all(const struct ui *ui, struct canvas *canvas,
+static bool draw_all(const struct session *session,
+                     const struct atom_state *own, struct canvas *canvas,
                      struct area area, const struct atom_report *report,
                      struct plot *plot)
 {
     struct samples s;
     char x_title[TITLE_MAX];
     char y_title[TITLE_MAX];
-    int shell = atom_shell(ui, report);
-    struct plot_axis x = atom_axis(ui, report);
-    name_axis(ui, &x, x_title);
-    sample_radii(ui, &x, area.columns, &s);
-    sample(ui, SLOT_CHOSEN, RUN_DENSITY, -1, &s);
+    int shell = screen_atom_shell(own, report);
+    struct plot_axis x = screen_atom_axis(session, own, report);
+    name_axis(session, &x, x_title);
+    sample_radii(session, &x, area.columns, &s);
+    sample(session, own, SLOT_CHOSEN, RUN_DENSITY, -1, &s);
     snprintf(y_title, sizeof y_title, "D(r), e/%s; root axis",
-             ui_unit(ui, QUANTITY_RADIUS)->id);
+             session_unit(session, QUANTITY_RADIUS)->id);
     struct plot_axis y = {.title = y_title,
                           .scale = PLOT_SQRT,
                           .high = plot_round_up(HEADROOM * largest(&s))};
-    if (!plot_open(plot, canvas, area, style_of(ui), x, y))
+    if (!plot_open(plot, canvas, area, style_of(session), x, y))
         return false;
     if (shell >= 0) {
-        sample(ui, SLOT_CHOSEN, RUN_DENSITY, shell, &s);
-        plot_fill(plot, atom_role(report->subshells[shell].l), s.points,
+        sample(session, own, SLOT_CHOSEN, RUN_DENSITY, shell, &s);
+        plot_fill(plot, screen_atom_role(report->subshells[shell].l), s.points,
                   s.count);
     }
-    draw_shells(ui, plot, report, &s);
+    draw_shells(session, own, plot, report, &s);
     return true;
 }
 
 /* Electrons within r as an area, Z_eff(r) as a curve, on a square-root axis so
  * that the few charges outside can be seen. */
-static bool draw_charge(const struct ui *ui, struct canvas *canvas,
+static bool draw_charge(const struct session *session,
+                        const struct atom_state *own, struct canvas *canvas,
                         struct area area, const struct atom_report *report,
                         struct plot *plot)
 {
     struct samples s;
     char x_title[TITLE_MAX];
     char name[ATOM_LABEL_MAX];
-    struct plot_axis x = atom_axis(ui, report);
+    struct plot_axis x = screen_atom_axis(session, own, report);
     struct plot_axis y = {.title = "e within r (area), Z_eff(r); root axis",
                           .scale = PLOT_SQRT,
                           .high = report->species.z};
-    const struct atom_report *over = atom_solved(ui, SLOT_OVER);
+    const struct atom_report *over =
+        screen_atom_solved(session, own, SLOT_OVER);
     if (over && over->species.z > y.high)
         y.high = over->species.z;
-    name_axis(ui, &x, x_title);
-    if (!plot_open(plot, canvas, area, style_of(ui), x, y))
+    name_axis(session, &x, x_title);
+    if (!plot_open(plot, canvas, area, style_of(session), x, y))
         return false;
-    sample_radii(ui, &x, area.columns, &s);
-    sample(ui, SLOT_CHOSEN, RUN_ENCLOSED, -1, &s);
+    sample_radii(session, &x, area.columns, &s);
+    sample(session, own, SLOT_CHOSEN, RUN_ENCLOSED, -1, &s);
     plot_fill(plot, ROLE_CURVE_5, s.points, s.count);
     if (over) {
-        sample(ui, SLOT_OVER, RUN_ZEFF, -1, &s);
-        draw_curve(plot, atom_overlay_role(-1), PLOT_DASHED, 'o', &s);
-        plot_label(plot, atom_overlay_role(-1), s.points[s.count / 3].x,
+        sample(session, own, SLOT_OVER, RUN_ZEFF, -1, &s);
+        draw_curve(plot, screen_atom_overlay_role(-1), PLOT_DASHED, 'o', &s);
+        plot_label(plot, screen_atom_overlay_role(-1), s.points[s.count / 3].x,
                    s.points[s.count / 3].y,
-                   atom_overlay_name(ui, report, name));
+                   screen_atom_overlay_name(session, own, report, name));
     }
-    sample(ui, SLOT_CHOSEN, RUN_ZEFF, -1, &s);
+    sample(session, own, SLOT_CHOSEN, RUN_ZEFF, -1, &s);
     draw_curve(plot, ROLE_CURVE_1, PLOT_SOLID, '*', &s);
     plot_label(plot, ROLE_CURVE_1, s.points[s.count * 9 / 10].x,
                s.points[s.count * 9 / 10].y, "Z_eff(r)");
     return true;
 }
 
-void atom_draw_plots(struct ui *ui, struct canvas *canvas,
-                     const struct atom_layout *l,
-                     const struct atom_report *report)
+void screen_atom_plots_draw(const struct session *session,
+                            struct atom_state *own, struct canvas *canvas,
+                            const struct atom_layout *l,
+                            const struct atom_report *report)
 {
     struct plot plot;
-    enum atom_curves curves = ui->choice.atom.curves;
-    ui->atom->has_plot = false;
+    enum atom_curves curves = own->curves;
+    own->has_plot = false;
     if (l->charge.rows > 0 && curves != CURVES_CHARGE) {
-        if (draw_charge(ui, canvas, l->charge, report, &plot))
-            draw_cursor_line(ui, &plot, report);
+        if (draw_charge(session, own, canvas, l->charge, report, &plot))
+            draw_cursor_line(session, own, &plot, report);
     }
     struct area area = l->plot;
     if (curves == CURVES_CHARGE)
         area.rows += l->charge.rows;
-    ui->atom->has_plot =
-        curves == CURVES_SHELL ? draw_shell(ui, canvas, area, report, &plot)
-        : curves == CURVES_ALL ? draw_all(ui, canvas, area, report, &plot)
-                               : draw_charge(ui, canvas, area, report, &plot);
-    if (!ui->atom->has_plot)
+    own->has_plot =
+        curves == CURVES_SHELL
+            ? draw_shell(session, own, canvas, area, report, &plot)
+        : curves == CURVES_ALL
+            ? draw_all(session, own, canvas, area, report, &plot)
+            : draw_charge(session, own, canvas, area, report, &plot);
+    if (!own->has_plot)
         return;
-    draw_cursor_line(ui, &plot, report);
-    ui->atom->plot = plot;
+    draw_cursor_line(session, own, &plot, report);
+    own->plot = plot;
 }
 
 /* Columns of the numbers at the cursor, from the left of their area. */
@@ -353,8 +371,8 @@ struct cursor_line {
     double zeff;
 };
 
-static void draw_cursor_numbers(const struct ui *ui, struct canvas *canvas,
-                                struct area a, int row,
+static void draw_cursor_numbers(const struct session *session,
+                                struct canvas *canvas, struct area a, int row,
                                 const struct cursor_line *line)
 {
     char out[32];
@@ -362,7 +380,8 @@ static void draw_cursor_numbers(const struct ui *ui, struct canvas *canvas,
         return;
     canvas_text(canvas, a.row + row, a.column, LABEL_WIDTH - 1, line->role,
                 line->label);
-    snprintf(out, sizeof out, "%.4g", line->density / atom_length(ui));
+    snprintf(out, sizeof out, "%.4g",
+             line->density / screen_atom_length(session));
     draw_cursor_cell(canvas, a, row, 0, ROLE_TEXT, out);
     snprintf(out, sizeof out, "%.4f", line->within);
     if (line->has_within)
@@ -372,16 +391,16 @@ static void draw_cursor_numbers(const struct ui *ui, struct canvas *canvas,
         draw_cursor_cell(canvas, a, row, 2, ROLE_TEXT, out);
 }
 
-static void draw_cursor_heading(const struct ui *ui, struct canvas *canvas,
-                                struct area a, double r)
+static void draw_cursor_heading(const struct session *session,
+                                struct canvas *canvas, struct area a, double r)
 {
-    char out[UI_TEXT_MAX];
+    char out[SESSION_TEXT_MAX];
     char number[NUMBER_TEXT_MAX];
-    const struct unit *unit = ui_unit(ui, QUANTITY_RADIUS);
-    snprintf(
-        out, sizeof out, "%s %s",
-        number_print_places(r * atom_length(ui), unit->decimals + 1, number),
-        unit->id);
+    const struct unit *unit = session_unit(session, QUANTITY_RADIUS);
+    snprintf(out, sizeof out, "%s %s",
+             number_print_places(r * screen_atom_length(session),
+                                 unit->decimals + 1, number),
+             unit->id);
     canvas_text(canvas, a.row, a.column, LABEL_WIDTH, ROLE_TITLE, out);
     snprintf(out, sizeof out, "D, e/%s", unit->id);
     const char *const heads[] = {out, "within, e", "Z_eff(r)"};
@@ -389,10 +408,10 @@ static void draw_cursor_heading(const struct ui *ui, struct canvas *canvas,
         draw_cursor_cell(canvas, a, 0, i, ROLE_HEADING, heads[i]);
 }
 
-static struct cursor_line line_of(const struct ui *ui, int slot, int shell,
-                                  double r)
+static struct cursor_line line_of(const struct atom_state *own, int slot,
+                                  int shell, double r)
 {
-    const struct atom_run *run = ui->atom->slots[slot].run;
+    const struct atom_run *run = own->slots[slot].run;
     struct cursor_line line = {.has_within = true, .has_zeff = shell < 0};
     atom_run_curve(run, RUN_DENSITY, shell, 1, &r, &line.density);
     atom_run_curve(run, RUN_ENCLOSED, shell, 1, &r, &line.within);
@@ -401,18 +420,19 @@ static struct cursor_line line_of(const struct ui *ui, int slot, int shell,
 }
 
 /* Numbers of all electrons below each other, where the table is too broad. */
-static void draw_cursor_narrow(const struct ui *ui, struct canvas *canvas,
-                               struct area a, double r)
+static void draw_cursor_narrow(const struct session *session,
+                               const struct atom_state *own,
+                               struct canvas *canvas, struct area a, double r)
 {
     char out[NUMBER_TEXT_MAX];
-    const struct unit *unit = ui_unit(ui, QUANTITY_RADIUS);
-    const struct cursor_line line = line_of(ui, SLOT_CHOSEN, -1, r);
+    const struct unit *unit = session_unit(session, QUANTITY_RADIUS);
+    const struct cursor_line line = line_of(own, SLOT_CHOSEN, -1, r);
     const struct {
         const char *name, *unit;
         double value;
     } rows[] = {
-        {"r", "", r * atom_length(ui)},
-        {"D(r)", "e/", line.density / atom_length(ui)},
+        {"r", "", r * screen_atom_length(session)},
+        {"D(r)", "e/", line.density / screen_atom_length(session)},
         {"within", "e", line.within},
         {"Z_eff(r)", "e", line.zeff},
     };
@@ -428,45 +448,49 @@ static void draw_cursor_narrow(const struct ui *ui, struct canvas *canvas,
     }
 }
 
-void atom_draw_cursor(const struct ui *ui, struct canvas *canvas, struct area a,
-                      const struct atom_report *report)
+void screen_atom_cursor_draw(const struct session *session,
+                             const struct atom_state *own,
+                             struct canvas *canvas, struct area a,
+                             const struct atom_report *report)
 {
     char ion[ION_TEXT_MAX];
     char label[LEVEL_TEXT_MAX];
     char name[ATOM_LABEL_MAX];
-    int shell = atom_shell(ui, report);
-    double r = atom_radius(ui, report);
+    int shell = screen_atom_shell(own, report);
+    double r = screen_atom_radius(own, report);
     int row = 1;
     if (a.rows == 0)
         return;
     if (a.columns < CURSOR_COLUMNS) {
-        draw_cursor_narrow(ui, canvas, a, r);
+        draw_cursor_narrow(session, own, canvas, a, r);
         return;
     }
-    draw_cursor_heading(ui, canvas, a, r);
-    struct cursor_line line = line_of(ui, SLOT_CHOSEN, -1, r);
+    draw_cursor_heading(session, canvas, a, r);
+    struct cursor_line line = line_of(own, SLOT_CHOSEN, -1, r);
     line.label = ion_print(report->species.z, report->species.charge, ion);
     line.role = ROLE_CURVE_5;
-    draw_cursor_numbers(ui, canvas, a, row++, &line);
+    draw_cursor_numbers(session, canvas, a, row++, &line);
     if (shell >= 0) {
-        line = line_of(ui, SLOT_CHOSEN, shell, r);
+        line = line_of(own, SLOT_CHOSEN, shell, r);
         line.label = level_print(&report->subshells[shell], label);
-        line.role = atom_role(report->subshells[shell].l);
-        draw_cursor_numbers(ui, canvas, a, row++, &line);
+        line.role = screen_atom_role(report->subshells[shell].l);
+        draw_cursor_numbers(session, canvas, a, row++, &line);
     }
-    const struct atom_report *over = atom_solved(ui, SLOT_OVER);
-    const struct orbital_run *orbitals = atom_orbitals(ui);
+    const struct atom_report *over =
+        screen_atom_solved(session, own, SLOT_OVER);
+    const struct orbital_run *orbitals = screen_atom_orbitals(session, own);
     if (orbitals) {
         line = (struct cursor_line){0};
         orbital_run_density(orbitals, shell, 1, &r, &line.density);
     } else if (over) {
-        int other = atom_other_shell(report, shell, over);
-        line = line_of(ui, SLOT_OVER, other < 0 ? -1 : other, r);
+        int other = screen_atom_other_shell(report, shell, over);
+        line = line_of(own, SLOT_OVER, other < 0 ? -1 : other, r);
         line.has_zeff = true;
     } else {
         return;
     }
-    line.label = atom_overlay_name(ui, report, name);
-    line.role = atom_overlay_role(shell < 0 ? -1 : report->subshells[shell].l);
-    draw_cursor_numbers(ui, canvas, a, row, &line);
+    line.label = screen_atom_overlay_name(session, own, report, name);
+    line.role =
+        screen_atom_overlay_role(shell < 0 ? -1 : report->subshells[shell].l);
+    draw_cursor_numbers(session, canvas, a, row, &line);
 }

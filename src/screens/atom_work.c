@@ -2,30 +2,26 @@
 /* What the screen Atom solves: the chosen atom, then what is laid over it, one
  * self-consistency cycle at a time. */
 #include <stdio.h>
-#include <stdlib.h>
 #include <string.h>
 
 #include "base/text.h"
-#include "screens/atom.h"
+#include "screens/atom_internal.h"
 
-void atom_work_free(struct atom_work *work)
+void screen_atom_release(struct atom_state *own)
 {
-    if (!work)
-        return;
-    for (int s = 0; s < SLOT_COUNT; s++)
-        atom_run_free(work->slots[s].run);
-    orbital_run_free(work->orbitals);
-    free(work);
+    for (int i = 0; i < SLOT_COUNT; i++)
+        atom_run_free(own->slots[i].run);
+    orbital_run_free(own->orbitals);
 }
 
 /* With the electrons of the user's own where they are this species'. */
-static bool species_of(const struct ui *ui, int z, int charge,
+static bool species_of(const struct session *session, int z, int charge,
                        struct species *species)
 {
     struct ask ask;
     struct status st = status_ok();
-    return ui_ask(ui, z, charge, &ask) &&
-           study_species(ui->study, &ask, species, &st);
+    return session_ask(session, z, charge, &ask) &&
+           study_species(session->study, &ask, species, &st);
 }
 
 static bool same_species(const struct species *a, const struct species *b)
@@ -40,29 +36,29 @@ static bool same_method(struct atom_method a, struct atom_method b)
 }
 
 /* What a slot is to hold; false when nothing. */
-static bool wanted(const struct ui *ui, int slot, struct species *species,
+static bool wanted(const struct session *session, const struct atom_state *own,
+                   int slot, struct species *species,
                    struct atom_method *method)
 {
-    const struct choice *c = &ui->choice;
-    *method = c->atom.method;
+    const struct choice *c = &session->choice;
+    *method = own->method;
     if (slot == SLOT_CHOSEN)
-        return species_of(ui, c->z, c->charge, species);
-    if (c->atom.overlay == OVERLAY_RELATIVITY) {
+        return species_of(session, c->z, c->charge, species);
+    if (own->overlay == OVERLAY_RELATIVITY) {
         method->relativity = method->relativity == RELATIVITY_DIRAC
                                  ? RELATIVITY_NONE
                                  : RELATIVITY_DIRAC;
-        return species_of(ui, c->z, c->charge, species);
+        return species_of(session, c->z, c->charge, species);
     }
-    return c->atom.overlay == OVERLAY_SPECIES &&
-           species_of(ui, c->atom.over.z, c->atom.over.charge, species);
+    return own->overlay == OVERLAY_SPECIES &&
+           species_of(session, own->over.z, own->over.charge, species);
 }
 
-static bool wants_orbitals(const struct ui *ui, enum orbital_kind *kind)
+static bool wants_orbitals(const struct atom_state *own,
+                           enum orbital_kind *kind)
 {
-    *kind = ui->choice.atom.overlay == OVERLAY_SLATER ? ORBITAL_SLATER
-                                                      : ORBITAL_ZETA;
-    return ui->choice.atom.overlay == OVERLAY_SLATER ||
-           ui->choice.atom.overlay == OVERLAY_ZETA;
+    *kind = own->overlay == OVERLAY_SLATER ? ORBITAL_SLATER : ORBITAL_ZETA;
+    return own->overlay == OVERLAY_SLATER || own->overlay == OVERLAY_ZETA;
 }
 
 /* True when the slot holds what it should. */
@@ -73,50 +69,53 @@ static bool is_current(const struct atom_slot *slot,
            same_method(slot->method, method);
 }
 
-static bool slot_pending(const struct ui *ui, int s)
+static bool slot_pending(const struct session *session,
+                         const struct atom_state *own, int s)
 {
     struct species species;
     struct atom_method method;
-    if (!wanted(ui, s, &species, &method))
+    if (!wanted(session, own, s, &species, &method))
         return false;
-    if (!ui->atom)
-        return true;
-    const struct atom_slot *slot = &ui->atom->slots[s];
+    const struct atom_slot *slot = &own->slots[s];
     if (!is_current(slot, &species, method))
         return true;
     return !slot->stopped && slot->failure[0] == '\0' &&
            atom_run_report(slot->run)->state == REPORT_RUNNING;
 }
 
-static bool orbitals_current(const struct ui *ui, enum orbital_kind kind,
+static bool orbitals_current(const struct atom_state *own,
+                             enum orbital_kind kind,
                              const struct species *species)
 {
-    const struct atom_work *w = ui->atom;
-    return w && w->orbitals_begun && w->orbitals_kind == kind &&
-           same_species(&w->orbitals_species, species);
+    return own->orbitals_begun && own->orbitals_kind == kind &&
+           same_species(&own->orbitals_species, species);
 }
 
-static bool orbitals_pending(const struct ui *ui)
+static bool orbitals_pending(const struct session *session,
+                             const struct atom_state *own)
 {
     enum orbital_kind kind;
     struct species species;
-    if (!wants_orbitals(ui, &kind) ||
-        !species_of(ui, ui->choice.z, ui->choice.charge, &species))
+    if (!wants_orbitals(own, &kind) ||
+        !species_of(session, session->choice.z, session->choice.charge,
+                    &species))
         return false;
-    return !orbitals_current(ui, kind, &species) ||
-           orbital_run_state(ui->atom->orbitals) == ORBITAL_RUNNING;
+    return !orbitals_current(own, kind, &species) ||
+           orbital_run_state(own->orbitals) == ORBITAL_RUNNING;
 }
 
-bool atom_pending(const struct ui *ui)
+bool screen_atom_pending(const struct session *session,
+                         const struct atom_state *own)
 {
-    return ui->screen == SCREEN_ATOM &&
-           (slot_pending(ui, SLOT_CHOSEN) || slot_pending(ui, SLOT_OVER) ||
-            orbitals_pending(ui));
+    return slot_pending(session, own, SLOT_CHOSEN) ||
+           slot_pending(session, own, SLOT_OVER) ||
+           orbitals_pending(session, own);
 }
 
 /* Makes the slot hold what it should. */
-static void begin(struct ui *ui, struct atom_slot *slot,
-                  const struct species *species, struct atom_method method)
+static void begin(struct session *session, struct atom_state *own,
+                  struct atom_slot *slot, const struct species *species,
+                  struct atom_method method)
 {
     struct status st = status_ok();
     if (!slot->run)
@@ -131,23 +130,24 @@ static void begin(struct ui *ui, struct atom_slot *slot,
     snprintf(slot->failure, sizeof slot->failure, "%s", st.message);
     if (!slot->run) {
         slot->begun = false;
-        ui->choice.atom.overlay = OVERLAY_NONE;
-        ui_report(ui, true, "%s", st.message);
-        ui->screen = SCREEN_MAP;
+        own->overlay = OVERLAY_NONE;
+        session_report(session, true, "%s", st.message);
+        session_go(session, "");
     }
 }
 
-static bool step_slot(struct ui *ui, int s, bool *changed)
+static bool step_slot(struct session *session, struct atom_state *own, int s,
+                      bool *changed)
 {
     struct species species;
     struct atom_method method;
-    struct atom_slot *slot = &ui->atom->slots[s];
-    if (!slot_pending(ui, s))
+    struct atom_slot *slot = &own->slots[s];
+    if (!slot_pending(session, own, s))
         return false;
-    if (!wanted(ui, s, &species, &method))
+    if (!wanted(session, own, s, &species, &method))
         return false;
     if (!is_current(slot, &species, method)) {
-        begin(ui, slot, &species, method);
+        begin(session, own, slot, &species, method);
         *changed = slot->failure[0] != '\0';
         return true;
     }
@@ -155,56 +155,50 @@ static bool step_slot(struct ui *ui, int s, bool *changed)
     return true;
 }
 
-static void step_orbitals(struct ui *ui, bool *changed)
+static void step_orbitals(struct session *session, struct atom_state *own,
+                          bool *changed)
 {
     enum orbital_kind kind;
     struct species species;
-    struct atom_work *w = ui->atom;
     struct status st = status_ok();
-    if (!orbitals_pending(ui) || !wants_orbitals(ui, &kind) ||
-        !species_of(ui, ui->choice.z, ui->choice.charge, &species))
+    if (!orbitals_pending(session, own) || !wants_orbitals(own, &kind) ||
+        !species_of(session, session->choice.z, session->choice.charge,
+                    &species))
         return;
-    if (!w->orbitals)
-        w->orbitals = orbital_run_new(&st);
-    if (!w->orbitals) {
-        ui->choice.atom.overlay = OVERLAY_NONE;
-        ui_report(ui, true, "%s", st.message);
+    if (!own->orbitals)
+        own->orbitals = orbital_run_new(&st);
+    if (!own->orbitals) {
+        own->overlay = OVERLAY_NONE;
+        session_report(session, true, "%s", st.message);
         *changed = true;
         return;
     }
-    if (!orbitals_current(ui, kind, &species)) {
-        orbital_run_begin(w->orbitals, kind, &species);
-        w->orbitals_begun = true;
-        w->orbitals_kind = kind;
-        w->orbitals_species = species;
+    if (!orbitals_current(own, kind, &species)) {
+        orbital_run_begin(own->orbitals, kind, &species);
+        own->orbitals_begun = true;
+        own->orbitals_kind = kind;
+        own->orbitals_species = species;
     } else {
-        orbital_run_step(w->orbitals);
+        orbital_run_step(own->orbitals);
     }
-    *changed = orbital_run_state(w->orbitals) != ORBITAL_RUNNING;
+    *changed = orbital_run_state(own->orbitals) != ORBITAL_RUNNING;
 }
 
-void atom_step_work(struct ui *ui, bool *changed)
+void screen_atom_step(struct session *session, struct atom_state *own,
+                      bool *changed)
 {
     *changed = false;
-    if (!ui->atom)
-        ui->atom = calloc(1, sizeof *ui->atom);
-    if (!ui->atom) {
-        ui_report(ui, true, "out of memory");
-        ui->screen = SCREEN_MAP;
-        *changed = true;
-        return;
-    }
-    if (!step_slot(ui, SLOT_CHOSEN, changed) &&
-        !step_slot(ui, SLOT_OVER, changed))
-        step_orbitals(ui, changed);
+    if (!step_slot(session, own, SLOT_CHOSEN, changed) &&
+        !step_slot(session, own, SLOT_OVER, changed))
+        step_orbitals(session, own, changed);
 }
 
-bool atom_stop(struct ui *ui)
+bool screen_atom_stop(struct session *session, struct atom_state *own)
 {
     bool any = false;
-    for (int s = 0; ui->atom && s < SLOT_COUNT; s++) {
-        struct atom_slot *slot = &ui->atom->slots[s];
-        if (!slot_pending(ui, s) || !slot->begun)
+    for (int s = 0; s < SLOT_COUNT; s++) {
+        struct atom_slot *slot = &own->slots[s];
+        if (!slot_pending(session, own, s) || !slot->begun)
             continue;
         slot->stopped = true;
         any = true;
@@ -212,29 +206,32 @@ bool atom_stop(struct ui *ui)
     return any;
 }
 
-bool atom_resume(struct ui *ui)
+bool screen_atom_resume(struct atom_state *own)
 {
     bool any = false;
-    for (int s = 0; ui->atom && s < SLOT_COUNT; s++) {
-        any = any || ui->atom->slots[s].stopped;
-        ui->atom->slots[s].stopped = false;
+    for (int s = 0; s < SLOT_COUNT; s++) {
+        any = any || own->slots[s].stopped;
+        own->slots[s].stopped = false;
     }
     return any;
 }
 
-const struct atom_slot *atom_slot_now(const struct ui *ui, int s)
+const struct atom_slot *screen_atom_slot(const struct session *session,
+                                         const struct atom_state *own, int s)
 {
     struct species species;
     struct atom_method method;
-    if (!ui->atom || !wanted(ui, s, &species, &method) ||
-        !is_current(&ui->atom->slots[s], &species, method))
+    if (!wanted(session, own, s, &species, &method) ||
+        !is_current(&own->slots[s], &species, method))
         return NULL;
-    return &ui->atom->slots[s];
+    return &own->slots[s];
 }
 
-const struct atom_report *atom_solved(const struct ui *ui, int s)
+const struct atom_report *screen_atom_solved(const struct session *session,
+                                             const struct atom_state *own,
+                                             int s)
 {
-    const struct atom_slot *slot = atom_slot_now(ui, s);
+    const struct atom_slot *slot = screen_atom_slot(session, own, s);
     if (!slot)
         return NULL;
     const struct atom_report *r = atom_run_report(slot->run);
@@ -247,42 +244,45 @@ static const char *slot_failure(const struct atom_slot *slot)
                                     : atom_run_report(slot->run)->reason;
 }
 
-const char *atom_overlay_failure(const struct ui *ui)
+const char *screen_atom_overlay_failure(const struct session *session,
+                                        const struct atom_state *own)
 {
     enum orbital_kind kind;
     struct species species;
-    const struct atom_slot *slot = atom_slot_now(ui, SLOT_OVER);
+    const struct atom_slot *slot = screen_atom_slot(session, own, SLOT_OVER);
     if (slot)
         return slot_failure(slot);
-    if (wants_orbitals(ui, &kind) &&
-        species_of(ui, ui->choice.z, ui->choice.charge, &species) &&
-        orbitals_current(ui, kind, &species))
-        return orbital_run_reason(ui->atom->orbitals);
+    if (wants_orbitals(own, &kind) &&
+        species_of(session, session->choice.z, session->choice.charge,
+                   &species) &&
+        orbitals_current(own, kind, &species))
+        return orbital_run_reason(own->orbitals);
     return "";
 }
 
-const struct orbital_run *atom_orbitals(const struct ui *ui)
+const struct orbital_run *screen_atom_orbitals(const struct session *session,
+                                               const struct atom_state *own)
 {
     enum orbital_kind kind;
     struct species species;
-    if (!wants_orbitals(ui, &kind) ||
-        !species_of(ui, ui->choice.z, ui->choice.charge, &species) ||
-        !orbitals_current(ui, kind, &species) ||
-        orbital_run_state(ui->atom->orbitals) != ORBITAL_SOLVED)
+    if (!wants_orbitals(own, &kind) ||
+        !species_of(session, session->choice.z, session->choice.charge,
+                    &species) ||
+        !orbitals_current(own, kind, &species) ||
+        orbital_run_state(own->orbitals) != ORBITAL_SOLVED)
         return NULL;
-    return ui->atom->orbitals;
+    return own->orbitals;
 }
 
-int atom_shell(const struct ui *ui, const struct atom_report *r)
+int screen_atom_shell(const struct atom_state *own, const struct atom_report *r)
 {
-    const struct atom_choice *a = &ui->choice.atom;
     const struct configuration *c = &r->species.configuration;
-    if (a->n < 0)
+    if (own->n < 0)
         return -1;
     const struct subshell *outer = configuration_outermost(c);
     int last = outer ? (int)(outer - c->shells) : -1;
-    for (int i = 0; i < c->count && a->n > 0; i++)
-        if (c->shells[i].n == a->n && c->shells[i].l == a->l)
+    for (int i = 0; i < c->count && own->n > 0; i++)
+        if (c->shells[i].n == own->n && c->shells[i].l == own->l)
             return i;
     return last;
 }
@@ -296,8 +296,8 @@ static int find_shell(const struct atom_report *report, int n, int l)
     return -2;
 }
 
-int atom_other_shell(const struct atom_report *report, int shell,
-                     const struct atom_report *over)
+int screen_atom_other_shell(const struct atom_report *report, int shell,
+                            const struct atom_report *over)
 {
     if (shell < 0)
         return -1;
@@ -313,33 +313,36 @@ int atom_other_shell(const struct atom_report *report, int shell,
 }
 
 /* "Ru 5s" */
-static void species_name(const struct ui *ui, const struct atom_report *report,
-                         struct text *t)
+static void species_name(const struct session *session,
+                         const struct atom_state *own,
+                         const struct atom_report *report, struct text *t)
 {
-    const struct pin *over = &ui->choice.atom.over;
-    const struct atom_report *r = atom_solved(ui, SLOT_OVER);
+    const struct pin *over = &own->over;
+    const struct atom_report *r = screen_atom_solved(session, own, SLOT_OVER);
     char ion[ION_TEXT_MAX];
     char label[LEVEL_TEXT_MAX];
     text_add(t, ion_print(over->z, over->charge, ion));
     int shell =
-        r && report ? atom_other_shell(report, atom_shell(ui, report), r) : -1;
+        r && report
+            ? screen_atom_other_shell(report, screen_atom_shell(own, report), r)
+            : -1;
     if (shell >= 0)
         text_addf(t, " %s", level_print(&r->subshells[shell], label));
 }
 
-const char *atom_overlay_name(const struct ui *ui,
-                              const struct atom_report *report,
-                              char out[ATOM_LABEL_MAX])
+const char *screen_atom_overlay_name(const struct session *session,
+                                     const struct atom_state *own,
+                                     const struct atom_report *report,
+                                     char out[ATOM_LABEL_MAX])
 {
-    const struct atom_choice *a = &ui->choice.atom;
     struct text t = text_over(out, ATOM_LABEL_MAX);
-    switch (a->overlay) {
+    switch (own->overlay) {
     case OVERLAY_SPECIES:
-        species_name(ui, report, &t);
+        species_name(session, own, report, &t);
         break;
     case OVERLAY_RELATIVITY:
-        text_add(&t, a->method.relativity == RELATIVITY_DIRAC ? "Schrödinger"
-                                                              : "Dirac");
+        text_add(&t, own->method.relativity == RELATIVITY_DIRAC ? "Schrödinger"
+                                                                : "Dirac");
         break;
     case OVERLAY_SLATER:
         text_add(&t, "slater");

@@ -1,18 +1,45 @@
 /* SPDX-License-Identifier: MIT */
 /* Model against reference, one mark per species, and the species themselves.
  */
+#include "screens/audit_internal.h"
+
 #include <math.h>
-#include <stdio.h>
 #include <string.h>
 
-#include "element/selection.h"
-#include "screens/audit.h"
 #include "canvas/plot.h"
-#include "screens/trend.h"
+#include "screens/trend_marks.h"
 
 #define LOG_FROM 20.0
 #define DIAGONAL_POINTS 48
 #define MARK_CURSOR 0x25CE
+
+const struct audit_series *screen_audit_chosen(const struct session *session,
+                                               const struct audit_state *own)
+{
+    for (int i = 0; i < own->audit.count; i++)
+        if (session->choice.model && strcmp(own->audit.series[i].value->id,
+                                            session->choice.model->id) == 0)
+            return &own->audit.series[i];
+    return NULL;
+}
+
+int screen_audit_outliers(const struct audit_state *own,
+                          const struct audit_series *series,
+                          const struct audit_point *points[Z_MAX])
+{
+    int count = 0;
+    for (int i = 0; series && i < series->count && count < Z_MAX; i++) {
+        const struct audit_point *p = &series->points[i];
+        if (p->state != ROW_OK || !audit_holds(own->part, p))
+            continue;
+        int at = count++;
+        for (; at > 0 && fabs(points[at - 1]->residual) < fabs(p->residual);
+             at--)
+            points[at] = points[at - 1];
+        points[at] = p;
+    }
+    return count;
+}
 
 /* One scale for both axes, so that equal values lie on the diagonal. */
 static struct plot_axis common_axis(const struct audit_point *const *points,
@@ -51,14 +78,16 @@ static void draw_diagonal(const struct plot *plot)
     plot_curve(plot, line, points, DIAGONAL_POINTS);
 }
 
-void draw_scatter(const struct ui *ui, struct canvas *canvas, struct area area)
+void screen_audit_scatter_draw(const struct session *session,
+                               const struct audit_state *own,
+                               struct canvas *canvas, struct area area)
 {
     const struct audit_point *points[Z_MAX];
-    const struct audit_series *s = audit_chosen(ui);
-    char title[UI_TEXT_MAX];
+    const struct audit_series *s = screen_audit_chosen(session, own);
+    char title[SESSION_TEXT_MAX];
     char ion[ION_TEXT_MAX];
     struct plot plot;
-    int count = audit_outliers(ui, s, points);
+    int count = screen_audit_outliers(own, s, points);
     if (count == 0) {
         canvas_text(canvas, area.row, area.column, area.columns, ROLE_GAP,
                     "no residual here");
@@ -68,16 +97,17 @@ void draw_scatter(const struct ui *ui, struct canvas *canvas, struct area area)
     struct plot_axis up = axis;
     snprintf(title, sizeof title, "%s, %s", s->value->id, s->unit->id);
     up.title = title;
-    enum plot_style style = ui->choice.atom.braille ? PLOT_BRAILLE : PLOT_BLOCK;
+    enum plot_style style = session->choice.braille ? PLOT_BRAILLE : PLOT_BLOCK;
     if (!plot_open(&plot, canvas, area, style, axis, up))
         return;
     draw_diagonal(&plot);
     const struct model *model = model_find(s->value->id);
     for (int i = count - 1; i >= 0; i--) {
         struct plot_point at = {points[i]->reference, points[i]->value, true};
-        plot_marks(&plot, trend_role(model), trend_mark(model), &at, 1);
+        plot_marks(&plot, screen_trend_role(model), screen_trend_mark(model),
+                   &at, 1);
     }
-    int chosen = ui->audit_point < count ? ui->audit_point : count - 1;
+    int chosen = own->point < count ? own->point : count - 1;
     const struct audit_point *p = points[chosen];
     struct plot_point at = {p->reference, p->value, true};
     plot_marks(&plot, ROLE_CHOSEN, MARK_CURSOR, &at, 1);
@@ -112,21 +142,23 @@ static void draw_outlier(struct canvas *canvas, struct area a, int row,
                      number_fit(p->reference, places, 9, reference));
 }
 
-void draw_outliers(const struct ui *ui, struct canvas *canvas, struct area area)
+void screen_audit_outliers_draw(const struct session *session,
+                                const struct audit_state *own,
+                                struct canvas *canvas, struct area area)
 {
     const struct audit_point *points[Z_MAX];
-    const struct audit_series *s = audit_chosen(ui);
-    int count = audit_outliers(ui, s, points);
+    const struct audit_series *s = screen_audit_chosen(session, own);
+    int count = screen_audit_outliers(own, s, points);
     int room = area.rows - 1;
     if (count == 0 || room < 1)
         return;
-    int at = ui->audit_point < count ? ui->audit_point : count - 1;
+    int at = own->point < count ? own->point : count - 1;
     int first = at >= room ? at - room + 1 : 0;
     canvas_textf(canvas, area.row, area.column, area.columns, ROLE_HEADING,
                  "worst, %s: %s", s->unit->id,
-                 ui->audit_points ? "Enter opens" : "Enter");
+                 own->points ? "Enter opens" : "Enter");
     for (int i = 0; i < room && first + i < count; i++) {
-        bool chosen = ui->audit_points && first + i == at;
+        bool chosen = own->points && first + i == at;
         int row = area.row + 1 + i;
         draw_outlier(canvas, area, row, s, points[first + i], chosen);
         if (chosen) {

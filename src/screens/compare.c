@@ -1,20 +1,38 @@
 /* SPDX-License-Identifier: MIT */
-/* Pinned species as columns, everything known as rows, differences against
- * the first. */
+/* The screen Compare: pinned species as columns, everything known as rows,
+ * differences against the first. */
 #include <stdio.h>
 #include <string.h>
 
 #include "base/text.h"
-#include "screens/parts.h"
+#include "report/comparison.h"
+#include "screens/list.h"
+#include "session/command.h"
+#include "session/common.h"
+#include "session/site.h"
 #include "study/facts.h"
 
 #define ATOM_COLUMNS 24
 #define VALUE_COLUMNS 15
 
-/* The pins, or the selection alone. */
-static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
+struct compare_state {
+    struct comparison comparison; /* of the pins, or of the selection */
+    unsigned choice_version, selection_version, solved_version;
+    int scroll;
+    int column_scroll; /* first pinned column shown */
+};
+
+static void clear(void *state)
 {
-    const struct choice *c = &ui->choice;
+    struct compare_state *own = state;
+    comparison_clear(&own->comparison);
+}
+
+/* The pins, or the selection alone. */
+static int compared(const struct session *session,
+                    struct ask asks[COMPARISON_MAX])
+{
+    const struct choice *c = &session->choice;
     int count = 0;
     for (int i = 0; i < c->pin_count; i++)
         asks[count++] =
@@ -22,9 +40,9 @@ static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
     if (count == 0)
         asks[count++] = (struct ask){.z = c->z, .charge = c->charge};
     for (int i = 0; i < count; i++) {
-        struct ask own;
-        if (ui_ask(ui, asks[i].z, asks[i].charge, &own))
-            asks[i].configuration = own.configuration;
+        struct ask ask;
+        if (session_ask(session, asks[i].z, asks[i].charge, &ask))
+            asks[i].configuration = ask.configuration;
         asks[i].n = c->n;
         asks[i].l = c->l;
         asks[i].site = c->site;
@@ -34,10 +52,10 @@ static int compared(const struct ui *ui, struct ask asks[COMPARISON_MAX])
 
 /* The second reference less the first set shown, as `compare --against` prints
  * it. */
-static bool add_second(struct ui *ui)
+static bool add_second(struct session *session, struct compare_state *own)
 {
-    const struct reference *against = ui->choice.against;
-    struct comparison *c = &ui->comparison;
+    const struct reference *against = session->choice.against;
+    struct comparison *c = &own->comparison;
     struct status st = status_ok();
     for (int i = 0; against && i < c->line_count; i++) {
         const struct provenance *first = c->lines[i].provenance;
@@ -46,66 +64,79 @@ static bool add_second(struct ui *ui)
         if (first == against->provenance ||
             comparison_add_pair(c, first, against->provenance, &st))
             return true;
-        ui_report(ui, true, "%s", st.message);
+        session_report(session, true, "%s", st.message);
         return false;
     }
     return true;
 }
 
-bool compare_refresh(struct ui *ui)
+static bool is_fresh(const struct session *session,
+                     const struct compare_state *own)
+{
+    return own->choice_version == session->choice_version &&
+           own->selection_version == session->selection_version &&
+           own->solved_version == session->solved_version;
+}
+
+/* Brings the comparison up to date; false when there is nothing to show. */
+static bool refresh(struct session *session, struct compare_state *own)
 {
     struct ask asks[COMPARISON_MAX];
     struct status st = status_ok();
-    if (!ui->comparison_stale)
-        return ui->comparison.count > 0;
-    comparison_clear(&ui->comparison);
-    int count = compared(ui, asks);
-    if (!study_compare(ui->study, asks, count, false, ui->choice.units,
-                       &ui->comparison, &st)) {
-        ui_report(ui, true, "%s", st.message);
+    if (is_fresh(session, own))
+        return own->comparison.count > 0;
+    comparison_clear(&own->comparison);
+    int count = compared(session, asks);
+    if (!study_compare(session->study, asks, count, false,
+                       session->choice.units, &own->comparison, &st)) {
+        session_report(session, true, "%s", st.message);
         return false;
     }
-    ui->comparison_stale = false;
-    return add_second(ui);
+    own->choice_version = session->choice_version;
+    own->selection_version = session->selection_version;
+    own->solved_version = session->solved_version;
+    return add_second(session, own);
 }
 
 /* Columns of the labels: enough for the longest id where there is room. */
-static int label_columns(const struct ui *ui)
+static int label_columns(const struct session *session)
 {
-    return ui->columns >= 130 ? 48 : 30;
+    return session->columns >= 130 ? 48 : 30;
 }
 
-static int atoms_in(const struct ui *ui)
+static int atoms_in(const struct session *session)
 {
-    int n = (ui->columns - label_columns(ui)) / ATOM_COLUMNS;
+    int n = (session->columns - label_columns(session)) / ATOM_COLUMNS;
     return n > 0 ? n : 1;
 }
 
 /* Column of the i-th shown atom; the first atom always is the first column.
  */
-static int atom_at(const struct ui *ui, int i)
+static int atom_at(const struct compare_state *own, int i)
 {
-    return i == 0 ? 0 : i + ui->column_scroll;
+    return i == 0 ? 0 : i + own->column_scroll;
 }
 
 /* The spin that a stored radius stands for; its coordination is in the label
  * of the line. */
-static void add_spin(const struct ui *ui, const struct species *species,
+static void add_spin(const struct session *session,
+                     const struct species *species,
                      const struct reading *stored, struct text *t)
 {
-    char site[UI_TEXT_MAX];
+    char site[SESSION_TEXT_MAX];
     struct text s = text_over(site, sizeof site);
-    stored_site_text(ui, species, stored, &s);
+    session_stored_site(session, species, stored, &s);
     for (int spin = SPIN_NONE + 1; spin < SPIN_COUNT; spin++)
         if (strstr(site, spin_word((enum spin_state)spin)))
             text_addf(t, " %s", spin_id((enum spin_state)spin));
 }
 
-static void draw_value(const struct ui *ui, struct canvas *canvas, int row,
-                       int column, const struct comparison_line *line,
+static void draw_value(const struct session *session,
+                       const struct compare_state *own, struct canvas *canvas,
+                       int row, int column, const struct comparison_line *line,
                        int which)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     char out[NUMBER_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     const struct reading *r = &line->readings[which];
@@ -114,10 +145,10 @@ static void draw_value(const struct ui *ui, struct canvas *canvas, int row,
         canvas_right(canvas, row, column, VALUE_COLUMNS, ROLE_GAP, "-");
         return;
     }
-    if (!line->provenance->computed)
+    if (!line->provenance->computed) {
         reading_text(&t, r);
-    if (!line->provenance->computed)
-        add_spin(ui, &ui->comparison.species[which], r, &t);
+        add_spin(session, &own->comparison.species[which], r, &t);
+    }
     if (t.length == 0 || t.length > VALUE_COLUMNS)
         snprintf(buffer, sizeof buffer, "%s",
                  number_fit(r->value.value, line->unit->decimals, VALUE_COLUMNS,
@@ -136,58 +167,66 @@ static void draw_value(const struct ui *ui, struct canvas *canvas, int row,
 }
 
 /* The label of a line, without the quantity that heads its group. */
-static const char *short_label(const struct ui *ui, int line,
-                               char out[UI_TEXT_MAX])
+static const char *short_label(const struct session *session,
+                               const struct compare_state *own, int line,
+                               char out[SESSION_TEXT_MAX])
 {
-    struct text t = text_over(out, UI_TEXT_MAX);
-    const char *quantity = quantity_at(ui->comparison.lines[line].quantity)->id;
+    struct text t = text_over(out, SESSION_TEXT_MAX);
+    const char *quantity =
+        quantity_at(own->comparison.lines[line].quantity)->id;
     size_t n = strlen(quantity);
-    comparison_label(&ui->comparison, line, &t);
-    add_asked_site(ui, ui->comparison.lines[line].provenance, &t);
+    comparison_label(&own->comparison, line, &t);
+    session_asked_site(session, own->comparison.lines[line].provenance, &t);
     return strncmp(out, quantity, n) == 0 && out[n] == '_' ? out + n + 1 : out;
 }
 
-static void draw_line(const struct ui *ui, struct canvas *canvas, int row,
-                      int item, bool first, int atoms)
+static void draw_line(const struct session *session,
+                      const struct compare_state *own, struct canvas *canvas,
+                      int row, int item, bool first, int atoms)
 {
-    char label[UI_TEXT_MAX];
-    const struct comparison_line *line = &ui->comparison.lines[item];
+    char label[SESSION_TEXT_MAX];
+    const struct comparison_line *line = &own->comparison.lines[item];
     if (first)
         canvas_textf(canvas, row, 0, 9, ROLE_HEADING, "%s %s",
                      quantity_at(line->quantity)->symbol, line->unit->id);
-    canvas_text(canvas, row, 10, label_columns(ui) - 11, ROLE_TEXT,
-                short_label(ui, item, label));
+    canvas_text(canvas, row, 10, label_columns(session) - 11, ROLE_TEXT,
+                short_label(session, own, item, label));
     for (int i = 0; i < atoms; i++) {
-        int which = atom_at(ui, i);
-        if (which < ui->comparison.count)
-            draw_value(ui, canvas, row, label_columns(ui) + i * ATOM_COLUMNS,
-                       line, which);
+        int which = atom_at(own, i);
+        if (which < own->comparison.count)
+            draw_value(session, own, canvas, row,
+                       label_columns(session) + i * ATOM_COLUMNS, line, which);
     }
 }
 
 /* Facts, one row each per atom column, cut to the column. */
-static void draw_fact_row(const struct ui *ui, struct canvas *canvas, int row,
+static void draw_fact_row(const struct session *session,
+                          const struct compare_state *own,
+                          struct canvas *canvas, int row,
                           const struct comparison_fact *fact, int atoms)
 {
-    canvas_text(canvas, row, 0, label_columns(ui) - 1, ROLE_HEADING,
+    canvas_text(canvas, row, 0, label_columns(session) - 1, ROLE_HEADING,
                 fact->label);
     bool caution = strcmp(fact->label, fact_label(FACT_CAUTION)) == 0;
     for (int i = 0; i < atoms; i++) {
-        int which = atom_at(ui, i);
-        if (which < ui->comparison.count)
-            canvas_text(canvas, row, label_columns(ui) + i * ATOM_COLUMNS + 1,
+        int which = atom_at(own, i);
+        if (which < own->comparison.count)
+            canvas_text(canvas, row,
+                        label_columns(session) + i * ATOM_COLUMNS + 1,
                         ATOM_COLUMNS - 2, caution ? ROLE_CAUTION : ROLE_TEXT,
                         fact->text[which]);
     }
 }
 
-static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
+static void draw_atoms(const struct session *session,
+                       const struct compare_state *own, struct canvas *canvas,
+                       int atoms)
 {
     char ion[ION_TEXT_MAX];
-    const struct comparison *c = &ui->comparison;
+    const struct comparison *c = &own->comparison;
     for (int i = 0; i < atoms; i++) {
-        int which = atom_at(ui, i);
-        int column = label_columns(ui) + i * ATOM_COLUMNS;
+        int which = atom_at(own, i);
+        int column = label_columns(session) + i * ATOM_COLUMNS;
         if (which >= c->count)
             continue;
         ion_print(c->species[which].z, c->species[which].charge, ion);
@@ -198,51 +237,187 @@ static void draw_atoms(const struct ui *ui, struct canvas *canvas, int atoms)
                          "to first");
     }
     if (c->count > atoms)
-        canvas_textf(canvas, 1, 0, label_columns(ui), ROLE_LABEL,
+        canvas_textf(canvas, 1, 0, label_columns(session), ROLE_LABEL,
                      "%d of %d; arrows show others", atoms, c->count);
-    else if (ui->choice.pin_count == 0)
-        canvas_text(canvas, 1, 0, label_columns(ui), ROLE_LABEL,
+    else if (session->choice.pin_count == 0)
+        canvas_text(canvas, 1, 0, label_columns(session), ROLE_LABEL,
                     "pin species on the map with p");
 }
 
-static void draw(struct ui *ui, struct canvas *canvas)
+static void draw(struct session *session, void *state, struct canvas *canvas)
 {
-    if (!compare_refresh(ui))
+    struct compare_state *own = state;
+    if (!refresh(session, own))
         return;
-    const struct comparison *c = &ui->comparison;
+    const struct comparison *c = &own->comparison;
     int room = canvas->rows - 4;
     int total = c->fact_count + c->line_count;
-    int atoms = atoms_in(ui);
-    int *skip = &ui->scroll[SCREEN_COMPARE];
+    int atoms = atoms_in(session);
+    int *skip = &own->scroll;
     if (*skip > total - room)
         *skip = total > room ? total - room : 0;
-    if (ui->column_scroll > c->count - atoms)
-        ui->column_scroll = c->count > atoms ? c->count - atoms : 0;
-    draw_atoms(ui, canvas, atoms);
+    if (own->column_scroll > c->count - atoms)
+        own->column_scroll = c->count > atoms ? c->count - atoms : 0;
+    draw_atoms(session, own, canvas, atoms);
     for (int i = 0; i < room && *skip + i < total; i++) {
         int item = *skip + i - c->fact_count;
         if (item < 0) {
-            draw_fact_row(ui, canvas, 2 + i, &c->facts[*skip + i], atoms);
+            draw_fact_row(session, own, canvas, 2 + i, &c->facts[*skip + i],
+                          atoms);
             continue;
         }
         bool first = i == 0 || item == 0 ||
                      c->lines[item].quantity != c->lines[item - 1].quantity ||
                      c->lines[item].unit != c->lines[item - 1].unit;
-        draw_line(ui, canvas, 2 + i, item, first, atoms);
+        draw_line(session, own, canvas, 2 + i, item, first, atoms);
     }
     canvas->cursor_row = 2;
     canvas->cursor_column = 0;
 }
 
-static enum effect update(struct ui *ui, enum action action)
+static enum effect move(struct session *session, void *state, enum move move)
 {
-    if (action == ACTION_LEFT && ui->column_scroll > 0)
-        ui->column_scroll--;
-    else if (action == ACTION_RIGHT)
-        ui->column_scroll++;
-    else
-        return EFFECT_NONE;
+    struct compare_state *own = state;
+    if (move == MOVE_RIGHT)
+        own->column_scroll++;
+    else if (move != MOVE_LEFT)
+        own->scroll = scroll_move(own->scroll, move, session->rows);
+    else if (own->column_scroll > 0)
+        own->column_scroll--;
     return EFFECT_REDRAW;
 }
 
-const struct screen_ops screen_compare = {"Compare", update, draw};
+static enum effect mouse(struct session *session, void *state,
+                         const struct event *event)
+{
+    struct compare_state *own = state;
+    (void)session;
+    if (event->button == MOUSE_LEFT)
+        return EFFECT_NONE;
+    own->scroll = scroll_wheel(own->scroll, event->button == MOUSE_WHEEL_UP);
+    return EFFECT_REDRAW;
+}
+
+static void wants(struct session *session, void *state)
+{
+    (void)state;
+    const struct choice *c = &session->choice;
+    for (int p = 0; p < c->pin_count; p++)
+        for (int m = 0; m < model_count(); m++)
+            session_want(session, c->pins[p].z, c->pins[p].charge, model_at(m),
+                         true);
+    session_want_selected(session);
+}
+
+/* The site alone: what is compared is shown against every set. */
+static const struct key_row keys[] = {
+    {290, '@', 0, "@", "site", SESSION_SITE_HELP, false, 0, 0,
+     &session_choose_compared_site, 0, 0},
+};
+
+static void export_file(const struct session *session, const void *state,
+                        struct text *t)
+{
+    (void)session;
+    (void)state;
+    text_add(t, "compare.csv");
+}
+
+/* A comparison holds all quantities, whichever is chosen. */
+static int lacks(struct session *session, int z, int charge)
+{
+    int count = 0;
+    for (int m = 0; m < model_count(); m++) {
+        const struct model *model = model_at(m);
+        struct ask ask;
+        struct status st = status_ok();
+        if (model->closed || !session_ask(session, z, charge, &ask))
+            continue;
+        ask.model = model;
+        ask.quantity = model->offers[0].quantity;
+        ask.reference = ask.against = NULL;
+        if (study_row(session->study, &ask).state != ROW_NOT_SOLVED)
+            continue;
+        if (study_want(session->study, &ask, true, &st))
+            count++;
+        else
+            session_report(session, true, "%s", st.message);
+    }
+    return count;
+}
+
+static int export_lacks(struct session *session, void *state)
+{
+    (void)state;
+    const struct choice *c = &session->choice;
+    int count = 0;
+    if (c->pin_count == 0)
+        return lacks(session, c->z, c->charge);
+    for (int i = 0; i < c->pin_count; i++)
+        count += lacks(session, c->pins[i].z, c->pins[i].charge);
+    return count;
+}
+
+static bool export_report(struct session *session, void *state, unsigned parts,
+                          struct report *report, struct status *st)
+{
+    struct compare_state *own = state;
+    if (!refresh(session, own))
+        return status_fail(st, STATUS_MEMORY, "out of memory");
+    comparison_report(report, parts, &own->comparison);
+    return true;
+}
+
+static void export_command(struct session *session, void *state, struct text *t)
+{
+    (void)state;
+    const struct choice *c = &session->choice;
+    char label[SUBSHELL_TEXT_MAX];
+    bool given = c->pin_count == 0 && session_is_own(session, c->z, c->charge);
+    for (int i = 0; i < c->pin_count; i++)
+        given =
+            given || session_is_own(session, c->pins[i].z, c->pins[i].charge);
+    if (given && c->pin_count > 1)
+        return;
+    text_add(t, "outershell compare");
+    if (c->pin_count == 0)
+        session_command_species(t, c->z, c->charge);
+    for (int i = 0; i < c->pin_count; i++)
+        session_command_species(t, c->pins[i].z, c->pins[i].charge);
+    if (c->n)
+        text_addf(t, " --subshell %s", subshell_print(c->n, c->l, label));
+    if (c->against)
+        text_addf(t, " --against %s", c->against->provenance->id);
+    session_command_site(session, t);
+    if (given)
+        session_command_own(session, t);
+    session_command_units(session, t);
+    session_command_data(session, t);
+}
+
+static const struct export_ops exports[] = {{
+    .label = "the comparison",
+    .file = export_file,
+    .lacks = export_lacks,
+    .report = export_report,
+    .command = export_command,
+}};
+
+const struct screen_ops screen_compare = {
+    .id = "compare",
+    .title = "Compare",
+    .state_size = sizeof(struct compare_state),
+    .key = {210, 'c', 0, "c", "compare", "the pinned species side by side",
+            true, 0, 0, 0, 0, 0},
+    .groups = KEYS_SPECIES | KEYS_CHARGE | KEYS_UNIT | KEYS_SECOND |
+              KEYS_CONFIGURATION | KEYS_SIDEWAYS,
+    .keys = keys,
+    .key_count = sizeof keys / sizeof keys[0],
+    .exports = exports,
+    .export_count = 1,
+    .clear = clear,
+    .draw = draw,
+    .move = move,
+    .mouse = mouse,
+    .wants = wants,
+};

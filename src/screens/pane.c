@@ -1,13 +1,14 @@
 /* SPDX-License-Identifier: MIT */
 /* The pane of the selected element: each model's value, the reference, the
- * residual, and how large residuals usually are there; and its facts. */
+ * residual, and how large residuals usually are there. */
+#include "screens/pane.h"
+
 #include <math.h>
 #include <stdio.h>
 #include <string.h>
 
 #include "base/text.h"
-#include "screens/parts.h"
-#include "study/facts.h"
+#include "session/site.h"
 
 #define BAR_FULL 0x2588
 #define BAR_LEFT_HALF 0x258C
@@ -81,7 +82,7 @@ static void draw_signed(struct canvas *canvas, int row, int column, int width,
 static void draw_reading(struct canvas *canvas, int row, int column, int width,
                          const struct reading *reading)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     char out[NUMBER_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     if (reading->state != READING_OK) {
@@ -95,14 +96,13 @@ static void draw_reading(struct canvas *canvas, int row, int column, int width,
                  (int)t.length > width ? out : buffer);
 }
 
-static void draw_heading(const struct ui *ui, struct canvas *canvas,
-                         struct area a, const struct row *row)
+static void draw_heading(struct canvas *canvas, struct area a,
+                         const struct row *row)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     const struct columns *c = columns_for(a);
-    (void)ui;
     text_add(&t, quantity_at(row->quantity)->symbol);
     if (row->n)
         text_addf(&t, " %s", subshell_print(row->n, row->l, label));
@@ -181,37 +181,15 @@ static void draw_set(struct canvas *canvas, struct area a, int row,
         canvas_text(canvas, row, column, a.columns - column, ROLE_QUIET, p->id);
 }
 
-void add_asked_site(const struct ui *ui, const struct provenance *set,
-                    struct text *t)
-{
-    const struct reference *reference =
-        reference_find(study_references(ui->study), set->id);
-    if (!reference || !reference_has_sites(reference))
-        return;
-    text_add(t, " at ");
-    reference_asked_site(reference, ui->choice.site, t);
-}
-
-void stored_site_text(const struct ui *ui, const struct species *species,
-                      const struct reading *stored, struct text *t)
-{
-    if (stored->state != READING_OK || !stored->provenance)
-        return;
-    const struct reference *reference =
-        reference_find(study_references(ui->study), stored->provenance->id);
-    if (reference)
-        reference_site_text(reference, species, ui->choice.site, t);
-}
-
 /* The site that a stored radius stands for, in a line of its own below the
  * rows; gives the rows used. */
-static int draw_site(const struct ui *ui, struct canvas *canvas, struct area a,
-                     const struct row *rows, int count)
+static int draw_site(const struct session *session, struct canvas *canvas,
+                     struct area a, const struct row *rows, int count)
 {
-    char site[UI_TEXT_MAX];
+    char site[SESSION_TEXT_MAX];
     for (int i = 0; i < count && a.rows > 0; i++) {
         struct text t = text_over(site, sizeof site);
-        stored_site_text(ui, &rows[i].species, &rows[i].reference, &t);
+        session_stored_site(session, &rows[i].species, &rows[i].reference, &t);
         if (t.length == 0)
             continue;
         canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
@@ -259,27 +237,27 @@ static void draw_row(struct canvas *canvas, struct area a, int row,
 }
 
 /* Rows of all models that offer a quantity (or the reference alone). */
-static int pane_rows(const struct ui *ui, enum quantity_id quantity,
+static int pane_rows(const struct session *session, enum quantity_id quantity,
                      struct row rows[MODELS_MAX])
 {
     struct ask ask;
     int count = 0;
-    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    if (!session_ask(session, session->choice.z, session->choice.charge, &ask))
         return 0;
     if (quantity != ask.quantity) {
         ask.quantity = quantity;
         ask.reference = ask.against = NULL;
         ask.n = quantity_at(quantity)->per_subshell ? ask.n : 0;
-        ask.unit = ui_unit(ui, quantity);
+        ask.unit = session_unit(session, quantity);
     }
     for (int m = 0; m < model_count() && count < MODELS_MAX; m++) {
         ask.model = model_at(m);
         if (model_offer_for(ask.model, quantity, NULL) >= 0)
-            rows[count++] = study_row(ui->study, &ask);
+            rows[count++] = study_row(session->study, &ask);
     }
     if (count == 0) {
         ask.model = NULL;
-        rows[count++] = study_row(ui->study, &ask);
+        rows[count++] = study_row(session->study, &ask);
     }
     return count;
 }
@@ -295,18 +273,18 @@ static double bar_full(const struct row *rows, int count)
     return fmin(full, 100.0);
 }
 
-static int draw_group(const struct ui *ui, struct canvas *canvas, struct area a,
-                      enum quantity_id quantity)
+static int draw_group(const struct session *session, struct canvas *canvas,
+                      struct area a, enum quantity_id quantity)
 {
     struct row rows[MODELS_MAX];
-    int count = pane_rows(ui, quantity, rows);
+    int count = pane_rows(session, quantity, rows);
     if (count == 0 || a.rows < 2)
         return 0;
     double full = bar_full(rows, count);
-    draw_heading(ui, canvas, a, &rows[0]);
+    draw_heading(canvas, a, &rows[0]);
     for (int i = 0; i < count && i + 1 < a.rows; i++) {
-        const struct model *model = ui->choice.model;
-        bool chosen = quantity == ui->choice.quantity && model &&
+        const struct model *model = session->choice.model;
+        bool chosen = quantity == session->choice.quantity && model &&
                       rows[i].value.provenance &&
                       strcmp(model->id, rows[i].value.provenance->id) == 0;
         draw_row(canvas, a, a.row + 1 + i, &rows[i], i ? &rows[i - 1] : NULL,
@@ -315,21 +293,22 @@ static int draw_group(const struct ui *ui, struct canvas *canvas, struct area a,
     int used = count + 1 < a.rows ? count + 1 : a.rows;
     struct area below = {a.row + used, a.column, a.rows - used, a.columns};
     /* Of the chosen quantity the line of the source says it. */
-    return quantity == ui->choice.quantity
+    return quantity == session->choice.quantity
                ? used
-               : used + draw_site(ui, canvas, below, rows, count);
+               : used + draw_site(session, canvas, below, rows, count);
 }
 
 /* The set, what it holds, and what its source says of this value. */
-static int draw_source(const struct ui *ui, struct canvas *canvas,
+static int draw_source(const struct session *session, struct canvas *canvas,
                        struct area a)
 {
     char buffer[1024];
     struct ask ask;
     struct text t = text_over(buffer, sizeof buffer);
-    if (a.rows < 1 || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    if (a.rows < 1 ||
+        !session_ask(session, session->choice.z, session->choice.charge, &ask))
         return 0;
-    struct row row = study_row(ui->study, &ask);
+    struct row row = study_row(session->study, &ask);
     const struct provenance *p = row.reference.provenance;
     if (!p)
         return 0;
@@ -352,28 +331,31 @@ static int draw_source(const struct ui *ui, struct canvas *canvas,
 
 /* The audit of the chosen model against the set that the selected element is
  * shown against; NULL when there is none. */
-static const struct audit_series *usual_series(const struct ui *ui)
+static const struct audit_series *usual_series(const struct session *session,
+                                               const struct audit *usual)
 {
     struct ask ask;
-    if (!ui->choice.model || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    if (!session->choice.model ||
+        !session_ask(session, session->choice.z, session->choice.charge, &ask))
         return NULL;
-    struct row row = study_row(ui->study, &ask);
-    for (int i = 0; i < ui->usual.count; i++)
-        if (ui->usual.series[i].value == row.value.provenance &&
-            ui->usual.series[i].reference == row.reference.provenance)
-            return &ui->usual.series[i];
+    struct row row = study_row(session->study, &ask);
+    for (int i = 0; i < usual->count; i++)
+        if (usual->series[i].value == row.value.provenance &&
+            usual->series[i].reference == row.reference.provenance)
+            return &usual->series[i];
     return NULL;
 }
 
 /* How large residuals usually are in the block, this element left out. */
-static int draw_usual(const struct ui *ui, struct canvas *canvas, struct area a)
+static int draw_usual(const struct session *session, const struct audit *usual,
+                      struct canvas *canvas, struct area a)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     char number[NUMBER_TEXT_MAX];
     char ion[ION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    const struct element *e = element_at(ui->choice.z);
-    const struct audit_series *series = usual_series(ui);
+    const struct element *e = element_at(session->choice.z);
+    const struct audit_series *series = usual_series(session, usual);
     struct audit_part part = {AUDIT_BLOCK, e->block};
     if (a.rows < 1 || !series)
         return 0;
@@ -402,16 +384,17 @@ static int draw_usual(const struct ui *ui, struct canvas *canvas, struct area a)
 
 /* Models that stand against another set than the chosen one, where the rows
  * do not name the sets; gives the rows used. */
-static int draw_other_sets(const struct ui *ui, struct canvas *canvas,
+static int draw_other_sets(const struct session *session, struct canvas *canvas,
                            struct area a)
 {
     struct row rows[MODELS_MAX];
     struct ask ask;
     int used = 0;
-    if (set_column(a) > 0 || !ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    if (set_column(a) > 0 ||
+        !session_ask(session, session->choice.z, session->choice.charge, &ask))
         return 0;
-    struct row chosen = study_row(ui->study, &ask);
-    int count = pane_rows(ui, ui->choice.quantity, rows);
+    struct row chosen = study_row(session->study, &ask);
+    int count = pane_rows(session, session->choice.quantity, rows);
     for (int i = 0; i < count && used < a.rows; i++) {
         const struct provenance *p = rows[i].reference.provenance;
         if (rows[i].state != ROW_OK || p == chosen.reference.provenance)
@@ -425,79 +408,29 @@ static int draw_other_sets(const struct ui *ui, struct canvas *canvas,
     return used;
 }
 
-void draw_pane(const struct ui *ui, struct canvas *canvas, struct area area)
+void screen_pane_draw(const struct session *session, const struct audit *usual,
+                      struct canvas *canvas, struct area area)
 {
     struct area left = area;
-    enum quantity_id chosen = ui->choice.quantity;
-    int used = draw_group(ui, canvas, left, chosen);
+    enum quantity_id chosen = session->choice.quantity;
+    int used = draw_group(session, canvas, left, chosen);
     left.row += used;
     left.rows -= used;
-    used = draw_source(ui, canvas, left);
+    used = draw_source(session, canvas, left);
     left.row += used;
     left.rows -= used;
-    used = draw_usual(ui, canvas, left);
+    used = draw_usual(session, usual, canvas, left);
     left.row += used;
     left.rows -= used;
-    used = draw_other_sets(ui, canvas, left);
+    used = draw_other_sets(session, canvas, left);
     left.row += used;
     left.rows -= used;
     /* Other quantities while there is room for a heading and a row. */
     for (int q = 0; q < QUANTITY_COUNT && left.rows >= 2; q++) {
         if ((enum quantity_id)q == chosen)
             continue;
-        used = draw_group(ui, canvas, left, (enum quantity_id)q);
+        used = draw_group(session, canvas, left, (enum quantity_id)q);
         left.row += used;
         left.rows -= used;
     }
-}
-
-/* One fact: labelled where there is room, one line of it where there is not.
- */
-static void draw_fact(const struct ui *ui, struct flow *flow,
-                      const struct species *species, enum fact_id id,
-                      bool narrow)
-{
-    char line[1024];
-    struct text t = text_over(line, sizeof line);
-    bool caution = id == FACT_CAUTION;
-    if (!narrow && id != FACT_CONFIGURATION)
-        text_addf(&t, "%s: ", fact_label(id));
-    size_t labelled = t.length;
-    study_fact(ui->study, species, id, &t);
-    enum role role = caution ? ROLE_CAUTION : ROLE_TEXT;
-    if (t.length == labelled)
-        return;
-    if (!narrow) {
-        flow_text(flow, role, 0, line);
-        return;
-    }
-    if (flow->used < flow->area.rows)
-        canvas_text(flow->canvas, flow->area.row + flow->used,
-                    flow->area.column, flow->area.columns, role, line);
-    flow->used++;
-}
-
-void draw_facts(const struct ui *ui, struct canvas *canvas, struct area area)
-{
-    /* What someone must see comes first: the rest may be cut off. */
-    static const enum fact_id order[] = {
-        FACT_CONFIGURATION, FACT_CAUTION,   FACT_CATEGORY, FACT_PLACE,
-        FACT_WEIGHT,        FACT_OXIDATION, FACT_SUPPLY,   FACT_ABUNDANCE};
-    const struct element *e = element_at(ui->choice.z);
-    struct flow flow = {canvas, area, 0, 0};
-    char line[UI_TEXT_MAX];
-    char ion[ION_TEXT_MAX];
-    struct ask ask;
-    struct species species;
-    struct status st = status_ok();
-    snprintf(line, sizeof line, "%s  %d  %s",
-             ion_print(e->z, ui->choice.charge, ion), e->z, e->name);
-    flow_text(&flow, ROLE_TITLE, 0, line);
-    if (!ui_ask(ui, e->z, ui->choice.charge, &ask) ||
-        !study_species(ui->study, &ask, &species, &st)) {
-        flow_text(&flow, ROLE_GAP, 0, "no such ion");
-        return;
-    }
-    for (size_t i = 0; i < sizeof order / sizeof order[0]; i++)
-        draw_fact(ui, &flow, &species, order[i], area.rows < 8);
 }

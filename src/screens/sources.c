@@ -1,9 +1,11 @@
 /* SPDX-License-Identifier: MIT */
-/* What every number rests on: models and data sets with their citations. */
+/* The screen Sources: what every number rests on: models and data sets with
+ * their citations. */
 #include <stdio.h>
 
 #include "base/text.h"
-#include "screens/parts.h"
+#include "canvas/flow.h"
+#include "screens/list.h"
 #include "study/facts.h"
 
 static void flow_source(struct flow *flow, const struct source *s)
@@ -32,29 +34,61 @@ static void flow_source(struct flow *flow, const struct source *s)
     flow_blank(flow);
 }
 
-static void draw(struct ui *ui, struct canvas *canvas)
+struct sources_state {
+    int scroll;
+};
+
+static void draw(struct session *session, void *state, struct canvas *canvas)
 {
+    struct sources_state *own = state;
     struct source sources[SOURCES_MAX] = {0};
     struct area area = {1, 1, canvas->rows - 3, canvas->columns - 2};
-    struct flow flow = {canvas, area, ui->scroll[SCREEN_SOURCES], 0};
-    int count = study_sources(ui->study, sources, SOURCES_MAX);
+    struct flow flow = {canvas, area, own->scroll, 0};
+    int count = study_sources(session->study, sources, SOURCES_MAX);
     for (int i = 0; i < count; i++)
         flow_source(&flow, &sources[i]);
     /* A scroll past the end comes back to the last full page. */
     int last = flow.used > area.rows ? flow.used - area.rows : 0;
-    if (ui->scroll[SCREEN_SOURCES] <= last)
+    if (own->scroll <= last)
         return;
-    ui->scroll[SCREEN_SOURCES] = last;
+    own->scroll = last;
     canvas_fill(canvas, area.row, 0, area.rows, canvas->columns, ROLE_TEXT,
                 ' ');
-    draw(ui, canvas);
+    draw(session, state, canvas);
 }
 
-static enum effect update(struct ui *ui, enum action action)
+static enum effect move(struct session *session, void *state, enum move move)
 {
-    (void)ui;
-    (void)action;
-    return EFFECT_NONE;
+    struct sources_state *own = state;
+    own->scroll = scroll_move(own->scroll, move, session->rows);
+    return EFFECT_REDRAW;
 }
 
-const struct screen_ops screen_sources = {"Sources", update, draw};
+static enum effect mouse(struct session *session, void *state,
+                         const struct event *event)
+{
+    struct sources_state *own = state;
+    (void)session;
+    if (event->button == MOUSE_LEFT)
+        return EFFECT_NONE;
+    own->scroll = scroll_wheel(own->scroll, event->button == MOUSE_WHEEL_UP);
+    return EFFECT_REDRAW;
+}
+
+static void wants(struct session *session, void *state)
+{
+    (void)state;
+    session_want_selected(session);
+}
+
+const struct screen_ops screen_sources = {
+    .id = "sources",
+    .title = "Sources",
+    .state_size = sizeof(struct sources_state),
+    .key = {320, 's', 0, "s", "sources", "what the numbers rest on", true, 0, 0,
+            0, 0, 0},
+    .draw = draw,
+    .move = move,
+    .mouse = mouse,
+    .wants = wants,
+};

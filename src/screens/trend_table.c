@@ -1,12 +1,14 @@
 /* SPDX-License-Identifier: MIT */
 /* What the curves say at the selected step, in numbers. */
-#include <math.h>
-#include <stdio.h>
-#include <string.h>
+#include "screens/trend_table.h"
 
+#include <stdio.h>
+
+#include "analysis/summary.h"
 #include "base/text.h"
 #include "element/selection.h"
-#include "screens/trend.h"
+#include "screens/trend_marks.h"
+#include "session/site.h"
 
 #define UNEQUAL 0x2260
 #define NAME_COLUMNS 14
@@ -16,14 +18,14 @@
 
 /* The row of a series at the selected step, exact; false without such an ion.
  */
-static bool row_at(const struct ui *ui, const struct model *model,
+static bool row_at(const struct session *session, const struct model *model,
                    struct row *row)
 {
     struct ask ask;
-    if (!ui_ask(ui, ui->choice.z, ui->choice.charge, &ask))
+    if (!session_ask(session, session->choice.z, session->choice.charge, &ask))
         return false;
     ask.model = model;
-    *row = study_row(ui->study, &ask);
+    *row = study_row(session->study, &ask);
     return true;
 }
 
@@ -39,17 +41,18 @@ static enum role sign_role(double value)
     return value < 0 ? ROLE_BELOW : ROLE_ABOVE;
 }
 
-static void draw_model(const struct ui *ui, struct canvas *canvas,
-                       struct area a, int row, int curve)
+static void draw_model(const struct session *session, const struct trend *trend,
+                       struct canvas *canvas, struct area a, int row, int curve)
 {
     char text[NUMBER_TEXT_MAX + 4];
     struct row r;
-    const struct model *model = ui->trend.series[curve].model;
+    const struct model *model = trend->series[curve].model;
     int column = a.column + 2 + NAME_COLUMNS;
-    canvas_put(canvas, row, a.column, trend_role(model), trend_mark(model));
-    canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1, trend_role(model),
-                model->id);
-    if (!row_at(ui, model, &r))
+    canvas_put(canvas, row, a.column, screen_trend_role(model),
+               screen_trend_mark(model));
+    canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1,
+                screen_trend_role(model), model->id);
+    if (!row_at(session, model, &r))
         return;
     if (r.value.state == READING_OK)
         canvas_right(canvas, row, column, VALUE_COLUMNS, ROLE_TEXT,
@@ -82,11 +85,12 @@ static int draw_stored(struct canvas *canvas, struct area a, int row,
                        const struct reading *stored, const char *site,
                        bool second)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    uint32_t mark = second                               ? MARK_SECOND
-                    : trend_unmeasured(stored->evidence) ? MARK_UNMEASURED
-                                                         : MARK_STORED;
+    uint32_t mark = second ? MARK_SECOND
+                    : screen_trend_unmeasured(stored->evidence)
+                        ? MARK_UNMEASURED
+                        : MARK_STORED;
     enum role role = second ? ROLE_HEADING : ROLE_TITLE;
     canvas_put(canvas, row, a.column, role, mark);
     canvas_text(canvas, row, a.column + 2, a.columns - 2, role,
@@ -105,15 +109,16 @@ static int draw_stored(struct canvas *canvas, struct area a, int row,
     return 2;
 }
 
-static int draw_stored_pair(const struct ui *ui, struct canvas *canvas,
-                            struct area a, int row, const struct row *r)
+static int draw_stored_pair(const struct session *session,
+                            struct canvas *canvas, struct area a, int row,
+                            const struct row *r)
 {
-    char first[UI_TEXT_MAX];
-    char second[UI_TEXT_MAX];
+    char first[SESSION_TEXT_MAX];
+    char second[SESSION_TEXT_MAX];
     struct text f = text_over(first, sizeof first);
     struct text s = text_over(second, sizeof second);
-    stored_site_text(ui, &r->species, &r->reference, &f);
-    stored_site_text(ui, &r->species, &r->against, &s);
+    session_stored_site(session, &r->species, &r->reference, &f);
+    session_stored_site(session, &r->species, &r->against, &s);
     char text[NUMBER_TEXT_MAX + 4];
     char percent[NUMBER_TEXT_MAX + 4];
     int used = 0;
@@ -135,17 +140,17 @@ static int draw_stored_pair(const struct ui *ui, struct canvas *canvas,
     return used + 1;
 }
 
-static void draw_head(const struct ui *ui, struct canvas *canvas, struct area a,
-                      const struct row *r)
+static void draw_head(const struct session *session, struct canvas *canvas,
+                      struct area a, const struct row *r)
 {
     char ion[ION_TEXT_MAX];
     char label[SUBSHELL_TEXT_MAX];
     char configuration[CONFIGURATION_TEXT_MAX];
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    const struct element *e = element_at(ui->choice.z);
-    text_addf(&t, "%s  %d  %s", ion_print(e->z, ui->choice.charge, ion), e->z,
-              e->name);
+    const struct element *e = element_at(session->choice.z);
+    text_addf(&t, "%s  %d  %s", ion_print(e->z, session->choice.charge, ion),
+              e->z, e->name);
     if (r->n)
         text_addf(&t, ", %s", subshell_print(r->n, r->l, label));
     canvas_text(canvas, a.row, a.column, a.columns, ROLE_TITLE, buffer);
@@ -157,14 +162,14 @@ static void draw_head(const struct ui *ui, struct canvas *canvas, struct area a,
 }
 
 /* Mean size of the residuals of a curve along the walk, and the largest. */
-static struct summary along(const struct trend *t, int curve)
+static struct summary along(const struct trend *trend, int curve)
 {
     struct summary s = {0};
-    for (int i = 0; i < t->walk.count; i++) {
-        const struct trend_value *v = &t->series[curve].values[i];
+    for (int i = 0; i < trend->walk.count; i++) {
+        const struct trend_value *v = &trend->series[curve].values[i];
         if (v->has_residual)
-            summary_add_residual(&s, t->walk.steps[i].z,
-                                 t->walk.steps[i].charge, v->residual,
+            summary_add_residual(&s, trend->walk.steps[i].z,
+                                 trend->walk.steps[i].charge, v->residual,
                                  v->has_percent ? &v->percent : NULL);
         else
             s.gaps++;
@@ -172,34 +177,36 @@ static struct summary along(const struct trend *t, int curve)
     return s;
 }
 
-static void draw_along(const struct ui *ui, struct canvas *canvas,
+static void draw_along(const struct trend *trend, struct canvas *canvas,
                        struct area a, int row)
 {
-    const struct trend *t = &ui->trend;
     char text[NUMBER_TEXT_MAX + 4];
     char ion[ION_TEXT_MAX];
     int bottom = a.row + a.rows;
-    if (row + 1 >= bottom || t->series_count == 0)
+    if (row + 1 >= bottom || trend->series_count == 0)
         return;
     canvas_textf(canvas, row++, a.column, a.columns, ROLE_HEADING,
-                 "%s: mean size, %s", walk_words(t->walk.kind), t->unit->id);
-    for (int s = 0; s < t->series_count && row < bottom; s++, row++) {
-        struct summary sum = along(t, s);
-        canvas_put(canvas, row, a.column, trend_role(t->series[s].model),
-                   trend_mark(t->series[s].model));
+                 "%s: mean size, %s", walk_words(trend->walk.kind),
+                 trend->unit->id);
+    for (int s = 0; s < trend->series_count && row < bottom; s++, row++) {
+        struct summary sum = along(trend, s);
+        canvas_put(canvas, row, a.column,
+                   screen_trend_role(trend->series[s].model),
+                   screen_trend_mark(trend->series[s].model));
         canvas_text(canvas, row, a.column + 2, NAME_COLUMNS - 1,
-                    trend_role(t->series[s].model), t->series[s].model->id);
+                    screen_trend_role(trend->series[s].model),
+                    trend->series[s].model->id);
         if (sum.count == 0) {
             canvas_textf(canvas, row, a.column + 3 + NAME_COLUMNS,
                          a.columns - 3 - NAME_COLUMNS, ROLE_GAP,
                          "no residual, %d gaps", sum.gaps);
             continue;
         }
-        number_print_places(summary_mean_absolute(&sum), t->unit->decimals,
+        number_print_places(summary_mean_absolute(&sum), trend->unit->decimals,
                             text);
         canvas_right(canvas, row, a.column + 2 + NAME_COLUMNS, VALUE_COLUMNS,
                      ROLE_TEXT, text);
-        signed_text(sum.largest, t->unit->decimals, text, sizeof text);
+        signed_text(sum.largest, trend->unit->decimals, text, sizeof text);
         canvas_textf(canvas, row, a.column + 3 + NAME_COLUMNS + VALUE_COLUMNS,
                      a.columns - 3 - NAME_COLUMNS - VALUE_COLUMNS, ROLE_TEXT,
                      "at most %s (%s)", text,
@@ -207,22 +214,23 @@ static void draw_along(const struct ui *ui, struct canvas *canvas,
     }
 }
 
-void draw_trend_table(const struct ui *ui, struct canvas *canvas,
-                      struct area area, int at)
+void screen_trend_table_draw(const struct session *session,
+                             const struct trend *trend, struct canvas *canvas,
+                             struct area area, int at)
 {
-    const struct trend *t = &ui->trend;
     struct row r;
     int row = area.row + 3;
     int bottom = area.row + area.rows;
     if (at < 0 ||
-        !row_at(ui, t->series_count ? t->series[0].model : NULL, &r)) {
+        !row_at(session, trend->series_count ? trend->series[0].model : NULL,
+                &r)) {
         canvas_text(canvas, area.row, area.column, area.columns, ROLE_GAP,
                     "no such ion");
         return;
     }
-    draw_head(ui, canvas, area, &r);
-    row += draw_stored_pair(ui, canvas, area, row, &r) + 1;
-    if (t->series_count > 0 && row < bottom) {
+    draw_head(session, canvas, area, &r);
+    row += draw_stored_pair(session, canvas, area, row, &r) + 1;
+    if (trend->series_count > 0 && row < bottom) {
         int column = area.column + 2 + NAME_COLUMNS;
         canvas_textf(canvas, row, area.column, NAME_COLUMNS, ROLE_HEADING,
                      "model, %s", r.unit->id);
@@ -233,9 +241,9 @@ void draw_trend_table(const struct ui *ui, struct canvas *canvas,
                      PERCENT_COLUMNS, ROLE_HEADING, "%");
         row++;
     }
-    for (int s = 0; s < t->series_count && row < bottom; s++)
-        draw_model(ui, canvas, area, row++, s);
-    draw_along(ui, canvas, area, row + 1);
+    for (int s = 0; s < trend->series_count && row < bottom; s++)
+        draw_model(session, trend, canvas, area, row++, s);
+    draw_along(trend, canvas, area, row + 1);
 }
 
 /* Entries flow from left to right; one that does not fit begins a new row. */
@@ -283,32 +291,33 @@ static void entry_text(const struct row *r, const char *name, struct text *t)
         text_add(t, " \xE2\x89\xA0");
 }
 
-void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
-                      struct area area, int at)
+void screen_trend_lines_draw(const struct session *session,
+                             const struct trend *trend, struct canvas *canvas,
+                             struct area area, int at)
 {
-    const struct trend *t = &ui->trend;
     char ion[ION_TEXT_MAX];
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct line l = {canvas, area, area.row, area.column};
     struct row r;
     if (area.rows < 1 || at < 0 ||
-        !row_at(ui, t->series_count ? t->series[0].model : NULL, &r))
+        !row_at(session, trend->series_count ? trend->series[0].model : NULL,
+                &r))
         return;
-    l.column =
-        canvas_textf(canvas, l.row, l.column, area.columns, ROLE_TITLE, "%s",
-                     ion_print(ui->choice.z, ui->choice.charge, ion)) +
-        2;
+    l.column = canvas_textf(
+                   canvas, l.row, l.column, area.columns, ROLE_TITLE, "%s",
+                   ion_print(session->choice.z, session->choice.charge, ion)) +
+               2;
     struct text text = text_over(buffer, sizeof buffer);
     if (r.reference.state == READING_OK)
         reading_text(&text, &r.reference);
     else
         text_add(&text, r.reference.reason);
-    char site[UI_TEXT_MAX];
+    char site[SESSION_TEXT_MAX];
     struct text where = text_over(site, sizeof site);
-    stored_site_text(ui, &r.species, &r.reference, &where);
+    session_stored_site(session, &r.species, &r.reference, &where);
     if (where.length > 0)
         text_addf(&text, " at %s", site);
-    bool measured = !trend_unmeasured(r.reference.evidence);
+    bool measured = !screen_trend_unmeasured(r.reference.evidence);
     if (!measured)
         text_addf(&text, " (%s)", evidence_id(r.reference.evidence));
     put_entry(&l, ROLE_TITLE, measured ? MARK_STORED : MARK_UNMEASURED, buffer);
@@ -326,12 +335,12 @@ void draw_trend_lines(const struct ui *ui, struct canvas *canvas,
         }
         put_entry(&l, ROLE_HEADING, MARK_SECOND, buffer);
     }
-    for (int s = 0; s < t->series_count; s++) {
-        if (!row_at(ui, t->series[s].model, &r))
+    for (int s = 0; s < trend->series_count; s++) {
+        if (!row_at(session, trend->series[s].model, &r))
             continue;
         text = text_over(buffer, sizeof buffer);
-        entry_text(&r, t->series[s].model->id, &text);
-        put_entry(&l, trend_role(t->series[s].model),
-                  trend_mark(t->series[s].model), buffer);
+        entry_text(&r, trend->series[s].model->id, &text);
+        put_entry(&l, screen_trend_role(trend->series[s].model),
+                  screen_trend_mark(trend->series[s].model), buffer);
     }
 }

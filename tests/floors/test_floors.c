@@ -17,10 +17,11 @@ static const struct {
     const char *folder;
     int floor;
 } floors[] = {
-    {"base", 0},    {"numeric", 1},  {"element", 1}, {"atom", 2},
-    {"zeta", 2},    {"refdata", 2},  {"canvas", 2},  {"analysis", 2},
-    {"model", 3},   {"report", 3},   {"write", 4},   {"study", 4},
-    {"screens", 5}, {"terminal", 6}, {"cli", 7},
+    {"base", 0},     {"numeric", 1}, {"element", 1}, {"atom", 2},
+    {"zeta", 2},     {"refdata", 2}, {"canvas", 2},  {"analysis", 2},
+    {"model", 3},    {"report", 3},  {"widget", 3},  {"write", 4},
+    {"study", 4},    {"session", 5}, {"screens", 6}, {"app", 7},
+    {"terminal", 8}, {"cli", 9},
 };
 #define FLOOR_COUNT (sizeof floors / sizeof floors[0])
 
@@ -53,6 +54,7 @@ static const struct {
     const char *seen; /* with a blank on each side */
 } narrow[] = {
     {"canvas", " base "},
+    {"widget", " base canvas "},
     {"terminal", " base canvas "},
 };
 

@@ -11,7 +11,7 @@
 #include <unistd.h>
 
 #include "base/file.h"
-#include "screens/parts.h"
+#include "app/app.h"
 #include "support/run.h"
 
 static const char *readme_path;
@@ -44,7 +44,7 @@ static void put_console(FILE *out, const char *block)
     }
 }
 
-static void press(struct ui *ui, const char *keys)
+static void press(struct app *app, const char *keys)
 {
     bool changed;
     for (; *keys; keys++) {
@@ -53,10 +53,10 @@ static void press(struct ui *ui, const char *keys)
         /* '~' stands for Enter. */
         if (*keys == '~')
             event = (struct event){.kind = EVENT_KEY, .key = KEY_CODE_ENTER};
-        ui_update(ui, &event);
+        app_update(app, &event);
     }
-    while (ui_has_work(ui))
-        ui_step(ui, &changed);
+    while (app_has_work(app))
+        app_step(app, &changed);
 }
 
 static void put_screen(FILE *out, int rows, int columns, const char *keys)
@@ -64,14 +64,14 @@ static void put_screen(FILE *out, int rows, int columns, const char *keys)
     struct status st = status_ok();
     struct study *study = study_new(catalogue_builtin(), &st);
     struct canvas canvas;
-    static struct ui ui;
+    static struct app app;
     ck_assert_ptr_nonnull(study);
     ck_assert(canvas_init(&canvas, rows, columns, &st));
-    ui_init(&ui, study);
+    ck_assert(app_init(&app, study, &st));
     struct event size = {.kind = EVENT_RESIZE, .row = rows, .column = columns};
-    ui_update(&ui, &size);
-    press(&ui, keys);
-    ui_draw(&ui, &canvas);
+    app_update(&app, &size);
+    press(&app, keys);
+    app_draw(&app, &canvas);
     char *text = canvas_to_text(&canvas);
     ck_assert_ptr_nonnull(text);
     char *roles = strstr(text, "\n==");
@@ -79,7 +79,7 @@ static void put_screen(FILE *out, int rows, int columns, const char *keys)
     roles[1] = '\0';
     fputs(text, out);
     free(text);
-    ui_clear(&ui);
+    app_clear(&app);
     study_free(study);
     canvas_clear(&canvas);
 }

@@ -6,21 +6,28 @@
 #include "screens/desk_keys.h"
 
 struct study *study;
-struct ui ui;
+struct app app;
 struct canvas canvas;
 
-void open_ui(void)
+void open_app(void)
 {
     struct status st = status_ok();
     study = study_new(catalogue_builtin(), &st);
     ck_assert_ptr_nonnull(study);
-    ui_init(&ui, study);
+    ck_assert_msg(app_init(&app, study, &st), "%s", st.message);
     ck_assert(canvas_init(&canvas, 24, 80, &st));
 }
 
-void close_ui(void)
+void reopen_app(void)
 {
-    ui_clear(&ui);
+    struct status st = status_ok();
+    app_clear(&app);
+    ck_assert_msg(app_init(&app, study, &st), "%s", st.message);
+}
+
+void close_app(void)
+{
+    app_clear(&app);
     study_free(study);
     canvas_clear(&canvas);
 }
@@ -30,13 +37,13 @@ void resize(int rows, int columns)
     struct status st = status_ok();
     ck_assert(canvas_resize(&canvas, rows, columns, &st));
     struct event event = {.kind = EVENT_RESIZE, .row = rows, .column = columns};
-    ck_assert_int_eq(ui_update(&ui, &event), EFFECT_REDRAW);
+    ck_assert_int_eq(app_update(&app, &event), EFFECT_REDRAW);
 }
 
 enum effect key(enum key code)
 {
     struct event event = {.kind = EVENT_KEY, .key = code};
-    return ui_update(&ui, &event);
+    return app_update(&app, &event);
 }
 
 enum effect type(const char *text)
@@ -45,14 +52,14 @@ enum effect type(const char *text)
     for (; *text; text++) {
         struct event event = {.kind = EVENT_CHARACTER,
                               .character = (unsigned char)*text};
-        effect = ui_update(&ui, &event);
+        effect = app_update(&app, &event);
     }
     return effect;
 }
 
 char *drawn(void)
 {
-    ui_draw(&ui, &canvas);
+    app_draw(&app, &canvas);
     char *text = canvas_to_text(&canvas);
     ck_assert_ptr_nonnull(text);
     return text;

@@ -3,7 +3,7 @@
 #ifndef TESTS_SCREENS_DESK_KEYS_H
 #define TESTS_SCREENS_DESK_KEYS_H
 
-#include "screens/ui.h"
+#include "app/app.h"
 
 void resize(int rows, int columns);
 enum effect key(enum key code);

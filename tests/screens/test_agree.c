@@ -7,7 +7,7 @@
 
 #include "screens/desk.h"
 #include "screens/desk_keys.h"
-#include "screens/parts.h"
+#include "screens/list.h"
 #include "screens/test_ui.h"
 
 /* The first line of the screen. */
@@ -25,19 +25,21 @@ START_TEST(the_title_of_the_map_names_the_set_of_its_row)
     static const int elements[] = {1, 8, 26, 58};
     int named = 0;
     resize(60, 200);
-    ui.choice.shown = SHOWN_REFERENCE;
+    app.session.choice.shown = SHOWN_REFERENCE;
     for (int q = 0; q < QUANTITY_COUNT; q++)
         for (size_t i = 0; i < sizeof elements / sizeof elements[0]; i++)
             for (int charge = -1; charge <= 4; charge++)
                 for (int n = 0; n <= 2; n += 2) {
                     struct ask ask;
-                    ui.choice.quantity = (enum quantity_id)q;
-                    ui.choice.z = elements[i];
-                    ui.choice.charge = charge;
-                    ui.choice.n =
-                        quantity_at(ui.choice.quantity)->per_subshell ? n : 0;
-                    ui.stale = true;
-                    if (!ui_ask(&ui, elements[i], charge, &ask))
+                    app.session.choice.quantity = (enum quantity_id)q;
+                    app.session.choice.z = elements[i];
+                    app.session.choice.charge = charge;
+                    app.session.choice.n =
+                        quantity_at(app.session.choice.quantity)->per_subshell
+                            ? n
+                            : 0;
+                    session_touch(&app.session);
+                    if (!session_ask(&app.session, elements[i], charge, &ask))
                         continue;
                     struct row row = study_row(study, &ask);
                     const struct provenance *p = row.reference.provenance;
@@ -56,14 +58,14 @@ END_TEST
  * says so. */
 START_TEST(a_trend_without_curves_names_no_model)
 {
-    char buffer[UI_COMMAND_MAX];
+    char buffer[SESSION_COMMAND_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     type("t");
-    ui.choice.hidden_curves = ~0u;
-    ui.trend_stale = true;
+    app.session.choice.hidden_models = ~0u;
+    session_touch(&app.session);
     free(drawn());
-    ui.scope = SCOPE_TREND;
-    ui_export_command(&ui, &t);
+    app.export = &screen_trend.exports[0];
+    app_export_command(&app, &t);
     ck_assert_ptr_nonnull(strstr(buffer, " --model none"));
 }
 END_TEST
@@ -83,12 +85,11 @@ START_TEST(a_stored_radius_stands_with_its_site)
         {"t", 24, 80, true},  {"d", 24, 120, true},
     };
     for (size_t i = 0; i < sizeof places / sizeof places[0]; i++) {
-        ui_clear(&ui);
-        ui_init(&ui, study);
+        reopen_app();
         resize(places[i].rows, places[i].columns);
-        ui.choice.charge = 3;
+        app.session.choice.charge = 3;
         if (places[i].radius)
-            ui.choice.quantity = QUANTITY_RADIUS;
+            app.session.choice.quantity = QUANTITY_RADIUS;
         type(places[i].keys);
         char *text = drawn();
         bool audit = places[i].keys[0] == 'd';
@@ -105,7 +106,7 @@ END_TEST
 TCase *agree_case(void)
 {
     TCase *tc = tcase_create("agree");
-    tcase_add_checked_fixture(tc, open_ui, close_ui);
+    tcase_add_checked_fixture(tc, open_app, close_app);
     tcase_add_test(tc, the_title_of_the_map_names_the_set_of_its_row);
     tcase_add_test(tc, a_trend_without_curves_names_no_model);
     tcase_add_test(tc, a_stored_radius_stands_with_its_site);

@@ -4,17 +4,23 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screens/atom.h"
+#include "screens/atom_internal.h"
+#include "screens/list.h"
 #include "screens/desk.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/near.h"
 #include "support/run.h"
 
+static struct atom_state *atom(void)
+{
+    return app_state(&app, "atom");
+}
+
 static void open_drawn(void)
 {
-    open_ui();
-    ui_draw(&ui, &canvas);
+    open_app();
+    app_draw(&app, &canvas);
 }
 
 static void resize(int rows, int columns)
@@ -22,29 +28,29 @@ static void resize(int rows, int columns)
     struct status st = status_ok();
     ck_assert(canvas_resize(&canvas, rows, columns, &st));
     struct event event = {.kind = EVENT_RESIZE, .row = rows, .column = columns};
-    ck_assert_int_eq(ui_update(&ui, &event), EFFECT_REDRAW);
-    ui_draw(&ui, &canvas);
+    ck_assert_int_eq(app_update(&app, &event), EFFECT_REDRAW);
+    app_draw(&app, &canvas);
 }
 
 static void settle(void)
 {
     bool changed;
-    while (ui_has_work(&ui))
-        ui_step(&ui, &changed);
-    ui_draw(&ui, &canvas);
+    while (app_has_work(&app))
+        app_step(&app, &changed);
+    app_draw(&app, &canvas);
 }
 
 static enum effect event_only(const struct event *event)
 {
-    enum effect effect = ui_update(&ui, event);
-    ui_draw(&ui, &canvas);
+    enum effect effect = app_update(&app, event);
+    app_draw(&app, &canvas);
     return effect;
 }
 
 static enum effect key(enum key code)
 {
     struct event event = {.kind = EVENT_KEY, .key = code};
-    enum effect effect = ui_update(&ui, &event);
+    enum effect effect = app_update(&app, &event);
     settle();
     return effect;
 }
@@ -54,7 +60,7 @@ static void type(const char *text)
     for (; *text; text++) {
         struct event event = {.kind = EVENT_CHARACTER,
                               .character = (unsigned char)*text};
-        ui_update(&ui, &event);
+        app_update(&app, &event);
         settle();
     }
 }
@@ -143,21 +149,22 @@ START_TEST(an_atom_is_solved_one_cycle_at_a_time)
     struct event a = {.kind = EVENT_CHARACTER, .character = 'a'};
     bool changed;
     int cycles = 0;
-    ui_update(&ui, &a);
-    ck_assert(ui_has_work(&ui));
-    ck_assert(ui_step(&ui, &changed)); /* begins */
-    ui_draw(&ui, &canvas);
+    app_update(&app, &a);
+    ck_assert(app_has_work(&app));
+    ck_assert(app_step(&app, &changed)); /* begins */
+    app_draw(&app, &canvas);
     ck_assert(shows("solving"));
-    while (atom_pending(&ui)) {
+    while (screen_atom_pending(&app.session, atom())) {
         const struct atom_report *r =
-            atom_run_report(ui.atom->slots[SLOT_CHOSEN].run);
+            atom_run_report(atom()->slots[SLOT_CHOSEN].run);
         ck_assert_int_eq(r->cycles, cycles);
-        ui_step(&ui, &changed);
+        app_step(&app, &changed);
         cycles++;
     }
     ck_assert_int_gt(cycles, 5);
     ck_assert(changed);
-    ck_assert_ptr_nonnull(atom_solved(&ui, SLOT_CHOSEN));
+    ck_assert_ptr_nonnull(
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN));
 }
 END_TEST
 
@@ -166,15 +173,16 @@ START_TEST(interrupt_stops_and_enter_goes_on)
     struct event a = {.kind = EVENT_CHARACTER, .character = 'a'};
     struct event interrupt = {.kind = EVENT_INTERRUPT};
     bool changed;
-    ui_update(&ui, &a);
+    app_update(&app, &a);
     for (int i = 0; i < 4; i++)
-        ui_step(&ui, &changed);
+        app_step(&app, &changed);
     ck_assert_int_eq(event_only(&interrupt), EFFECT_REDRAW);
-    ck_assert(!atom_pending(&ui));
+    ck_assert(!screen_atom_pending(&app.session, atom()));
     ck_assert(shows("stopped at cycle 3"));
-    ck_assert_ptr_null(atom_solved(&ui, SLOT_CHOSEN));
+    ck_assert_ptr_null(screen_atom_solved(&app.session, atom(), SLOT_CHOSEN));
     key(KEY_CODE_ENTER);
-    ck_assert_ptr_nonnull(atom_solved(&ui, SLOT_CHOSEN));
+    ck_assert_ptr_nonnull(
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN));
     ck_assert_int_eq(event_only(&interrupt), EFFECT_QUIT);
 }
 END_TEST
@@ -182,14 +190,16 @@ END_TEST
 START_TEST(the_cursor_reads_at_its_radius_and_charges_add_up_to_z)
 {
     type("a");
-    const struct atom_report *r = atom_solved(&ui, SLOT_CHOSEN);
-    near(atom_radius(&ui, r), r->subshells[6].peak_radius, 0.0, 1e-12, "4s");
+    const struct atom_report *r =
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN);
+    near(screen_atom_radius(atom(), r), r->subshells[6].peak_radius, 0.0, 1e-12,
+         "4s");
     for (int i = 0; i < 7; i++)
         key(KEY_CODE_LEFT);
-    double radius = ui.choice.atom.radius;
+    double radius = atom()->radius;
     ck_assert(radius > 0.0 && radius < r->subshells[6].peak_radius);
     double density, within, zeff;
-    const struct atom_run *run = ui.atom->slots[SLOT_CHOSEN].run;
+    const struct atom_run *run = atom()->slots[SLOT_CHOSEN].run;
     atom_run_curve(run, RUN_DENSITY, -1, 1, &radius, &density);
     atom_run_curve(run, RUN_ENCLOSED, -1, 1, &radius, &within);
     atom_run_curve(run, RUN_ZEFF, -1, 1, &radius, &zeff);
@@ -203,10 +213,10 @@ START_TEST(the_cursor_reads_at_its_radius_and_charges_add_up_to_z)
     ck_assert_msg(strstr(text, want), "no %s in\n%s", want, text);
     free(text);
     key(KEY_CODE_HOME);
-    ck_assert(ui.choice.atom.radius < radius);
+    ck_assert(atom()->radius < radius);
     key(KEY_CODE_END);
     key(KEY_CODE_RIGHT);
-    ck_assert(ui.choice.atom.radius > radius);
+    ck_assert(atom()->radius > radius);
 }
 END_TEST
 
@@ -215,7 +225,7 @@ START_TEST(up_and_down_choose_a_subshell_or_all)
     type("a");
     for (int i = 0; i < 20; i++)
         key(KEY_CODE_UP);
-    ck_assert_int_eq(ui.choice.atom.n, -1);
+    ck_assert_int_eq(atom()->n, -1);
     ck_assert(shows(">all"));
     key(KEY_CODE_DOWN);
     ck_assert(shows(">1s"));
@@ -233,10 +243,13 @@ START_TEST(the_next_element_is_solved_as_well)
     type("a");
     key(KEY_CODE_PAGE_DOWN);
     ck_assert(shows("cobalt"));
-    ck_assert_int_eq(atom_solved(&ui, SLOT_CHOSEN)->species.z, 27);
+    ck_assert_int_eq(
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN)->species.z, 27);
     type("+++");
     ck_assert(shows("Co3+"));
-    ck_assert_int_eq(atom_solved(&ui, SLOT_CHOSEN)->species.charge, 3);
+    ck_assert_int_eq(
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN)->species.charge,
+        3);
 }
 END_TEST
 
@@ -246,13 +259,13 @@ START_TEST(what_does_not_bind_has_a_reason_and_no_number)
     type("a-");
     ck_assert(shows("no number: "));
     ck_assert(!shows("max D"));
-    ck_assert_int_eq(ui_has_work(&ui), false);
+    ck_assert_int_eq(app_has_work(&app), false);
     struct status st = status_ok();
     char *out;
     size_t size;
     FILE *f = open_memstream(&out, &size);
-    ui.scope = SCOPE_ATOM;
-    ck_assert(!ui_export(&ui, f, &st));
+    app.export = &screen_atom.exports[0];
+    ck_assert(!app_export(&app, f, &st));
     fclose(f);
     ck_assert_uint_eq(size, 0);
     free(out);
@@ -265,7 +278,7 @@ START_TEST(every_overlay_is_drawn_and_named)
     static const char *const names[] = {"Fe+", "Schr", "slater", "single-zeta"};
     type("a");
     for (int i = 0; i < 4; i++) {
-        ui.choice.atom.overlay = OVERLAY_NONE;
+        atom()->overlay = OVERLAY_NONE;
         type("n");
         ck_assert(shows(" Laid over "));
         for (int k = 0; k <= i; k++)
@@ -274,13 +287,14 @@ START_TEST(every_overlay_is_drawn_and_named)
         ck_assert_msg(shows(names[i]), "%s", names[i]);
     }
     /* pins come first */
-    ui.choice.atom.overlay = OVERLAY_NONE;
+    atom()->overlay = OVERLAY_NONE;
     jump("Ru");
     type("p");
     jump("Fe");
     type("nj");
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(atom_solved(&ui, SLOT_OVER)->species.z, 44);
+    ck_assert_int_eq(
+        screen_atom_solved(&app.session, atom(), SLOT_OVER)->species.z, 44);
     ck_assert(shows("Ru 5s"));
     key(KEY_CODE_UP);
     ck_assert(shows("Ru 4d"));
@@ -300,7 +314,8 @@ START_TEST(methods_are_chosen_from_a_list)
     key(KEY_CODE_UP);
     key(KEY_CODE_ENTER);
     ck_assert(shows("LDA, Schr"));
-    const struct atom_report *r = atom_solved(&ui, SLOT_CHOSEN);
+    const struct atom_report *r =
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN);
     ck_assert_int_eq(r->method.relativity, RELATIVITY_NONE);
     ck_assert_int_eq(r->levels[0].spin, 0);
 }
@@ -308,24 +323,25 @@ END_TEST
 
 START_TEST(the_export_is_what_the_command_prints)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     struct status st = status_ok();
     char *out;
     size_t size;
     type("a++");
-    ui.scope = SCOPE_ATOM;
-    ui_export_command(&ui, &t);
+    app.export = &screen_atom.exports[0];
+    app_export_command(&app, &t);
     ck_assert_str_eq(buffer, "outershell atom Fe2+ --functional lsd "
                              "--relativity dirac --unit pm,eV --format csv");
     FILE *f = open_memstream(&out, &size);
-    ck_assert(ui_export(&ui, f, &st));
+    ck_assert(app_export(&app, f, &st));
     fclose(f);
     struct csv csv = csv_read_text(out);
     ck_assert_str_eq(csv_cell(&csv, 0, "quantity"), "etot");
     near(csv_number(&csv, 0, "value"),
-         atom_solved(&ui, SLOT_CHOSEN)->etot * 27.211386245981, 1e-6, 0.0,
-         "etot, eV");
+         screen_atom_solved(&app.session, atom(), SLOT_CHOSEN)->etot *
+             27.211386245981,
+         1e-6, 0.0, "etot, eV");
     csv_free(&csv);
     free(out);
 }
@@ -335,16 +351,17 @@ END_TEST
  * named: another total energy than the ground state's. */
 START_TEST(own_electrons_are_solved_and_named)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
     struct status st = status_ok();
     type("a");
-    double ground = atom_solved(&ui, SLOT_CHOSEN)->etot;
+    double ground = screen_atom_solved(&app.session, atom(), SLOT_CHOSEN)->etot;
     type(":");
     key(KEY_CODE_CLEAR);
     type("[Ar] 3d7 4s1");
     key(KEY_CODE_ENTER);
-    const struct atom_report *own = atom_solved(&ui, SLOT_CHOSEN);
+    const struct atom_report *own =
+        screen_atom_solved(&app.session, atom(), SLOT_CHOSEN);
     ck_assert_ptr_nonnull(own);
     ck_assert(shows("[Ar] 3d7 4s1"));
     struct atom_run *run = atom_run_new(&st);
@@ -357,8 +374,8 @@ START_TEST(own_electrons_are_solved_and_named)
     near(own->etot, atom_run_report(run)->etot, 1e-9, 0.0, "etot as asked");
     ck_assert(own->etot > ground + 1e-3 || own->etot < ground - 1e-3);
     atom_run_free(run);
-    ui.scope = SCOPE_ATOM;
-    ui_export_command(&ui, &t);
+    app.export = &screen_atom.exports[0];
+    app_export_command(&app, &t);
     ck_assert_ptr_nonnull(strstr(buffer, "--configuration '[Ar] 3d7 4s1'"));
 }
 END_TEST
@@ -368,16 +385,14 @@ START_TEST(the_view_is_remembered)
     char buffer[4096];
     struct text t = text_over(buffer, sizeof buffer);
     type("avg.");
-    ui.choice.atom.method =
-        (struct atom_method){FUNCTIONAL_PBE, RELATIVITY_NONE, 0.0};
-    ui_save_view(&ui, &t);
-    ui_clear(&ui);
-    ui_init(&ui, study);
-    ui_load_view(&ui, buffer);
-    ck_assert_int_eq(ui.choice.atom.method.functional, FUNCTIONAL_PBE);
-    ck_assert_int_eq(ui.choice.atom.method.relativity, RELATIVITY_NONE);
-    ck_assert_int_eq(ui.choice.atom.curves, CURVES_ALL);
-    ck_assert(ui.choice.atom.root && ui.choice.atom.braille);
+    atom()->method = (struct atom_method){FUNCTIONAL_PBE, RELATIVITY_NONE, 0.0};
+    app_save_view(&app, &t);
+    reopen_app();
+    app_load_view(&app, buffer);
+    ck_assert_int_eq(atom()->method.functional, FUNCTIONAL_PBE);
+    ck_assert_int_eq(atom()->method.relativity, RELATIVITY_NONE);
+    ck_assert_int_eq(atom()->curves, CURVES_ALL);
+    ck_assert(atom()->root && app.session.choice.braille);
 }
 END_TEST
 
@@ -388,17 +403,18 @@ START_TEST(a_click_chooses_a_subshell_or_moves_the_cursor)
         .kind = EVENT_MOUSE, .row = 5, .column = 3, .button = MOUSE_LEFT};
     ck_assert_int_eq(event_only(&click), EFFECT_REDRAW);
     ck_assert(shows(">1s"));
-    const struct area in = ui.atom->plot.inside;
+    const struct area in = atom()->plot.inside;
     click.row = in.row + 2;
     click.column = in.column + 9;
     ck_assert_int_eq(event_only(&click), EFFECT_REDRAW);
     int column;
-    ck_assert(plot_column(&ui.atom->plot,
-                          ui.choice.atom.radius * atom_length(&ui), &column));
+    ck_assert(plot_column(&atom()->plot,
+                          atom()->radius * screen_atom_length(&app.session),
+                          &column));
     ck_assert_int_eq(column, in.column + 9);
     struct event wheel = {.kind = EVENT_MOUSE, .button = MOUSE_WHEEL_DOWN};
     event_only(&wheel);
-    ck_assert_int_eq(ui.choice.z, 27);
+    ck_assert_int_eq(app.session.choice.z, 27);
 }
 END_TEST
 
@@ -411,8 +427,8 @@ START_TEST(every_size_keeps_title_and_keys)
         for (int columns = NEEDED_COLUMNS; columns <= 210; columns += 13)
             for (int detail = 0; detail < 2; detail++)
                 for (int curves = 0; curves < CURVES_COUNT; curves++) {
-                    ui.detail = detail;
-                    ui.choice.atom.curves = (enum atom_curves)curves;
+                    app.session.detail = detail;
+                    atom()->curves = (enum atom_curves)curves;
                     resize(rows, columns);
                     char *text = characters();
                     ck_assert_int_eq(strncmp(text, "Atom  U  92", 11), 0);
@@ -429,7 +445,8 @@ START_TEST(areas_stay_inside_and_apart)
     for (int rows = NEEDED_ROWS; rows <= 100; rows++)
         for (int columns = NEEDED_COLUMNS; columns <= 300; columns += 7)
             for (int shells = 1; shells <= SUBSHELL_MAX; shells += 5) {
-                struct atom_layout l = layout_atom(rows, columns, shells);
+                struct atom_layout l =
+                    screen_atom_layout(rows, columns, shells);
                 const struct area all[] = {l.table, l.levels, l.cursor, l.plot,
                                            l.charge};
                 for (int i = 0; i < 5; i++) {
@@ -451,7 +468,7 @@ int main(void)
 {
     Suite *suite = suite_create("atom screen");
     TCase *tc = tcase_create("screen");
-    tcase_add_checked_fixture(tc, open_drawn, close_ui);
+    tcase_add_checked_fixture(tc, open_drawn, close_app);
     tcase_add_test(tc, iron_at_80x24);
     tcase_add_test(tc, all_subshells_at_120x40);
     tcase_add_test(tc, uranium_at_200x60_from_the_nucleus_on);

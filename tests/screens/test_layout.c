@@ -1,7 +1,7 @@
 /* SPDX-License-Identifier: MIT */
 #include <check.h>
 
-#include "screens/layout.h"
+#include "screens/map_layout.h"
 #include "screens/test_ui.h"
 
 /* True when an area lies on the screen. */
@@ -18,7 +18,7 @@ START_TEST(every_size_gives_areas_on_the_screen)
         for (int columns = 1; columns <= 300; columns++)
             for (int width = 0; width < 2; width++) {
                 struct map_layout l =
-                    layout_map(rows, columns, (enum grid_width)width);
+                    screen_map_layout(rows, columns, (enum grid_width)width);
                 if (l.form == FORM_SENTENCE)
                     continue;
                 ck_assert_msg(inside(l.grid, rows, columns) &&
@@ -31,7 +31,8 @@ START_TEST(every_size_gives_areas_on_the_screen)
                     continue;
                 int outside = 0;
                 for (int z = 1; z <= Z_MAX; z++)
-                    if (!inside(layout_cell(&l, z, GRID_LU_LR), rows, columns))
+                    if (!inside(screen_map_cell(&l, z, GRID_LU_LR), rows,
+                                columns))
                         outside = z;
                 ck_assert_msg(outside == 0, "%dx%d Z=%d", columns, rows,
                               outside);
@@ -43,7 +44,7 @@ START_TEST(areas_do_not_overlap_where_all_stand_together)
 {
     for (int rows = 20; rows <= 80; rows++)
         for (int columns = 57; columns <= 220; columns++) {
-            struct map_layout l = layout_map(rows, columns, GRID_18);
+            struct map_layout l = screen_map_layout(rows, columns, GRID_18);
             if (l.form != FORM_WHOLE)
                 continue;
             ck_assert_int_eq(l.scale.row, l.grid.row + l.grid.rows);
@@ -59,14 +60,14 @@ END_TEST
 
 START_TEST(the_sizes_that_were_promised)
 {
-    ck_assert_int_eq(layout_map(24, 80, GRID_18).form, FORM_WHOLE);
-    ck_assert_int_eq(layout_map(60, 200, GRID_18).form, FORM_WHOLE);
-    ck_assert_int_gt(layout_map(60, 200, GRID_18).cell_rows, 1);
-    ck_assert_int_eq(layout_map(60, 200, GRID_32).width, GRID_32);
-    ck_assert_int_eq(layout_map(24, 80, GRID_32).width, GRID_18);
-    ck_assert_int_eq(layout_map(12, 40, GRID_18).form, FORM_SINGLE);
-    ck_assert_int_eq(layout_map(10, 30, GRID_18).form, FORM_LIST);
-    ck_assert_int_eq(layout_map(5, 20, GRID_18).form, FORM_SENTENCE);
+    ck_assert_int_eq(screen_map_layout(24, 80, GRID_18).form, FORM_WHOLE);
+    ck_assert_int_eq(screen_map_layout(60, 200, GRID_18).form, FORM_WHOLE);
+    ck_assert_int_gt(screen_map_layout(60, 200, GRID_18).cell_rows, 1);
+    ck_assert_int_eq(screen_map_layout(60, 200, GRID_32).width, GRID_32);
+    ck_assert_int_eq(screen_map_layout(24, 80, GRID_32).width, GRID_18);
+    ck_assert_int_eq(screen_map_layout(12, 40, GRID_18).form, FORM_SINGLE);
+    ck_assert_int_eq(screen_map_layout(10, 30, GRID_18).form, FORM_LIST);
+    ck_assert_int_eq(screen_map_layout(5, 20, GRID_18).form, FORM_SENTENCE);
 }
 END_TEST
 

@@ -5,8 +5,8 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screens/audit.h"
-#include "screens/trend.h"
+#include "screens/audit_internal.h"
+#include "screens/trend_marks.h"
 #include "screens/desk.h"
 #include "screens/desk_keys.h"
 #include "support/csv.h"
@@ -18,9 +18,9 @@
 static void settle(void)
 {
     bool changed;
-    ui_draw(&ui, &canvas);
-    while (ui_has_work(&ui))
-        ui_step(&ui, &changed);
+    app_draw(&app, &canvas);
+    while (app_has_work(&app))
+        app_step(&app, &changed);
 }
 
 static void check_golden(const char *name)
@@ -46,10 +46,10 @@ static bool shows(const char *words)
 static void choose(const char *opener, const char *start)
 {
     type(opener);
-    ck_assert_int_ne(ui.chooser.kind, CHOOSER_NONE);
-    for (int i = 0; i < ui.chooser.count; i++)
-        if (strncmp(ui.chooser.labels[i], start, strlen(start)) == 0) {
-            ui.chooser.at = i;
+    ck_assert_ptr_nonnull(app.chooser);
+    for (int i = 0; i < app.list.count; i++)
+        if (strncmp(app.list.labels[i], start, strlen(start)) == 0) {
+            app.list.at = i;
             key(KEY_CODE_ENTER);
             return;
         }
@@ -139,12 +139,12 @@ START_TEST(a_step_along_a_trend_redraws_only_the_cursor)
     choose("w", "ionization");
     type("t");
     settle();
-    ui_draw(&ui, &canvas);
+    app_draw(&app, &canvas);
     ck_assert(canvas_init(&before, 24, 80, &st));
     memcpy(before.cells, canvas.cells, sizeof *canvas.cells * 24 * 80);
     key(KEY_CODE_RIGHT);
-    ck_assert_int_eq(ui.choice.z, 27);
-    ui_draw(&ui, &canvas);
+    ck_assert_int_eq(app.session.choice.z, 27);
+    app_draw(&app, &canvas);
     int count = changed_cells(&before, &canvas, 1, 18, columns);
     int wide = 0;
     for (int c = 0; c < 80; c++)
@@ -174,9 +174,10 @@ START_TEST(a_gap_stays_a_gap_and_a_curve_can_be_turned_off)
     key(KEY_CODE_ENTER);
     type("t");
     settle();
-    ui_draw(&ui, &canvas);
-    ck_assert_int_eq(marks(trend_mark(model_find("clementi")), 1, 18), 0);
-    ck_assert_int_gt(marks(trend_mark(model_find("slater")), 1, 18), 10);
+    app_draw(&app, &canvas);
+    ck_assert_int_eq(marks(screen_trend_mark(model_find("clementi")), 1, 18),
+                     0);
+    ck_assert_int_gt(marks(screen_trend_mark(model_find("slater")), 1, 18), 10);
     ck_assert(shows("clementi outside-model"));
     choose("b", "[x] slater");
     key(KEY_CODE_ESCAPE);
@@ -190,31 +191,31 @@ END_TEST
 START_TEST(every_walk_is_gone_along_and_across)
 {
     type("t");
-    ui_draw(&ui, &canvas);
+    app_draw(&app, &canvas);
     key(KEY_CODE_HOME);
-    ck_assert_int_eq(ui.choice.z, 19);
+    ck_assert_int_eq(app.session.choice.z, 19);
     key(KEY_CODE_END);
-    ck_assert_int_eq(ui.choice.z, 36);
+    ck_assert_int_eq(app.session.choice.z, 36);
     choose("z", "group");
     key(KEY_CODE_RIGHT);
-    ck_assert_int_eq(ui.choice.z, 54);
+    ck_assert_int_eq(app.session.choice.z, 54);
     key(KEY_CODE_UP); /* the group before: I */
-    ck_assert_int_eq(ui.choice.z, 53);
+    ck_assert_int_eq(app.session.choice.z, 53);
     choose("z", "block");
     key(KEY_CODE_HOME);
-    ck_assert_int_eq(ui.choice.z, 49);
+    ck_assert_int_eq(app.session.choice.z, 49);
     choose("z", "charges");
     key(KEY_CODE_RIGHT);
     key(KEY_CODE_RIGHT);
-    ck_assert_int_eq(ui.choice.charge, 2);
+    ck_assert_int_eq(app.session.choice.charge, 2);
     ck_assert(shows("charges of the element"));
     key(KEY_CODE_END);
-    ck_assert_int_eq(ui.choice.charge, 48);
+    ck_assert_int_eq(app.session.choice.charge, 48);
     key(KEY_CODE_HOME);
     choose("z", "isoelectronic");
     key(KEY_CODE_RIGHT);
-    ck_assert_int_eq(ui.choice.z, 50);
-    ck_assert_int_eq(ui.choice.charge, 1);
+    ck_assert_int_eq(app.session.choice.z, 50);
+    ck_assert_int_eq(app.session.choice.charge, 1);
     resize(40, 120);
     ck_assert(shows("series of 49 electrons"));
 }
@@ -228,7 +229,7 @@ START_TEST(a_configuration_is_typed_and_taken_back)
         key(KEY_CODE_ERASE);
     type("[Ar] 3d7 4s1");
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.configuration.count, 7);
+    ck_assert_int_eq(app.session.choice.configuration.count, 7);
     resize(40, 120);
     ck_assert(shows("[Ar] 3d7 4s1 (given)"));
     type("m");
@@ -254,15 +255,16 @@ START_TEST(the_worst_species_is_reached_from_the_audit)
 {
     choose("w", "radius");
     type("d");
-    ui_draw(&ui, &canvas);
-    const struct audit_series *s = audit_chosen(&ui);
+    app_draw(&app, &canvas);
+    const struct audit_series *s =
+        screen_audit_chosen(&app.session, app_state(&app, "audit"));
     ck_assert_ptr_nonnull(s);
     struct audit_part all = {AUDIT_ALL, 0};
     struct summary sum = audit_summary(s, all);
     key(KEY_CODE_ENTER);
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.screen, SCREEN_MAP);
-    ck_assert_int_eq(ui.choice.z, sum.largest_z);
+    ck_assert_str_eq(app_screen(&app)->id, "map");
+    ck_assert_int_eq(app.session.choice.z, sum.largest_z);
 }
 END_TEST
 
@@ -277,7 +279,8 @@ START_TEST(the_usual_residual_is_that_of_the_others_in_the_block)
     choose("w", "ionization");
     for (int z = 1; z <= Z_MAX; z++) {
         struct ask ask;
-        if (z == 26 || element_at(z)->block != 'd' || !ui_ask(&ui, z, 0, &ask))
+        if (z == 26 || element_at(z)->block != 'd' ||
+            !session_ask(&app.session, z, 0, &ask))
             continue;
         struct row row = study_row(study, &ask);
         if (row.state != ROW_OK)
@@ -300,7 +303,7 @@ static struct csv exported(void)
     size_t size = 0;
     FILE *out = open_memstream(&text, &size);
     ck_assert_ptr_nonnull(out);
-    ck_assert(ui_export(&ui, out, &st));
+    ck_assert(app_export(&app, out, &st));
     fclose(out);
     struct csv csv = csv_read_text(text);
     free(text);
@@ -309,7 +312,7 @@ static struct csv exported(void)
 
 START_TEST(trend_and_audit_are_exported_with_their_command)
 {
-    char command[UI_TEXT_MAX];
+    char command[SESSION_TEXT_MAX];
     struct text t = text_over(command, sizeof command);
     choose("w", "ionization");
     type("t");
@@ -317,24 +320,24 @@ START_TEST(trend_and_audit_are_exported_with_their_command)
     key(KEY_CODE_ESCAPE);
     choose("b", "[x] scf");
     key(KEY_CODE_ESCAPE);
-    ui_draw(&ui, &canvas);
+    app_draw(&app, &canvas);
     type("e");
     key(KEY_CODE_ENTER);
     struct csv csv = exported();
     ck_assert_uint_eq(csv_rows(&csv), 54);
     csv_free(&csv);
-    ui_export_command(&ui, &t);
+    app_export_command(&app, &t);
     ck_assert_str_eq(command, "outershell list period:4 --quantity ionization "
                               "--model shells,slater,clementi --format csv");
     type("d");
-    ui_draw(&ui, &canvas);
+    app_draw(&app, &canvas);
     type("e");
     key(KEY_CODE_ENTER);
     csv = exported();
     ck_assert_uint_gt(csv_rows(&csv), 100);
     csv_free(&csv);
     t = text_over(command, sizeof command);
-    ui_export_command(&ui, &t);
+    app_export_command(&app, &t);
     ck_assert_str_eq(command,
                      "outershell audit --quantity ionization --format csv");
 }
@@ -350,21 +353,21 @@ START_TEST(uranium_is_followed_to_its_last_electron)
     choose("w", "ionization");
     type("U");
     key(KEY_CODE_ENTER);
-    ui.choice.hidden_curves = ~(1u << index);
+    app.session.choice.hidden_models = ~(1u << index);
     type("t");
     choose("z", "charges");
-    ui_draw(&ui, &canvas);
-    for (int steps = 0; ui_has_work(&ui); steps++) {
-        ui_step(&ui, &changed);
+    app_draw(&app, &canvas);
+    for (int steps = 0; app_has_work(&app); steps++) {
+        app_step(&app, &changed);
         if (steps % 500 == 250) {
-            int before = ui.choice.charge;
+            int before = app.session.choice.charge;
             key(before < 91 ? KEY_CODE_RIGHT : KEY_CODE_HOME);
-            ck_assert_int_ne(ui.choice.charge, before);
+            ck_assert_int_ne(app.session.choice.charge, before);
         }
     }
     for (int charge = 0; charge < 92; charge++) {
         struct ask ask;
-        ck_assert(ui_ask(&ui, 92, charge, &ask));
+        ck_assert(session_ask(&app.session, 92, charge, &ask));
         ask.model = model_find("scf");
         struct row row = study_row(study, &ask);
         ck_assert_int_ne(row.value.state, READING_PENDING);
@@ -381,7 +384,7 @@ int main(void)
 {
     Suite *suite = suite_create("trend");
     TCase *c = tcase_create("trend");
-    tcase_add_checked_fixture(c, open_ui, close_ui);
+    tcase_add_checked_fixture(c, open_app, close_app);
     tcase_set_timeout(c, 60);
     tcase_add_test(c, ionization_along_period_4_at_80x24);
     tcase_add_test(c, two_covalent_sets_down_a_group_at_120x40);

@@ -6,19 +6,24 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screens/parts.h"
+#include "screens/list.h"
+#include "screens/map_layout.h"
+#include "session/common.h"
 #include "screens/desk.h"
 #include "screens/desk_keys.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/run.h"
 
+/* Places among the exports of the map. */
+enum { EXPORT_ROW, EXPORT_PINS, EXPORT_SHEET };
+
 /* Solves what the screen wants solved. */
 static void settle(void)
 {
     bool changed;
-    while (ui_has_work(&ui))
-        ui_step(&ui, &changed);
+    while (app_has_work(&app))
+        app_step(&app, &changed);
 }
 
 static void check_golden(const char *name)
@@ -76,7 +81,7 @@ START_TEST(three_species_compared_at_100x40)
     resize(40, 100);
     static const int z[] = {40, 72, 22};
     for (int i = 0; i < 3; i++) {
-        ui_select(&ui, z[i]);
+        session_select(&app.session, z[i]);
         type("p");
     }
     type("c");
@@ -88,8 +93,8 @@ START_TEST(every_symbol_stands_on_the_map_at_80x24)
 {
     char *text = drawn();
     for (int z = 1; z <= Z_MAX; z++) {
-        struct map_layout l = layout_map(24, 80, GRID_18);
-        struct area a = layout_cell(&l, z, GRID_LU_LR);
+        struct map_layout l = screen_map_layout(24, 80, GRID_18);
+        struct area a = screen_map_cell(&l, z, GRID_LU_LR);
         const char *symbol = element_at(z)->symbol;
         for (int i = 0; symbol[i]; i++)
             ck_assert_msg(
@@ -121,7 +126,7 @@ START_TEST(every_size_is_drawn_on_every_screen)
         for (int rows = 1; rows < 70; rows += 4)
             for (int columns = 1; columns < 240; columns += 13) {
                 resize(rows, columns);
-                ui_draw(&ui, &canvas);
+                app_draw(&app, &canvas);
                 ck_assert_int_lt(canvas.cursor_row, rows);
                 ck_assert_int_lt(canvas.cursor_column, columns);
             }
@@ -133,19 +138,19 @@ END_TEST
 START_TEST(a_capital_letter_jumps_and_arrows_move_on)
 {
     type("Zr");
-    ck_assert_int_eq(ui.choice.z, 40);
+    ck_assert_int_eq(app.session.choice.z, 40);
     key(KEY_CODE_RIGHT);
-    ck_assert_int_eq(ui.choice.z, 41);
+    ck_assert_int_eq(app.session.choice.z, 41);
     type("/tung");
     ck_assert(shows("element: tung"));
     key(KEY_CODE_ESCAPE);
     type("92");
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.z, 92);
+    ck_assert_int_eq(app.session.choice.z, 92);
     type("/wolf");
     key(KEY_CODE_ENTER);
     ck_assert(shows("no element has this symbol, name or number"));
-    ck_assert_int_eq(ui.choice.z, 92);
+    ck_assert_int_eq(app.session.choice.z, 92);
 }
 END_TEST
 
@@ -153,12 +158,12 @@ START_TEST(erasing_takes_whole_characters)
 {
     struct event e = {.kind = EVENT_PASTE, .character = 0xE9};
     type("/Z");
-    ui_update(&ui, &e);
+    app_update(&app, &e);
     key(KEY_CODE_ERASE);
-    ck_assert_str_eq(ui.prompt.text, "Z");
+    ck_assert_str_eq(app.field.text, "Z");
     key(KEY_CODE_ERASE);
     key(KEY_CODE_ERASE);
-    ck_assert_str_eq(ui.prompt.text, "");
+    ck_assert_str_eq(app.field.text, "");
 }
 END_TEST
 
@@ -171,7 +176,7 @@ START_TEST(pasted_text_never_is_a_command)
         char *before = drawn();
         for (uint32_t c = ' '; c < 127; c++) {
             struct event e = {.kind = EVENT_PASTE, .character = c};
-            ck_assert_int_eq(ui_update(&ui, &e), EFFECT_NONE);
+            ck_assert_int_eq(app_update(&app, &e), EFFECT_NONE);
         }
         char *after = drawn();
         ck_assert_str_eq(after, before);
@@ -186,9 +191,9 @@ START_TEST(the_cursor_stands_on_the_selection)
 {
     type("Og");
     key(KEY_CODE_ENTER);
-    ui_draw(&ui, &canvas);
-    struct map_layout l = layout_map(24, 80, GRID_18);
-    struct area a = layout_cell(&l, 118, GRID_LU_LR);
+    app_draw(&app, &canvas);
+    struct map_layout l = screen_map_layout(24, 80, GRID_18);
+    struct area a = screen_map_cell(&l, 118, GRID_LU_LR);
     ck_assert_int_eq(canvas.cursor_row, a.row);
     ck_assert_int_eq(canvas.cursor_column, a.column + 1);
 }
@@ -197,16 +202,16 @@ END_TEST
 START_TEST(charges_and_subshells_are_chosen)
 {
     type("++");
-    ck_assert_int_eq(ui.choice.charge, 2);
+    ck_assert_int_eq(app.session.choice.charge, 2);
     ck_assert(shows("charge 2+"));
     type("o");
     ck_assert(shows("outermost"));
     key(KEY_CODE_END);
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.n, 3);
-    ck_assert_int_eq(ui.choice.l, 2);
+    ck_assert_int_eq(app.session.choice.n, 3);
+    ck_assert_int_eq(app.session.choice.l, 2);
     type("---");
-    ck_assert_int_eq(ui.choice.charge, -1);
+    ck_assert_int_eq(app.session.choice.charge, -1);
     type("He");
     key(KEY_CODE_ENTER);
     type("++++");
@@ -216,9 +221,9 @@ END_TEST
 
 START_TEST(a_site_is_chosen_with_its_radius_in_sight)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    ui_select(&ui, 31);
+    session_select(&app.session, 31);
     type("+++wr");
     key(KEY_CODE_ENTER);
     type("@");
@@ -227,18 +232,17 @@ START_TEST(a_site_is_chosen_with_its_radius_in_sight)
     ck_assert(shows("IV  47 pm"));
     key(KEY_CODE_DOWN);
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+    ck_assert_int_eq(app.session.choice.site.coordination, COORDINATION_IV);
     ck_assert(shows("coordination IV"));
-    ui.scope = SCOPE_ROW;
-    ui_export_command(&ui, &t);
+    app.export = &screen_map.exports[EXPORT_ROW];
+    app_export_command(&app, &t);
     ck_assert_ptr_nonnull(strstr(buffer, "--coordination IV"));
     char view[2048];
     t = text_over(view, sizeof view);
-    ui_save_view(&ui, &t);
-    ui_clear(&ui);
-    ui_init(&ui, study);
-    ui_load_view(&ui, view);
-    ck_assert_int_eq(ui.choice.site.coordination, COORDINATION_IV);
+    app_save_view(&app, &t);
+    reopen_app();
+    app_load_view(&app, view);
+    ck_assert_int_eq(app.session.choice.site.coordination, COORDINATION_IV);
 }
 END_TEST
 
@@ -246,12 +250,12 @@ START_TEST(a_wrong_configuration_stays_to_be_mended)
 {
     type(":x");
     ck_assert_int_eq(key(KEY_CODE_ENTER), EFFECT_REDRAW);
-    ck_assert_int_eq(ui.prompt.kind, PROMPT_CONFIGURATION);
+    ck_assert_ptr_eq(app.prompt, &session_prompt_configuration);
     ck_assert(shows("is no subshell"));
     type("y");
     ck_assert(!shows("is no subshell"));
     key(KEY_CODE_ESCAPE);
-    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
+    ck_assert_ptr_null(app.prompt);
 }
 END_TEST
 
@@ -260,8 +264,8 @@ START_TEST(quantities_without_a_model_show_their_reference)
     type("w");
     key(KEY_CODE_END);
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.quantity, QUANTITY_POLARIZABILITY);
-    ck_assert_int_eq(ui.choice.shown, SHOWN_REFERENCE);
+    ck_assert_int_eq(app.session.choice.quantity, QUANTITY_POLARIZABILITY);
+    ck_assert_int_eq(app.session.choice.shown, SHOWN_REFERENCE);
     type("v");
     ck_assert(shows("no model computes"));
     type("b");
@@ -274,10 +278,10 @@ START_TEST(a_chooser_goes_by_letter_and_can_be_left)
     type("w");
     type("i");
     key(KEY_CODE_ENTER);
-    ck_assert_int_eq(ui.choice.quantity, QUANTITY_IONIZATION);
+    ck_assert_int_eq(app.session.choice.quantity, QUANTITY_IONIZATION);
     type("w");
     key(KEY_CODE_ESCAPE);
-    ck_assert_int_eq(ui.choice.quantity, QUANTITY_IONIZATION);
+    ck_assert_int_eq(app.session.choice.quantity, QUANTITY_IONIZATION);
     type("u");
     type("k");
     key(KEY_CODE_DOWN);
@@ -286,16 +290,16 @@ START_TEST(a_chooser_goes_by_letter_and_can_be_left)
 }
 END_TEST
 
-/* What an export of this scope holds, as text. The caller frees it. */
-static char *exported(enum export_scope scope)
+/* What the i-th export of the map holds, as text. The caller frees it. */
+static char *exported(int i)
 {
     struct status st = status_ok();
     char *text = NULL;
     size_t size = 0;
     FILE *out = open_memstream(&text, &size);
     ck_assert_ptr_nonnull(out);
-    ui.scope = scope;
-    ck_assert(ui_export(&ui, out, &st));
+    app.export = &screen_map.exports[i];
+    ck_assert(app_export(&app, out, &st));
     fclose(out);
     return text;
 }
@@ -306,9 +310,9 @@ START_TEST(exports_ask_for_a_file_and_hold_what_is_shown)
     key(KEY_CODE_ENTER);
     ck_assert(shows("write CSV to: Fe-zeff.csv"));
     ck_assert_int_eq(key(KEY_CODE_ENTER), EFFECT_WRITE);
-    ck_assert_str_eq(ui.path, "Fe-zeff.csv");
-    ck_assert(!ui.replace);
-    char *row = exported(SCOPE_ROW);
+    ck_assert_str_eq(app.path, "Fe-zeff.csv");
+    ck_assert(!app.replace);
+    char *row = exported(EXPORT_ROW);
     struct csv csv = csv_read_text(row);
     int offering = 0;
     for (int m = 0; m < model_count(); m++)
@@ -317,7 +321,7 @@ START_TEST(exports_ask_for_a_file_and_hold_what_is_shown)
     ck_assert_str_eq(csv_cell(&csv, 0, "symbol"), "Fe");
     csv_free(&csv);
     free(row);
-    char *sheet = exported(SCOPE_SHEET);
+    char *sheet = exported(EXPORT_SHEET);
     csv = csv_read_text(sheet);
     ck_assert_uint_eq(csv_rows(&csv), Z_MAX);
     csv_free(&csv);
@@ -327,26 +331,26 @@ END_TEST
 
 START_TEST(an_existing_file_is_asked_about)
 {
-    snprintf(ui.path, sizeof ui.path, "there.csv");
-    ui_ask_overwrite(&ui);
+    snprintf(app.path, sizeof app.path, "there.csv");
+    app_ask_overwrite(&app);
     ck_assert(shows("there.csv exists; overwrite it? y/n"));
     ck_assert_int_eq(type("n"), EFFECT_REDRAW);
     ck_assert(shows("left as it was"));
-    ui_ask_overwrite(&ui);
+    app_ask_overwrite(&app);
     ck_assert_int_eq(type("y"), EFFECT_WRITE);
-    ck_assert(ui.replace);
+    ck_assert(app.replace);
 }
 END_TEST
 
 START_TEST(the_command_of_an_export_names_every_choice)
 {
-    char buffer[UI_TEXT_MAX];
+    char buffer[SESSION_TEXT_MAX];
     struct text t = text_over(buffer, sizeof buffer);
-    ui.choice.charge = 2;
-    ui.choice.n = 3;
-    ui.choice.l = 2;
-    ui.scope = SCOPE_SHEET;
-    ui_export_command(&ui, &t);
+    app.session.choice.charge = 2;
+    app.session.choice.n = 3;
+    app.session.choice.l = 2;
+    app.export = &screen_map.exports[EXPORT_SHEET];
+    app_export_command(&app, &t);
     ck_assert_str_eq(buffer, "outershell list --quantity zeff --model slater "
                              "--charge 2 --subshell 3d --format csv");
 }
@@ -355,17 +359,17 @@ END_TEST
 START_TEST(a_key_behind_a_whole_symbol_ends_the_jump)
 {
     type("Nip");
-    ck_assert_int_eq(ui.prompt.kind, PROMPT_NONE);
-    ck_assert_int_eq(ui.choice.z, 28);
-    ck_assert_int_eq(ui.choice.pin_count, 1);
+    ck_assert_ptr_null(app.prompt);
+    ck_assert_int_eq(app.session.choice.z, 28);
+    ck_assert_int_eq(app.session.choice.pin_count, 1);
     type("Cop"); /* copper */
-    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
-    ck_assert_int_eq(ui.choice.z, 29);
-    ck_assert_int_eq(ui.choice.pin_count, 1);
+    ck_assert_ptr_eq(app.prompt, &session_prompt_jump);
+    ck_assert_int_eq(app.session.choice.z, 29);
+    ck_assert_int_eq(app.session.choice.pin_count, 1);
     key(KEY_CODE_ENTER);
     type("Sodiux"); /* a slip does not drop the pins */
-    ck_assert_int_eq(ui.prompt.kind, PROMPT_JUMP);
-    ck_assert_int_eq(ui.choice.pin_count, 1);
+    ck_assert_ptr_eq(app.prompt, &session_prompt_jump);
+    ck_assert_int_eq(app.session.choice.pin_count, 1);
     ck_assert(shows("no such element"));
 }
 END_TEST
@@ -376,11 +380,12 @@ START_TEST(long_messages_are_read_whole)
     char path[181];
     memset(path, 'd', sizeof path - 1);
     path[sizeof path - 1] = '\0';
-    ui_report(&ui, false, "%s written; the same: outershell END", path);
+    session_report(&app.session, false, "%s written; the same: outershell END",
+                   path);
     ck_assert(shows("outershell END"));
     ck_assert(shows("? keys"));
-    snprintf(ui.path, sizeof ui.path, "%s", path);
-    ui_ask_overwrite(&ui);
+    snprintf(app.path, sizeof app.path, "%s", path);
+    app_ask_overwrite(&app);
     ck_assert(shows("exists; overwrite it? y/n"));
 }
 END_TEST
@@ -400,11 +405,11 @@ END_TEST
  * listed, it has no place, least of all in their units. */
 START_TEST(a_second_set_stays_with_its_quantity)
 {
-    ui.choice.quantity = QUANTITY_ELECTRONEGATIVITY;
-    ui.choice.against = reference_find(study_references(ui.study),
-                                       "electronegativity_allen_2000");
-    ck_assert_ptr_nonnull(ui.choice.against);
-    ui.choice.units[DIMENSION_ENERGY] = unit_find("cm-1");
+    app.session.choice.quantity = QUANTITY_ELECTRONEGATIVITY;
+    app.session.choice.against = reference_find(
+        study_references(app.session.study), "electronegativity_allen_2000");
+    ck_assert_ptr_nonnull(app.session.choice.against);
+    app.session.choice.units[DIMENSION_ENERGY] = unit_find("cm-1");
     resize(60, 200);
     settle();
     ck_assert(shows("I, cm-1"));
@@ -416,9 +421,9 @@ START_TEST(a_coordination_is_never_cut_to_another)
     type("Co");
     key(KEY_CODE_ENTER);
     type("++");
-    ui.choice.quantity = QUANTITY_RADIUS;
-    ui.choice.reference = reference_find(study_references(ui.study),
-                                         "ionic_effective_shannon_1976");
+    app.session.choice.quantity = QUANTITY_RADIUS;
+    app.session.choice.reference = reference_find(
+        study_references(app.session.study), "ionic_effective_shannon_1976");
     settle();
     ck_assert(shows("coordination VI; high spin"));
 }
@@ -431,14 +436,14 @@ START_TEST(a_view_comes_back_as_it_was_left)
     struct text t = text_over(first, sizeof first);
     type("v+");
     type("p");
-    ui.choice.n = 3;
-    ui.choice.l = 1;
-    ui.choice.units[DIMENSION_LENGTH] = unit_find("bohr");
-    ui_save_view(&ui, &t);
-    ui_init(&ui, study);
-    ui_load_view(&ui, first);
+    app.session.choice.n = 3;
+    app.session.choice.l = 1;
+    app.session.choice.units[DIMENSION_LENGTH] = unit_find("bohr");
+    app_save_view(&app, &t);
+    reopen_app();
+    app_load_view(&app, first);
     t = text_over(second, sizeof second);
-    ui_save_view(&ui, &t);
+    app_save_view(&app, &t);
     ck_assert_str_eq(first, second);
     ck_assert_ptr_nonnull(strstr(first, "pin Fe+"));
 }
@@ -446,12 +451,13 @@ END_TEST
 
 START_TEST(a_broken_view_is_passed_over)
 {
-    ui_load_view(&ui, "quantity\nmodel none\nelement Xx\ncharge 999\n\n\nunit\n"
-                      "subshell 9z\npin Fe99+\npin \nreference nothing\n"
-                      "shown never\nnonsense of the past\ncolumns x");
-    ck_assert_int_eq(ui.choice.z, 26);
-    ck_assert_int_eq(ui.choice.charge, 0);
-    ck_assert_int_eq(ui.choice.pin_count, 0);
+    app_load_view(&app,
+                  "quantity\nmodel none\nelement Xx\ncharge 999\n\n\nunit\n"
+                  "subshell 9z\npin Fe99+\npin \nreference nothing\n"
+                  "shown never\nnonsense of the past\ncolumns x");
+    ck_assert_int_eq(app.session.choice.z, 26);
+    ck_assert_int_eq(app.session.choice.charge, 0);
+    ck_assert_int_eq(app.session.choice.pin_count, 0);
     free(drawn());
 }
 END_TEST
@@ -459,31 +465,33 @@ END_TEST
 START_TEST(twelve_pins_and_no_more)
 {
     for (int z = 1; z <= PIN_MAX + 1; z++) {
-        ui_select(&ui, z);
+        session_select(&app.session, z);
         type("p");
     }
-    ck_assert_int_eq(ui.choice.pin_count, PIN_MAX);
+    ck_assert_int_eq(app.session.choice.pin_count, PIN_MAX);
     ck_assert(shows("not pinned"));
     type("c");
     key(KEY_CODE_RIGHT);
     free(drawn());
     type("x");
-    ck_assert_int_eq(ui.choice.pin_count, 0);
+    ck_assert_int_eq(app.session.choice.pin_count, 0);
 }
 END_TEST
 
 START_TEST(keys_do_one_thing_on_each_screen)
 {
-    for (int screen = 0; screen <= SCREEN_KEYS; screen++)
-        for (int i = 0; i < key_row_count(); i++)
+    for (int s = 0; s < screen_list_count; s++) {
+        struct key_set set;
+        session_key_set(screen_list, screen_list_count, screen_list[s], &set);
+        for (int i = 0; i < set.count; i++)
             for (int k = 0; k < i; k++) {
-                const struct key_row *a = key_row_at(i);
-                const struct key_row *b = key_row_at(k);
-                bool both = a->screens >> screen & b->screens >> screen & 1;
-                ck_assert_msg(!both || a->character != b->character ||
-                                  a->key != b->key,
-                              "%s", a->name);
+                const struct key_row *a = set.rows[i];
+                const struct key_row *b = set.rows[k];
+                ck_assert_msg(a->character != b->character || a->key != b->key,
+                              "%s: %s", screen_list[s]->id, a->name);
+                ck_assert_int_ne(a->place, b->place);
             }
+    }
 }
 END_TEST
 
@@ -512,14 +520,14 @@ static void check_picture(int turn)
 /* What every function behind the keys takes for granted. */
 static void check_choice(int turn)
 {
-    const struct choice *c = &ui.choice;
+    const struct choice *c = &app.session.choice;
     ck_assert_msg(c->z >= 1 && c->z <= Z_MAX, "turn %d: Z=%d", turn, c->z);
     ck_assert_msg(c->charge <= Z_MAX, "turn %d: Z=%d charge %d", turn, c->z,
                   c->charge);
     ck_assert(c->pin_count >= 0 && c->pin_count <= PIN_MAX);
     ck_assert(c->quantity < QUANTITY_COUNT && c->shown < SHOWN_COUNT);
-    ck_assert(ui.screen <= SCREEN_KEYS);
-    ck_assert_uint_lt(strlen(ui.prompt.text), sizeof ui.prompt.text);
+    ck_assert(app.screen >= 0 && app.screen < screen_list_count);
+    ck_assert_uint_lt(strlen(app.field.text), sizeof app.field.text);
 }
 
 START_TEST(random_keys_always_leave_something_to_draw)
@@ -537,11 +545,12 @@ START_TEST(random_keys_always_leave_something_to_draw)
             type(c);
         }
         check_choice(i);
-        screens |= 1u << ui.screen;
+        screens |= 1u << app.screen;
         if (i % 5 == 0)
             check_picture(i);
     }
-    ck_assert_uint_eq(screens, (2u << SCREEN_KEYS) - 1); /* all were seen */
+    ck_assert_uint_eq(screens,
+                      (1u << screen_list_count) - 1); /* all were seen */
     /* and whatever is open, it can be left */
     for (int i = 0; i < 4; i++)
         key(KEY_CODE_ESCAPE);
@@ -556,7 +565,7 @@ int main(void)
     suite_add_tcase(suite, agree_case());
     suite_add_tcase(suite, keys_case());
     TCase *golden = tcase_create("golden screens");
-    tcase_add_checked_fixture(golden, open_ui, close_ui);
+    tcase_add_checked_fixture(golden, open_app, close_app);
     tcase_add_test(golden, the_map_at_80x24);
     tcase_add_test(golden, the_map_of_residuals_at_200x60);
     tcase_add_test(golden, the_map_at_40x12_and_its_pane);
@@ -564,7 +573,7 @@ int main(void)
     tcase_add_test(golden, three_species_compared_at_100x40);
     suite_add_tcase(suite, golden);
     TCase *use = tcase_create("use");
-    tcase_add_checked_fixture(use, open_ui, close_ui);
+    tcase_add_checked_fixture(use, open_app, close_app);
     tcase_add_test(use, every_symbol_stands_on_the_map_at_80x24);
     tcase_add_test(use, small_terminals_say_what_they_need);
     tcase_add_test(use, every_size_is_drawn_on_every_screen);

@@ -8,7 +8,8 @@
 #include <string.h>
 
 #include "fuzz/target.h"
-#include "screens/parts.h"
+#include "analysis/atom_report.h"
+#include "app/app.h"
 #include "support/run.h"
 
 #define FILES 12 /* per round */
@@ -180,18 +181,18 @@ START_TEST(a_charge_before_its_element_is_judged_with_it)
 {
     struct status st = status_ok();
     struct study *study = study_new(catalogue_builtin(), &st);
-    struct ui *ui = malloc(sizeof *ui);
-    ck_assert(study && ui);
-    ui_init(ui, study);
-    ui_load_view(ui, "charge 20\nelement H\n");
-    ck_assert_int_eq(ui->choice.z, 1);
-    ck_assert_int_eq(ui->choice.charge, 0);
-    ui_clear(ui);
-    ui_init(ui, study);
-    ui_load_view(ui, "charge 40\nelement U\n");
-    ck_assert_int_eq(ui->choice.charge, 40);
-    ui_clear(ui);
-    free(ui);
+    struct app *app = malloc(sizeof *app);
+    ck_assert(study && app);
+    ck_assert(app_init(app, study, &st));
+    app_load_view(app, "charge 20\nelement H\n");
+    ck_assert_int_eq(app->session.choice.z, 1);
+    ck_assert_int_eq(app->session.choice.charge, 0);
+    app_clear(app);
+    ck_assert(app_init(app, study, &st));
+    app_load_view(app, "charge 40\nelement U\n");
+    ck_assert_int_eq(app->session.choice.charge, 40);
+    app_clear(app);
+    free(app);
     study_free(study);
 }
 END_TEST

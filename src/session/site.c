@@ -1,0 +1,24 @@
+/* SPDX-License-Identifier: MIT */
+#include "session/site.h"
+
+void session_asked_site(const struct session *s, const struct provenance *set,
+                        struct text *t)
+{
+    const struct reference *reference =
+        reference_find(study_references(s->study), set->id);
+    if (!reference || !reference_has_sites(reference))
+        return;
+    text_add(t, " at ");
+    reference_asked_site(reference, s->choice.site, t);
+}
+
+void session_stored_site(const struct session *s, const struct species *species,
+                         const struct reading *stored, struct text *t)
+{
+    if (stored->state != READING_OK || !stored->provenance)
+        return;
+    const struct reference *reference =
+        reference_find(study_references(s->study), stored->provenance->id);
+    if (reference)
+        reference_site_text(reference, species, s->choice.site, t);
+}
