@@ -1,6 +1,6 @@
 /* SPDX-License-Identifier: MIT */
 /* `atom`: one self-consistent atom. */
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/output.h"
 #include "element/selection.h"
 #include "report/solved.h"
@@ -48,7 +48,7 @@ static bool solve(struct atom_run *run, const struct request *r,
                        report->cycles);
 }
 
-bool cli_atom(struct request *r, struct status *st)
+static bool run(struct request *r, struct status *st)
 {
     struct species species;
     struct ask ask;
@@ -66,3 +66,39 @@ bool cli_atom(struct request *r, struct status *st)
     atom_run_free(run);
     return ok;
 }
+
+static const struct option *const options[] = {
+    &option_charge,     &option_configuration,
+    &option_unit,       &option_functional,
+    &option_relativity, &option_speed_of_light,
+    OPTIONS_OF_OUTPUT,  NULL,
+};
+
+const struct command command_atom = {
+    .name = "atom",
+    .operands = "ELEMENT",
+    .least = 1,
+    .most = 1,
+    .manner = {.chooses = true},
+    .options = options,
+    .summary = "solve one atom or ion and print what it is made of",
+    .about =
+        "Solves the Kohn-Sham equations of one atom or ion, spherical and with "
+        "a "
+        "point nucleus, until they are self-consistent. Prints the total "
+        "energy "
+        "and its parts, then for each subshell its electrons, orbital energy, "
+        "mean "
+        "radius, radius of the outermost maximum of the radial density D(r) "
+        "and "
+        "effective nuclear charge by each definition. The density that the "
+        "model "
+        "scf rests on is the default, LSD with the Dirac equation. An atom "
+        "that "
+        "does not converge or does not bind is a failure and gives no number. "
+        "ELEMENT is a symbol, name or atomic number, or an ion that carries "
+        "its "
+        "charge (Fe3+).",
+    .example = "atom Fe3+ --functional pbe --format csv",
+    .run = run,
+};

@@ -1,6 +1,6 @@
 /* SPDX-License-Identifier: MIT */
 /* `audit`: how far each model can be trusted where. */
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/output.h"
 #include "report/audit.h"
 
@@ -55,7 +55,7 @@ static bool gather(struct request *r, struct audit *audit, struct status *st)
     return true;
 }
 
-bool cli_audit(struct request *r, struct status *st)
+static bool run(struct request *r, struct status *st)
 {
     struct audit audit = {0};
     struct report report;
@@ -78,3 +78,43 @@ bool cli_audit(struct request *r, struct status *st)
     audit_clear(&audit);
     return ok;
 }
+
+static const struct option *const options[] = {
+    &option_quantity,
+    &option_model,
+    &option_charge,
+    &option_subshell,
+    &option_reference,
+    &option_against,
+    &option_coordination,
+    &option_spin,
+    &option_evidence,
+    &option_unit,
+    &option_scope,
+    OPTIONS_OF_OUTPUT,
+    NULL,
+};
+
+const struct command command_audit = {
+    .name = "audit",
+    .operands = "[SELECTION...]",
+    .least = 0,
+    .most = -1,
+    .manner = {.chooses = true},
+    .options = options,
+    .summary = "print how large the residuals of each model are, and where",
+    .about =
+        "Prints statistics of the residuals of each model against a reference "
+        "set: count, gaps, mean, mean absolute, root mean square, and the "
+        "largest "
+        "with its species, for all chosen species and by block, period and "
+        "group, "
+        "by charge where several were asked for, by the kind of reference "
+        "value "
+        "where several occur; then which model is best where, over the species "
+        "that all of them have. With --against the second set takes the place "
+        "of "
+        "a model. " COMMAND_SELECTION,
+    .example = "audit block:d --quantity ionization",
+    .run = run,
+};

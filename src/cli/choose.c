@@ -8,11 +8,6 @@
 #include "base/text.h"
 
 #define LINE_MAX_BYTES 256
-/* Charges asked for, both ends included. */
-struct charges {
-    int low, high;
-};
-
 #define BLANKS " \t\r\n\f\v"
 
 static bool add_atom(struct request *r, struct request_atom atom,
@@ -47,8 +42,8 @@ static bool exists(const struct request *r, struct request_atom atom,
 /* One element at every charge asked for that it has; a range passes over what
  * does not exist, and over the bare nucleus, which has no electron left. */
 static bool take_charges(struct request *r, struct chosen c,
-                         struct charges charges, bool named, const char *word,
-                         struct status *st)
+                         struct request_charges charges, bool named,
+                         const char *word, struct status *st)
 {
     struct status why = status_ok();
     bool any = false;
@@ -79,9 +74,10 @@ static bool take_charges(struct request *r, struct chosen c,
 }
 
 static bool take(struct request *r, const struct selection *s,
-                 struct charges charges, const char *word, struct status *st)
+                 struct request_charges charges, const char *word,
+                 struct status *st)
 {
-    const char *given = r->call->value[OPTION_CHARGE];
+    const char *given = charges.text;
     for (int i = 0; i < s->count; i++) {
         const struct chosen *c = &s->items[i];
         if (c->has_charge && given &&
@@ -97,14 +93,14 @@ static bool take(struct request *r, const struct selection *s,
 }
 
 static bool take_word(struct request *r, const char *word,
-                      struct charges charges, struct status *st)
+                      struct request_charges charges, struct status *st)
 {
     struct selection s = {0};
     return selection_add(&s, word, st) && take(r, &s, charges, word, st);
 }
 
 /* Names from standard input, one per line, blank lines passed over. */
-static bool take_lines(struct request *r, struct charges charges,
+static bool take_lines(struct request *r, struct request_charges charges,
                        struct status *st)
 {
     char line[LINE_MAX_BYTES];
@@ -136,38 +132,6 @@ static bool take_lines(struct request *r, struct charges charges,
                               "one per line");
 }
 
-/* "2", "-1", "0..5", "all". */
-static bool read_charges(const char *text, struct charges *charges,
-                         struct status *st)
-{
-    char first[16];
-    *charges = (struct charges){0, 0};
-    if (!text)
-        return true;
-    if (strcmp(text, "all") == 0) {
-        charges->high = Z_MAX;
-        return true;
-    }
-    const char *dots = strstr(text, "..");
-    size_t length = dots ? (size_t)(dots - text) : strlen(text);
-    bool ok = length < sizeof first;
-    if (ok) {
-        memcpy(first, text, length);
-        first[length] = '\0';
-        ok = text_to_int(first, &charges->low);
-        charges->high = charges->low;
-        if (ok && dots)
-            ok = text_to_int(dots + 2, &charges->high);
-    }
-    if (ok && abs(charges->low) <= Z_MAX && abs(charges->high) <= Z_MAX &&
-        charges->low <= charges->high)
-        return true;
-    return status_fail(st, STATUS_USAGE,
-                       "--charge %s: expected a whole number from %d to %d, a "
-                       "range such as 0..5, or all",
-                       text, -Z_MAX, Z_MAX);
-}
-
 static bool nothing_chosen(const struct request *r, const char *given,
                            struct status *st)
 {
@@ -175,7 +139,7 @@ static bool nothing_chosen(const struct request *r, const char *given,
         return status_fail(st, STATUS_USAGE,
                            "--configuration %s: no chosen element holds so "
                            "many electrons at charge %s",
-                           r->call->value[OPTION_CONFIGURATION],
+                           call_value(r->call, &option_configuration),
                            given ? given : "0");
     return status_fail(st, STATUS_USAGE,
                        "--charge %s: no chosen element has a known ion of "
@@ -186,11 +150,8 @@ static bool nothing_chosen(const struct request *r, const char *given,
 bool choose_atoms(struct request *r, struct status *st)
 {
     const struct call *call = r->call;
-    const char *given = call->value[OPTION_CHARGE];
-    struct charges charges;
+    struct request_charges charges = r->charges;
     bool from_input = false;
-    if (!read_charges(given, &charges, st))
-        return false;
     if (call->operand_count == 0) {
         struct selection all = {0};
         selection_all(&all);
@@ -208,5 +169,5 @@ bool choose_atoms(struct request *r, struct status *st)
                  : !take_word(r, word, charges, st))
             return false;
     }
-    return r->atom_count > 0 || nothing_chosen(r, given, st);
+    return r->atom_count > 0 || nothing_chosen(r, charges.text, st);
 }

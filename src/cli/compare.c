@@ -2,7 +2,7 @@
 /* `compare`: elements or ions side by side. */
 #include <string.h>
 
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/output.h"
 #include "report/comparison.h"
 #include "study/facts.h"
@@ -104,7 +104,7 @@ static bool write(const struct request *r, const struct comparison *c,
     return ok;
 }
 
-bool cli_compare(struct request *r, struct status *st)
+static bool run(struct request *r, struct status *st)
 {
     struct ask asks[COMPARISON_MAX];
     struct comparison comparison;
@@ -124,3 +124,38 @@ bool cli_compare(struct request *r, struct status *st)
     comparison_clear(&comparison);
     return ok;
 }
+
+static const struct option *const options[] = {
+    &option_quantity,
+    &option_model,
+    &option_charge,
+    &option_subshell,
+    &option_configuration,
+    &option_term,
+    &option_reference,
+    &option_against,
+    &option_coordination,
+    &option_spin,
+    &option_unit,
+    OPTIONS_OF_OUTPUT,
+    NULL,
+};
+
+const struct command command_compare = {
+    .name = "compare",
+    .operands = "SELECTION...",
+    .least = 1,
+    .most = -1,
+    .manner = {.chooses = true,
+               .all_quantities = true,
+               .all_sets = true,
+               .sets_beside = true},
+    .options = options,
+    .summary = "print elements or ions side by side",
+    .about =
+        "Prints up to twelve elements or ions side by side: all quantities, "
+        "each from every model and data set that has a value, with differences "
+        "from the first. " COMMAND_SELECTION,
+    .example = "compare Fe3+ Al3+ Cr3+ --quantity radius",
+    .run = run,
+};

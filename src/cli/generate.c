@@ -22,10 +22,10 @@ static const struct reference_list *references(void)
     return &list;
 }
 
-void generate_words(FILE *out, enum word_kind kind)
+void generate_words(FILE *out, const struct option *option)
 {
     struct words words;
-    words_fill(&words, kind, references());
+    words_fill(&words, option, references());
     for (int i = 0; i < words.count; i++)
         fprintf(out, i ? " %s" : "%s", words.items[i]);
 }
@@ -38,8 +38,8 @@ void generate_symbols(FILE *out)
 
 void generate_commands(FILE *out, const char *separator)
 {
-    for (int i = 1; i < COMMAND_COUNT; i++)
-        fprintf(out, "%s%s", i > 1 ? separator : "", command_at(i)->name);
+    for (int i = 1; i < command_list_count; i++)
+        fprintf(out, "%s%s", i > 1 ? separator : "", command_list[i]->name);
 }
 
 static const struct {

@@ -8,8 +8,8 @@
 #include "base/status.h"
 #include "cli/option.h"
 
-/* Words of a kind, symbols of the elements, names of the commands. */
-void generate_words(FILE *out, enum word_kind kind);
+/* Words of an option, symbols of the elements, names of the commands. */
+void generate_words(FILE *out, const struct option *option);
 void generate_symbols(FILE *out);
 void generate_commands(FILE *out, const char *separator);
 

@@ -61,8 +61,8 @@ static void put_operands(FILE *out, const char *operands)
 
 static void put_synopsis(FILE *out)
 {
-    for (int c = 0; c < COMMAND_COUNT; c++) {
-        const struct command *command = command_at(c);
+    for (int c = 0; c < command_list_count; c++) {
+        const struct command *command = command_list[c];
         fputs(".Nm\n", out);
         if (command->name)
             fprintf(out, ".Cm %s\n", command->name);
@@ -73,28 +73,22 @@ static void put_synopsis(FILE *out)
 
 static void put_commands(FILE *out)
 {
-    for (int c = 1; c < COMMAND_COUNT; c++) {
-        const struct command *command = command_at(c);
+    for (int c = 1; c < command_list_count; c++) {
+        const struct command *command = command_list[c];
         fprintf(out, ".It Cm %s\n", command->name);
         put_text(out, command->about);
         fputs("Options:\n", out);
-        const struct option *last = NULL;
-        for (int i = 0; i < OPTION_COUNT; i++) {
-            if (!option_belongs(option_at(i), command->id))
-                continue;
-            if (last)
-                fprintf(out, ".Fl Fl %s ,\n", last->name);
-            last = option_at(i);
-        }
-        if (last)
-            fprintf(out, ".Fl Fl %s .\n", last->name);
+        for (const struct option *const *o = command->options; *o; o++)
+            fprintf(out, ".Fl Fl %s %c\n", (*o)->name, o[1] ? ',' : '.');
     }
 }
 
 static void put_options(FILE *out)
 {
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = options[i];
         fputs(".It ", out);
         if (o->letter)
             fprintf(out, "Fl %c , ", o->letter);

@@ -6,28 +6,30 @@
 #include "cli/command.h"
 
 /* True when a command takes elements. */
-static bool takes_elements(int command)
+static bool takes_elements(const struct command *command)
 {
-    return command_at(command)->operands[0] != '\0';
+    return command->operands[0] != '\0';
 }
 
 static bool has_words(const struct option *o)
 {
-    return o->words != WORDS_NONE && o->words != WORDS_FILE;
+    return o->words != NULL;
 }
 
 static void put_bash_arguments(FILE *out)
 {
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
     fputs("    case $option in\n", out);
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = options[i];
         if (!o->argument)
             continue;
         fprintf(out, "    --%s", o->name);
         if (o->letter)
             fprintf(out, "|-%c", o->letter);
         fputs(")\n        ", out);
-        if (o->words == WORDS_FILE) {
+        if (o->file) {
             fputs("compopt -o filenames 2>/dev/null\n"
                   "        mapfile -t COMPREPLY < <(compgen -f -- \"$cur\")",
                   out);
@@ -35,7 +37,7 @@ static void put_bash_arguments(FILE *out)
             fputs(o->list ? "_outershell_words list '"
                           : "_outershell_words one '",
                   out);
-            generate_words(out, o->words);
+            generate_words(out, o);
             fputs("'", out);
         } else {
             fputs(":", out);
@@ -48,18 +50,18 @@ static void put_bash_arguments(FILE *out)
 static void put_bash_options(FILE *out)
 {
     fputs("    case $command in\n", out);
-    for (int c = 0; c < COMMAND_COUNT; c++) {
-        const char *name = command_at(c)->name;
+    for (int c = 0; c < command_list_count; c++) {
+        const struct command *command = command_list[c];
+        const char *name = command->name;
         fprintf(out, "    %s)\n        options='", name ? name : "''");
-        for (int i = 0; i < OPTION_COUNT; i++)
-            if (option_belongs(option_at(i), (enum command_id)c))
-                fprintf(out, " --%s", option_at(i)->name);
+        for (const struct option *const *o = command->options; *o; o++)
+            fprintf(out, " --%s", (*o)->name);
         fputs("'\n", out);
         if (!name) {
             fputs("        operands='", out);
             generate_commands(out, " ");
             fputs("'\n", out);
-        } else if (takes_elements(c)) {
+        } else if (takes_elements(command)) {
             fputs("        operands=$elements\n", out);
         }
         fputs("        ;;\n", out);
@@ -133,14 +135,14 @@ static void put_zsh_text(FILE *out, const char *text)
 static void put_zsh_action(FILE *out, const struct option *o)
 {
     fprintf(out, ":%s:", o->argument);
-    if (o->words == WORDS_FILE) {
+    if (o->file) {
         fputs("_files", out);
     } else if (has_words(o) && o->list) {
         fprintf(out, "_values -s , %s ", o->argument);
-        generate_words(out, o->words);
+        generate_words(out, o);
     } else if (has_words(o)) {
         fputs("(", out);
-        generate_words(out, o->words);
+        generate_words(out, o);
         fputs(")", out);
     }
 }
@@ -165,24 +167,22 @@ static void put_zsh_option(FILE *out, const struct option *o)
     fputs("'", out);
 }
 
-static void put_zsh_command(FILE *out, int command)
+static void put_zsh_command(FILE *out, const struct command *c)
 {
-    const struct command *c = command_at(command);
     fprintf(out, "    %s)\n        _arguments -s -S", c->name ? c->name : "''");
-    for (int i = 0; i < OPTION_COUNT; i++)
-        if (option_belongs(option_at(i), (enum command_id)command))
-            put_zsh_option(out, option_at(i));
+    for (const struct option *const *o = c->options; *o; o++)
+        put_zsh_option(out, *o);
     if (!c->name) {
         fputs(" \\\n        '1:command:((", out);
-        for (int i = 1; i < COMMAND_COUNT; i++) {
-            fprintf(out, i > 1 ? " %s\\:\"" : "%s\\:\"", command_at(i)->name);
-            put_zsh_text(out, command_at(i)->summary);
+        for (int i = 1; i < command_list_count; i++) {
+            fprintf(out, i > 1 ? " %s\\:\"" : "%s\\:\"", command_list[i]->name);
+            put_zsh_text(out, command_list[i]->summary);
             fputs("\"", out);
         }
         fputs("))'", out);
     } else {
         fputs(" \\\n        '1:command:'", out);
-        if (takes_elements(command)) {
+        if (takes_elements(c)) {
             fputs(" \\\n        '*:selection:(", out);
             generate_symbols(out);
             fputs(")'", out);
@@ -207,8 +207,8 @@ void generate_zsh(FILE *out)
           "    done\n"
           "    case $command in\n",
           out);
-    for (int c = 0; c < COMMAND_COUNT; c++)
-        put_zsh_command(out, c);
+    for (int c = 0; c < command_list_count; c++)
+        put_zsh_command(out, command_list[c]);
     fputs("    esac\n}\n_outershell \"$@\"\n", out);
 }
 
@@ -224,12 +224,12 @@ static void put_fish_text(FILE *out, const char *text)
 /* The commands that an option belongs to, as a condition. */
 static void put_fish_condition(FILE *out, const struct option *o)
 {
-    if (option_belongs(o, COMMAND_SCREENS))
+    if (command_takes(command_list[0], o))
         return;
     fputs(" -n '__fish_seen_subcommand_from", out);
-    for (int c = 1; c < COMMAND_COUNT; c++)
-        if (option_belongs(o, (enum command_id)c))
-            fprintf(out, " %s", command_at(c)->name);
+    for (int c = 1; c < command_list_count; c++)
+        if (command_takes(command_list[c], o))
+            fprintf(out, " %s", command_list[c]->name);
     fputs("'", out);
 }
 
@@ -240,14 +240,14 @@ static void put_fish_option(FILE *out, const struct option *o)
     if (o->letter)
         fprintf(out, " -s %c", o->letter);
     fprintf(out, " -l %s", o->name);
-    if (o->words == WORDS_FILE)
+    if (o->file)
         fputs(" -r -F", out);
     else if (has_words(o) && o->list)
         fprintf(out, " -x -a '(__fish_complete_list , __outershell_%s)'",
                 o->name);
     else if (has_words(o)) {
         fputs(" -x -a '", out);
-        generate_words(out, o->words);
+        generate_words(out, o);
         fputs("'", out);
     } else if (o->argument) {
         fputs(" -x", out);
@@ -257,33 +257,38 @@ static void put_fish_option(FILE *out, const struct option *o)
     fputs("'\n", out);
 }
 
+/* A command, and what it takes. */
+static void put_fish_command(FILE *out, const struct command *c)
+{
+    fprintf(out, "complete -c outershell -n __fish_use_subcommand -a %s -d '",
+            c->name);
+    put_fish_text(out, c->summary);
+    fputs("'\n", out);
+    if (!takes_elements(c))
+        return;
+    fprintf(out,
+            "complete -c outershell -n '__fish_seen_subcommand_from %s' -a '",
+            c->name);
+    generate_symbols(out);
+    fputs("'\n", out);
+}
+
 void generate_fish(FILE *out)
 {
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
     fputs("# fish completion for outershell; made from its tables\n", out);
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = options[i];
         if (!o->list)
             continue;
         fprintf(out, "function __outershell_%s\n    printf '%%s\\n' ", o->name);
-        generate_words(out, o->words);
+        generate_words(out, o);
         fputs("\nend\n", out);
     }
     fputs("complete -c outershell -f\n", out);
-    for (int c = 1; c < COMMAND_COUNT; c++) {
-        fprintf(out,
-                "complete -c outershell -n __fish_use_subcommand -a %s -d '",
-                command_at(c)->name);
-        put_fish_text(out, command_at(c)->summary);
-        fputs("'\n", out);
-        if (!takes_elements(c))
-            continue;
-        fprintf(out,
-                "complete -c outershell -n '__fish_seen_subcommand_from %s' "
-                "-a '",
-                command_at(c)->name);
-        generate_symbols(out);
-        fputs("'\n", out);
-    }
-    for (int i = 0; i < OPTION_COUNT; i++)
-        put_fish_option(out, option_at(i));
+    for (int c = 1; c < command_list_count; c++)
+        put_fish_command(out, command_list[c]);
+    for (int i = 0; i < count; i++)
+        put_fish_option(out, options[i]);
 }

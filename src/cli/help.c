@@ -48,23 +48,23 @@ static void put_option(FILE *out, const struct option *o)
     put_wrapped(out, o->help, 2 * OPTION_INDENT + 2);
 }
 
-static void put_words(FILE *out, const char *title, enum word_kind kind)
+/* The words of the options that show theirs. */
+static void put_words(FILE *out, const struct option *option)
 {
     char list[512];
     struct words words;
     struct text t = text_over(list, sizeof list);
-    words_fill(&words, kind, NULL);
-    text_addf(&t, "%s: ", title);
+    words_fill(&words, option, NULL);
+    text_addf(&t, "%s: ", option->title);
     words_join(&t, words.items, words.count, "and");
     put_wrapped(out, list, 0);
 }
 
-static void put_options(FILE *out, enum command_id command)
+static void put_options(FILE *out, const struct command *command)
 {
     fprintf(out, "\nOptions:\n");
-    for (int i = 0; i < OPTION_COUNT; i++)
-        if (option_belongs(option_at(i), command))
-            put_option(out, option_at(i));
+    for (const struct option *const *o = command->options; *o; o++)
+        put_option(out, *o);
 }
 
 static void put_general(FILE *out)
@@ -77,12 +77,12 @@ static void put_general(FILE *out)
                 "reference and the residual.",
                 0);
     putc('\n', out);
-    put_wrapped(out, command_at(COMMAND_SCREENS)->about, 0);
+    put_wrapped(out, command_list[0]->about, 0);
     fprintf(out, "\nCommands:\n");
-    for (int i = 1; i < COMMAND_COUNT; i++)
-        fprintf(out, "  %-9s %s\n", command_at(i)->name,
-                command_at(i)->summary);
-    put_options(out, COMMAND_SCREENS);
+    for (int i = 1; i < command_list_count; i++)
+        fprintf(out, "  %-9s %s\n", command_list[i]->name,
+                command_list[i]->summary);
+    put_options(out, command_list[0]);
     fprintf(out, "\noutershell COMMAND --help tells more of a command.\n");
 }
 
@@ -95,14 +95,11 @@ void help_print(FILE *out, const struct command *command)
     fprintf(out, "Usage: outershell %s [OPTION...]%s%s\n\n", command->name,
             command->operands[0] ? " " : "", command->operands);
     put_wrapped(out, command->about, 0);
-    put_options(out, command->id);
+    put_options(out, command);
     putc('\n', out);
-    if (option_belongs(option_at(OPTION_QUANTITY), command->id))
-        put_words(out, "Quantities", WORDS_QUANTITY);
-    if (option_belongs(option_at(OPTION_MODEL), command->id))
-        put_words(out, "Models", WORDS_MODEL);
-    if (option_belongs(option_at(OPTION_UNIT), command->id))
-        put_words(out, "Units", WORDS_UNIT);
+    for (const struct option *const *o = command->options; *o; o++)
+        if ((*o)->title)
+            put_words(out, *o);
     fprintf(out, "Example: outershell %s\n", command->example);
 }
 

@@ -3,7 +3,7 @@
 #include <assert.h>
 #include <stdlib.h>
 
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/output.h"
 #include "report/rows.h"
 
@@ -60,7 +60,7 @@ static bool gather_all(struct request *r, struct gathered *g, struct status *st)
     return true;
 }
 
-bool cli_list(struct request *r, struct status *st)
+static bool run(struct request *r, struct status *st)
 {
     struct report report;
     size_t wanted = rows_wanted(r);
@@ -79,3 +79,29 @@ bool cli_list(struct request *r, struct status *st)
     free(g.rows);
     return ok;
 }
+
+static const struct option *const options[] = {
+    &option_quantity,  &option_model,         &option_charge,
+    &option_subshell,  &option_configuration, &option_term,
+    &option_reference, &option_against,       &option_coordination,
+    &option_spin,      &option_evidence,      &option_unit,
+    &option_sort,      OPTIONS_OF_OUTPUT,     NULL,
+};
+
+const struct command command_print = {
+    .name = "list",
+    .operands = "[SELECTION...]",
+    .least = 0,
+    .most = -1,
+    .manner = {.chooses = true, .one_set = true, .needs_models = true},
+    .options = options,
+    .summary = "print values, references and residuals, one row each",
+    .about =
+        "Prints one row per element, quantity and model that offers the "
+        "quantity: the model's value, the stored reference and the residual "
+        "between them. Without a selection all elements are listed. Runs, "
+        "periods, groups, blocks and the whole table leave out elements that "
+        "have no such charge. " COMMAND_SELECTION,
+    .example = "list Ti-Zn --quantity radius --model slater",
+    .run = run,
+};

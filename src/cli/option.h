@@ -1,53 +1,18 @@
 /* SPDX-License-Identifier: MIT */
-/* The one table of options. The parser, --help, the manual, the completions
- * and the tests all iterate it. */
+/* Options: what one is, how it reads itself, and those that there are. A
+ * command lists the options that it takes; the parser, --help, the manual, the
+ * completions and the tests iterate the commands. */
 #ifndef CLI_OPTION_H
 #define CLI_OPTION_H
 
 #include <stdbool.h>
 #include <stddef.h>
 
-/* Ids of commands, one bit each in option.commands. COMMAND_SCREENS is the
- * call without a command. */
-enum command_id {
-    COMMAND_SCREENS,
-    COMMAND_LIST,
-    COMMAND_COMPARE,
-    COMMAND_ATOM,
-    COMMAND_AUDIT,
-    COMMAND_SOURCES,
-    COMMAND_COUNT
-};
+#include "base/status.h"
 
-enum option_id {
-    OPTION_QUANTITY,
-    OPTION_MODEL,
-    OPTION_CHARGE,
-    OPTION_SUBSHELL,
-    OPTION_CONFIGURATION,
-    OPTION_TERM,
-    OPTION_REFERENCE,
-    OPTION_AGAINST,
-    OPTION_COORDINATION,
-    OPTION_SPIN,
-    OPTION_EVIDENCE,
-    OPTION_UNIT,
-    OPTION_FUNCTIONAL,
-    OPTION_RELATIVITY,
-    OPTION_SPEED_OF_LIGHT,
-    OPTION_SORT,
-    OPTION_SCOPE,
-    OPTION_DATA,
-    OPTION_FORMAT,
-    OPTION_OUTPUT,
-    OPTION_FORCE,
-    OPTION_COLOR,
-    OPTION_ASCII,
-    OPTION_BACKGROUND,
-    OPTION_HELP,
-    OPTION_VERSION,
-    OPTION_COUNT
-};
+struct reference_list;
+struct request;
+struct words;
 
 /* How often an option may stand and whether it takes an argument. */
 enum option_kind {
@@ -56,52 +21,71 @@ enum option_kind {
     OPTION_REPEAT, /* one argument, any number of times */
 };
 
-/* Which words an argument is made of (words.h lists them). */
-enum word_kind {
-    WORDS_NONE, /* free text, a number, or no argument */
-    WORDS_QUANTITY,
-    WORDS_MODEL,
-    WORDS_REFERENCE,
-    WORDS_COORDINATION,
-    WORDS_SPIN,
-    WORDS_EVIDENCE,
-    WORDS_SORT,
-    WORDS_SCOPE,
-    WORDS_UNIT,
-    WORDS_SUBSHELL,
-    WORDS_TERM,
-    WORDS_FUNCTIONAL,
-    WORDS_RELATIVITY,
-    WORDS_FORMAT,
-    WORDS_COLOR,
-    WORDS_BACKGROUND,
-    WORDS_FILE, /* a path: the shell completes it */
-};
+/* When an option is read: before the study is opened, then what others rest
+ * on, then the others; within a stage in the order of the command's list. */
+enum option_stage { OPTION_BEFORE, OPTION_FIRST, OPTION_LATER };
 
 /* letter: short form, 0 when there is none. argument: its name in help, NULL
- * for a flag. list: several words parted by commas. help: one clause. */
+ * for a flag. words fills in the words that an argument is made of, NULL for
+ * free text or a number; file: it is a path, which the shell completes. list:
+ * several words separated by commas. title: heading under which --help lists
+ * the words, or NULL. apart: words that differ by a letter mean other things;
+ * none is proposed for another. help: one clause.
+ *
+ * read understands the argument ("" for a flag) and puts it where it belongs in
+ * the request; a repeated option is read once for each argument. It is called
+ * when the option was given, with NULL otherwise where `always` says so. Fails
+ * with STATUS_USAGE naming option and word, or as the file that it reads.
+ * check, where there is one, judges a given argument once the species are
+ * chosen. */
 struct option {
-    enum option_id id;
     const char *name;
     char letter;
     const char *argument;
     enum option_kind kind;
-    enum word_kind words;
-    bool list;
-    unsigned commands;
+    enum option_stage stage;
+    void (*words)(struct words *words, const struct reference_list *references);
+    bool file, list, apart, always;
+    const char *title;
     const char *help;
+    bool (*read)(struct request *request, const struct option *self,
+                 const char *value, struct status *st);
+    bool (*check)(const struct request *request, const struct option *self,
+                  const char *value, struct status *st);
 };
 
-/* The i-th option in the order of the help, 0 <= i < OPTION_COUNT; its id is
- * i. */
-const struct option *option_at(int i);
+extern const struct option option_quantity;
+extern const struct option option_model;
+extern const struct option option_charge;
+extern const struct option option_subshell;
+extern const struct option option_configuration;
+extern const struct option option_term;
+extern const struct option option_reference;
+extern const struct option option_against;
+extern const struct option option_coordination;
+extern const struct option option_spin;
+extern const struct option option_evidence;
+extern const struct option option_unit;
+extern const struct option option_functional;
+extern const struct option option_relativity;
+extern const struct option option_speed_of_light;
+extern const struct option option_sort;
+extern const struct option option_scope;
+extern const struct option option_data;
+extern const struct option option_format;
+extern const struct option option_output;
+extern const struct option option_force;
+extern const struct option option_color;
+extern const struct option option_ascii;
+extern const struct option option_background;
+extern const struct option option_help;
+extern const struct option option_version;
 
-/* By long name without dashes (length bytes), or by letter; NULL when there is
- * none. */
-const struct option *option_by_name(const char *name, size_t length);
-const struct option *option_by_letter(char letter);
-
-/* True when a command takes the option. */
-bool option_belongs(const struct option *option, enum command_id command);
+/* What every command that prints takes, for the end of its list; and the
+ * screens. */
+#define OPTIONS_OF_OUTPUT                                                      \
+    &option_data, &option_format, &option_output, &option_force,               \
+        &option_color, &option_ascii, &option_background, &option_help,        \
+        &option_version
 
 #endif

@@ -10,6 +10,7 @@
 /* More than any word or list that is accepted. */
 #define ARGUMENT_MAX 300
 #define OPERAND_MAX 60
+#define COMMANDS_MAX 64
 
 static bool is_long(const char *word)
 {
@@ -36,15 +37,25 @@ static void find_help(int argc, char *const *argv, struct call *call)
     }
 }
 
+const char *call_value(const struct call *call, const struct option *option)
+{
+    for (int i = call->option_count - 1; i >= 0; i--)
+        if (call->options[i].option == option)
+            return call->options[i].value;
+    return NULL;
+}
+
 static bool unknown_option(const char *word, size_t length, struct status *st)
 {
     char name[WORD_TEXT_MAX];
     struct text t = text_over(name, sizeof name);
     text_add_bytes(&t, word + 2, length);
-    const char *names[OPTION_COUNT];
-    for (int i = 0; i < OPTION_COUNT; i++)
-        names[i] = option_at(i)->name;
-    const char *near = word_nearest(name, names, OPTION_COUNT);
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    const char *names[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
+    for (int i = 0; i < count; i++)
+        names[i] = options[i]->name;
+    const char *near = word_nearest(name, names, count);
     if (near)
         return status_fail(st, STATUS_USAGE,
                            "%.*s: no such option; did you mean --%s?",
@@ -54,32 +65,36 @@ static bool unknown_option(const char *word, size_t length, struct status *st)
                        (int)length + 2, word);
 }
 
-static bool take(struct call *call, const struct option *option,
-                 const char *value, struct status *st)
+static bool check_argument(const struct option *option, const char *value,
+                           struct status *st)
 {
     if (option->argument && value[0] == '\0')
         return status_fail(st, STATUS_USAGE, "--%s '': expected %s",
                            option->name, option->argument);
-    if (option->argument && option->words != WORDS_FILE &&
-        strlen(value) > ARGUMENT_MAX)
+    if (option->argument && !option->file && strlen(value) > ARGUMENT_MAX)
         return status_fail(st, STATUS_USAGE,
                            "--%s %.40s...: longer than %d bytes; expected %s",
                            option->name, value, ARGUMENT_MAX, option->argument);
-    if (option->kind == OPTION_REPEAT) {
-        if (call->repeat_count == CALL_REPEATS_MAX)
-            return status_fail(st, STATUS_USAGE,
-                               "--%s: given more than %d times", option->name,
-                               CALL_REPEATS_MAX);
-        call->repeats[call->repeat_count].id = option->id;
-        call->repeats[call->repeat_count++].value = value;
-    } else if (call->value[option->id]) {
-        if (option->argument)
-            return status_fail(st, STATUS_USAGE,
-                               "--%s: given twice, as '%s' and as '%s'",
-                               option->name, call->value[option->id], value);
+    return true;
+}
+
+static bool take(struct call *call, const struct option *option,
+                 const char *value, struct status *st)
+{
+    const char *before = call_value(call, option);
+    if (!check_argument(option, value, st))
+        return false;
+    if (before && option->kind == OPTION_VALUE)
+        return status_fail(st, STATUS_USAGE,
+                           "--%s: given twice, as '%s' and as '%s'",
+                           option->name, before, value);
+    if (before && option->kind == OPTION_FLAG)
         return status_fail(st, STATUS_USAGE, "--%s: given twice", option->name);
-    }
-    call->value[option->id] = value;
+    if (call->option_count == CALL_OPTIONS_MAX)
+        return status_fail(st, STATUS_USAGE,
+                           "--%s: more than %d options in one call",
+                           option->name, CALL_OPTIONS_MAX);
+    call->options[call->option_count++] = (struct call_option){option, value};
     return true;
 }
 
@@ -104,7 +119,7 @@ static bool parse_long(int argc, char *const *argv, int *i, struct call *call,
     const char *word = argv[*i];
     const char *equals = strchr(word, '=');
     size_t length = equals ? (size_t)(equals - word) - 2 : strlen(word) - 2;
-    const struct option *option = option_by_name(word + 2, length);
+    const struct option *option = command_option(word + 2, length);
     if (!option)
         return unknown_option(word, length, st);
     const char *value = "";
@@ -125,7 +140,7 @@ static bool parse_short(int argc, char *const *argv, int *i, struct call *call,
 {
     const char *word = argv[*i];
     for (const char *p = word + 1; *p; p++) {
-        const struct option *option = option_by_letter(*p);
+        const struct option *option = command_option_letter(*p);
         uint32_t code;
         size_t bytes = utf8_decode(p, strlen(p), &code);
         if (!option && bytes == 1 && code < 0x7F && code > 0x20)
@@ -149,15 +164,27 @@ static bool parse_short(int argc, char *const *argv, int *i, struct call *call,
     return true;
 }
 
+/* Names of the commands that take an option, of all for NULL; gives how many.
+ */
+static int names_of_commands(const struct option *option,
+                             const char *names[COMMANDS_MAX])
+{
+    int count = 0;
+    for (int c = 0; c < command_list_count && count < COMMANDS_MAX; c++)
+        if (command_list[c]->name &&
+            (!option || command_takes(command_list[c], option)))
+            names[count++] = command_list[c]->name;
+    return count;
+}
+
 static bool unknown_command(const char *word, struct status *st)
 {
-    const char *names[COMMAND_COUNT];
+    const char *names[COMMANDS_MAX];
     char all[WORD_LIST_TEXT_MAX];
     struct text t = text_over(all, sizeof all);
-    for (int i = 1; i < COMMAND_COUNT; i++)
-        names[i - 1] = command_at(i)->name;
-    const char *near = word_nearest(word, names, COMMAND_COUNT - 1);
-    words_join(&t, names, COMMAND_COUNT - 1, "or");
+    int count = names_of_commands(NULL, names);
+    const char *near = word_nearest(word, names, count);
+    words_join(&t, names, count, "or");
     struct selection selection = {0};
     struct status ignored;
     if (near)
@@ -214,18 +241,14 @@ static const char *name_of(const struct command *command)
 
 static bool check_belongs(const struct call *call, struct status *st)
 {
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *option = option_at(i);
-        if (!call->value[i] || option_belongs(option, call->command->id))
+    for (int i = 0; i < call->option_count; i++) {
+        const struct option *option = call->options[i].option;
+        if (command_takes(call->command, option))
             continue;
-        const char *names[COMMAND_COUNT];
-        int count = 0;
+        const char *names[COMMANDS_MAX];
         char all[WORD_LIST_TEXT_MAX];
         struct text t = text_over(all, sizeof all);
-        for (int c = 1; c < COMMAND_COUNT; c++)
-            if (option_belongs(option, (enum command_id)c))
-                names[count++] = command_at(c)->name;
-        words_join(&t, names, count, "and");
+        words_join(&t, names, names_of_commands(option, names), "and");
         return status_fail(st, STATUS_USAGE,
                            "--%s: not an option of %s; it belongs to %s",
                            option->name, name_of(call->command), all);
@@ -251,11 +274,11 @@ static bool check_operands(const struct call *call, struct status *st)
 bool call_parse(int argc, char *const *argv, struct call *call,
                 struct status *st)
 {
-    *call = (struct call){.command = command_at(COMMAND_SCREENS)};
+    *call = (struct call){.command = command_list[0]};
     find_help(argc, argv, call);
     if (call->help || call->version)
         return true;
-    call->command = command_at(COMMAND_SCREENS);
+    call->command = command_list[0];
     bool only_operands = false;
     bool has_command = false;
     for (int i = 1; i < argc; i++) {

@@ -9,24 +9,29 @@
 #include "cli/option.h"
 
 #define CALL_OPERANDS_MAX 512
-#define CALL_REPEATS_MAX 64
+#define CALL_OPTIONS_MAX 128
 
-/* Borrowed from argv. value[id]: the argument of an option that was given, ""
- * for a flag, NULL when it was not given; of a repeated one the last.
- * repeats: all arguments of repeated options in order. help, version: one of
- * them stands in the call, which is then not checked further. */
+/* An option that was given, with its argument, "" for a flag. */
+struct call_option {
+    const struct option *option;
+    const char *value;
+};
+
+/* Borrowed from argv. options[option_count]: in the order of the call; one that
+ * may not be repeated is there at most once. help, version: one of them is in
+ * the call, which is then not checked further. */
 struct call {
     const struct command *command;
-    const char *value[OPTION_COUNT];
-    int repeat_count;
-    struct {
-        enum option_id id;
-        const char *value;
-    } repeats[CALL_REPEATS_MAX];
+    int option_count;
+    struct call_option options[CALL_OPTIONS_MAX];
     int operand_count;
     const char *operands[CALL_OPERANDS_MAX];
     bool help, version;
 };
+
+/* The argument of an option, "" for a flag; NULL when it was not given; of a
+ * repeated one the last. */
+const char *call_value(const struct call *call, const struct option *option);
 
 /* Reads a call. The first operand names the command; options stand anywhere
  * before "--". Fails with STATUS_USAGE, naming the word: unknown option or

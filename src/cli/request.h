@@ -31,6 +31,13 @@ struct request_atom {
     bool named;
 };
 
+/* Charges asked for, both ends included; text: as given, NULL where none was.
+ */
+struct request_charges {
+    const char *text;
+    int low, high;
+};
+
 /* quantities and models: those asked for, or the command's default (then
  * has_… is false). references[quantity], units[dimension]: NULL where none was
  * chosen; against[quantity] likewise, the second reference. evidence: kinds of
@@ -58,6 +65,7 @@ struct request {
     struct configuration configuration;
     int n, l;
     struct site site;
+    struct request_charges charges;
     struct atom_method method;
     int atom_count;
     struct request_atom atoms[REQUEST_ATOM_MAX];
@@ -68,6 +76,7 @@ struct request {
     enum color_option color; /* words in the order of the enumerators */
     bool ascii;
     enum scheme scheme;
+    void *state; /* of the command's own options, owned; NULL for none */
 };
 
 /* Understands a call: loads the user's data sets, opens the study, reads every
@@ -77,6 +86,15 @@ struct request {
 MUST_CHECK bool request_open(struct request *request, const struct call *call,
                              struct status *st);
 void request_close(struct request *request);
+
+/* Whether a quantity is among the chosen ones. */
+bool request_chooses(const struct request *request, enum quantity_id quantity);
+
+/* Whether a model offers one of the chosen quantities. */
+bool request_offers(const struct request *request, const struct model *model);
+
+/* Writes the ids of the chosen quantities. */
+void request_quantities(const struct request *request, struct text *t);
 
 /* The question about one chosen atom: quantity and model are left to set. */
 struct ask request_ask(const struct request *request, int atom,

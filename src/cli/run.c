@@ -9,8 +9,10 @@
 
 #include "base/file.h"
 #include "base/text.h"
+#include "cli/command.h"
 #include "cli/help.h"
 #include "cli/request.h"
+#include "cli/words.h"
 
 /* A closed standard stream is replaced by one that fails, so that no file
  * opened later takes its number and receives what was meant for the stream. */
@@ -43,12 +45,20 @@ static void complain(const struct status *st)
 
 static bool check_has_screen(const struct call *call, struct status *st)
 {
-    if (call->command->id != COMMAND_SCREENS || isatty(STDOUT_FILENO))
+    const char *names[WORD_MAX];
+    char all[WORD_LIST_TEXT_MAX];
+    struct text t = text_over(all, sizeof all);
+    int count = 0;
+    if (!call->command->manner.needs_terminal || isatty(STDOUT_FILENO))
         return true;
-    return status_fail(
-        st, STATUS_USAGE,
-        "no command: expected list, compare, atom, audit or sources; the "
-        "screens need a terminal on standard output");
+    for (int c = 0; c < command_list_count && count < WORD_MAX; c++)
+        if (command_list[c]->name)
+            names[count++] = command_list[c]->name;
+    words_join(&t, names, count, "or");
+    return status_fail(st, STATUS_USAGE,
+                       "no command: expected %s; the screens need a terminal "
+                       "on standard output",
+                       all);
 }
 
 static bool carry_out(const struct call *call, struct status *st)

@@ -6,10 +6,11 @@
 #include <unistd.h>
 
 #include "base/file.h"
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/loop.h"
 #include "cli/remember.h"
 #include "app/app.h"
+#include "cli/request.h"
 
 struct shown_app {
     struct terminal *terminal;
@@ -117,11 +118,11 @@ static bool run(struct shown_app *s, const struct terminal_options *options,
 /* `--data FILE …` as a shell reads it. */
 static void quote_data(const struct call *call, struct text *t)
 {
-    for (int i = 0; i < call->repeat_count; i++) {
-        if (call->repeats[i].id != OPTION_DATA)
+    for (int i = 0; i < call->option_count; i++) {
+        if (call->options[i].option != &option_data)
             continue;
         text_add(t, t->length ? " --data " : "--data ");
-        const char *path = call->repeats[i].value;
+        const char *path = call->options[i].value;
         bool plain =
             path[strcspn(path, " \t\n\"'`$&|;<>()*?[]#~\\!{}")] == '\0';
         text_add(t, plain ? "" : "'");
@@ -132,7 +133,7 @@ static void quote_data(const struct call *call, struct text *t)
     }
 }
 
-bool cli_screens(struct request *request, struct status *st)
+static bool run_screens(struct request *request, struct status *st)
 {
     int signal = 0;
     char view[VIEW_BYTES_MAX];
@@ -161,3 +162,22 @@ bool cli_screens(struct request *request, struct status *st)
         terminal_die(signal);
     return ok;
 }
+
+static const struct option *const options[] = {
+    &option_data, &option_color,   &option_ascii, &option_background,
+    &option_help, &option_version, NULL,
+};
+
+const struct command command_screens = {
+    .operands = "",
+    .least = 0,
+    .most = 0,
+    .manner = {.needs_terminal = true},
+    .options = options,
+    .summary = "open the screens",
+    .about =
+        "Without a command, on a terminal, the screens open: everything that a "
+        "command prints, on one sheet to move about in.",
+    .example = "",
+    .run = run_screens,
+};

@@ -2,12 +2,12 @@
 /* `sources`: every model and data set with its citation. */
 #include <stdlib.h>
 
-#include "cli/commands.h"
+#include "cli/command.h"
 #include "cli/output.h"
 #include "report/sources.h"
 #include "study/facts.h"
 
-bool cli_sources(struct request *r, struct status *st)
+static bool run(struct request *r, struct status *st)
 {
     struct report report;
     struct source *sources = calloc(SOURCES_MAX, sizeof *sources);
@@ -21,3 +21,22 @@ bool cli_sources(struct request *r, struct status *st)
     free(sources);
     return ok;
 }
+
+static const struct option *const options[] = {
+    OPTIONS_OF_OUTPUT,
+    NULL,
+};
+
+const struct command command_sources = {
+    .name = "sources",
+    .operands = "",
+    .least = 0,
+    .most = 0,
+    .options = options,
+    .summary = "print every model and data set with its citation",
+    .about = "Prints what every number rests on: models with their domain, "
+             "data sets "
+             "with their terms and notes, all with their citations.",
+    .example = "sources --format bibtex --output outershell.bib",
+    .run = run,
+};

@@ -4,31 +4,10 @@
 #include <stdint.h>
 #include <string.h>
 
-#include "analysis/atom_report.h"
-#include "analysis/audit.h"
-#include "analysis/order.h"
-#include "base/units.h"
-#include "element/quantity.h"
-#include "element/subshell.h"
-#include "model/registry.h"
-#include "write/format.h"
-
-/* In the order of model_options.average_term: false, true. */
-static const char *const terms[] = {"hund", "average"};
 /* Bytes of a refused word that a message shows. */
 #define WORD_SHOWN_MAX 41
 
-static const char *const colors[] = {"auto", "always", "never"};
-/* In the order of enum scheme; colors in that of enum color_option. */
-static const char *const backgrounds[] = {"terminal", "light", "dark",
-                                          "contrast"};
-/* Every subshell that an atom up to Z = 118 may hold. */
-static const char *const subshells[] = {
-    "1s", "2s", "2p", "3s", "3p", "3d", "4s", "4p", "4d",
-    "4f", "5s", "5p", "5d", "5f", "6s", "6p", "6d", "6f",
-    "7s", "7p", "7d", "7f", "8s", "8p", "8d", "8f"};
-
-static void add_titled(struct words *words, const char *word, const char *title)
+void words_add(struct words *words, const char *word, const char *title)
 {
     for (int i = 0; i < words->count; i++)
         if (strcmp(words->items[i], word) == 0)
@@ -39,106 +18,12 @@ static void add_titled(struct words *words, const char *word, const char *title)
     words->items[words->count++] = word;
 }
 
-static void add(struct words *words, const char *word)
-{
-    add_titled(words, word, "");
-}
-
-static void add_all(struct words *words, const char *const *items, size_t count)
-{
-    for (size_t i = 0; i < count; i++)
-        add(words, items[i]);
-}
-
-#define ADD_ARRAY(words, array)                                                \
-    add_all(words, array, sizeof(array) / sizeof(array)[0])
-
-/* Units that a quantity can be converted to: of a dimension that has a
- * choice. */
-static void add_units(struct words *words)
-{
-    for (size_t i = 0; i < unit_count(); i++) {
-        enum dimension d = unit_at(i)->dimension;
-        if (d == DIMENSION_LENGTH || d == DIMENSION_ENERGY)
-            add_titled(words, unit_at(i)->id, unit_at(i)->title);
-    }
-}
-
-void words_fill(struct words *words, enum word_kind kind,
+void words_fill(struct words *words, const struct option *option,
                 const struct reference_list *references)
 {
     words->count = 0;
-    switch (kind) {
-    case WORDS_QUANTITY:
-        for (int q = 0; q < QUANTITY_COUNT; q++)
-            add_titled(words, quantity_at((enum quantity_id)q)->id,
-                       quantity_at((enum quantity_id)q)->title);
-        break;
-    case WORDS_MODEL:
-        for (int m = 0; m < model_count(); m++)
-            add_titled(words, model_at(m)->id, model_at(m)->title);
-        add(words, WORD_NO_MODEL);
-        break;
-    case WORDS_REFERENCE:
-        for (int i = 0; references && i < references->count; i++)
-            add_titled(words, references->items[i].provenance->id,
-                       references->items[i].provenance->title);
-        break;
-    case WORDS_COORDINATION:
-        for (int c = COORDINATION_NONE + 1; c < COORDINATION_COUNT; c++)
-            add(words, coordination_id((enum coordination)c));
-        break;
-    case WORDS_SPIN:
-        for (int s = SPIN_NONE + 1; s < SPIN_COUNT; s++)
-            add_titled(words, spin_id((enum spin_state)s),
-                       spin_word((enum spin_state)s));
-        break;
-    case WORDS_EVIDENCE:
-        for (int e = 0; e < EVIDENCE_COUNT; e++)
-            add_titled(words, evidence_id((enum evidence)e),
-                       evidence_word((enum evidence)e));
-        break;
-    case WORDS_SORT:
-        for (int s = 0; s < ROW_ORDER_COUNT; s++)
-            add(words, row_order_id((enum row_order)s));
-        break;
-    case WORDS_SCOPE:
-        for (int s = 0; s < AUDIT_SCOPE_COUNT; s++)
-            add(words, audit_scope_id((enum audit_scope)s));
-        break;
-    case WORDS_UNIT:
-        add_units(words);
-        break;
-    case WORDS_SUBSHELL:
-        ADD_ARRAY(words, subshells);
-        break;
-    case WORDS_TERM:
-        ADD_ARRAY(words, terms);
-        break;
-    case WORDS_FUNCTIONAL:
-        for (int f = 0; f < FUNCTIONAL_COUNT; f++)
-            add_titled(words, functional_id((enum functional)f),
-                       functional_title((enum functional)f));
-        break;
-    case WORDS_RELATIVITY:
-        for (int i = 0; i < RELATIVITY_COUNT; i++)
-            add_titled(words, relativity_id((enum relativity)i),
-                       relativity_title((enum relativity)i));
-        break;
-    case WORDS_FORMAT:
-        for (int f = 0; f < format_list_count; f++)
-            add(words, format_list[f]->id);
-        break;
-    case WORDS_COLOR:
-        ADD_ARRAY(words, colors);
-        break;
-    case WORDS_BACKGROUND:
-        ADD_ARRAY(words, backgrounds);
-        break;
-    case WORDS_NONE:
-    case WORDS_FILE:
-        break;
-    }
+    if (option->words)
+        option->words(words, references);
 }
 
 const char *word_nearest(const char *word, const char *const *items, int count)
@@ -232,8 +117,7 @@ bool word_refuse(const struct option *option, const char *word,
     struct text t = text_over(all, sizeof all);
     struct text m = text_over(meant, sizeof meant);
     int count = words_holding(words, word + strspn(word, " "), near);
-    /* Roman numbers a letter apart are other numbers: none is proposed. */
-    if (count == 0 && option->words != WORDS_COORDINATION) {
+    if (count == 0 && !option->apart) {
         near[0] = word_nearest(word, words->items, words->count);
         count = near[0] != NULL;
     }

@@ -24,10 +24,13 @@ struct words {
     const char *titles[WORD_MAX];
 };
 
-/* All words of a kind; none for WORDS_NONE and WORDS_FILE. references may be
- * NULL for kinds other than WORDS_REFERENCE. */
-void words_fill(struct words *words, enum word_kind kind,
+/* Fills in the words of an option, none where it has none of its own.
+ * references may be NULL: then there are no words for a data set. */
+void words_fill(struct words *words, const struct option *option,
                 const struct reference_list *references);
+
+/* Adds a word, and what it stands for; one that is there already is left. */
+void words_add(struct words *words, const char *word, const char *title);
 
 /* The one of items[count] that a misspelt word may have meant: it starts with
  * it or differs in at most a quarter of the letters and one more, and in fewer

@@ -11,7 +11,6 @@
 #include "base/file.h"
 #include "base/text.h"
 #include "cli/command.h"
-#include "cli/sha256.h"
 #include "cli/words.h"
 #include "suites.h"
 #include "support/program.h"
@@ -43,9 +42,11 @@ START_TEST(the_manual_lists_every_option_and_command_and_no_other)
     char *end = strstr(options, "\n.El");
     ck_assert_ptr_nonnull(end);
     *end = '\0';
-    ck_assert_int_eq(count_of(options, "\n.It "), OPTION_COUNT);
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
+    const struct option *all[COMMAND_OPTIONS_MAX];
+    int count = command_options(all);
+    ck_assert_int_eq(count_of(options, "\n.It "), count);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = all[i];
         char line[128];
         char argument[32] = "";
         for (size_t k = 0; o->argument && o->argument[k]; k++)
@@ -57,20 +58,19 @@ START_TEST(the_manual_lists_every_option_and_command_and_no_other)
                  o->argument ? " Ar " : "", argument);
         ck_assert_msg(strstr(options, line), "manual: no %s", line);
     }
-    ck_assert_int_eq(count_of(text, "\n.It Cm "), COMMAND_COUNT - 1);
-    for (int c = 1; c < COMMAND_COUNT; c++) {
+    ck_assert_int_eq(count_of(text, "\n.It Cm "), command_list_count - 1);
+    for (int c = 1; c < command_list_count; c++) {
         char line[64];
-        snprintf(line, sizeof line, "\n.It Cm %s\n", command_at(c)->name);
+        snprintf(line, sizeof line, "\n.It Cm %s\n", command_list[c]->name);
         char *part = strstr(text, line);
         ck_assert_msg(part, "manual: no %s", line);
         char *next = strstr(part + 1, "\n.It ");
-        for (int i = 0; i < OPTION_COUNT; i++) {
-            snprintf(line, sizeof line, "\n.Fl Fl %s ", option_at(i)->name);
+        for (int i = 0; i < count; i++) {
+            snprintf(line, sizeof line, "\n.Fl Fl %s ", all[i]->name);
             const char *found = strstr(part, line);
             bool here = found && (!next || found < next);
-            ck_assert_msg(here ==
-                              option_belongs(option_at(i), (enum command_id)c),
-                          "manual: %s in %s", line, command_at(c)->name);
+            ck_assert_msg(here == command_takes(command_list[c], all[i]),
+                          "manual: %s in %s", line, command_list[c]->name);
         }
     }
     ck_assert_ptr_null(strchr(text, '@'));
@@ -80,19 +80,21 @@ END_TEST
 
 START_TEST(help_lists_the_options_of_a_command_and_no_other)
 {
-    for (int c = 0; c < COMMAND_COUNT; c++) {
-        const char *name = command_at(c)->name;
+    const struct option *all[COMMAND_OPTIONS_MAX];
+    int count = command_options(all);
+    for (int c = 0; c < command_list_count; c++) {
+        const char *name = command_list[c]->name;
         char line[64];
         snprintf(line, sizeof line, "%s --help", name ? name : "");
         struct program_result r = program_call(OUTERSHELL, line);
         ck_assert_int_eq(r.status, 0);
         ck_assert_uint_eq(r.err_size, 0);
-        for (int i = 0; i < OPTION_COUNT; i++) {
-            const struct option *o = option_at(i);
+        for (int i = 0; i < count; i++) {
+            const struct option *o = all[i];
             snprintf(line, sizeof line, "--%s%s%s\n", o->name,
                      o->argument ? " " : "", o->argument ? o->argument : "");
             ck_assert_msg((strstr(r.out, line) != NULL) ==
-                              option_belongs(o, (enum command_id)c),
+                              command_takes(command_list[c], o),
                           "help of %s: %s", name ? name : "the screens", line);
         }
         for (const char *l = r.out; *l; l = strchr(l, '\n') + 1)
@@ -129,15 +131,17 @@ static bool has_line(const char *text, const char *line)
 
 START_TEST(bash_offers_the_options_of_a_command_and_no_other)
 {
-    for (int c = 0; c < COMMAND_COUNT; c++) {
-        const char *name = command_at(c)->name;
+    const struct option *all[COMMAND_OPTIONS_MAX];
+    int count = command_options(all);
+    for (int c = 0; c < command_list_count; c++) {
+        const char *name = command_list[c]->name;
         char line[64];
         snprintf(line, sizeof line, "%s --", name ? name : "");
         struct program_result r = complete_in_bash(line);
-        for (int i = 0; i < OPTION_COUNT; i++) {
-            snprintf(line, sizeof line, "--%s", option_at(i)->name);
+        for (int i = 0; i < count; i++) {
+            snprintf(line, sizeof line, "--%s", all[i]->name);
             ck_assert_msg(has_line(r.out, line) ==
-                              option_belongs(option_at(i), (enum command_id)c),
+                              command_takes(command_list[c], all[i]),
                           "bash: %s with %s", line, name ? name : "none");
         }
         program_free(&r);
@@ -173,12 +177,14 @@ START_TEST(zsh_and_fish_know_every_option_where_it_belongs)
 {
     char *zsh = read_whole(ZSH_COMPLETION);
     char *fish = read_whole(FISH_COMPLETION);
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
+    const struct option *all[COMMAND_OPTIONS_MAX];
+    int count = command_options(all);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = all[i];
         char part[64];
         int commands = 0;
-        for (int c = 0; c < COMMAND_COUNT; c++)
-            commands += option_belongs(o, (enum command_id)c);
+        for (int c = 0; c < command_list_count; c++)
+            commands += command_takes(command_list[c], o);
         snprintf(part, sizeof part, "--%s%s", o->name,
                  o->argument ? "="
                  : o->letter ? "}"
@@ -192,11 +198,11 @@ START_TEST(zsh_and_fish_know_every_option_where_it_belongs)
         char *names = strstr(line, part); /* commands stand before it */
         char kept = *names;
         *names = '\0';
-        for (int c = 1; c < COMMAND_COUNT; c++)
-            ck_assert_msg(option_belongs(o, COMMAND_SCREENS) ||
-                              (strstr(line, command_at(c)->name) != NULL) ==
-                                  option_belongs(o, (enum command_id)c) ||
-                              strstr(o->help, command_at(c)->name) != NULL,
+        for (int c = 1; c < command_list_count; c++)
+            ck_assert_msg(command_takes(command_list[0], o) ||
+                              (strstr(line, command_list[c]->name) != NULL) ==
+                                  command_takes(command_list[c], o) ||
+                              strstr(o->help, command_list[c]->name) != NULL,
                           "fish: %s", line);
         *names = kept;
     }
@@ -205,45 +211,37 @@ START_TEST(zsh_and_fish_know_every_option_where_it_belongs)
 }
 END_TEST
 
-static int by_name(const void *a, const void *b)
+/* Number of data sets in the folder. */
+static size_t count_data(void)
 {
-    return strcmp(*(char *const *)a, *(char *const *)b);
-}
-
-/* The sum that anyone gets by: cat data/(files by name).json | sha256sum */
-START_TEST(version_names_licence_and_data_with_their_sum)
-{
-    char *names[256];
     size_t count = 0;
     DIR *folder = opendir(DATA_DIR);
     ck_assert_ptr_nonnull(folder);
     for (struct dirent *d; (d = readdir(folder)) != NULL;) {
         size_t length = strlen(d->d_name);
-        if (length > 5 && strcmp(d->d_name + length - 5, ".json") == 0)
-            names[count++] = strdup(d->d_name);
+        count += length > 5 && strcmp(d->d_name + length - 5, ".json") == 0;
     }
     closedir(folder);
-    qsort(names, count, sizeof *names, by_name);
-    struct sha256 s;
-    char sum[SHA256_TEXT_MAX];
+    return count;
+}
+
+/* The sum that anyone gets of the data, in the order of the names. */
+START_TEST(version_names_licence_and_data_with_their_sum)
+{
+    char sum[65] = "";
     char want[256];
-    sha256_begin(&s);
-    for (size_t i = 0; i < count; i++) {
-        char path[1024];
-        snprintf(path, sizeof path, "%s/%s", DATA_DIR, names[i]);
-        char *text = read_whole(path);
-        sha256_add(&s, text, strlen(text));
-        free(text);
-        free(names[i]);
-    }
-    sha256_end(&s, sum);
+    FILE *tool =
+        popen("cd '" DATA_DIR "' && LC_ALL=C && cat *.json | sha256sum", "r");
+    ck_assert_ptr_nonnull(tool);
+    ck_assert_int_eq(fscanf(tool, "%64s", sum), 1);
+    ck_assert_int_eq(pclose(tool), 0);
     struct program_result r = program_call(OUTERSHELL, "--version");
     ck_assert_int_eq(r.status, 0);
     snprintf(want, sizeof want, "outershell %s\n", OUTERSHELL_VERSION);
     ck_assert_int_eq(strncmp(r.out, want, strlen(want)), 0);
     ck_assert_ptr_nonnull(strstr(r.out, "Licence: MIT"));
-    snprintf(want, sizeof want, "Data sets: %zu\nData SHA-256: %s\n", count,
-             sum);
+    snprintf(want, sizeof want, "Data sets: %zu\nData SHA-256: %s\n",
+             count_data(), sum);
     ck_assert_msg(strstr(r.out, want), "%s\nwant %s", r.out, want);
     program_free(&r);
 }

@@ -3,7 +3,6 @@
 #include <string.h>
 
 #include "cli/parse.h"
-#include "cli/sha256.h"
 #include "cli/words.h"
 #include "suites.h"
 #include "support/program.h"
@@ -43,9 +42,9 @@ START_TEST(options_stand_before_and_behind_command_and_operands)
     };
     for (size_t i = 0; i < sizeof lines / sizeof lines[0]; i++) {
         struct call c = parsed(lines[i]);
-        ck_assert_int_eq(c.command->id, COMMAND_LIST);
-        ck_assert_str_eq(c.value[OPTION_QUANTITY], "zeff");
-        ck_assert_str_eq(c.value[OPTION_FORMAT], "csv");
+        ck_assert_ptr_eq(c.command, &command_print);
+        ck_assert_str_eq(call_value(&c, &option_quantity), "zeff");
+        ck_assert_str_eq(call_value(&c, &option_format), "csv");
         ck_assert_int_eq(c.operand_count, 2);
         ck_assert_str_eq(c.operands[0], "Fe");
         ck_assert_str_eq(c.operands[1], "Cr");
@@ -56,20 +55,27 @@ END_TEST
 START_TEST(letters_stand_together_and_the_last_may_take_an_argument)
 {
     struct call c = parsed("list -aFo out.txt Fe");
-    ck_assert_ptr_nonnull(c.value[OPTION_ASCII]);
-    ck_assert_ptr_nonnull(c.value[OPTION_FORCE]);
-    ck_assert_str_eq(c.value[OPTION_OUTPUT], "out.txt");
+    ck_assert_ptr_nonnull(call_value(&c, &option_ascii));
+    ck_assert_ptr_nonnull(call_value(&c, &option_force));
+    ck_assert_str_eq(call_value(&c, &option_output), "out.txt");
     c = parsed("list -aFoout.txt Fe");
-    ck_assert_str_eq(c.value[OPTION_OUTPUT], "out.txt");
+    ck_assert_str_eq(call_value(&c, &option_output), "out.txt");
     ck_assert_int_eq(c.operand_count, 1);
 }
 END_TEST
 
+/* The argument of an option in a line that is in order. */
+static const char *argument(const char *line, const struct option *option)
+{
+    struct call c = parsed(line);
+    return call_value(&c, option);
+}
+
 START_TEST(an_argument_may_begin_with_one_dash_but_is_no_long_option)
 {
-    ck_assert_str_eq(parsed("list --charge -1 O").value[OPTION_CHARGE], "-1");
-    ck_assert_str_eq(parsed("list --charge=-1 O").value[OPTION_CHARGE], "-1");
-    ck_assert_str_eq(parsed("list --output=--x O").value[OPTION_OUTPUT], "--x");
+    ck_assert_str_eq(argument("list --charge -1 O", &option_charge), "-1");
+    ck_assert_str_eq(argument("list --charge=-1 O", &option_charge), "-1");
+    ck_assert_str_eq(argument("list --output=--x O", &option_output), "--x");
     struct call call;
     struct status st;
     ck_assert(!parse("list --output --force", &call, &st));
@@ -90,10 +96,13 @@ END_TEST
 START_TEST(repeated_options_keep_their_order)
 {
     struct call c = parsed("--data a list --data=b -dc");
-    ck_assert_int_eq(c.repeat_count, 3);
-    ck_assert_str_eq(c.repeats[0].value, "a");
-    ck_assert_str_eq(c.repeats[1].value, "b");
-    ck_assert_str_eq(c.repeats[2].value, "c");
+    static const char *const values[] = {"a", "b", "c"};
+    ck_assert_int_eq(c.option_count, 3);
+    for (int i = 0; i < 3; i++) {
+        ck_assert_ptr_eq(c.options[i].option, &option_data);
+        ck_assert_str_eq(c.options[i].value, values[i]);
+    }
+    ck_assert_str_eq(call_value(&c, &option_data), "c");
 }
 END_TEST
 
@@ -107,60 +116,70 @@ START_TEST(help_and_version_win_over_every_mistake)
                                         "list -h -h --charge x"};
     for (size_t i = 0; i < sizeof lines / sizeof lines[0]; i++)
         ck_assert_msg(parsed(lines[i]).help, "%s", lines[i]);
-    ck_assert_int_eq(parsed("compare --help").command->id, COMMAND_COMPARE);
-    ck_assert_int_eq(parsed("--help sources").command->id, COMMAND_SOURCES);
-    ck_assert_int_eq(parsed("--help").command->id, COMMAND_SCREENS);
+    ck_assert_ptr_eq(parsed("compare --help").command, &command_compare);
+    ck_assert_ptr_eq(parsed("--help sources").command, &command_sources);
+    ck_assert_ptr_eq(parsed("--help").command, &command_screens);
     ck_assert(parsed("list --bogus --version").version);
 }
 END_TEST
 
-/* Every option with every command: taken exactly where the table says. */
+/* Every option with every command: taken exactly where the command lists it.
+ */
 START_TEST(an_option_is_taken_where_it_belongs_and_nowhere_else)
 {
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
     int refused = 0;
-    for (int c = 0; c < COMMAND_COUNT; c++)
-        for (int i = 0; i < OPTION_COUNT; i++) {
-            const struct option *o = option_at(i);
-            const char *name = command_at(c)->name;
+    for (int c = 0; c < command_list_count; c++)
+        for (int i = 0; i < count; i++) {
+            const struct option *o = options[i];
+            const struct command *command = command_list[c];
             char line[128];
             struct call call;
             struct status st;
-            if (i == OPTION_HELP || i == OPTION_VERSION)
+            if (o == &option_help || o == &option_version)
                 continue;
             snprintf(line, sizeof line, "--%s %s %s %s", o->name,
-                     o->argument ? "word" : "", name ? name : "",
-                     command_at(c)->least > 0 ? "Fe" : "");
+                     o->argument ? "word" : "",
+                     command->name ? command->name : "",
+                     command->least > 0 ? "Fe" : "");
             bool ok = parse(line, &call, &st);
-            ck_assert_msg(ok == option_belongs(o, (enum command_id)c), "%s",
-                          line);
+            ck_assert_msg(ok == command_takes(command, o), "%s", line);
             refused += !ok;
         }
     ck_assert_int_gt(refused, 0);
 }
 END_TEST
 
-START_TEST(names_letters_and_ids_of_the_tables_are_unique_and_complete)
+START_TEST(names_and_letters_of_the_options_are_unique_and_complete)
 {
-    for (int i = 0; i < OPTION_COUNT; i++) {
-        const struct option *o = option_at(i);
-        ck_assert_ptr_eq(option_by_name(o->name, strlen(o->name)), o);
+    const struct option *options[COMMAND_OPTIONS_MAX];
+    int count = command_options(options);
+    ck_assert_int_gt(count, 20);
+    for (int i = 0; i < count; i++) {
+        const struct option *o = options[i];
+        ck_assert_ptr_eq(command_option(o->name, strlen(o->name)), o);
+        if (i > 0)
+            ck_assert_int_lt(strcmp(options[i - 1]->name, o->name), 0);
         if (o->letter)
-            ck_assert_ptr_eq(option_by_letter(o->letter), o);
-        ck_assert_int_ne((int)o->commands, 0);
+            ck_assert_ptr_eq(command_option_letter(o->letter), o);
         ck_assert_int_eq(o->argument == NULL, o->kind == OPTION_FLAG);
         ck_assert_ptr_null(strchr(o->help, '\n'));
+        ck_assert(o->read || o == &option_help || o == &option_version);
     }
-    for (int c = 1; c < COMMAND_COUNT; c++)
-        ck_assert_ptr_eq(command_find(command_at(c)->name), command_at(c));
-    ck_assert_ptr_null(option_by_name("quant", 5));
-    ck_assert_ptr_null(option_by_letter('\0'));
+    for (int c = 1; c < command_list_count; c++)
+        ck_assert_ptr_eq(command_find(command_list[c]->name), command_list[c]);
+    ck_assert_ptr_null(command_list[0]->name);
+    ck_assert_ptr_null(command_option("quant", 5));
+    ck_assert_ptr_null(command_option_letter('\0'));
 }
 END_TEST
 
 START_TEST(the_examples_of_the_help_are_calls_in_order)
 {
-    for (int c = 1; c < COMMAND_COUNT; c++)
-        ck_assert_int_eq(parsed(command_at(c)->example).command->id, c);
+    for (int c = 1; c < command_list_count; c++)
+        ck_assert_ptr_eq(parsed(command_list[c]->example).command,
+                         command_list[c]);
 }
 END_TEST
 
@@ -214,32 +233,6 @@ START_TEST(a_list_falls_into_its_words_the_empty_ones_too)
 }
 END_TEST
 
-/* FIPS 180-4 examples: "abc", the empty text, and the 448-bit text
- * (csrc.nist.gov, Example Algorithms, SHA256.pdf; the empty one from memory).
- */
-START_TEST(sha256_gives_the_published_examples)
-{
-    static const struct {
-        const char *text, *sum;
-    } cases[] = {
-        {"abc",
-         "ba7816bf8f01cfea414140de5dae2223b00361a396177a9cb410ff61f20015ad"},
-        {"",
-         "e3b0c44298fc1c149afbf4c8996fb92427ae41e4649b934ca495991b7852b855"},
-        {"abcdbcdecdefdefgefghfghighijhijkijkljklmklmnlmnomnopnopq",
-         "248d6a61d20638b8e5c026930c3e6039a33ce45964ff2167f6ecedd419db06c1"},
-    };
-    for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
-        struct sha256 s;
-        char out[SHA256_TEXT_MAX];
-        sha256_begin(&s);
-        sha256_add(&s, cases[i].text, strlen(cases[i].text));
-        sha256_end(&s, out);
-        ck_assert_str_eq(out, cases[i].sum);
-    }
-}
-END_TEST
-
 TCase *parse_cases(void)
 {
     TCase *c = tcase_create("parse");
@@ -251,12 +244,10 @@ TCase *parse_cases(void)
     tcase_add_test(c, repeated_options_keep_their_order);
     tcase_add_test(c, help_and_version_win_over_every_mistake);
     tcase_add_test(c, an_option_is_taken_where_it_belongs_and_nowhere_else);
-    tcase_add_test(c,
-                   names_letters_and_ids_of_the_tables_are_unique_and_complete);
+    tcase_add_test(c, names_and_letters_of_the_options_are_unique_and_complete);
     tcase_add_test(c, the_examples_of_the_help_are_calls_in_order);
     tcase_add_test(c, a_call_may_be_long_but_not_endless);
     tcase_add_test(c, the_nearest_word_is_found_and_no_other_is_made_up);
     tcase_add_test(c, a_list_falls_into_its_words_the_empty_ones_too);
-    tcase_add_test(c, sha256_gives_the_published_examples);
     return c;
 }

@@ -22,7 +22,7 @@ static bool reads_nothing(const struct call *call)
     for (int i = 0; i < call->operand_count; i++)
         if (strcmp(call->operands[i], "-") == 0)
             return false;
-    return call->repeat_count == 0;
+    return call_value(call, &option_data) == NULL;
 }
 
 static void check_atoms(const struct request *r)
