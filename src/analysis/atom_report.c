@@ -5,8 +5,8 @@
 
 #include "base/text.h"
 
-const struct atom_method atom_method_default = {FUNCTIONAL_LSD,
-                                                RELATIVITY_DIRAC, 0.0};
+const struct atom_method method_default = {FUNCTIONAL_LSD, RELATIVITY_DIRAC,
+                                           0.0};
 
 struct names {
     const char *id, *title;
@@ -56,7 +56,7 @@ const char *level_print(const struct report_level *level,
     return out;
 }
 
-const char *spin_text(int spin)
+const char *level_spin_text(int spin)
 {
     return spin > 0 ? "majority" : spin < 0 ? "minority" : "";
 }

@@ -46,7 +46,7 @@ struct atom_method {
 };
 
 /* The method of the model scf: LSD on the Dirac equation. */
-extern const struct atom_method atom_method_default;
+extern const struct atom_method method_default;
 
 /* A level, or a whole subshell (twice_j and spin 0, energy the mean over its
  * electrons). twice_j: 2j, 0 where levels are not parted by j; spin: +1
@@ -94,6 +94,6 @@ const char *level_print(const struct report_level *level,
                         char out[LEVEL_TEXT_MAX]);
 
 /* "", "majority" or "minority". */
-const char *spin_text(int spin);
+const char *level_spin_text(int spin);
 
 #endif

@@ -84,8 +84,8 @@ static void sort(struct row *rows, size_t count, enum row_order order,
     merge(rows, half, count, order, left);
 }
 
-bool rows_sort(struct row *rows, size_t count, enum row_order order,
-               struct status *st)
+bool order_rows(struct row *rows, size_t count, enum row_order order,
+                struct status *st)
 {
     struct row *left = calloc(count / 2 + 1, sizeof *left);
     if (!left)

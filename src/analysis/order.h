@@ -28,7 +28,7 @@ const char *row_order_id(enum row_order order);
 
 /* Sorts rows[count]; those without the number come last, equal ones stay in
  * the order of atomic number, then charge. Fails with STATUS_MEMORY. */
-MUST_CHECK bool rows_sort(struct row *rows, size_t count, enum row_order order,
-                          struct status *st);
+MUST_CHECK bool order_rows(struct row *rows, size_t count, enum row_order order,
+                           struct status *st);
 
 #endif

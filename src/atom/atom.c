@@ -198,7 +198,7 @@ static void start(struct atom_solver *s, int elements, bool warm)
     int n = s->channels * points;
     mixer_reset(space->mixer, s->a2 > 0.0 ? 2 * n : n, n);
     if (!warm)
-        start_potential(s);
+        atom_start_potential(s);
     s->warm = warm;
     s->found = false;
     s->last_total = 0.0;

@@ -158,14 +158,14 @@ static double exact_exchange(struct hybrid *h)
         if (a->f < 1.0)
             pairs = 0.0;
         for (int k = 2; k <= 2 * l && pairs > 0.0; k += 2)
-            sum += pairs * (2 * l + 1) / (2.0 * l) * term_three_j(l, k, l) *
+            sum += pairs * (2 * l + 1) / (2.0 * l) * atom_three_j(l, k, l) *
                    repulsion(h, a->p, a->p, k);
         for (int j = 0; j < i; j++) {
             const struct shell *b = &h->shell[j];
             if (b->spin != a->spin)
                 continue;
             for (int k = abs(l - b->l); k <= l + b->l; k += 2)
-                sum += a->f * b->f * term_three_j(l, k, b->l) *
+                sum += a->f * b->f * atom_three_j(l, k, b->l) *
                        repulsion(h, a->p, b->p, k);
         }
     }
@@ -214,7 +214,7 @@ double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term)
             s->l, (int)lround(s->occ), atom_zeta(hybrid->solver, s->n, s->l),
             s->l == 1 ? hybrid_slater(hybrid, s->n, s->l, 2) : 0.0};
     }
-    return term_spin_orbit(open, count, term);
+    return atom_term_spin_orbit(open, count, term);
 }
 
 /* Terms belong to whole numbers of electrons. */
@@ -235,7 +235,7 @@ static double term_shift(struct hybrid *h)
         double f2 = hybrid_slater(h, s->n, s->l, 2);
         double f4 = hybrid_slater(h, s->n, s->l, 4);
         double f6 = s->l > 2 ? hybrid_slater(h, s->n, s->l, 6) : 0.0;
-        sum += term_hund_shift(s->l, (int)lround(s->occ), f2, f4, f6);
+        sum += atom_term_hund_shift(s->l, (int)lround(s->occ), f2, f4, f6);
     }
     return sum;
 }

@@ -56,7 +56,7 @@ double hybrid_slater(const struct hybrid *hybrid, int n, int l, int k);
 
 /* Spin–orbit energy of the ground level of the atom evaluated last, solved
  * with the Dirac equation, from the average that its levels filled by 2j+1
- * have; hartree. Its term tells L, S and J (term_spin_orbit). */
+ * have; hartree. Its term tells L, S and J (atom_term_spin_orbit). */
 double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term);
 
 /* Spin–orbit parameter ζ = (ε(l+½) - ε(l-½))/(l+½) of a subshell of an atom

@@ -56,7 +56,7 @@ struct atom_solver {
 };
 
 /* Puts a starting potential into space->q. */
-void start_potential(struct atom_solver *solver);
+void atom_start_potential(struct atom_solver *solver);
 
 /* Makes space->gradient if it is not there; STATUS_MEMORY, STATUS_DATA. */
 MUST_CHECK bool space_gradient(struct atom_space *space, struct status *st);

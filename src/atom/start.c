@@ -17,7 +17,7 @@ static double screening(double x)
                                                             s * 0.006944))))));
 }
 
-void start_potential(struct atom_solver *solver)
+void atom_start_potential(struct atom_solver *solver)
 {
     struct atom_space *space = solver->now;
     double Z = solver->Z, tail = (Z - solver->electrons + 1.0) / Z;

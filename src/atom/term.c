@@ -13,7 +13,7 @@ static double factorial(int n)
 }
 
 /* A. R. Edmonds, Angular Momentum in Quantum Mechanics, equation 3.7.17. */
-double term_three_j(int a, int b, int c)
+double atom_three_j(int a, int b, int c)
 {
     int sum = a + b + c, g = sum / 2;
     if (sum % 2 != 0 || c > a + b || c < abs(a - b))
@@ -24,7 +24,8 @@ double term_three_j(int a, int b, int c)
            factorial(sum - 2 * c) / factorial(sum + 1) * root * root;
 }
 
-double term_hund_shift(int l, int electrons, double f2, double f4, double f6)
+double atom_term_hund_shift(int l, int electrons, double f2, double f4,
+                            double f6)
 {
     int half = 2 * l + 1, n = electrons % half;
     if (l == 2 && (n == 2 || n == 3))
@@ -135,8 +136,8 @@ static bool quantum_numbers(const struct open_subshell *open, int count,
     return count == 1;
 }
 
-double term_spin_orbit(const struct open_subshell *open, int count,
-                       const struct term *term)
+double atom_term_spin_orbit(const struct open_subshell *open, int count,
+                            const struct term *term)
 {
     double l, s, j, lambda = 0.0;
     if (count == 1 && open[0].l == 1)

@@ -9,14 +9,15 @@
 
 /* Square of the 3j symbol (a b c; 0 0 0), for a, b, c >= 0; 0 unless they form
  * a triangle with an even sum. */
-double term_three_j(int a, int b, int c);
+double atom_three_j(int a, int b, int c);
 
 /* Energy of Hund's term of a d or f subshell with `electrons` electrons above
  * the mean of the terms of highest spin: d2, d3, d7, d8: -4.5 B; f2, f5, f9,
  * f12: -9 E3; f3, f4, f10, f11: -21 E3; else 0. Racah's parameters from the
  * Slater integrals F^k (G. Racah, Phys. Rev. 62, 438 (1942), doi
  * 10.1103/PhysRev.62.438; 76, 1352 (1949), doi 10.1103/PhysRev.76.1352). */
-double term_hund_shift(int l, int electrons, double f2, double f4, double f6);
+double atom_term_hund_shift(int l, int electrons, double f2, double f4,
+                            double f6);
 
 /* Spin–orbit energy of level J of the ground term of a configuration: the
  * parameters zeta and f2 = F²(pp) of each open subshell, in the order of
@@ -25,7 +26,7 @@ struct open_subshell {
     int l, electrons;
     double zeta, f2;
 };
-double term_spin_orbit(const struct open_subshell *open, int count,
-                       const struct term *term);
+double atom_term_spin_orbit(const struct open_subshell *open, int count,
+                            const struct term *term);
 
 #endif

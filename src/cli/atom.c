@@ -18,8 +18,8 @@ static bool write(const struct request *r, const struct atom_report *atom,
 {
     struct report report;
     report_begin(&report);
-    solved_report(&report, r->format->uses, atom,
-                  atom_run_source(r->method.functional),
+    report_solved(&report, r->format->uses, atom,
+                  run_atom_source(r->method.functional),
                   unit_for(r, DIMENSION_ENERGY, "hartree"),
                   unit_for(r, DIMENSION_LENGTH, "pm"));
     bool ok = output_report(r, &report, st);
@@ -34,11 +34,11 @@ static bool solve(struct atom_run *run, const struct request *r,
 {
     char ion[ION_TEXT_MAX];
     ion_print(species->z, species->charge, ion);
-    if (!atom_run_begin(run, species, &r->method, st))
+    if (!run_atom_begin(run, species, &r->method, st))
         return status_context(st, "atom: %s", ion);
-    while (atom_run_step(run))
+    while (run_atom_step(run))
         ;
-    const struct atom_report *report = atom_run_report(run);
+    const struct atom_report *report = run_atom_report(run);
     return report->state == REPORT_SOLVED ||
            status_fail(st, STATUS_CONVERGENCE,
                        "atom: %s, %s, %s: %s (cycle %d); no number "
@@ -59,11 +59,11 @@ static bool run(struct request *r, struct status *st)
     ask = request_ask(r, 0, QUANTITY_ZEFF, NULL);
     if (!output_check(r, st) || !study_species(r->study, &ask, &species, st))
         return false;
-    struct atom_run *run = atom_run_new(st);
+    struct atom_run *run = run_atom_new(st);
     if (!run)
         return false;
-    bool ok = solve(run, r, &species, st) && write(r, atom_run_report(run), st);
-    atom_run_free(run);
+    bool ok = solve(run, r, &species, st) && write(r, run_atom_report(run), st);
+    run_atom_free(run);
     return ok;
 }
 

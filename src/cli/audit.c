@@ -71,7 +71,7 @@ static bool run(struct request *r, struct status *st)
                          "each other");
     report_begin(&report);
     if (ok) {
-        audit_report(&report, r->format->uses, &audit, r->scopes);
+        report_audit(&report, r->format->uses, &audit, r->scopes);
         ok = output_report(r, &report, st);
     }
     report_clear(&report);

@@ -98,7 +98,7 @@ static bool write(const struct request *r, const struct comparison *c,
 {
     struct report report;
     report_begin(&report);
-    comparison_report(&report, r->format->uses, c);
+    report_comparison(&report, r->format->uses, c);
     bool ok = output_report(r, &report, st);
     report_clear(&report);
     return ok;

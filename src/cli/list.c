@@ -70,9 +70,9 @@ static bool run(struct request *r, struct status *st)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     report_begin(&report);
     bool ok = output_check(r, st) && gather_all(r, &g, st) &&
-              (!r->has_order || rows_sort(g.rows, g.count, r->order, st));
+              (!r->has_order || order_rows(g.rows, g.count, r->order, st));
     if (ok) {
-        rows_report(&report, r->format->uses, g.rows, g.count);
+        report_rows(&report, r->format->uses, g.rows, g.count);
         ok = output_report(r, &report, st);
     }
     report_clear(&report);

@@ -7,30 +7,6 @@
 #include "cli/command.h"
 #include "cli/words.h"
 
-bool request_chooses(const struct request *r, enum quantity_id quantity)
-{
-    for (int i = 0; i < r->quantity_count; i++)
-        if (r->quantities[i] == quantity)
-            return true;
-    return false;
-}
-
-bool request_offers(const struct request *r, const struct model *model)
-{
-    for (int i = 0; i < r->quantity_count; i++)
-        if (model_offer_for(model, r->quantities[i], NULL) >= 0)
-            return true;
-    return false;
-}
-
-void request_quantities(const struct request *r, struct text *t)
-{
-    const char *names[QUANTITY_COUNT];
-    for (int i = 0; i < r->quantity_count; i++)
-        names[i] = quantity_at(r->quantities[i])->id;
-    words_join(t, names, r->quantity_count, "and");
-}
-
 /* One option with every argument that it was given. */
 static bool read_option(struct request *r, const struct option *option,
                         struct status *st)
@@ -93,7 +69,7 @@ bool request_open(struct request *r, const struct call *call, struct status *st)
                           .format = format_list[0],
                           .color = COLOR_AUTO,
                           .scheme = SCHEME_TERMINAL,
-                          .method = atom_method_default};
+                          .method = method_default};
     if (!open_state(r, st) || !read_stage(r, OPTION_BEFORE, st))
         return false;
     r->study = study_new(&r->catalogue, st);

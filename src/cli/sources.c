@@ -15,7 +15,7 @@ static bool run(struct request *r, struct status *st)
         return status_fail(st, STATUS_MEMORY, "out of memory");
     int count = study_sources(r->study, sources, SOURCES_MAX);
     report_begin(&report);
-    sources_report(&report, r->format->uses, sources, count);
+    report_sources(&report, r->format->uses, sources, count);
     bool ok = output_check(r, st) && output_report(r, &report, st);
     report_clear(&report);
     free(sources);

@@ -76,7 +76,7 @@ bool coordination_find(const char *text, enum coordination *found)
     return false;
 }
 
-const char *configuration_status_id(enum configuration_status status)
+const char *dataset_configuration_status_id(enum configuration_status status)
 {
     static const char *const ids[] = {CONFIGURATION_STATUS_LIST(ID3)};
     return ids[status];

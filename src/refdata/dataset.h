@@ -98,7 +98,7 @@ int coordination_number(enum coordination coordination); /* 0 for none */
  * behind it: "VI", "vi", "6", "IVSQ", "4sq". False when there is none. */
 bool coordination_find(const char *text, enum coordination *found);
 
-const char *configuration_status_id(enum configuration_status status);
+const char *dataset_configuration_status_id(enum configuration_status status);
 const char *radioactive_id(enum radioactive radioactive);
 const char *radioactive_word(enum radioactive radioactive);
 

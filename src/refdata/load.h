@@ -50,6 +50,14 @@ bool load_entry_context(struct load *ld, const cJSON *object, int place);
 void load_index(struct dataset *set, int count, int (*z_of)(const void *row),
                 const void *rows, size_t row_size);
 
+/* A copied text member; *out stays as it is when the key is absent. */
+bool load_member(struct load *ld, const cJSON *object, const char *key,
+                 const char **out);
+
+/* Members of a list joined by a separator, copied; NULL without the key. */
+bool load_list(struct load *ld, const cJSON *object, const char *key,
+               const char *separator, const char **out);
+
 /* A copy in the data set's memory, or NULL with a failed status. */
 const char *load_copy(struct load *ld, const char *text);
 

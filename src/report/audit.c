@@ -465,7 +465,7 @@ static void add_left_out(struct report *report, const struct audit *audit)
     }
 }
 
-void audit_report(struct report *report, unsigned parts,
+void report_audit(struct report *report, unsigned parts,
                   const struct audit *audit, unsigned scopes)
 {
     struct report_table *ranks = NULL;

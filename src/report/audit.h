@@ -9,7 +9,7 @@
 /* Fills the parts (bits of enum report_part) of an empty report from an audit,
  * which must outlive it; scopes as in audit_parts. Records: one per series and
  * part. Blocks: the same as a table, then which model is best where. */
-void audit_report(struct report *report, unsigned parts,
+void report_audit(struct report *report, unsigned parts,
                   const struct audit *audit, unsigned scopes);
 
 #endif

@@ -345,7 +345,7 @@ static void add_blocks(struct report *report, const struct comparison *c)
     report_legends(report);
 }
 
-void comparison_report(struct report *report, unsigned parts,
+void report_comparison(struct report *report, unsigned parts,
                        const struct comparison *c)
 {
     report->records = (struct report_records){

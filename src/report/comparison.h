@@ -10,7 +10,7 @@
  * comparison, which must outlive it. Records: one per line and species. Blocks:
  * what is known in words, then tables with a column per species and, from the
  * second on, its difference from the first. */
-void comparison_report(struct report *report, unsigned parts,
+void report_comparison(struct report *report, unsigned parts,
                        const struct comparison *comparison);
 
 #endif

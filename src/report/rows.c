@@ -208,7 +208,7 @@ static const struct provenance *against_source(const void *record)
 #define NUMBER .kind = COLUMN_NUMBER
 #define OF_SPECIES .repeats = true
 
-const struct report_column rows_columns[] = {
+const struct report_column report_rows_columns[] = {
     {"z", NUMBER, .put = put_z, OF_SPECIES},
     {"symbol", TEXT, .put = put_symbol, OF_SPECIES},
     {"name", TEXT, .put = put_name, OF_SPECIES},
@@ -241,7 +241,8 @@ const struct report_column rows_columns[] = {
     {"against_source", TEXT, .source = against_source},
 };
 #define COLUMNS_AGAINST 6
-#define COLUMNS_ALL ((int)(sizeof rows_columns / sizeof rows_columns[0]))
+#define COLUMNS_ALL                                                            \
+    ((int)(sizeof report_rows_columns / sizeof report_rows_columns[0]))
 
 static const void *row_at(const void *data, size_t i, void *room)
 {
@@ -409,13 +410,13 @@ static void add_blocks(struct report *r, const struct row *rows, size_t count,
     report_legends(r);
 }
 
-void rows_report(struct report *report, unsigned parts, const struct row *rows,
+void report_rows(struct report *report, unsigned parts, const struct row *rows,
                  size_t count)
 {
     struct shown shown = shown_of(rows, count);
     report->records = (struct report_records){
         .name = "rows",
-        .columns = rows_columns,
+        .columns = report_rows_columns,
         .column_count = COLUMNS_ALL - (shown.against ? 0 : COLUMNS_AGAINST),
         .data = rows,
         .count = count,

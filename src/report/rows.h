@@ -10,11 +10,11 @@
  * rows[count], count >= 1, which must outlive it. Records: one per row, with
  * the columns of a second reference where some row has one. Blocks: a table
  * with the places that the unit shows, and its legends. */
-void rows_report(struct report *report, unsigned parts, const struct row *rows,
+void report_rows(struct report *report, unsigned parts, const struct row *rows,
                  size_t count);
 
 /* The columns of its records that are always there. */
 #define ROWS_COLUMN_COUNT 20
-extern const struct report_column rows_columns[];
+extern const struct report_column report_rows_columns[];
 
 #endif

@@ -132,7 +132,7 @@ static void put_spin(const void *record, struct text *t)
 {
     const struct record *r = record;
     if (r->level)
-        text_add(t, spin_text(r->level->spin));
+        text_add(t, level_spin_text(r->level->spin));
 }
 
 /* A number in its unit, with the places that belong to it. */
@@ -360,7 +360,7 @@ static void add_levels(struct report *report, const struct solved *s)
     }
 }
 
-void solved_report(struct report *report, unsigned parts,
+void report_solved(struct report *report, unsigned parts,
                    const struct atom_report *atom,
                    const struct provenance *source, const struct unit *energy,
                    const struct unit *length)

@@ -12,7 +12,7 @@
  * it is written in. Records: a record for each part of the energy, then for
  * each level one per number. Blocks: energy and its parts, whole subshells, and
  * the levels where they are told apart by spin or j. */
-void solved_report(struct report *report, unsigned parts,
+void report_solved(struct report *report, unsigned parts,
                    const struct atom_report *atom,
                    const struct provenance *source, const struct unit *energy,
                    const struct unit *length);

@@ -132,7 +132,7 @@ static void add_blocks(struct report *report, const struct source *sources,
     }
 }
 
-void sources_report(struct report *report, unsigned parts,
+void report_sources(struct report *report, unsigned parts,
                     const struct source *sources, int count)
 {
     report->records = (struct report_records){

@@ -8,7 +8,7 @@
 
 /* Fills the parts (bits of enum report_part) of an empty report from
  * sources[count], which must outlive it. */
-void sources_report(struct report *report, unsigned parts,
+void report_sources(struct report *report, unsigned parts,
                     const struct source *sources, int count);
 
 #endif

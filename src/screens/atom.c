@@ -20,7 +20,7 @@ static void init(struct session *session, void *state)
 {
     struct atom_state *own = state;
     (void)session;
-    own->method = atom_method_default;
+    own->method = method_default;
 }
 
 static void clear(void *state)
@@ -63,7 +63,7 @@ static void draw_atom_title(const struct session *session,
 static void slot_text(const struct session *session,
                       const struct atom_slot *slot, struct text *t)
 {
-    const struct atom_report *r = atom_run_report(slot->run);
+    const struct atom_report *r = run_atom_report(slot->run);
     char out[NUMBER_TEXT_MAX];
     if (slot->failure[0] != '\0')
         text_addf(t, "no number: %s", slot->failure);
@@ -96,7 +96,7 @@ static void draw_state(const struct session *session,
     if (slot) {
         slot_text(session, slot, &t);
         bad = slot->failure[0] != '\0' ||
-              atom_run_report(slot->run)->state == REPORT_FAILED;
+              run_atom_report(slot->run)->state == REPORT_FAILED;
     } else {
         struct species species;
         bool there = session_species(session, &species);
@@ -110,7 +110,7 @@ static void draw_state(const struct session *session,
     else if (over && !screen_atom_solved(session, own, SLOT_OVER))
         text_addf(&t, "; %s: cycle %d",
                   screen_atom_overlay_name(session, own, NULL, name),
-                  atom_run_report(over->run)->cycles);
+                  run_atom_report(over->run)->cycles);
     canvas_text(canvas, 1, 0, canvas->columns,
                 bad || failure[0] != '\0' ? ROLE_CAUTION : ROLE_TEXT, line);
 }
@@ -340,7 +340,7 @@ static bool export_report(struct session *session, void *state, unsigned parts,
         screen_atom_solved(session, state, SLOT_CHOSEN);
     if (!atom)
         return status_fail(st, STATUS_CONVERGENCE, "the atom is not solved");
-    solved_report(report, parts, atom, atom_run_source(atom->method.functional),
+    report_solved(report, parts, atom, run_atom_source(atom->method.functional),
                   screen_atom_energy_unit(session),
                   session_unit(session, QUANTITY_RADIUS));
     return true;

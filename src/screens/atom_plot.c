@@ -57,9 +57,9 @@ struct plot_axis screen_atom_axis(const struct session *session,
 {
     int shell = screen_atom_shell(own, report);
     double first = FIRST_PART / report->species.z;
-    double last = atom_run_extent(own->slots[SLOT_CHOSEN].run, LEFT_OUT);
+    double last = run_atom_extent(own->slots[SLOT_CHOSEN].run, LEFT_OUT);
     if (screen_atom_solved(session, own, SLOT_OVER))
-        last = fmax(last, atom_run_extent(own->slots[SLOT_OVER].run, LEFT_OUT));
+        last = fmax(last, run_atom_extent(own->slots[SLOT_OVER].run, LEFT_OUT));
     if (!own->whole && shell >= 0)
         first = NEAR_PART * report->subshells[shell].peak_radius;
     else if (own->root)
@@ -105,7 +105,7 @@ static void sample(const struct session *session, const struct atom_state *own,
                    int slot, enum atom_run_curve curve, int shell,
                    struct samples *s)
 {
-    atom_run_curve(own->slots[slot].run, curve, shell, s->count, s->r,
+    run_atom_curve(own->slots[slot].run, curve, shell, s->count, s->r,
                    s->value);
     to_points(session, s, curve == RUN_DENSITY);
 }
@@ -413,9 +413,9 @@ static struct cursor_line line_of(const struct atom_state *own, int slot,
 {
     const struct atom_run *run = own->slots[slot].run;
     struct cursor_line line = {.has_within = true, .has_zeff = shell < 0};
-    atom_run_curve(run, RUN_DENSITY, shell, 1, &r, &line.density);
-    atom_run_curve(run, RUN_ENCLOSED, shell, 1, &r, &line.within);
-    atom_run_curve(run, RUN_ZEFF, -1, 1, &r, &line.zeff);
+    run_atom_curve(run, RUN_DENSITY, shell, 1, &r, &line.density);
+    run_atom_curve(run, RUN_ENCLOSED, shell, 1, &r, &line.within);
+    run_atom_curve(run, RUN_ZEFF, -1, 1, &r, &line.zeff);
     return line;
 }
 

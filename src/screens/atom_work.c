@@ -10,7 +10,7 @@
 void screen_atom_release(struct atom_state *own)
 {
     for (int i = 0; i < SLOT_COUNT; i++)
-        atom_run_free(own->slots[i].run);
+        run_atom_free(own->slots[i].run);
     orbital_run_free(own->orbitals);
 }
 
@@ -80,7 +80,7 @@ static bool slot_pending(const struct session *session,
     if (!is_current(slot, &species, method))
         return true;
     return !slot->stopped && slot->failure[0] == '\0' &&
-           atom_run_report(slot->run)->state == REPORT_RUNNING;
+           run_atom_report(slot->run)->state == REPORT_RUNNING;
 }
 
 static bool orbitals_current(const struct atom_state *own,
@@ -119,13 +119,13 @@ static void begin(struct session *session, struct atom_state *own,
 {
     struct status st = status_ok();
     if (!slot->run)
-        slot->run = atom_run_new(&st);
+        slot->run = run_atom_new(&st);
     slot->species = *species;
     slot->method = method;
     slot->begun = true;
     slot->stopped = false;
     slot->failure[0] = '\0';
-    if (slot->run && atom_run_begin(slot->run, species, &method, &st))
+    if (slot->run && run_atom_begin(slot->run, species, &method, &st))
         return;
     snprintf(slot->failure, sizeof slot->failure, "%s", st.message);
     if (!slot->run) {
@@ -151,7 +151,7 @@ static bool step_slot(struct session *session, struct atom_state *own, int s,
         *changed = slot->failure[0] != '\0';
         return true;
     }
-    *changed = !atom_run_step(slot->run);
+    *changed = !run_atom_step(slot->run);
     return true;
 }
 
@@ -234,14 +234,14 @@ const struct atom_report *screen_atom_solved(const struct session *session,
     const struct atom_slot *slot = screen_atom_slot(session, own, s);
     if (!slot)
         return NULL;
-    const struct atom_report *r = atom_run_report(slot->run);
+    const struct atom_report *r = run_atom_report(slot->run);
     return r->state == REPORT_SOLVED ? r : NULL;
 }
 
 static const char *slot_failure(const struct atom_slot *slot)
 {
     return slot->failure[0] != '\0' ? slot->failure
-                                    : atom_run_report(slot->run)->reason;
+                                    : run_atom_report(slot->run)->reason;
 }
 
 const char *screen_atom_overlay_failure(const struct session *session,

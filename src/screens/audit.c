@@ -463,7 +463,7 @@ static bool export_report(struct session *session, void *state, unsigned parts,
     struct audit_state *own = state;
     if (!refresh(session, own, st))
         return false;
-    audit_report(report, parts, &own->audit, 0);
+    report_audit(report, parts, &own->audit, 0);
     return true;
 }
 

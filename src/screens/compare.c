@@ -364,7 +364,7 @@ static bool export_report(struct session *session, void *state, unsigned parts,
     struct compare_state *own = state;
     if (!refresh(session, own))
         return status_fail(st, STATUS_MEMORY, "out of memory");
-    comparison_report(report, parts, &own->comparison);
+    report_comparison(report, parts, &own->comparison);
     return true;
 }
 

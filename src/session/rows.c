@@ -47,7 +47,7 @@ bool session_rows_report(struct rows *rows, bool gathered, unsigned parts,
     if (kept) {
         if (size > 0)
             memcpy(kept, rows->items, size);
-        rows_report(report, parts, kept, rows->count);
+        report_rows(report, parts, kept, rows->count);
     }
     free(rows->items);
     *rows = (struct rows){0};

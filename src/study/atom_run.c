@@ -15,7 +15,7 @@ struct atom_run {
     struct atom_report report;
 };
 
-struct atom_run *atom_run_new(struct status *st)
+struct atom_run *run_atom_new(struct status *st)
 {
     struct atom_run *run = calloc(1, sizeof *run);
     if (!run) {
@@ -31,7 +31,7 @@ struct atom_run *atom_run_new(struct status *st)
     return run;
 }
 
-void atom_run_free(struct atom_run *run)
+void run_atom_free(struct atom_run *run)
 {
     if (!run)
         return;
@@ -49,7 +49,7 @@ static enum atom_functional functional_of(enum functional functional)
     return solvers[functional];
 }
 
-bool atom_run_begin(struct atom_run *run, const struct species *species,
+bool run_atom_begin(struct atom_run *run, const struct species *species,
                     const struct atom_method *method, struct status *st)
 {
     bool dirac = method->relativity == RELATIVITY_DIRAC;
@@ -131,10 +131,10 @@ static void fill_reason(struct atom_report *report,
                                  .spin = level.spin};
     char out[LEVEL_TEXT_MAX];
     text_addf(&t, " (%s%s%s)", level_print(&label, out), level.spin ? " " : "",
-              spin_text(level.spin));
+              level_spin_text(level.spin));
 }
 
-bool atom_run_step(struct atom_run *run)
+bool run_atom_step(struct atom_run *run)
 {
     struct atom_report *report = &run->report;
     if (report->state != REPORT_RUNNING)
@@ -152,12 +152,12 @@ bool atom_run_step(struct atom_run *run)
     return false;
 }
 
-const struct atom_report *atom_run_report(const struct atom_run *run)
+const struct atom_report *run_atom_report(const struct atom_run *run)
 {
     return &run->report;
 }
 
-void atom_run_curve(const struct atom_run *run, enum atom_run_curve curve,
+void run_atom_curve(const struct atom_run *run, enum atom_run_curve curve,
                     int subshell, int n, const double *r, double *out)
 {
     static const enum atom_curve curves[] = {
@@ -169,13 +169,13 @@ void atom_run_curve(const struct atom_run *run, enum atom_run_curve curve,
     atom_curve_at(run->solver, curves[curve], subshell, n, r, out);
 }
 
-double atom_run_extent(const struct atom_run *run, double electrons)
+double run_atom_extent(const struct atom_run *run, double electrons)
 {
     assert(run->report.state == REPORT_SOLVED);
     return atom_extent(run->solver, electrons);
 }
 
-const struct provenance *atom_run_source(enum functional functional)
+const struct provenance *run_atom_source(enum functional functional)
 {
     return scf_atom_source(functional == FUNCTIONAL_PBE);
 }

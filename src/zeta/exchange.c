@@ -272,9 +272,9 @@ static void contract_direct(struct energy *e, int l1, int l2,
                 continue;
             double R = 0.0, R_a = 0.0, log_a;
             for (int k = 2; k <= most; k += 2) {
-                R += weight[k / 2] * slater_integral(&e->tables, p1->N[p],
-                                                     p1->a[p], p2->N[q],
-                                                     p2->a[q], k, &log_a);
+                R += weight[k / 2] * zeta_slater_integral(&e->tables, p1->N[p],
+                                                          p1->a[p], p2->N[q],
+                                                          p2->a[q], k, &log_a);
                 R_a += weight[k / 2] * log_a;
             }
             int at1 = p1->at[p], at2 = p2->at[q];

@@ -120,8 +120,8 @@ static double function_norm(int n, double zeta)
     return sqrt(square);
 }
 
-double orbital_value(int l, int count, const double zeta[],
-                     const double coefficient[], double r)
+double zeta_orbital_value(int l, int count, const double zeta[],
+                          const double coefficient[], double r)
 {
     double sum = 0.0, power = 1.0;
     for (int i = 0; i < l; i++)
@@ -218,8 +218,8 @@ void orbitals_fill(const struct energy *e, struct zeta_subshell shells[])
             shell->z_eff = shell->n * zeta[i];
             shell->mean_radius = mean_radius(e, l, shell->coefficient);
             shell->peak_radius = peak_radius(e, l, i, shell->coefficient);
-            double tail = orbital_value(l, b->count, zeta, shell->coefficient,
-                                        shell->peak_radius);
+            double tail = zeta_orbital_value(
+                l, b->count, zeta, shell->coefficient, shell->peak_radius);
             for (int k = 0; k < N_MAX; k++)
                 if (k >= b->count)
                     shell->coefficient[k] = 0.0;

@@ -12,7 +12,7 @@ void orbitals_fill(const struct energy *e, struct zeta_subshell shells[]);
 
 /* P(r) of an orbital over count functions of one l whose exponents are
  * zeta[count], the first with n = l+1. */
-double orbital_value(int l, int count, const double zeta[],
-                     const double coefficient[], double r);
+double zeta_orbital_value(int l, int count, const double zeta[],
+                          const double coefficient[], double r);
 
 #endif

@@ -3,7 +3,7 @@
 
 #include <assert.h>
 
-void slater_tables_fill(struct slater_tables *tables)
+void zeta_slater_tables_fill(struct slater_tables *tables)
 {
     for (int Q = 0; Q <= SLATER_SECOND_MAX; Q++) {
         tables->ratio[Q][0] = (slater_lanes){0.0, 0.0};
@@ -25,8 +25,8 @@ void slater_tables_fill(struct slater_tables *tables)
                 tables->descend[k][N][M] = (double)(N - k - 1) / (M + k + 1);
 }
 
-double slater_integral(const struct slater_tables *tables, int N, double a,
-                       int M, double b, int k, double *log_a)
+double zeta_slater_integral(const struct slater_tables *tables, int N, double a,
+                            int M, double b, int k, double *log_a)
 {
     assert(N > k && M > k && N <= SLATER_POWER_MAX && M <= SLATER_POWER_MAX);
     assert(k >= 0 && k <= SLATER_ORDER_MAX);

@@ -28,15 +28,15 @@ struct slater_tables {
 };
 
 /* Fills the tables. */
-void slater_tables_fill(struct slater_tables *tables);
+void zeta_slater_tables_fill(struct slater_tables *tables);
 
 /* R^k of the densities a^(N+1)/N! r^N e^(-ar) and b^(M+1)/M! r^M e^(-br), both
  * of unit charge: the double integral of their product with r<^k/r>^(k+1), in
  * hartree. *log_a receives a dR/da; b dR/db is R minus that, because R grows
  * as the common scale of a and b. 2 <= N, M <= SLATER_POWER_MAX, k < N, M,
  * 0 <= k <= SLATER_ORDER_MAX; a, b > 0 in 1/bohr. */
-double slater_integral(const struct slater_tables *tables, int N, double a,
-                       int M, double b, int k, double *log_a);
+double zeta_slater_integral(const struct slater_tables *tables, int N, double a,
+                            int M, double b, int k, double *log_a);
 
 /* A call would cost as much as a short chain. */
 #define SLATER_INLINE static inline __attribute__((always_inline))

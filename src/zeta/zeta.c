@@ -56,7 +56,7 @@ struct zeta *zeta_new(struct status *st)
         status_fail(st, STATUS_MEMORY, "no memory for the single-zeta atom");
         return NULL;
     }
-    slater_tables_fill(&work->energy.tables);
+    zeta_slater_tables_fill(&work->energy.tables);
     work->state = ZETA_REFUSED;
     work->reason[0] = '\0';
     work->configuration.count = 0;
@@ -220,7 +220,7 @@ double zeta_orbital(const struct zeta_result *result, int shell, double r)
     for (int i = 0; i < result->count; i++)
         if (result->shells[i].l == own->l)
             zeta[count++] = result->shells[i].zeta;
-    return orbital_value(own->l, count, zeta, own->coefficient, r);
+    return zeta_orbital_value(own->l, count, zeta, own->coefficient, r);
 }
 
 /* Least eigenvalue of the Hessian, by central differences of the gradient.

@@ -164,10 +164,10 @@ START_TEST(rows_are_sorted_by_size_and_gaps_come_last)
             stored(QUANTITY_RADIUS, 2, 0, &same));
         rows[i].species.z = i + 1;
     }
-    ck_assert(rows_sort(rows, 5, ROW_ORDER_RESIDUAL, &st));
+    ck_assert(order_rows(rows, 5, ROW_ORDER_RESIDUAL, &st));
     for (int i = 0; i < 5; i++)
         ck_assert_int_eq(rows[i].species.z, want[i]);
-    ck_assert(rows_sort(rows, 0, ROW_ORDER_VALUE, &st));
+    ck_assert(order_rows(rows, 0, ROW_ORDER_VALUE, &st));
 }
 END_TEST
 
@@ -202,7 +202,7 @@ START_TEST(every_order_is_by_its_own_number)
                     ? reading_gap(QUANTITY_RADIUS, READING_MISSING, "y", &other)
                     : stored(QUANTITY_RADIUS, against[i], 1, &other));
         }
-        ck_assert(rows_sort(rows, 5, (enum row_order)o, &st));
+        ck_assert(order_rows(rows, 5, (enum row_order)o, &st));
         for (int i = 0; i < 5; i++)
             ck_assert_msg(rows[i].species.z == want[o][i], "%s, place %d: %d",
                           row_order_id((enum row_order)o), i,

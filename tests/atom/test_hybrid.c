@@ -18,12 +18,12 @@ static const struct atom_options DIRAC = {.functional = ATOM_LSD,
 /* Edmonds, Angular Momentum in Quantum Mechanics (1957), table 2. */
 START_TEST(three_j_symbols_are_the_tabulated_ones)
 {
-    near(term_three_j(0, 1, 1), 1.0 / 3.0, 1e-15, 0.0, "0 1 1");
-    near(term_three_j(1, 2, 1), 2.0 / 15.0, 1e-15, 0.0, "1 2 1");
-    near(term_three_j(2, 2, 2), 2.0 / 35.0, 1e-15, 0.0, "2 2 2");
-    near(term_three_j(2, 4, 2), 2.0 / 35.0, 1e-15, 0.0, "2 4 2");
-    near(term_three_j(3, 6, 3), 100.0 / 3003.0, 1e-15, 0.0, "3 6 3");
-    ck_assert(term_three_j(1, 1, 1) == 0.0 && term_three_j(0, 1, 2) == 0.0);
+    near(atom_three_j(0, 1, 1), 1.0 / 3.0, 1e-15, 0.0, "0 1 1");
+    near(atom_three_j(1, 2, 1), 2.0 / 15.0, 1e-15, 0.0, "1 2 1");
+    near(atom_three_j(2, 2, 2), 2.0 / 35.0, 1e-15, 0.0, "2 2 2");
+    near(atom_three_j(2, 4, 2), 2.0 / 35.0, 1e-15, 0.0, "2 4 2");
+    near(atom_three_j(3, 6, 3), 100.0 / 3003.0, 1e-15, 0.0, "3 6 3");
+    ck_assert(atom_three_j(1, 1, 1) == 0.0 && atom_three_j(0, 1, 2) == 0.0);
 }
 END_TEST
 
@@ -58,10 +58,10 @@ START_TEST(p_shifts_have_both_coupling_limits)
     struct term unknown = {"", -1, -1, -1};
     for (int n = 1; n <= 5; n++) {
         struct open_subshell p = {1, n, 1e-6, 2.385};
-        near(term_spin_orbit(&p, 1, &unknown) / 1e-6, lande[n - 1], 1e-4, 0.0,
-             "p%d, weak", n);
+        near(atom_term_spin_orbit(&p, 1, &unknown) / 1e-6, lande[n - 1], 1e-4,
+             0.0, "p%d, weak", n);
         p.zeta = 1e6;
-        near(term_spin_orbit(&p, 1, &unknown) / 1e6, jj[n - 1], 1e-4, 0.0,
+        near(atom_term_spin_orbit(&p, 1, &unknown) / 1e6, jj[n - 1], 1e-4, 0.0,
              "p%d, strong", n);
     }
 }
@@ -73,27 +73,28 @@ START_TEST(d_and_f_shifts_follow_the_interval_rule)
     struct term term;
     struct open_subshell d2 = {2, 2, 0.1, 0.0}, f11 = {3, 11, 0.1, 0.0};
     ck_assert(term_parse("3F2", &term));
-    near(term_spin_orbit(&d2, 1, &term), -0.2, 1e-14, 0.0, "d2");
+    near(atom_term_spin_orbit(&d2, 1, &term), -0.2, 1e-14, 0.0, "d2");
     ck_assert(term_parse("4I*15/2", &term));
-    near(term_spin_orbit(&f11, 1, &term), -0.3, 1e-14, 0.0, "f11");
+    near(atom_term_spin_orbit(&f11, 1, &term), -0.3, 1e-14, 0.0, "f11");
     /* the same J by Hund's rule when no term is known */
     struct term unknown = {"", -1, -1, -1};
-    near(term_spin_orbit(&d2, 1, &unknown), -0.2, 1e-14, 0.0, "d2, by rule");
+    near(atom_term_spin_orbit(&d2, 1, &unknown), -0.2, 1e-14, 0.0,
+         "d2, by rule");
     /* (15/2,1/2)8 of f11 s: the stretched state keeps the core's shift */
     struct open_subshell pair[2] = {f11, {0, 1, 0.0, 0.0}};
     ck_assert(term_parse("(15/2,1/2)*8", &term));
-    near(term_spin_orbit(pair, 2, &term), -0.3, 1e-14, 0.0, "f11 s");
+    near(atom_term_spin_orbit(pair, 2, &term), -0.3, 1e-14, 0.0, "f11 s");
 }
 END_TEST
 
 /* d²: mean of 3F and 3P by degeneracy is zero, 3P - 3F = 15 B. */
 START_TEST(hund_shifts_have_their_closed_values)
 {
-    near(term_hund_shift(2, 2, 49.0, 0.0, 0.0), -4.5, 1e-14, 0.0, "d2");
-    near(term_hund_shift(2, 7, 49.0, 0.0, 0.0), -4.5, 1e-14, 0.0, "d7");
-    ck_assert(term_hund_shift(2, 5, 49.0, 7.0, 0.0) == 0.0);
-    near(term_hund_shift(3, 3, 135.0, 0.0, 0.0), -21.0, 1e-13, 0.0, "f3");
-    near(term_hund_shift(3, 12, 135.0, 0.0, 0.0), -9.0, 1e-13, 0.0, "f12");
+    near(atom_term_hund_shift(2, 2, 49.0, 0.0, 0.0), -4.5, 1e-14, 0.0, "d2");
+    near(atom_term_hund_shift(2, 7, 49.0, 0.0, 0.0), -4.5, 1e-14, 0.0, "d7");
+    ck_assert(atom_term_hund_shift(2, 5, 49.0, 7.0, 0.0) == 0.0);
+    near(atom_term_hund_shift(3, 3, 135.0, 0.0, 0.0), -21.0, 1e-13, 0.0, "f3");
+    near(atom_term_hund_shift(3, 12, 135.0, 0.0, 0.0), -9.0, 1e-13, 0.0, "f12");
 }
 END_TEST
 

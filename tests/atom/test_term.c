@@ -186,7 +186,7 @@ START_TEST(p_shifts_are_those_of_all_determinants)
         for (size_t i = 0; i < sizeof ratios / sizeof *ratios; i++) {
             double zeta = ratios[i] * f2;
             struct open_subshell p = {1, n, zeta, f2};
-            near(term_spin_orbit(&p, 1, &unknown),
+            near(atom_term_spin_orbit(&p, 1, &unknown),
                  ground_energy(n, zeta, f2) - ground_energy(n, 0.0, f2), 2e-7,
                  0.0, "p%d, zeta/F2 %g", n, ratios[i]);
         }
@@ -214,12 +214,12 @@ START_TEST(hund_shifts_are_those_of_the_stretched_determinant)
                     stretched += l - m < n ? pair : 0.0;
                 }
             double mean = all * n * (n - 1.0) / ((2.0 * l + 1.0) * 2.0 * l);
-            near(term_hund_shift(l, n, f[1], f[2], l > 2 ? f[3] : 0.0),
+            near(atom_term_hund_shift(l, n, f[1], f[2], l > 2 ? f[3] : 0.0),
                  stretched - mean, 1e-8, 0.0, "l=%d, %d electrons", l, n);
             /* a half-filled subshell more is a sphere more */
             if (n < 2 * l + 1)
-                near(term_hund_shift(l, n + 2 * l + 1, f[1], f[2],
-                                     l > 2 ? f[3] : 0.0),
+                near(atom_term_hund_shift(l, n + 2 * l + 1, f[1], f[2],
+                                          l > 2 ? f[3] : 0.0),
                      stretched - mean, 1e-8, 0.0, "l=%d, %d electrons", l,
                      n + 2 * l + 1);
         }

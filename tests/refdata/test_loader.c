@@ -528,7 +528,7 @@ WORD_OF(gap_word, gap)
 WORD_OF(spin_id, spin_state)
 WORD_OF(spin_word, spin_state)
 WORD_OF(coordination_id, coordination)
-WORD_OF(configuration_status_id, configuration_status)
+WORD_OF(dataset_configuration_status_id, configuration_status)
 WORD_OF(radioactive_id, radioactive)
 WORD_OF(radioactive_word, radioactive)
 
@@ -542,7 +542,7 @@ START_TEST(test_words_are_distinct)
     distinct(spin_id_of, SPIN_COUNT);
     distinct(spin_word_of, SPIN_COUNT);
     distinct(coordination_id_of, COORDINATION_COUNT);
-    distinct(configuration_status_id_of, CONFIGURATION_STATUS_COUNT);
+    distinct(dataset_configuration_status_id_of, CONFIGURATION_STATUS_COUNT);
     distinct(radioactive_id_of, RADIOACTIVE_COUNT);
     distinct(radioactive_word_of, RADIOACTIVE_COUNT);
 }

@@ -156,7 +156,7 @@ START_TEST(an_atom_is_solved_one_cycle_at_a_time)
     ck_assert(shows("solving"));
     while (screen_atom_pending(&app.session, atom())) {
         const struct atom_report *r =
-            atom_run_report(atom()->slots[SLOT_CHOSEN].run);
+            run_atom_report(atom()->slots[SLOT_CHOSEN].run);
         ck_assert_int_eq(r->cycles, cycles);
         app_step(&app, &changed);
         cycles++;
@@ -200,9 +200,9 @@ START_TEST(the_cursor_reads_at_its_radius_and_charges_add_up_to_z)
     ck_assert(radius > 0.0 && radius < r->subshells[6].peak_radius);
     double density, within, zeff;
     const struct atom_run *run = atom()->slots[SLOT_CHOSEN].run;
-    atom_run_curve(run, RUN_DENSITY, -1, 1, &radius, &density);
-    atom_run_curve(run, RUN_ENCLOSED, -1, 1, &radius, &within);
-    atom_run_curve(run, RUN_ZEFF, -1, 1, &radius, &zeff);
+    run_atom_curve(run, RUN_DENSITY, -1, 1, &radius, &density);
+    run_atom_curve(run, RUN_ENCLOSED, -1, 1, &radius, &within);
+    run_atom_curve(run, RUN_ZEFF, -1, 1, &radius, &zeff);
     near(within + zeff, 26.0, 1e-12, 0.0, "Gauss");
     char words[64];
     snprintf(words, sizeof words, "%.4f   %.4f", within, zeff);
@@ -364,16 +364,16 @@ START_TEST(own_electrons_are_solved_and_named)
         screen_atom_solved(&app.session, atom(), SLOT_CHOSEN);
     ck_assert_ptr_nonnull(own);
     ck_assert(shows("[Ar] 3d7 4s1"));
-    struct atom_run *run = atom_run_new(&st);
+    struct atom_run *run = run_atom_new(&st);
     ck_assert_ptr_nonnull(run);
     struct species species = own->species;
     ck_assert(configuration_parse("[Ar] 3d7 4s1", &species.configuration, &st));
-    ck_assert(atom_run_begin(run, &species, &atom_method_default, &st));
-    while (atom_run_step(run))
+    ck_assert(run_atom_begin(run, &species, &method_default, &st));
+    while (run_atom_step(run))
         ;
-    near(own->etot, atom_run_report(run)->etot, 1e-9, 0.0, "etot as asked");
+    near(own->etot, run_atom_report(run)->etot, 1e-9, 0.0, "etot as asked");
     ck_assert(own->etot > ground + 1e-3 || own->etot < ground - 1e-3);
-    atom_run_free(run);
+    run_atom_free(run);
     app.export = &screen_atom.exports[0];
     app_export_command(&app, &t);
     ck_assert_ptr_nonnull(strstr(buffer, "--configuration '[Ar] 3d7 4s1'"));

@@ -145,37 +145,37 @@ START_TEST(curves_of_an_atom_agree_with_each_other)
 {
     struct status st = status_ok();
     struct species silver = species_of(47, 1);
-    struct atom_run *run = atom_run_new(&st);
+    struct atom_run *run = run_atom_new(&st);
     for (int f = 0; f < FUNCTIONAL_COUNT; f++)
         for (int rel = 0; rel < RELATIVITY_COUNT; rel++) {
             struct atom_method method = {(enum functional)f,
                                          (enum relativity)rel, 0.0};
             double enclosed, zeff, part, sum = 0.0, at = 0.7331;
-            ck_assert(atom_run_begin(run, &silver, &method, &st));
-            while (atom_run_step(run))
+            ck_assert(run_atom_begin(run, &silver, &method, &st));
+            while (run_atom_step(run))
                 ;
-            const struct atom_report *report = atom_run_report(run);
+            const struct atom_report *report = run_atom_report(run);
             ck_assert_int_eq(report->state, REPORT_SOLVED);
-            atom_run_curve(run, RUN_ENCLOSED, -1, 1, &at, &enclosed);
-            atom_run_curve(run, RUN_ZEFF, -1, 1, &at, &zeff);
+            run_atom_curve(run, RUN_ENCLOSED, -1, 1, &at, &enclosed);
+            run_atom_curve(run, RUN_ZEFF, -1, 1, &at, &zeff);
             near(enclosed + zeff, 47.0, 1e-11, 0.0, "Z_eff(r)");
             for (int s = 0; s < report->subshell_count; s++) {
-                atom_run_curve(run, RUN_ENCLOSED, s, 1, &at, &part);
+                run_atom_curve(run, RUN_ENCLOSED, s, 1, &at, &part);
                 sum += part;
             }
             near(sum, enclosed, 1e-7, 0.0, "subshells");
             for (int i = 0; i < POINTS; i++)
                 r[i] = 2.0 * i / (POINTS - 1);
-            atom_run_curve(run, RUN_DENSITY, -1, POINTS, r, d);
+            run_atom_curve(run, RUN_DENSITY, -1, POINTS, r, d);
             at = 2.0;
-            atom_run_curve(run, RUN_ENCLOSED, -1, 1, &at, &enclosed);
+            run_atom_curve(run, RUN_ENCLOSED, -1, 1, &at, &enclosed);
             /* the innermost maximum is narrow for equal steps */
             near(electrons(), enclosed, 2e-3, 0.0, "D integrates");
-            double beyond = atom_run_extent(run, 1e-3);
-            atom_run_curve(run, RUN_ENCLOSED, -1, 1, &beyond, &enclosed);
+            double beyond = run_atom_extent(run, 1e-3);
+            run_atom_curve(run, RUN_ENCLOSED, -1, 1, &beyond, &enclosed);
             ck_assert(enclosed > 46.0 - 1e-3 && enclosed <= 46.0 + 1e-9);
         }
-    atom_run_free(run);
+    run_atom_free(run);
 }
 END_TEST
 
@@ -183,16 +183,16 @@ START_TEST(a_run_refuses_what_has_no_electron)
 {
     struct status st = status_ok();
     struct species bare = species_of(1, 1);
-    struct atom_run *run = atom_run_new(&st);
-    ck_assert_int_eq(atom_run_report(run)->state, REPORT_FAILED);
-    ck_assert(!atom_run_begin(run, &bare, &atom_method_default, &st));
+    struct atom_run *run = run_atom_new(&st);
+    ck_assert_int_eq(run_atom_report(run)->state, REPORT_FAILED);
+    ck_assert(!run_atom_begin(run, &bare, &method_default, &st));
     ck_assert_int_eq(st.code, STATUS_USAGE);
-    ck_assert(!atom_run_step(run));
+    ck_assert(!run_atom_step(run));
     struct species u = species_of(92, 0);
     struct atom_method slow = {FUNCTIONAL_LDA, RELATIVITY_DIRAC, 91.0};
-    ck_assert(!atom_run_begin(run, &u, &slow, &st));
+    ck_assert(!run_atom_begin(run, &u, &slow, &st));
     ck_assert_int_eq(st.code, STATUS_USAGE);
-    atom_run_free(run);
+    run_atom_free(run);
 }
 END_TEST
 

@@ -428,7 +428,7 @@ int main(int argc, char **argv)
         free(fit);
         return EXIT_FAILURE;
     }
-    slater_tables_fill(&fit->energy.tables);
+    zeta_slater_tables_fill(&fit->energy.tables);
     add_listed(fit, data);
     add_isoelectronic(fit);
     add_random(fit);

@@ -19,7 +19,7 @@ static struct energy *energy_of(int z, const char *text,
     ck_assert_ptr_nonnull(e);
     ck_assert_msg(configuration_parse(text, &c, &st), "%s", st.message);
     struct zeta_problem problem = {z, &c, coupling, NULL};
-    slater_tables_fill(&e->tables);
+    zeta_slater_tables_fill(&e->tables);
     ck_assert_msg(layout_fill(&e->atom, &problem, reason), "%s", reason);
     energy_prepare(e);
     double z_eff[ENERGY_SHELL_MAX];

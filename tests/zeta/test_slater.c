@@ -31,7 +31,7 @@ static double radial(const struct hydrogen *a, const struct hydrogen *b,
 {
     struct slater_tables *tables = malloc(sizeof *tables);
     ck_assert_ptr_nonnull(tables);
-    slater_tables_fill(tables);
+    zeta_slater_tables_fill(tables);
     double sum = 0.0, log_a, x = a->zeta + b->zeta, y = c->zeta + d->zeta;
     for (int i = 0; i < a->terms; i++)
         for (int j = 0; j < b->terms; j++)
@@ -41,7 +41,7 @@ static double radial(const struct hydrogen *a, const struct hydrogen *b,
                     int M = c->power[m] + d->power[n];
                     sum += a->c[i] * b->c[j] * c->c[m] * d->c[n] *
                            charge(N, x) * charge(M, y) *
-                           slater_integral(tables, N, x, M, y, k, &log_a);
+                           zeta_slater_integral(tables, N, x, M, y, k, &log_a);
                 }
     free(tables);
     return sum;
@@ -107,11 +107,12 @@ START_TEST(integrals_are_what_their_definition_gives)
     };
     struct slater_tables *tables = malloc(sizeof *tables);
     ck_assert_ptr_nonnull(tables);
-    slater_tables_fill(tables);
+    zeta_slater_tables_fill(tables);
     for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
         double log_a;
         int N = cases[i].N, M = cases[i].M, k = cases[i].k;
-        near(slater_integral(tables, N, cases[i].a, M, cases[i].b, k, &log_a),
+        near(zeta_slater_integral(tables, N, cases[i].a, M, cases[i].b, k,
+                                  &log_a),
              by_quadrature(N, cases[i].a, M, cases[i].b, k), 0, 2e-5,
              "N=%d M=%d k=%d", N, M, k);
     }
@@ -123,21 +124,21 @@ START_TEST(integrals_are_symmetric_with_the_right_derivative)
 {
     struct slater_tables *tables = malloc(sizeof *tables);
     ck_assert_ptr_nonnull(tables);
-    slater_tables_fill(tables);
+    zeta_slater_tables_fill(tables);
     const double a = 1.873, b = 4.119, h = 1e-5;
     for (int N = 2; N <= SLATER_POWER_MAX; N++)
         for (int M = 2; M <= SLATER_POWER_MAX; M++)
             for (int k = 0; k <= SLATER_ORDER_MAX && k < N && k < M; k++) {
                 double log_a, log_b, unused;
-                double R = slater_integral(tables, N, a, M, b, k, &log_a);
-                near(slater_integral(tables, M, b, N, a, k, &log_b), R, 0,
+                double R = zeta_slater_integral(tables, N, a, M, b, k, &log_a);
+                near(zeta_slater_integral(tables, M, b, N, a, k, &log_b), R, 0,
                      1e-14, "N=%d M=%d k=%d", N, M, k);
                 near(log_a + log_b, R, 0, 1e-13, "N=%d M=%d k=%d scale", N, M,
                      k);
-                double up =
-                    slater_integral(tables, N, a * exp(h), M, b, k, &unused);
-                double down =
-                    slater_integral(tables, N, a * exp(-h), M, b, k, &unused);
+                double up = zeta_slater_integral(tables, N, a * exp(h), M, b, k,
+                                                 &unused);
+                double down = zeta_slater_integral(tables, N, a * exp(-h), M, b,
+                                                   k, &unused);
                 near(log_a, (up - down) / (2 * h), 1e-10, 1e-8,
                      "N=%d M=%d k=%d derivative", N, M, k);
             }
@@ -149,7 +150,7 @@ START_TEST(lower_orders_follow_from_higher_ones)
 {
     struct slater_tables *tables = malloc(sizeof *tables);
     ck_assert_ptr_nonnull(tables);
-    slater_tables_fill(tables);
+    zeta_slater_tables_fill(tables);
     const slater_lanes a = {1.873, 0.31}, b = {4.119, 0.87};
     for (int N = 8; N <= SLATER_POWER_MAX; N++)
         for (int M = 8; M <= SLATER_POWER_MAX; M++) {
@@ -159,8 +160,8 @@ START_TEST(lower_orders_follow_from_higher_ones)
                 double log_a;
                 slater_descend(tables, N, M, k, &h);
                 for (int lane = 0; lane < 2; lane++) {
-                    double R = slater_integral(tables, N, a[lane], M, b[lane],
-                                               k, &log_a);
+                    double R = zeta_slater_integral(tables, N, a[lane], M,
+                                                    b[lane], k, &log_a);
                     near(h.inner[lane] + h.outer[lane], R, 0, 1e-13,
                          "N=%d M=%d k=%d", N, M, k);
                 }

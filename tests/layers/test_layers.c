@@ -1,5 +1,5 @@
 /* SPDX-License-Identifier: MIT */
-/* The house: a folder includes only lower floors, outside libraries stay in
+/* The house: a folder includes only lower layers, outside libraries stay in
  * their room, and the calls that the house does without are not there. */
 #include <check.h>
 #include <dirent.h>
@@ -15,15 +15,15 @@ static const char *source_folder;
 /* From DEVELOPERS.md, "The house". */
 static const struct {
     const char *folder;
-    int floor;
-} floors[] = {
+    int layer;
+} layers[] = {
     {"base", 0},     {"numeric", 1}, {"element", 1}, {"atom", 2},
     {"zeta", 2},     {"refdata", 2}, {"canvas", 2},  {"analysis", 2},
     {"model", 3},    {"report", 3},  {"widget", 3},  {"write", 4},
     {"study", 4},    {"session", 5}, {"screens", 6}, {"app", 7},
     {"terminal", 8}, {"cli", 9},
 };
-#define FLOOR_COUNT (sizeof floors / sizeof floors[0])
+#define LAYER_COUNT (sizeof layers / sizeof layers[0])
 
 /* A library's header, and the only folder that may include it. */
 static const struct {
@@ -39,16 +39,16 @@ static const char *const banned[] = {"strcpy(", "strcat(", "sprintf(",
                                      "gets(",   "atoi(",   "atof(",
                                      "strtok(", "alloca("};
 
-static int floor_of(const char *folder, size_t length)
+static int layer_of(const char *folder, size_t length)
 {
-    for (size_t i = 0; i < FLOOR_COUNT; i++)
-        if (strlen(floors[i].folder) == length &&
-            strncmp(floors[i].folder, folder, length) == 0)
-            return floors[i].floor;
+    for (size_t i = 0; i < LAYER_COUNT; i++)
+        if (strlen(layers[i].folder) == length &&
+            strncmp(layers[i].folder, folder, length) == 0)
+            return layers[i].layer;
     return -1;
 }
 
-/* Folders that see fewer than all lower floors. */
+/* Folders that see fewer than all lower layers. */
 static const struct {
     const char *folder;
     const char *seen; /* with a blank on each side */
@@ -77,8 +77,8 @@ static void check_project_include(const char *folder, const char *file,
     size_t length = (size_t)(slash - included);
     if (strlen(folder) == length && strncmp(folder, included, length) == 0)
         return;
-    int own = floor_of(folder, strlen(folder));
-    int other = floor_of(included, length);
+    int own = layer_of(folder, strlen(folder));
+    int other = layer_of(included, length);
     bool ok = other >= 0 && other < own && sees(folder, included, length);
     ck_assert_msg(ok, "%s/%s includes %.30s", folder, file, included);
 }
@@ -149,22 +149,22 @@ static int check_folder(const char *folder)
     return count;
 }
 
-START_TEST(folders_include_only_lower_floors)
+START_TEST(folders_include_only_lower_layers)
 {
     int files = 0;
-    for (size_t i = 0; i < FLOOR_COUNT; i++)
-        files += check_folder(floors[i].folder);
+    for (size_t i = 0; i < LAYER_COUNT; i++)
+        files += check_folder(layers[i].folder);
     ck_assert_int_gt(files, 100);
 }
 END_TEST
 
-START_TEST(every_folder_has_a_floor)
+START_TEST(every_folder_has_a_layer)
 {
     DIR *dir = opendir(source_folder);
     ck_assert_ptr_nonnull(dir);
     for (struct dirent *e; (e = readdir(dir)) != NULL;)
         if (!strchr(e->d_name, '.'))
-            ck_assert_msg(floor_of(e->d_name, strlen(e->d_name)) >= 0, "%s",
+            ck_assert_msg(layer_of(e->d_name, strlen(e->d_name)) >= 0, "%s",
                           e->d_name);
     closedir(dir);
 }
@@ -175,10 +175,10 @@ int main(int argc, char **argv)
     if (argc != 2)
         return EXIT_FAILURE;
     source_folder = argv[1];
-    Suite *suite = suite_create("floors");
+    Suite *suite = suite_create("layers");
     TCase *house = tcase_create("house");
-    tcase_add_test(house, folders_include_only_lower_floors);
-    tcase_add_test(house, every_folder_has_a_floor);
+    tcase_add_test(house, folders_include_only_lower_layers);
+    tcase_add_test(house, every_folder_has_a_layer);
     suite_add_tcase(suite, house);
     return run_suite(suite);
 }
