@@ -210,9 +210,17 @@ double hybrid_spin_orbit(const struct hybrid *hybrid, const struct term *term)
         const struct subshell *s = &c->shells[i];
         if (s->occ > 4 * s->l + 1.5 || s->occ < 0.5)
             continue;
-        open[count++] = (struct open_subshell){
-            s->l, (int)lround(s->occ), atom_zeta(hybrid->solver, s->n, s->l),
-            s->l == 1 ? hybrid_slater(hybrid, s->n, s->l, 2) : 0.0};
+        struct open_subshell *o = &open[count++];
+        *o =
+            (struct open_subshell){.l = s->l, .electrons = (int)lround(s->occ)};
+        if (s->l == 0)
+            continue;
+        o->zeta = atom_zeta(hybrid->solver, s->n, s->l);
+        o->f2 = hybrid_slater(hybrid, s->n, s->l, 2);
+        if (s->l > 1)
+            o->f4 = hybrid_slater(hybrid, s->n, s->l, 4);
+        if (s->l > 2)
+            o->f6 = hybrid_slater(hybrid, s->n, s->l, 6);
     }
     return atom_term_spin_orbit(open, count, term);
 }

@@ -4,6 +4,8 @@
 #include <math.h>
 #include <stdlib.h>
 
+#include "atom/level.h"
+
 static double factorial(int n)
 {
     double product = 1.0;
@@ -108,45 +110,34 @@ static int hund_l(int l, int electrons)
     return n * (2 * l + 1 - n) / 2;
 }
 
-/* L, S and J of the ground level, from the term as far as it is known; what is
- * missing by Hund's rules where one subshell with l > 0 is open. */
-static bool quantum_numbers(const struct open_subshell *open, int count,
-                            const struct term *term, double *l, double *s,
-                            double *j)
+/* L and S of the ground term: the stored ones, unless no level of that term
+ * can have the stored J, or Hund's where nothing is stored. True when they are
+ * stored. */
+static bool ground_term(const struct open_subshell *open, int count,
+                        const struct term *term, double *l, double *s)
 {
-    int orbital = -1, spins = 0;
-    bool several = false;
+    double sum_l = 0.0, spins = 0.0;
     for (int i = 0; i < count; i++) {
         int half = 2 * open[i].l + 1, n = open[i].electrons;
         spins += n > half ? 2 * half - n : n;
-        several |= open[i].l > 0 && orbital >= 0;
-        orbital = open[i].l > 0 ? i : orbital;
+        sum_l += hund_l(open[i].l, n);
     }
-    bool known = term->multiplicity > 0 && term->big_l >= 0;
-    if (orbital < 0 || (several && !known))
-        return false;
-    int n = open[orbital].electrons, half = 2 * open[orbital].l + 1;
-    *l = known ? term->big_l : hund_l(open[orbital].l, n);
-    *s = 0.5 * (known ? term->multiplicity - 1 : spins);
-    if (term->twice_j >= 0) {
-        *j = 0.5 * term->twice_j;
-        return true;
-    }
-    *j = n > half ? *l + *s : fabs(*l - *s);
-    return count == 1;
+    int twice_s = term->multiplicity - 1, twice_l = 2 * term->big_l;
+    bool known =
+        term->multiplicity > 0 && term->big_l >= 0 &&
+        (term->twice_j < 0 || (term->twice_j >= abs(twice_l - twice_s) &&
+                               term->twice_j <= twice_l + twice_s));
+    *l = known ? term->big_l : sum_l;
+    *s = 0.5 * (known ? twice_s : spins);
+    return known;
 }
 
-double atom_term_spin_orbit(const struct open_subshell *open, int count,
-                            const struct term *term)
+/* λ of H = λ L·S. Each open subshell in Hund's term, its spin parallel to the
+ * others': its part is projected on L, as vectors are. */
+static double coupling(const struct open_subshell *open, int count, double l,
+                       double s)
 {
-    double l, s, j, lambda = 0.0;
-    if (count == 1 && open[0].l == 1)
-        return p_shift(open[0].electrons, open[0].zeta, open[0].f2);
-    if (!quantum_numbers(open, count, term, &l, &s, &j) || l < 0.5 || s < 0.25)
-        return 0.0;
-    double product = 0.5 * (j * (j + 1.0) - l * (l + 1.0) - s * (s + 1.0));
-    /* Each open subshell in Hund's term, its spin parallel to the others': its
-     * part is projected on L, as vectors are. */
+    double lambda = 0.0;
     for (int i = 0; i < count; i++) {
         if (open[i].l == 0)
             continue;
@@ -160,5 +151,70 @@ double atom_term_spin_orbit(const struct open_subshell *open, int count,
         double sign = open[i].electrons > 2 * open[i].l + 1 ? -1.0 : 1.0;
         lambda += part * sign * open[i].zeta / (2.0 * s);
     }
-    return lambda * product;
+    return lambda;
+}
+
+/* Level J of a term in which all open subshells are coupled: the stored J,
+ * else the lowest, which is |L - S| for λ > 0 and L + S for λ < 0 (Hund's
+ * third rule). */
+static double coupled(const struct open_subshell *open, int count,
+                      const struct term *term, bool *known)
+{
+    double l, s;
+    *known = ground_term(open, count, term, &l, &s);
+    if (l < 0.5 || s < 0.25)
+        return 0.0;
+    double lambda = coupling(open, count, l, s);
+    double j = lambda > 0.0 ? fabs(l - s) : l + s;
+    double stored = 0.5 * term->twice_j;
+    if (term->twice_j >= 0 && stored > fabs(l - s) - 0.25 &&
+        stored < l + s + 0.25)
+        j = stored;
+    return lambda * 0.5 * (j * (j + 1.0) - l * (l + 1.0) - s * (s + 1.0));
+}
+
+/* Where LS coupling ends: ζ/F². Up to there second-order terms stay below what
+ * the model is good for. */
+static const double STRONG = 0.1;
+
+static bool is_strong(const struct open_subshell *s)
+{
+    return s->l > 0 && s->f2 > 0.0 && s->zeta > STRONG * s->f2;
+}
+
+/* A subshell by itself. */
+static double alone(const struct open_subshell *s)
+{
+    static const struct term none = {"", -1, -1, -1};
+    bool known;
+    if (s->l == 1)
+        return p_shift(s->electrons, s->zeta, s->f2);
+    if (is_strong(s))
+        return level_spin_orbit(s->l, s->electrons, s->zeta,
+                                (const double[]){s->f2, s->f4, s->f6});
+    return coupled(s, 1, &none, &known);
+}
+
+double atom_term_spin_orbit(const struct open_subshell *open, int count,
+                            const struct term *term)
+{
+    double each = 0.0;
+    int orbital = 0;
+    bool known, strong = false;
+    for (int i = 0; i < count; i++) {
+        orbital += open[i].l > 0;
+        strong = strong || is_strong(&open[i]);
+    }
+    if (orbital == 0)
+        return 0.0;
+    if (count == 1 && (open[0].l == 1 || strong))
+        return alone(&open[0]);
+    double together = coupled(open, count, term, &known);
+    if (!strong && (known || orbital == 1))
+        return together;
+    /* Of several: where spin and orbit of one hold together more strongly than
+     * the subshells do, each stands alone. */
+    for (int i = 0; i < count; i++)
+        each += open[i].l > 0 ? alone(&open[i]) : 0.0;
+    return each < together ? each : together;
 }

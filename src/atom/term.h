@@ -19,12 +19,15 @@ double atom_three_j(int a, int b, int c);
 double atom_term_hund_shift(int l, int electrons, double f2, double f4,
                             double f6);
 
-/* Spin–orbit energy of level J of the ground term of a configuration: the
- * parameters zeta and f2 = F²(pp) of each open subshell, in the order of
- * open[count]. See term.c for the cases. 0 when term or J is not known. */
+/* Spin–orbit energy of the ground level of a configuration, zero at the mean of
+ * its term: the parameters zeta and F^k of each open subshell, in the order of
+ * open[count]; of d and f subshells 0 for all F^k stands for LS coupling. L, S
+ * and J are those of the term as far as it is known and can be; what is missing
+ * follows from Hund's rules. See term.c for the cases. 0 when no subshell with
+ * l > 0 is open. */
 struct open_subshell {
     int l, electrons;
-    double zeta, f2;
+    double zeta, f2, f4, f6;
 };
 double atom_term_spin_orbit(const struct open_subshell *open, int count,
                             const struct term *term);

@@ -224,6 +224,22 @@ configuration_outermost(const struct configuration *configuration)
     return &configuration->shells[configuration->count - 1];
 }
 
+const struct subshell *configuration_emptied(const struct configuration *before,
+                                             const struct configuration *after)
+{
+    const struct subshell *emptied = NULL;
+    for (int i = 0; i < before->count; i++) {
+        const struct subshell *s = &before->shells[i];
+        if (configuration_occupation(after, s->n, s->l) >
+            s->occ - OCCUPATION_TOLERANCE)
+            continue;
+        if (emptied)
+            return NULL;
+        emptied = s;
+    }
+    return emptied;
+}
+
 bool configuration_same(const struct configuration *a,
                         const struct configuration *b)
 {

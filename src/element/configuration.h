@@ -43,6 +43,11 @@ double configuration_occupation(const struct configuration *configuration,
 const struct subshell *
 configuration_outermost(const struct configuration *configuration);
 
+/* The subshell of `before` that holds fewer electrons in `after`, as an ion is
+ * made from its atom; NULL when there is none or more than one. */
+const struct subshell *configuration_emptied(const struct configuration *before,
+                                             const struct configuration *after);
+
 /* Adds (or with a negative change removes) electrons in one subshell. False,
  * and nothing changed, when it would hold less than 0 or more than 4l+2. */
 MUST_CHECK bool configuration_change(struct configuration *configuration, int n,

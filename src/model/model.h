@@ -57,7 +57,8 @@ enum model_progress { MODEL_RUNNING, MODEL_DONE };
  *   step   one unit of work, at most some milliseconds.
  *   read   after MODEL_DONE: offer is an index into offers; n = 0 asks for
  *          the outermost subshell, else for subshell n, l. Always a reading:
- *          a number, or a state with its reason.
+ *          a number, or a state with its reason. A remark may live in the work
+ *          space: good until the next begin.
  * repeats: ids of the data sets that hold this very calculation, published,
  * ended by NULL; NULL for none. A residual against one checks the program, and
  * says nothing of the model. */

@@ -7,8 +7,10 @@
 
 #include "atom/hybrid.h"
 #include "atom/result.h"
+#include "base/text.h"
 #include "base/units.h"
 #include "model/models.h"
+#include "model/neighbour.h"
 #include "model/scf.h"
 #include "model/rule.h"
 
@@ -114,28 +116,43 @@ static double uncertainty_ev(const struct species *species)
     }
 }
 
-/* One of the two solutions. */
+/* One of the two solutions: that of the configuration which is asked about, or
+ * of the lowest neighbour where that one is doubtful (model/neighbour.h). */
 struct half {
     enum atom_state state;
     bool evaluated;  /* energy holds the hybrid energy with its shift */
     bool unsound;    /* its correlation cannot be right (hybrid.h) */
+    bool by_hund;    /* its level J is by Hund's rules */
     double energy;   /* hartree */
     double with_pbe; /* the same with PBE correlation */
+    struct configuration configuration;
+    double moved; /* how far below the configuration asked about, hartree */
 };
 
-enum phase { PHASE_ATOM, PHASE_ATOM_ENERGY, PHASE_ION, PHASE_ION_ENERGY, DONE };
+/* PHASE_SOLVE and PHASE_ENERGY are of one half, and of trial - 1 among its
+ * neighbours unless trial is 0. */
+enum phase { PHASE_SOLVE, PHASE_ENERGY, DONE };
+
+#define REMARK_MAX 320
 
 struct work {
     struct atom_solver *solver;
     struct hybrid *hybrid;
     struct question question;
     enum phase phase;
-    struct half atom, ion;
+    struct half half[2]; /* the atom, the ion */
+    int now;             /* which of them is at work */
+    int trial;
+    int neighbour_count;
+    struct configuration neighbour[NEIGHBOURS_MAX + 1];
     int count;
     struct atom_orbital orbital[SUBSHELL_MAX];
     double top[SUBSHELL_MAX]; /* highest level of each, hartree */
     double isodensity;        /* bohr */
+    char remark[REMARK_MAX];  /* of the ionization energy */
 };
+
+enum { ATOM, ION };
 
 static bool open_work(void *work, struct status *st)
 {
@@ -156,26 +173,41 @@ static void close_work(void *work)
     w->solver = NULL;
 }
 
-/* Starts the self-consistent solution of one species; where there is nothing
- * to solve (a bare nucleus) its energy is zero. */
-static enum phase start(struct work *w, const struct species *species,
-                        struct half *half, enum phase solve, enum phase next)
+static const struct species *species_of(const struct work *w)
+{
+    return w->now == ATOM ? &w->question.species : &w->question.cation;
+}
+
+/* Starts the self-consistent solution of one configuration. */
+static bool start(struct work *w, const struct configuration *configuration)
 {
     /* the ion from its atom, the atom from nothing: an answer must not depend
      * on what was asked before */
-    const struct atom_options options = {.functional = ATOM_LSD,
-                                         .relativity = ATOM_DIRAC,
-                                         .warm = half == &w->ion};
+    const struct atom_options options = {
+        .functional = ATOM_LSD,
+        .relativity = ATOM_DIRAC,
+        .warm = w->now == ION || w->trial > 0,
+    };
     struct status st = status_ok();
-    *half = (struct half){.state = ATOM_CONVERGED, .evaluated = true};
-    if (species->configuration.count == 0)
-        return next;
-    *half = (struct half){.state = ATOM_RUNNING};
-    if (atom_begin(w->solver, species->z, &species->configuration, &options,
-                   &st))
-        return solve;
-    half->state = ATOM_LOST;
-    return next;
+    w->phase = PHASE_SOLVE;
+    return atom_begin(w->solver, w->question.species.z, configuration, &options,
+                      &st);
+}
+
+/* Starts one of the two; where there is nothing to solve (a bare nucleus) its
+ * energy is zero. */
+static void start_half(struct work *w, int now)
+{
+    struct half *half = &w->half[now];
+    w->now = now;
+    w->trial = w->neighbour_count = 0;
+    const struct configuration *c = &species_of(w)->configuration;
+    *half = (struct half){.state = ATOM_RUNNING, .configuration = *c};
+    if (c->count > 0 && start(w, c))
+        return;
+    half->state = c->count == 0 ? ATOM_CONVERGED : ATOM_LOST;
+    half->evaluated = c->count == 0;
+    w->phase = DONE;
 }
 
 static void begin(void *work, const struct question *question,
@@ -185,8 +217,9 @@ static void begin(void *work, const struct question *question,
     struct work *w = work;
     w->question = *question;
     w->count = 0;
-    w->ion = (struct half){.state = ATOM_RUNNING};
-    w->phase = start(w, &w->question.species, &w->atom, PHASE_ATOM, DONE);
+    w->remark[0] = '\0';
+    w->half[ION] = (struct half){.state = ATOM_RUNNING};
+    start_half(w, ATOM);
 }
 
 /* A configuration that the user gives comes without a level J: then neither
@@ -196,17 +229,29 @@ static bool is_given(const struct species *species)
     return species->origin == ORIGIN_USER;
 }
 
-static void evaluate(struct work *w, const struct species *species,
-                     struct half *half)
+/* Whether there is a J to choose. */
+static bool has_levels(const struct configuration *c)
+{
+    for (int i = 0; i < c->count; i++)
+        if (c->shells[i].l > 0 && c->shells[i].occ < 4 * c->shells[i].l + 1.5)
+            return true;
+    return false;
+}
+
+/* Fills energies of a half from the solver, which holds that configuration
+ * with a ground term (none: by Hund's rules). */
+static void evaluate(struct work *w, const struct configuration *configuration,
+                     const struct term *term, struct half *half)
 {
     struct status st = status_ok();
     struct hybrid_energy energy;
+    half->configuration = *configuration;
     half->evaluated = hybrid_evaluate(w->hybrid, w->solver, &energy, &st);
     if (!half->evaluated)
         return;
-    double shift = is_given(&w->question.species)
-                       ? 0.0
-                       : hybrid_spin_orbit(w->hybrid, &species->term);
+    bool given = is_given(&w->question.species);
+    double shift = given ? 0.0 : hybrid_spin_orbit(w->hybrid, term);
+    half->by_hund = !given && term->twice_j < 0 && has_levels(configuration);
     half->unsound = !energy.sound;
     half->energy = energy.total + shift;
     half->with_pbe = energy.with_pbe + shift;
@@ -229,37 +274,107 @@ static void keep(struct work *w)
     w->isodensity = atom_isodensity_radius(w->solver, ISODENSITY);
 }
 
+static void add_moved(const struct half *half, const char *what, struct text *t)
+{
+    char out[CONFIGURATION_TEXT_MAX];
+    if (half->moved > 0.0)
+        text_addf(t, "%s%s is %s, %.1f eV below its listed configuration",
+                  t->length ? "; " : "", what,
+                  configuration_print(&half->configuration, out),
+                  half->moved * HARTREE_EV);
+}
+
+/* What to know about the ionization energy. */
+static void write_remark(struct work *w)
+{
+    struct text t = text_over(w->remark, sizeof w->remark);
+    const struct half *atom = &w->half[ATOM], *ion = &w->half[ION];
+    if (is_given(&w->question.species))
+        text_add(&t, "no level is given with a configuration: without "
+                     "spin-orbit shifts");
+    add_moved(atom,
+              atom->moved > 0.0 && w->question.species.charge > 0 ? "this ion"
+                                                                  : "the atom",
+              &t);
+    add_moved(ion, "the ion left", &t);
+    if (atom->by_hund || ion->by_hund)
+        text_addf(&t, "%slevel J of %s by Hund's rules", t.length ? "; " : "",
+                  atom->by_hund && ion->by_hund ? "both"
+                  : atom->by_hund               ? "the first"
+                                                : "the ion left");
+    if (atom->unsound || ion->unsound)
+        text_addf(&t,
+                  "%swith PBE correlation: that of revTPSS cannot be right "
+                  "here",
+                  t.length ? "; " : "");
+}
+
+/* The next neighbour that can be begun, else the ion, else the end. */
+static void go_on(struct work *w)
+{
+    while (w->trial < w->neighbour_count)
+        if (start(w, &w->neighbour[w->trial++]))
+            return;
+    w->phase = DONE;
+    if (w->now == ATOM && w->question.has_cation)
+        start_half(w, ION);
+}
+
+/* Neighbours of the configuration that the solver holds. */
+static void list_neighbours(struct work *w)
+{
+    w->trial = w->neighbour_count = 0;
+    if (!neighbour_doubtful(species_of(w)))
+        return;
+    w->neighbour_count =
+        neighbour_list(w->solver, &w->half[w->now].configuration,
+                       neighbour_emptied(species_of(w)), w->neighbour);
+}
+
+/* Takes the solution in the solver: the one asked about, or a neighbour that
+ * lies lower, from which the search goes on. */
+static void take(struct work *w)
+{
+    static const struct term none = {"", -1, -1, -1};
+    struct half *half = &w->half[w->now];
+    if (w->trial == 0) {
+        if (w->now == ATOM)
+            keep(w);
+        evaluate(w, &species_of(w)->configuration, &species_of(w)->term, half);
+        list_neighbours(w);
+        return;
+    }
+    struct half other = *half;
+    evaluate(w, &w->neighbour[w->trial - 1], &none, &other);
+    double gain = half->energy - other.energy;
+    if (!other.evaluated || other.unsound || half->unsound ||
+        !(gain > neighbour_error(w->solver)))
+        return;
+    other.moved += gain;
+    *half = other;
+    list_neighbours(w);
+}
+
 /* One cycle, or one evaluation. */
 static enum model_progress step(void *work)
 {
     struct work *w = work;
-    struct question *q = &w->question;
-    switch (w->phase) {
-    case PHASE_ATOM:
-        w->atom.state = atom_step(w->solver);
-        if (w->atom.state != ATOM_RUNNING)
-            w->phase =
-                w->atom.state == ATOM_CONVERGED ? PHASE_ATOM_ENERGY : DONE;
-        break;
-    case PHASE_ATOM_ENERGY:
-        keep(w);
-        evaluate(w, &q->species, &w->atom);
-        w->phase = q->has_cation
-                       ? start(w, &q->cation, &w->ion, PHASE_ION, DONE)
-                       : DONE;
-        break;
-    case PHASE_ION:
-        w->ion.state = atom_step(w->solver);
-        if (w->ion.state != ATOM_RUNNING)
-            w->phase = w->ion.state == ATOM_CONVERGED ? PHASE_ION_ENERGY : DONE;
-        break;
-    case PHASE_ION_ENERGY:
-        evaluate(w, &q->cation, &w->ion);
-        w->phase = DONE;
-        break;
-    case DONE:
-        break;
+    if (w->phase == PHASE_SOLVE) {
+        enum atom_state state = atom_step(w->solver);
+        if (w->trial == 0)
+            w->half[w->now].state = state;
+        if (state == ATOM_CONVERGED)
+            w->phase = PHASE_ENERGY;
+        else if (state != ATOM_RUNNING && w->trial > 0)
+            go_on(w);
+        else if (state != ATOM_RUNNING)
+            w->phase = DONE;
+    } else if (w->phase == PHASE_ENERGY) {
+        take(w);
+        go_on(w);
     }
+    if (w->phase == DONE)
+        write_remark(w);
     return w->phase == DONE ? MODEL_DONE : MODEL_RUNNING;
 }
 
@@ -296,19 +411,20 @@ static struct reading gap_of(int offer, enum atom_state state)
 static bool ionization(const struct work *w, int offer, double *energy,
                        struct reading *none)
 {
+    const struct half *atom = &w->half[ATOM], *ion = &w->half[ION];
     if (!w->question.has_cation)
         *none = gap(offer, READING_OUTSIDE, "no ion to compare with");
-    else if (w->ion.state != ATOM_CONVERGED)
-        *none = gap_of(offer, w->ion.state);
-    else if (!w->atom.evaluated || !w->ion.evaluated)
+    else if (ion->state != ATOM_CONVERGED)
+        *none = gap_of(offer, ion->state);
+    else if (!atom->evaluated || !ion->evaluated)
         *none = gap(offer, READING_NOT_CONVERGED,
                     "the hybrid energy could not be evaluated");
-    else if (w->atom.unsound || w->ion.unsound)
-        *energy = w->ion.with_pbe - w->atom.with_pbe;
+    else if (atom->unsound || ion->unsound)
+        *energy = ion->with_pbe - atom->with_pbe;
     else
-        *energy = w->ion.energy - w->atom.energy;
-    return w->question.has_cation && w->ion.state == ATOM_CONVERGED &&
-           w->atom.evaluated && w->ion.evaluated;
+        *energy = ion->energy - atom->energy;
+    return w->question.has_cation && ion->state == ATOM_CONVERGED &&
+           atom->evaluated && ion->evaluated;
 }
 
 static struct reading read_ionization(const struct work *w)
@@ -320,17 +436,10 @@ static struct reading read_ionization(const struct work *w)
     struct reading r =
         reading_computed(QUANTITY_IONIZATION, energy * HARTREE_EV,
                          &offers[OFFER_IONIZATION].provenance);
-    bool given = is_given(&w->question.species);
     double u = uncertainty_ev(&w->question.species);
-    r.has_u = u > 0.0 && !given;
+    r.has_u = u > 0.0 && !is_given(&w->question.species);
     r.u = number_round(u, 2, 2);
-    if (given)
-        r.remark = "no level is given with a configuration: without "
-                   "spin-orbit shifts";
-    if (w->atom.unsound || w->ion.unsound)
-        r.remark = "with PBE correlation: that of revTPSS cannot be right here";
-    if (energy < 0.0)
-        r.remark = "negative: the ion lies lower in this model";
+    r.remark = w->remark;
     return r;
 }
 
@@ -342,19 +451,20 @@ static const struct atom_orbital *find(const struct work *w, int n, int l)
     return NULL;
 }
 
-/* From the energy: the outermost subshell by the energy that it takes to
- * remove an electron, as the measured reference is made; an inner one by its
- * orbital energy. */
+/* From the energy: the subshell that loses the electron by the energy that it
+ * takes, as the measured reference is made; any other by its orbital energy. */
 static struct reading read_zeff(const struct work *w,
                                 const struct atom_orbital *o)
 {
     const struct provenance *provenance = &offers[OFFER_ZEFF].provenance;
-    const struct subshell *outer =
-        configuration_outermost(&w->question.species.configuration);
+    const struct subshell *emptied = configuration_emptied(
+        &w->half[ATOM].configuration, &w->half[ION].configuration);
     double value = o->zeff_energy, energy;
     struct reading none;
     const char *remark = "from the orbital energy";
-    if (o->n == outer->n && o->l == outer->l) {
+    if (!w->question.has_cation || w->half[ION].configuration.count == 0)
+        emptied = configuration_outermost(&w->half[ATOM].configuration);
+    if (emptied && o->n == emptied->n && o->l == emptied->l) {
         if (!ionization(w, OFFER_ZEFF, &energy, &none))
             return none;
         if (energy <= 0.0)
@@ -440,8 +550,8 @@ static struct reading read(const void *work, int offer, int n, int l)
     const struct work *w = work;
     if (w->question.species.configuration.count == 0)
         return gap(offer, READING_OUTSIDE, "no electron left");
-    if (w->atom.state != ATOM_CONVERGED)
-        return gap_of(offer, w->atom.state);
+    if (w->half[ATOM].state != ATOM_CONVERGED)
+        return gap_of(offer, w->half[ATOM].state);
     switch (offer) {
     case OFFER_IONIZATION:
         return read_ionization(w);

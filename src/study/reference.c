@@ -6,6 +6,7 @@
 #include <string.h>
 
 #include "base/units.h"
+#include "refdata/ground.h"
 
 /* The stored set that Z_eff from an energy follows from. */
 #define IONIZATION_RANK 1
@@ -136,26 +137,50 @@ const struct reference *reference_default(const struct reference_list *list,
     return first;
 }
 
+const struct subshell *reference_emptied(const struct species *species)
+{
+    struct species ion;
+    struct status st = status_ok();
+    if (species->charge >= species->z ||
+        !ground_state(species->z, species->charge + 1, &ion, &st))
+        return NULL;
+    return configuration_emptied(&species->configuration, &ion.configuration);
+}
+
+/* Why Z_eff from the energy says nothing of a subshell, "" when it does. */
+static const char *not_emptied(const struct species *species,
+                               const struct subshell *asked)
+{
+    const struct subshell *emptied = reference_emptied(species);
+    if (!asked)
+        return "no electron left";
+    if (!emptied)
+        return "the ion differs from its atom in more than one subshell";
+    if (emptied->n != asked->n || emptied->l != asked->l)
+        return "the electron that the energy removes leaves another subshell";
+    return "";
+}
+
 /* Z_eff = n sqrt(I/Ry); du/dI = Z_eff/(2I). */
 static struct reading zeff_from_ionization(const struct reference *reference,
-                                           const struct species *species)
+                                           const struct species *species,
+                                           const struct subshell *asked)
 {
-    const struct subshell *outer =
-        configuration_outermost(&species->configuration);
+    const char *reason = not_emptied(species, asked);
     struct reading energy =
         dataset_reading(reference->set, species->z, species->charge, 0, 0);
-    if (!outer)
-        return reading_gap(QUANTITY_ZEFF, READING_MISSING, "no electron left",
+    if (reason[0])
+        return reading_gap(QUANTITY_ZEFF, READING_MISSING, reason,
                            reference->provenance);
     if (energy.state != READING_OK)
         return reading_gap(QUANTITY_ZEFF, READING_MISSING, energy.reason,
                            reference->provenance);
     double ev = energy.value.value;
-    double z_eff = outer->n * sqrt(ev / RYDBERG_EV);
+    double z_eff = asked->n * sqrt(ev / RYDBERG_EV);
     struct reading r =
         reading_computed(QUANTITY_ZEFF, z_eff, reference->provenance);
-    r.n = outer->n;
-    r.l = outer->l;
+    r.n = asked->n;
+    r.l = asked->l;
     r.remark = energy.remark;
     r.evidence = energy.evidence;
     r.has_u = energy.has_u;
@@ -235,6 +260,15 @@ void reference_asked_site(const struct reference *reference, struct site site,
                  site.spin, t);
 }
 
+static const struct subshell *subshell_of(const struct configuration *c, int n,
+                                          int l)
+{
+    for (int i = 0; i < c->count; i++)
+        if (c->shells[i].n == n && c->shells[i].l == l)
+            return &c->shells[i];
+    return NULL;
+}
+
 struct reading reference_read(const struct reference *reference,
                               const struct species *species, int n, int l,
                               struct site site)
@@ -242,7 +276,7 @@ struct reading reference_read(const struct reference *reference,
     const struct subshell *outer =
         configuration_outermost(&species->configuration);
     bool is_outer = n == 0 || (outer && outer->n == n && outer->l == l);
-    if (reference->outermost_only && !is_outer)
+    if (reference->outermost_only && !reference->derived && !is_outer)
         return reading_gap(reference->quantity, READING_MISSING,
                            "this set holds outermost subshells only",
                            reference->provenance);
@@ -251,7 +285,9 @@ struct reading reference_read(const struct reference *reference,
                            "stored for the ground configuration only",
                            reference->provenance);
     if (reference->derived)
-        return zeff_from_ionization(reference, species);
+        return zeff_from_ionization(
+            reference, species,
+            n == 0 ? outer : subshell_of(&species->configuration, n, l));
     /* A set by subshells is asked for the very subshell. */
     bool by_subshell = quantity_at(reference->quantity)->per_subshell &&
                        !reference->outermost_only;

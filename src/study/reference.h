@@ -9,7 +9,9 @@
 #include "element/species.h"
 #include "refdata/catalogue.h"
 
-/* Z_eff = n sqrt(I/Ry) from the built-in ionization energies I. A set that
+/* Z_eff = n sqrt(I/Ry) from the built-in ionization energies I, of the
+ * subshell that loses the electron: the one that holds fewer in the stored
+ * configuration of the ion than in that of the atom. A set that
  * the user adds has no such companion: what is cited for one id never depends
  * on what else was loaded. Effective charges of the user's own are a set of
  * their own, with the definition "from the energy, n sqrt(E/Ry)". */
@@ -53,7 +55,8 @@ const struct reference *reference_find(const struct reference_list *list,
  * the first set that tells sites apart, since no other holds ions. Else the
  * first with the model's own definition, else the first of the quantity that
  * covers such a subshell; NULL when the quantity has none. definition may be
- * NULL; inner: the subshell asked about is not the outermost. */
+ * NULL; inner: the subshell asked about is neither the outermost nor the one
+ * that loses the electron. */
 const struct reference *reference_default(const struct reference_list *list,
                                           enum quantity_id quantity, int charge,
                                           const char *definition, bool inner);
@@ -78,6 +81,11 @@ void reference_site_text(const struct reference *reference,
  * where one was chosen; nothing when it knows none. */
 void reference_asked_site(const struct reference *reference, struct site site,
                           struct text *t);
+
+/* The subshell that loses the electron between the ground configurations of a
+ * species and of its ion, in species->configuration; NULL when it is none or
+ * not one alone. */
+const struct subshell *reference_emptied(const struct species *species);
 
 /* Its value for a species, in base units; n = 0 asks for the outermost
  * subshell or for a quantity without subshells. Always a reading; a gap says

@@ -1,7 +1,14 @@
 /* SPDX-License-Identifier: MIT */
 #include "study/solution.h"
 
+#include <stdint.h>
 #include <stdlib.h>
+#include <string.h>
+
+struct solution_remark {
+    struct solution_remark *next;
+    char text[];
+};
 
 static bool same_species(const struct species *a, const struct species *b)
 {
@@ -49,6 +56,39 @@ static struct solution *room(struct solution_store *store)
     return old;
 }
 
+static bool lives_in(const char *text, const void *work, size_t size)
+{
+    uintptr_t at = (uintptr_t)text, start = (uintptr_t)work;
+    return at >= start && at - start < size;
+}
+
+/* Moves a remark out of the work space. Of one text there is one copy. */
+static bool keep_remark(struct solution_store *store, struct reading *reading,
+                        const struct model *model, const void *work)
+{
+    const char *text = reading->remark;
+    if (!lives_in(text, work, model->work_size))
+        return true;
+    if (!text[0]) {
+        reading->remark = "";
+        return true;
+    }
+    struct solution_remark *r = store->remarks;
+    while (r && strcmp(r->text, text) != 0)
+        r = r->next;
+    if (!r) {
+        size_t size = strlen(text) + 1;
+        r = malloc(sizeof *r + size);
+        if (!r)
+            return false;
+        memcpy(r->text, text, size);
+        r->next = store->remarks;
+        store->remarks = r;
+    }
+    reading->remark = r->text;
+    return true;
+}
+
 bool solution_keep(struct solution_store *store, const struct model *model,
                    const void *work, const struct species *species,
                    struct status *st)
@@ -56,17 +96,21 @@ bool solution_keep(struct solution_store *store, const struct model *model,
     const struct configuration *c = &species->configuration;
     struct reading *readings =
         calloc(reading_count(model, c->count), sizeof *readings);
-    struct solution *s = readings ? room(store) : NULL;
+    bool whole = readings != NULL;
+    size_t next = (size_t)model->offer_count;
+    for (int o = 0; whole && o < model->offer_count; o++) {
+        readings[o] = model->read(work, o, 0, 0);
+        whole = keep_remark(store, &readings[o], model, work);
+        for (int i = 0; whole && by_subshell(model, o) && i < c->count; i++) {
+            readings[next] =
+                model->read(work, o, c->shells[i].n, c->shells[i].l);
+            whole = keep_remark(store, &readings[next++], model, work);
+        }
+    }
+    struct solution *s = whole ? room(store) : NULL;
     if (!s) {
         free(readings);
         return status_fail(st, STATUS_MEMORY, "out of memory");
-    }
-    size_t next = (size_t)model->offer_count;
-    for (int o = 0; o < model->offer_count; o++) {
-        readings[o] = model->read(work, o, 0, 0);
-        for (int i = 0; by_subshell(model, o) && i < c->count; i++)
-            readings[next++] =
-                model->read(work, o, c->shells[i].n, c->shells[i].l);
     }
     *s = (struct solution){model, *species, readings};
     return true;
@@ -96,5 +140,16 @@ void solution_clear(struct solution_store *store)
     for (int i = 0; i < store->count; i++)
         free(store->items[i].readings);
     free(store->items);
-    *store = (struct solution_store){0};
+    store->items = NULL;
+    store->count = store->oldest = 0;
+}
+
+void solution_free(struct solution_store *store)
+{
+    solution_clear(store);
+    while (store->remarks) {
+        struct solution_remark *next = store->remarks->next;
+        free(store->remarks);
+        store->remarks = next;
+    }
 }

@@ -15,10 +15,15 @@ struct solution {
     struct reading *readings;
 };
 
+/* A remark that a model wrote for one atom. */
+struct solution_remark;
+
+/* remarks: they outlive the solutions, since rows point to them. */
 struct solution_store {
     int count;
     int oldest; /* where the next one goes once the store is full */
     struct solution *items;
+    struct solution_remark *remarks;
 };
 
 /* The solution for a species, or NULL. */
@@ -36,7 +41,10 @@ MUST_CHECK bool solution_keep(struct solution_store *store,
 struct reading solution_read(const struct solution *solution, int offer, int n,
                              int l);
 
-/* Forgets everything. */
+/* Forgets all solutions; readings given before stay good. */
 void solution_clear(struct solution_store *store);
+
+/* Forgets everything. */
+void solution_free(struct solution_store *store);
 
 #endif

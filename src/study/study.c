@@ -72,7 +72,7 @@ void study_free(struct study *study)
             model_at(m)->close(study->works[m]);
         free(study->works[m]);
     }
-    solution_clear(&study->solutions);
+    solution_free(&study->solutions);
     free(study->queue);
     free(study->grounds);
     free(study);
@@ -237,7 +237,10 @@ static bool is_inner(const struct ask *ask, const struct species *species)
 {
     const struct subshell *outer =
         configuration_outermost(&species->configuration);
-    return ask->n != 0 && (!outer || outer->n != ask->n || outer->l != ask->l);
+    const struct subshell *emptied = reference_emptied(species);
+    bool is_outer = outer && outer->n == ask->n && outer->l == ask->l;
+    bool leaves = emptied && emptied->n == ask->n && emptied->l == ask->l;
+    return ask->n != 0 && !is_outer && !leaves;
 }
 
 /* Subshell of a row: the one asked about, or the outermost. */

@@ -32,5 +32,6 @@ TCase *case_functionals(void);
 TCase *case_hybrid(void);
 TCase *case_term(void);
 TCase *case_correlation(void);
+TCase *case_level(void);
 
 #endif

@@ -11,5 +11,6 @@ int main(void)
     suite_add_tcase(suite, case_hybrid());
     suite_add_tcase(suite, case_term());
     suite_add_tcase(suite, case_correlation());
+    suite_add_tcase(suite, case_level());
     return run_suite(suite);
 }

@@ -57,7 +57,8 @@ START_TEST(p_shifts_have_both_coupling_limits)
     static const double jj[] = {-1.0, -2.0, -1.5, -1.0, -0.5};
     struct term unknown = {"", -1, -1, -1};
     for (int n = 1; n <= 5; n++) {
-        struct open_subshell p = {1, n, 1e-6, 2.385};
+        struct open_subshell p = {
+            .l = 1, .electrons = n, .zeta = 1e-6, .f2 = 2.385};
         near(atom_term_spin_orbit(&p, 1, &unknown) / 1e-6, lande[n - 1], 1e-4,
              0.0, "p%d, weak", n);
         p.zeta = 1e6;
@@ -71,7 +72,8 @@ END_TEST
 START_TEST(d_and_f_shifts_follow_the_interval_rule)
 {
     struct term term;
-    struct open_subshell d2 = {2, 2, 0.1, 0.0}, f11 = {3, 11, 0.1, 0.0};
+    struct open_subshell d2 = {.l = 2, .electrons = 2, .zeta = 0.1},
+                         f11 = {.l = 3, .electrons = 11, .zeta = 0.1};
     ck_assert(term_parse("3F2", &term));
     near(atom_term_spin_orbit(&d2, 1, &term), -0.2, 1e-14, 0.0, "d2");
     ck_assert(term_parse("4I*15/2", &term));
@@ -81,7 +83,7 @@ START_TEST(d_and_f_shifts_follow_the_interval_rule)
     near(atom_term_spin_orbit(&d2, 1, &unknown), -0.2, 1e-14, 0.0,
          "d2, by rule");
     /* (15/2,1/2)8 of f11 s: the stretched state keeps the core's shift */
-    struct open_subshell pair[2] = {f11, {0, 1, 0.0, 0.0}};
+    struct open_subshell pair[2] = {f11, {.l = 0, .electrons = 1}};
     ck_assert(term_parse("(15/2,1/2)*8", &term));
     near(atom_term_spin_orbit(pair, 2, &term), -0.3, 1e-14, 0.0, "f11 s");
 }

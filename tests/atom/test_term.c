@@ -185,7 +185,8 @@ START_TEST(p_shifts_are_those_of_all_determinants)
     for (int n = 1; n <= 5; n++)
         for (size_t i = 0; i < sizeof ratios / sizeof *ratios; i++) {
             double zeta = ratios[i] * f2;
-            struct open_subshell p = {1, n, zeta, f2};
+            struct open_subshell p = {
+                .l = 1, .electrons = n, .zeta = zeta, .f2 = f2};
             near(atom_term_spin_orbit(&p, 1, &unknown),
                  ground_energy(n, zeta, f2) - ground_energy(n, 0.0, f2), 2e-7,
                  0.0, "p%d, zeta/F2 %g", n, ratios[i]);

@@ -1,0 +1,46 @@
+/* SPDX-License-Identifier: MIT */
+/* Configurations one electron away from one that is known by rule or theory
+ * only, and that may lie lower. */
+#ifndef MODEL_NEIGHBOUR_H
+#define MODEL_NEIGHBOUR_H
+
+#include "atom/atom.h"
+#include "element/species.h"
+
+enum { NEIGHBOURS_MAX = 12 };
+
+/* Whether the configuration of an ion rests on theory or on a rule: it is not
+ * stored, or its ionization energy is none that was measured or follows from
+ * measured ones. Never of an atom, nor of what the user gave, nor of two
+ * electrons. */
+bool neighbour_doubtful(const struct species *species);
+
+/* What two total energies of one atom must differ by, hartree, to be told
+ * apart: one and a half electronvolt in a thousand more for each that the
+ * highest level is bound by. The model's ionization energies miss the measured
+ * ones by 0.1 eV at charge 0 and by half a per cent in highly charged ions. */
+double neighbour_error(const struct atom_solver *solver);
+
+/* Fills out[] with the configurations that differ from c, which the solver
+ * holds converged, by one electron moved between its outermost subshells, and
+ * whose energy may be lower: to first order it differs by that of the two
+ * levels, which errs by some electronvolts. also: a subshell, empty in c, that
+ * may take an electron of d or f as well; n = 0 for none. Returns their number.
+ */
+int neighbour_list(const struct atom_solver *solver,
+                   const struct configuration *c, struct subshell also,
+                   struct configuration out[NEIGHBOURS_MAX]);
+
+/* A subshell that is empty but that the true configuration may hold: by rule s
+ * goes before the d and f of lower shells, so the lowest s that the atom has
+ * and the ion has not; else what the ion of one charge less still has. n = 0
+ * when there is none. */
+struct subshell neighbour_emptied(const struct species *species);
+
+/* The listed configuration of the next lighter element with as many electrons,
+ * where that of the species is by rule; false when there is none or it is the
+ * same. */
+bool neighbour_isoelectronic(const struct species *species,
+                             struct configuration *out);
+
+#endif
