@@ -255,7 +255,8 @@ static double lowest(const struct block *b, double zeta)
     return lowest_of(diagonal, beside, n);
 }
 
-double level_spin_orbit(int l, int electrons, double zeta, const double f[3])
+double atom_level_spin_orbit(int l, int electrons, double zeta,
+                             const double f[3])
 {
     static struct block b; /* 300 kB: too large for the stack */
     memset(&b, 0, sizeof b);

@@ -10,6 +10,7 @@
  * integrals F², F⁴, F⁶, those above 2l not looked at. J. C. Slater, Quantum
  * Theory of Atomic Structure I (1960), chapter 13; E. U. Condon, G. H.
  * Shortley, The Theory of Atomic Spectra (1935), chapters 6 and 11. */
-double level_spin_orbit(int l, int electrons, double zeta, const double f[3]);
+double atom_level_spin_orbit(int l, int electrons, double zeta,
+                             const double f[3]);
 
 #endif

@@ -190,8 +190,8 @@ static double alone(const struct open_subshell *s)
     if (s->l == 1)
         return p_shift(s->electrons, s->zeta, s->f2);
     if (is_strong(s))
-        return level_spin_orbit(s->l, s->electrons, s->zeta,
-                                (const double[]){s->f2, s->f4, s->f6});
+        return atom_level_spin_orbit(s->l, s->electrons, s->zeta,
+                                     (const double[]){s->f2, s->f4, s->f6});
     return coupled(s, 1, &none, &known);
 }
 

@@ -29,9 +29,9 @@ START_TEST(levels_have_both_coupling_limits)
                            (j * (j + 1) - big_l * (big_l + 1) - s * (s + 1));
             double jj = -0.5 * (l + 1) * least(n, 2 * l) +
                         0.5 * l * (n > 2 * l ? n - 2 * l : 0);
-            near(level_spin_orbit(l, n, 1e-4, f) / 1e-4, lande, 0.01, 0.0,
+            near(atom_level_spin_orbit(l, n, 1e-4, f) / 1e-4, lande, 0.01, 0.0,
                  "l = %d, n = %d, weak", l, n);
-            near(level_spin_orbit(l, n, 1e4, f) / 1e4, jj, 2e-4, 0.0,
+            near(atom_level_spin_orbit(l, n, 1e4, f) / 1e4, jj, 2e-4, 0.0,
                  "l = %d, n = %d, strong", l, n);
         }
 }
@@ -48,8 +48,8 @@ START_TEST(levels_between_the_limits_are_the_closed_ones)
     double p4 = 0.5 * (6.0 - 0.5 * zeta) -
                 sqrt(0.25 * (6.0 + 0.5 * zeta) * (6.0 + 0.5 * zeta) +
                      0.5 * zeta * zeta);
-    near(level_spin_orbit(1, 2, zeta, f), p2, 1e-8, 0.0, "p2");
-    near(level_spin_orbit(1, 4, zeta, f), p4, 1e-8, 0.0, "p4");
+    near(atom_level_spin_orbit(1, 2, zeta, f), p2, 1e-8, 0.0, "p2");
+    near(atom_level_spin_orbit(1, 4, zeta, f), p4, 1e-8, 0.0, "p4");
 }
 END_TEST
 
