@@ -38,14 +38,14 @@ static void erase(struct field *field)
 
 bool field_edit(struct field *field, const struct event *event)
 {
+    bool is_key = event->kind == EVENT_KEY;
     if (event->kind == EVENT_CHARACTER || event->kind == EVENT_PASTE)
         field_type(field, event->character);
-    else if (event->kind != EVENT_KEY)
-        return false;
-    else if (event->key == KEY_CODE_ERASE || event->key == KEY_CODE_DELETE)
-        erase(field);
-    else if (event->key == KEY_CODE_CLEAR)
+    else if (is_key && event->key == KEY_CODE_CLEAR)
         field_set(field, "");
+    else if (is_key &&
+             (event->key == KEY_CODE_ERASE || event->key == KEY_CODE_DELETE))
+        erase(field);
     else
         return false;
     return true;
