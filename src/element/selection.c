@@ -175,7 +175,7 @@ bool selection_add(struct selection *selection, const char *word,
         add(selection, (struct chosen){.z = e->z});
         return true;
     }
-    struct chosen item;
+    struct chosen item = {0};
     bool is_ion;
     if (!parse_ion(word, &item, &is_ion, st))
         return false;

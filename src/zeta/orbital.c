@@ -14,7 +14,7 @@ static void block_basis(const struct energy_block *b,
                         double basis[][BLOCK_MAX])
 {
     int last = b->count - 1;
-    double v[BLOCK_MAX], norm = 0.0;
+    double v[BLOCK_MAX] = {0.0}, norm = 0.0;
     for (int i = 0; i <= last && b->open > 0; i++) {
         v[i] = mat->turn[i] + (i == last ? copysign(1.0, mat->turn[last]) : 0);
         norm += v[i] * v[i];
