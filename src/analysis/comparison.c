@@ -26,6 +26,13 @@ static int line_of(const struct comparison *c, const struct provenance *source)
     return -1;
 }
 
+/* What a line of differences of two sets holds. */
+static const struct definition disagreement_of = {
+    .name = "disagreement", .text = "disagreement of two sets"};
+static const struct definition unlike = {
+    .name = "disagreement_unlike",
+    .text = "disagreement of two sets, not like with like"};
+
 static struct comparison_pair *pair_new(const struct provenance *first,
                                         const struct provenance *second)
 {
@@ -43,9 +50,8 @@ static struct comparison_pair *pair_new(const struct provenance *first,
     pair->provenance = (struct provenance){
         .id = pair->id,
         .title = "disagreement of two sets",
-        .definition = strcmp(first->definition, second->definition) == 0
-                          ? "disagreement of two sets"
-                          : "disagreement of two sets, not like with like",
+        .definition = first->definition == second->definition ? &disagreement_of
+                                                              : &unlike,
         .citations = pair->citations,
         .citation_count = count,
     };
@@ -81,9 +87,7 @@ bool comparison_add_pair(struct comparison *comparison,
     if (a < 0 || b < 0 ||
         comparison->lines[a].unit != comparison->lines[b].unit)
         return true;
-    bool scale = quantity_at(comparison->lines[a].quantity)->dimension ==
-                 DIMENSION_NUMBER;
-    if (scale && strcmp(first->definition, second->definition) != 0)
+    if (!definition_subtracts(first->definition, second->definition))
         return true;
     size_t count = (size_t)comparison->line_count;
     struct comparison_line *lines =
@@ -137,5 +141,5 @@ void comparison_label(const struct comparison *comparison, int line,
     }
     text_add(t, self->provenance->id);
     if (shared)
-        text_addf(t, ": %s", self->provenance->definition);
+        text_addf(t, ": %s", provenance_definition(self->provenance));
 }

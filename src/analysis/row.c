@@ -19,7 +19,12 @@ const char *row_state_id(enum row_state state)
 static bool same_definition(const struct provenance *a,
                             const struct provenance *b)
 {
-    return a && b && strcmp(a->definition, b->definition) == 0;
+    return a && b && a->definition == b->definition;
+}
+
+static bool subtracts(const struct provenance *a, const struct provenance *b)
+{
+    return a && b && definition_subtracts(a->definition, b->definition);
 }
 
 /* A percentage of a signed quantity is meant as a share of its size. False
@@ -72,8 +77,7 @@ void row_compare(struct row *row, struct reading value,
     } else if (reference.state != READING_OK) {
         row->state = ROW_NO_REFERENCE;
         row->reason = reference.reason;
-    } else if (row->unit->dimension == DIMENSION_NUMBER &&
-               !row->like_with_like) {
+    } else if (!subtracts(value.provenance, reference.provenance)) {
         row->state = ROW_OTHER_SCALE;
         row->reason = "the reference is on another scale";
     } else {
@@ -85,10 +89,9 @@ void row_compare(struct row *row, struct reading value,
 void row_disagree(struct row *row, struct reading against)
 {
     row->against = reading_in_unit(against, row->unit);
-    row->disagrees =
-        against.state == READING_OK && row->reference.state == READING_OK &&
-        (quantity_at(row->quantity)->dimension != DIMENSION_NUMBER ||
-         same_definition(against.provenance, row->reference.provenance));
+    row->disagrees = against.state == READING_OK &&
+                     row->reference.state == READING_OK &&
+                     subtracts(against.provenance, row->reference.provenance);
     if (!row->disagrees)
         return;
     row->disagreement =

@@ -228,10 +228,15 @@ const struct subshell *configuration_emptied(const struct configuration *before,
                                              const struct configuration *after)
 {
     const struct subshell *emptied = NULL;
+    int k = 0; /* both go upwards in n, then l */
     for (int i = 0; i < before->count; i++) {
         const struct subshell *s = &before->shells[i];
-        if (configuration_occupation(after, s->n, s->l) >
-            s->occ - OCCUPATION_TOLERANCE)
+        const struct subshell *o = after->shells;
+        while (k < after->count &&
+               (o[k].n < s->n || (o[k].n == s->n && o[k].l < s->l)))
+            k++;
+        bool there = k < after->count && o[k].n == s->n && o[k].l == s->l;
+        if ((there ? o[k].occ : 0.0) > s->occ - OCCUPATION_TOLERANCE)
             continue;
         if (emptied)
             return NULL;

@@ -25,6 +25,12 @@ void citation_text(struct text *t, const struct citation *c)
         text_addf(t, ", doi %s", c->doi);
 }
 
+const char *provenance_definition(const struct provenance *provenance)
+{
+    return provenance->definition ? provenance->definition->text
+                                  : provenance->title;
+}
+
 void provenance_text(struct text *t, const struct provenance *provenance)
 {
     for (int i = 0; provenance && i < provenance->citation_count; i++) {

@@ -6,6 +6,7 @@
 #include <stdbool.h>
 
 #include "base/text.h"
+#include "element/definition.h"
 
 /* A bibliographic record. Fields that do not apply are NULL or 0. key is a
  * BibTeX key; kind a BibTeX entry type: "article", "book", "misc", … */
@@ -22,20 +23,21 @@ struct citation {
 };
 
 /* The source of a reading; lives as long as the program or its data set.
- * definition says what the number is ("covalent radius", "radius of maximum
- * radial density", "Pauling scale"): only equal definitions are like with
- * like. */
+ * definition says what the numbers are: only equal ones are like with like. */
 struct provenance {
     bool computed;
-    const char *id;    /* model or data set */
-    const char *title; /* one line */
-    const char *definition;
-    const struct citation *citations; /* citations[citation_count] */
+    const char *id;                      /* model or data set */
+    const char *title;                   /* one line */
+    const struct definition *definition; /* NULL for a table of facts */
+    const struct citation *citations;    /* citations[citation_count] */
     int citation_count;
 };
 
 /* Appends "E. Author, Journal 36, 57 (1930), doi 10.…". */
 void citation_text(struct text *t, const struct citation *citation);
+
+/* What its numbers are, in words: its definition's, or its title. */
+const char *provenance_definition(const struct provenance *provenance);
 
 /* Appends all citations of a source joined by "; ", nothing for NULL. */
 void provenance_text(struct text *t, const struct provenance *provenance);

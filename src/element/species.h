@@ -40,6 +40,10 @@ struct species {
     struct configuration configuration;
     enum configuration_origin origin;
     struct term term;
+    /* Which subshell loses the next electron, where that has been worked out:
+     * 1 + its place in the configuration, -1 when the ion differs in more than
+     * one subshell or there is none; 0 when nobody has looked. */
+    int emptied;
 };
 
 /* Appends a configuration with where it comes from when that is not a table:

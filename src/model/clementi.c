@@ -20,10 +20,10 @@ static const struct citation citations[] = {
     }
 
 static const struct model_offer offers[RULE_OFFERS] = {
-    [RULE_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_RULE)},
-    [RULE_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(DEFINITION_RADIAL_MAXIMUM)},
+    [RULE_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(&definition_zeff_rule)},
+    [RULE_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(&definition_radial_maximum)},
     [RULE_IONIZATION] = {QUANTITY_IONIZATION,
-                         PROVENANCE(DEFINITION_IONIZATION)},
+                         PROVENANCE(&definition_ionization)},
 };
 
 /* Subshells of the rules, as bits in the order in which they fill a row. */

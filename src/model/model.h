@@ -11,20 +11,6 @@
 #include "element/reading.h"
 #include "element/species.h"
 
-/* What the numbers are; a reference set with the same words is like with
- * like (data/ uses the same). */
-#define DEFINITION_RADIAL_MAXIMUM "radius of maximum radial density"
-#define DEFINITION_ISODENSITY "radius at 0.001 electrons per cubic bohr"
-#define DEFINITION_IONIZATION "ionization energy"
-#define DEFINITION_ZEFF_RULE "screening rule, Z - S"
-#define DEFINITION_ZEFF_EXPONENT "orbital exponent, n zeta"
-#define DEFINITION_ZEFF_ENERGY "from the energy, n sqrt(E/Ry)"
-#define DEFINITION_ZEFF_SIZE "from the size, mean radius"
-#define DEFINITION_ZEFF_ENCLOSED "Gauss's law at the radial maximum"
-#define DEFINITION_ALLRED_ROCHOW "Allred-Rochow scale"
-#define DEFINITION_MULLIKEN "Mulliken scale, eV"
-#define DEFINITION_ALLEN "Allen scale"
-
 /* One electron more, or less: what an energy difference needs. */
 struct question {
     struct species species;
@@ -84,6 +70,6 @@ struct model {
  * first for that quantity; -1 when the model does not offer it. definition may
  * be NULL. */
 int model_offer_for(const struct model *model, enum quantity_id quantity,
-                    const char *definition);
+                    const struct definition *definition);
 
 #endif

@@ -34,7 +34,7 @@ int model_index(const struct model *model)
 }
 
 int model_offer_for(const struct model *model, enum quantity_id quantity,
-                    const char *definition)
+                    const struct definition *definition)
 {
     int first = -1;
     for (int i = 0; i < model->offer_count; i++) {
@@ -42,8 +42,7 @@ int model_offer_for(const struct model *model, enum quantity_id quantity,
             continue;
         if (first < 0)
             first = i;
-        if (definition &&
-            strcmp(model->offers[i].provenance.definition, definition) == 0)
+        if (definition && model->offers[i].provenance.definition == definition)
             return i;
     }
     return first;

@@ -63,8 +63,7 @@ enum {
 const struct provenance *scf_atom_source(bool gradient)
 {
     static const struct provenance sources[] = {
-        PROVENANCE("self-consistent atom", SOURCES_DENSITY),
-        PROVENANCE("self-consistent atom", SOURCES_GRADIENT)};
+        PROVENANCE(NULL, SOURCES_DENSITY), PROVENANCE(NULL, SOURCES_GRADIENT)};
     return &sources[gradient];
 }
 
@@ -81,19 +80,20 @@ enum {
 
 static const struct model_offer offers[OFFER_COUNT] = {
     [OFFER_ZEFF] = {QUANTITY_ZEFF,
-                    PROVENANCE(DEFINITION_ZEFF_ENERGY, SOURCES_ENERGY)},
+                    PROVENANCE(&definition_zeff_energy, SOURCES_ENERGY)},
     [OFFER_ZEFF_SIZE] = {QUANTITY_ZEFF,
-                         PROVENANCE(DEFINITION_ZEFF_SIZE, SOURCES_DENSITY)},
-    [OFFER_ZEFF_ENCLOSED] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_ENCLOSED,
-                                                       SOURCES_DENSITY)},
+                         PROVENANCE(&definition_zeff_size, SOURCES_DENSITY)},
+    [OFFER_ZEFF_ENCLOSED] = {QUANTITY_ZEFF,
+                             PROVENANCE(&definition_zeff_enclosed,
+                                        SOURCES_DENSITY)},
     [OFFER_RADIUS] = {QUANTITY_RADIUS,
-                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, SOURCES_DENSITY)},
+                      PROVENANCE(&definition_radial_maximum, SOURCES_DENSITY)},
     [OFFER_ISODENSITY] = {QUANTITY_ISODENSITY,
-                          PROVENANCE(DEFINITION_ISODENSITY, SOURCES_DENSITY)},
+                          PROVENANCE(&definition_isodensity, SOURCES_DENSITY)},
     [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION, SOURCES_ENERGY)},
+                          PROVENANCE(&definition_ionization, SOURCES_ENERGY)},
     [OFFER_ALLEN] = {QUANTITY_ELECTRONEGATIVITY,
-                     PROVENANCE(DEFINITION_ALLEN, SOURCES_ALLEN)},
+                     PROVENANCE(&definition_allen, SOURCES_ALLEN)},
 };
 
 /* Standard uncertainty of a first ionization energy in eV, by block: the root

@@ -40,20 +40,20 @@ enum { OFFER_ZEFF, OFFER_RADIUS, OFFER_IONIZATION, OFFER_COUNT };
 
 static const struct model_offer offers[OFFER_COUNT] = {
     [OFFER_ZEFF] = {QUANTITY_ZEFF,
-                    PROVENANCE(DEFINITION_ZEFF_EXPONENT, citations, 1)},
+                    PROVENANCE(&definition_zeff_exponent, citations, 1)},
     [OFFER_RADIUS] = {QUANTITY_RADIUS,
-                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, citations, 1)},
+                      PROVENANCE(&definition_radial_maximum, citations, 1)},
     [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION, citations, 2)},
+                          PROVENANCE(&definition_ionization, citations, 2)},
 };
 
 static const struct model_offer average_offers[OFFER_COUNT] = {
-    [OFFER_ZEFF] = {QUANTITY_ZEFF,
-                    PROVENANCE(DEFINITION_ZEFF_EXPONENT, average_citations, 2)},
-    [OFFER_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(DEFINITION_RADIAL_MAXIMUM,
+    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(&definition_zeff_exponent,
+                                              average_citations, 2)},
+    [OFFER_RADIUS] = {QUANTITY_RADIUS, PROVENANCE(&definition_radial_maximum,
                                                   average_citations, 2)},
     [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION, average_citations,
+                          PROVENANCE(&definition_ionization, average_citations,
                                      2)},
 };
 

@@ -37,13 +37,13 @@ enum {
 };
 
 static const struct model_offer offers[OFFER_COUNT] = {
-    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(DEFINITION_ZEFF_RULE, 1)},
+    [OFFER_ZEFF] = {QUANTITY_ZEFF, PROVENANCE(&definition_zeff_rule, 1)},
     [OFFER_RADIUS] = {QUANTITY_RADIUS,
-                      PROVENANCE(DEFINITION_RADIAL_MAXIMUM, 1)},
+                      PROVENANCE(&definition_radial_maximum, 1)},
     [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(DEFINITION_IONIZATION, 1)},
+                          PROVENANCE(&definition_ionization, 1)},
     [OFFER_ELECTRONEGATIVITY] = {QUANTITY_ELECTRONEGATIVITY,
-                                 PROVENANCE(DEFINITION_ALLRED_ROCHOW, 3)},
+                                 PROVENANCE(&definition_allred_rochow, 3)},
 };
 
 double slater_n_star(int n)

@@ -204,7 +204,9 @@ static void put_dataset(FILE *out, const struct dataset *set, size_t i)
     fprintf(out, "static const struct dataset set_%zu = {\n", i);
     put_member(out, "provenance.id", set->provenance.id);
     put_member(out, "provenance.title", set->provenance.title);
-    put_member(out, "provenance.definition", set->provenance.definition);
+    if (set->provenance.definition)
+        fprintf(out, "    .provenance.definition = &definition_%s,\n",
+                set->provenance.definition->name);
     put_member(out, "licence", set->licence);
     put_member(out, "absent", set->absent);
     fprintf(out, "    .provenance.citations = citations_%zu,\n", i);

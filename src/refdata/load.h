@@ -5,7 +5,7 @@
 
 #include <cjson/cJSON.h>
 
-#include "refdata/definition.h"
+#include "element/definition.h"
 #include "refdata/loader.h"
 #include "refdata/object.h"
 

@@ -102,12 +102,12 @@ static bool check_range(struct load *ld, const cJSON *object,
     const struct dataset *set = &ld->out->set;
     const struct quantity *quantity = quantity_at(set->quantity);
     double lowest = quantity->lowest, highest = quantity->highest;
-    if (!ld->definition->may_be_negative && lowest < 0.0)
+    if (!(ld->definition->traits & DEFINITION_SIGNED) && lowest < 0.0)
         lowest = 0.0;
     double scale = set->unit->per_base;
     lowest *= scale;
     highest *= scale;
-    bool above_zero = !ld->definition->may_be_negative;
+    bool above_zero = !(ld->definition->traits & DEFINITION_SIGNED);
     if (e->value.value < lowest || e->value.value > highest ||
         (above_zero && e->value.value == 0.0))
         return status_fail(

@@ -230,7 +230,7 @@ static bool load_quantity(struct load *ld)
     if (!load_word(ld, ld->root, "definition", texts, (int)count, &place))
         return false;
     ld->definition = definition_at(set->quantity, (size_t)place);
-    set->provenance.definition = ld->definition->text;
+    set->provenance.definition = ld->definition;
 
     const char *ids[16];
     const struct unit *units[16];
@@ -291,7 +291,6 @@ static bool load_head(struct load *ld)
         return false;
     if (set->kind == DATASET_VALUES)
         return load_values_head(ld);
-    set->provenance.definition = set->provenance.title;
     for (size_t i = VALUES_ONLY_FROM; i < ROOT_FIELD_COUNT; i++)
         if (object_member(ld->root, root_fields[i].key))
             return status_fail(ld->st, STATUS_DATA,

@@ -177,14 +177,14 @@ static void put_percent(const void *record, struct text *t)
 static void put_model_definition(const void *record, struct text *t)
 {
     const struct record *r = record;
-    text_add(t, r->series->value->definition);
+    text_add(t, provenance_definition(r->series->value));
 }
 
 static void put_set_definition(const void *record, struct text *t)
 {
     const struct record *r = record;
     if (r->series->reference)
-        text_add(t, r->series->reference->definition);
+        text_add(t, provenance_definition(r->series->reference));
 }
 
 static void put_like(const void *record, struct text *t)
@@ -323,7 +323,8 @@ static void add_line(struct report *report, struct report_table *table,
     report_cell(report, table, s->unit->id);
     const struct report_note notes[] = {
         {"not like with like; the model gives: ",
-         s->like_with_like || !s->reference ? "" : s->value->definition},
+         s->like_with_like || !s->reference ? ""
+                                            : provenance_definition(s->value)},
         {"", s->repeats ? "the set is the same calculation, published" : ""},
         {"", s->reference ? "" : "no reference set for this quantity"},
     };

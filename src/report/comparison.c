@@ -40,7 +40,7 @@ static void put_source(const void *record, struct text *t)
 static void put_definition(const void *record, struct text *t)
 {
     const struct record *r = record;
-    text_add(t, r->line->provenance->definition);
+    text_add(t, provenance_definition(r->line->provenance));
 }
 
 static void put_unit(const void *record, struct text *t)

@@ -315,7 +315,7 @@ static void add_notes(struct report *r, struct report_table *table,
         {"", sets ? "" : row->reason},
         {"", row->value.remark},
         {"not like with like; the reference is: ",
-         unlike ? row->reference.provenance->definition : ""},
+         unlike ? provenance_definition(row->reference.provenance) : ""},
         {"", row->state == ROW_OK && row->repeats
                  ? "the reference is the same calculation, published"
                  : ""},
@@ -325,9 +325,9 @@ static void add_notes(struct report *r, struct report_table *table,
         {"second: ", second ? row->against.remark : ""},
         {"not like with like; the second is: ",
          row->against.provenance && row->reference.provenance &&
-                 strcmp(row->against.provenance->definition,
-                        row->reference.provenance->definition) != 0
-             ? row->against.provenance->definition
+                 row->against.provenance->definition !=
+                     row->reference.provenance->definition
+             ? provenance_definition(row->against.provenance)
              : ""},
         {"", origin_note(row->species.origin)},
     };

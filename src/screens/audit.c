@@ -272,7 +272,8 @@ static void draw_words(const struct session *session,
     text_addf(&t,
               "\xE2\x89\xA0 not like with like: the model gives %s; the "
               "reference is %s",
-              s->value->definition, s->reference->definition);
+              provenance_definition(s->value),
+              provenance_definition(s->reference));
     flow_text(&flow, ROLE_CAUTION, 0, text);
 }
 

@@ -316,7 +316,7 @@ static int draw_source(const struct session *session, struct canvas *canvas,
     text_addf(&t, "reference %s: ", p->id);
     if (row.reference.remark[0] != '\0')
         text_addf(&t, "%s; ", row.reference.remark);
-    text_add(&t, p->definition);
+    text_add(&t, provenance_definition(p));
     if (row.value.state == READING_OK && row.value.remark[0] != '\0')
         text_addf(&t, "; model: %s", row.value.remark);
     canvas_text(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT, buffer);
@@ -325,7 +325,7 @@ static int draw_source(const struct session *session, struct canvas *canvas,
     canvas_put(canvas, a.row + 1, NAME, ROLE_TEXT, UNEQUAL);
     canvas_textf(canvas, a.row + 1, NAME + 2, a.columns - NAME - 2, ROLE_TEXT,
                  "the model gives another thing: %s",
-                 row.value.provenance->definition);
+                 provenance_definition(row.value.provenance));
     return 2;
 }
 
@@ -402,7 +402,8 @@ static int draw_other_sets(const struct session *session, struct canvas *canvas,
         canvas_textf(canvas, a.row + used, NAME, a.columns - NAME, ROLE_TEXT,
                      "%s: reference %s: %s%s%s", rows[i].value.provenance->id,
                      p->id, rows[i].reference.remark,
-                     rows[i].reference.remark[0] ? "; " : "", p->definition);
+                     rows[i].reference.remark[0] ? "; " : "",
+                     provenance_definition(p));
         used++;
     }
     return used;

@@ -71,7 +71,7 @@ static void add_references(const struct session *s, struct chooser *c,
         const struct reference *ref = &list->items[r];
         if (ref->quantity == s->choice.quantity)
             chooser_add(c, r, now == ref, "%s: %s", ref->provenance->id,
-                        ref->provenance->definition);
+                        provenance_definition(ref->provenance));
     }
 }
 

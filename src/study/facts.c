@@ -4,8 +4,6 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "refdata/definition.h"
-
 /* What is said of every element with a tag. The program gives no advice on
  * handling: it names who does. */
 #define DEFER "see the safety data sheet, local codes, licensed practice"
@@ -180,7 +178,7 @@ static struct comparison_line *add_line(struct comparison *c, int *capacity,
         c->lines = lines;
         *capacity = more;
     }
-    enum dimension d = definition_dimension(quantity, provenance->definition);
+    enum dimension d = provenance->definition->dimension;
     struct comparison_line *line = &c->lines[c->line_count++];
     line->quantity = quantity;
     /* A scale in a unit of its own keeps it. */

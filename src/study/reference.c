@@ -38,7 +38,7 @@ static void set_derived(struct reference_list *list,
         false,
         REFERENCE_ZEFF_FROM_IONIZATION,
         "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
-        "from the energy, n sqrt(E/Ry)",
+        &definition_zeff_energy,
         list->derived_citations,
         count,
     };
@@ -112,35 +112,14 @@ const struct reference *reference_find(const struct reference_list *list,
     return NULL;
 }
 
-const struct reference *reference_default(const struct reference_list *list,
-                                          enum quantity_id quantity, int charge,
-                                          const char *definition, bool inner)
-{
-    const struct reference *first = NULL;
-    for (int i = 0; i < list->count && charge != 0 && !inner &&
-                    quantity == QUANTITY_RADIUS;
-         i++)
-        if (list->items[i].quantity == quantity &&
-            reference_has_sites(&list->items[i]))
-            return &list->items[i];
-    for (int i = 0; i < list->count; i++) {
-        const struct reference *r = &list->items[i];
-        if (r->quantity != quantity || (inner && r->outermost_only))
-            continue;
-        if (!first)
-            first = r;
-        if (definition && strcmp(r->provenance->definition, definition) == 0)
-            return r;
-    }
-    if (!first && inner)
-        return reference_default(list, quantity, charge, definition, false);
-    return first;
-}
-
 const struct subshell *reference_emptied(const struct species *species)
 {
     struct species ion;
     struct status st = status_ok();
+    if (species->emptied != 0)
+        return species->emptied > 0
+                   ? &species->configuration.shells[species->emptied - 1]
+                   : NULL;
     if (species->charge >= species->z ||
         !ground_state(species->z, species->charge + 1, &ion, &st))
         return NULL;
@@ -313,4 +292,34 @@ struct reading reference_read(const struct reference *reference,
                            reference->provenance);
     r.remark = "stored for the ground configuration";
     return r;
+}
+
+const struct reference *
+reference_default(const struct reference_list *list, enum quantity_id quantity,
+                  const struct species *species, int n, int l, struct site site,
+                  const struct definition *definition, bool inner)
+{
+    const struct reference *first = NULL, *like = NULL, *of_ions = NULL;
+    for (int i = 0; i < list->count; i++) {
+        const struct reference *r = &list->items[i];
+        const struct definition *own = r->provenance->definition;
+        if (r->quantity != quantity || (inner && r->outermost_only))
+            continue;
+        /* A set of the user stands behind ours and changes no row unasked. */
+        if (first && r->rank == RANK_ADDED)
+            break;
+        if (definition && own == definition) {
+            if (reference_read(r, species, n, l, site).state == READING_OK)
+                return r;
+            like = like ? like : r;
+        }
+        if (!of_ions && species->charge != 0 && !inner &&
+            (own->traits & DEFINITION_OF_IONS))
+            of_ions = r;
+        first = first ? first : r;
+    }
+    if (!first && inner)
+        return reference_default(list, quantity, species, n, l, site,
+                                 definition, false);
+    return of_ions ? of_ions : like ? like : first;
 }

@@ -51,22 +51,24 @@ void reference_list_fill(struct reference_list *list,
 const struct reference *reference_find(const struct reference_list *list,
                                        const char *id);
 
-/* The reference that a row takes when none was chosen. The radius of an ion:
- * the first set that tells sites apart, since no other holds ions. Else the
- * first with the model's own definition, else the first of the quantity that
- * covers such a subshell; NULL when the quantity has none. definition may be
- * NULL; inner: the subshell asked about is neither the outermost nor the one
- * that loses the electron. */
-const struct reference *reference_default(const struct reference_list *list,
-                                          enum quantity_id quantity, int charge,
-                                          const char *definition, bool inner);
-
 /* The site of an ion, for sets that tell them apart: COORDINATION_NONE is the
  * set's own default, SPIN_NONE the spin that its source prefers there. */
 struct site {
     enum coordination coordination;
     enum spin_state spin;
 };
+
+/* The reference that a row takes when none was chosen: the first set with the
+ * model's own definition (NULL: none) that holds a value for the species at its
+ * site; for an ion else the first that was found for ions; else the first with
+ * that definition, else the first of the quantity that covers such a subshell.
+ * NULL when the quantity has none. n, l, site as in reference_read; inner: the
+ * subshell asked about is neither the outermost nor the one that loses the
+ * electron. */
+const struct reference *
+reference_default(const struct reference_list *list, enum quantity_id quantity,
+                  const struct species *species, int n, int l, struct site site,
+                  const struct definition *definition, bool inner);
 
 /* True when the set tells sites apart. */
 bool reference_has_sites(const struct reference *reference);

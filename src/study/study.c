@@ -6,7 +6,6 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "refdata/definition.h"
 #include "refdata/ground.h"
 #include "study/solution.h"
 
@@ -141,7 +140,14 @@ static const struct question *ground_question(const struct study *study, int z,
     if (!ground_state(z, charge, &species, st))
         return NULL;
     *g = (struct ground){true, question_of(study, &species)};
-    return &g->question;
+    struct question *q = &g->question;
+    const struct subshell *emptied =
+        q->has_cation ? configuration_emptied(&q->species.configuration,
+                                              &q->cation.configuration)
+                      : NULL;
+    q->species.emptied =
+        emptied ? 1 + (int)(emptied - q->species.configuration.shells) : -1;
+    return q;
 }
 
 bool study_species(const struct study *study, const struct ask *ask,
@@ -255,9 +261,12 @@ static void set_subshell(struct row *row, const struct ask *ask)
 }
 
 /* A scale may have a unit of its own: Mulliken's values are energies. */
-static const struct unit *unit_of(const struct ask *ask, const char *definition)
+static const struct unit *unit_of(const struct ask *ask,
+                                  const struct definition *definition)
 {
-    enum dimension dimension = definition_dimension(ask->quantity, definition);
+    enum dimension dimension = definition
+                                   ? definition->dimension
+                                   : quantity_at(ask->quantity)->dimension;
     if (ask->unit && ask->unit->dimension == dimension)
         return ask->unit;
     return unit_base(dimension);
@@ -295,7 +304,7 @@ struct row study_row(const struct study *study, const struct ask *ask)
     set_subshell(&row, ask);
 
     const struct reference *reference = ask->reference;
-    const char *definition =
+    const struct definition *definition =
         reference ? reference->provenance->definition : NULL;
     int offer = ask->model
                     ? model_offer_for(ask->model, ask->quantity, definition)
@@ -311,9 +320,9 @@ struct row study_row(const struct study *study, const struct ask *ask)
         definition = ask->model->offers[offer].provenance.definition;
     }
     if (!reference)
-        reference =
-            reference_default(&study->references, ask->quantity, ask->charge,
-                              definition, is_inner(ask, &row.species));
+        reference = reference_default(&study->references, ask->quantity,
+                                      &row.species, ask->n, ask->l, ask->site,
+                                      definition, is_inner(ask, &row.species));
     struct reading stored =
         reference
             ? reference_read(reference, &row.species, ask->n, ask->l, ask->site)

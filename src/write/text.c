@@ -109,7 +109,7 @@ static void write_sets(FILE *out, const struct report *report)
         struct text t = text_over(letter, sizeof letter);
         report_set_letter(i, &t);
         fprintf(out, "  %-2s  %s: %s; %s\n", letter, p->id, p->title,
-                p->definition);
+                provenance_definition(p));
     }
 }
 

@@ -12,9 +12,18 @@
 #include "support/near.h"
 #include "support/run.h"
 
-static const struct provenance rule = {true, "rule", "", "scale a", NULL, 0};
-static const struct provenance same = {false, "same", "", "scale a", NULL, 0};
-static const struct provenance other = {false, "other", "", "scale b", NULL, 0};
+static const struct provenance rule = {true, "rule", "", &definition_covalent,
+                                       NULL, 0};
+static const struct provenance same = {false, "same", "", &definition_covalent,
+                                       NULL,  0};
+static const struct provenance other = {
+    false, "other", "", &definition_metallic_12, NULL, 0};
+
+/* Scales of electronegativity. */
+static const struct provenance pauling = {
+    false, "pauling", "", &definition_pauling, NULL, 0};
+static const struct provenance allen = {true, "allen", "", &definition_allen,
+                                        NULL, 0};
 
 static struct reading stored(enum quantity_id q, double value, int decimals,
                              const struct provenance *p)
@@ -55,8 +64,8 @@ START_TEST(unlike_definitions_are_marked_and_unlike_scales_not_subtracted)
     ck_assert(!radius.like_with_like);
     struct row chi =
         row_of(QUANTITY_ELECTRONEGATIVITY, "1",
-               reading_computed(QUANTITY_ELECTRONEGATIVITY, 2.1, &rule),
-               stored(QUANTITY_ELECTRONEGATIVITY, 2.2, 2, &other));
+               reading_computed(QUANTITY_ELECTRONEGATIVITY, 2.1, &allen),
+               stored(QUANTITY_ELECTRONEGATIVITY, 2.2, 2, &pauling));
     ck_assert_int_eq(chi.state, ROW_OTHER_SCALE);
     ck_assert_str_ne(chi.reason, "");
 }
@@ -139,8 +148,8 @@ START_TEST(two_sets_disagree_only_on_one_scale)
     row = row_of(
         QUANTITY_ELECTRONEGATIVITY, "1",
         reading_gap(QUANTITY_ELECTRONEGATIVITY, READING_MISSING, "none", NULL),
-        stored(QUANTITY_ELECTRONEGATIVITY, 1.83, 2, &same));
-    row_disagree(&row, stored(QUANTITY_ELECTRONEGATIVITY, 1.64, 2, &other));
+        stored(QUANTITY_ELECTRONEGATIVITY, 1.83, 2, &pauling));
+    row_disagree(&row, stored(QUANTITY_ELECTRONEGATIVITY, 1.64, 2, &allen));
     ck_assert(!row.disagrees);
     ck_assert_str_ne(row_of_sets(&row).reason, "");
     row_disagree(&row, reading_gap(QUANTITY_ELECTRONEGATIVITY, READING_MISSING,
@@ -256,9 +265,10 @@ static void add_run(struct audit *audit, const struct provenance *model,
 
 START_TEST(an_audit_leaves_one_out_and_ranks_on_common_species)
 {
-    static const struct provenance good = {true,      "good", "",
-                                           "scale a", NULL,   0};
-    static const struct provenance few = {true, "few", "", "scale a", NULL, 0};
+    static const struct provenance good = {
+        true, "good", "", &definition_covalent, NULL, 0};
+    static const struct provenance few = {true, "few", "", &definition_covalent,
+                                          NULL, 0};
     struct audit audit = {0};
     struct audit_part all = {AUDIT_ALL, 0};
     struct audit_part d = {AUDIT_BLOCK, 'd'};
@@ -294,10 +304,10 @@ END_TEST
  * calculation no test: neither makes a model best. */
 START_TEST(no_model_is_best_across_unlike_definitions)
 {
-    static const struct provenance near_by = {true,      "near", "",
-                                              "scale b", NULL,   0};
-    static const struct provenance copy = {true,      "copy", "",
-                                           "scale a", NULL,   0};
+    static const struct provenance near_by = {
+        true, "near", "", &definition_metallic_12, NULL, 0};
+    static const struct provenance copy = {
+        true, "copy", "", &definition_covalent, NULL, 0};
     struct audit audit = {0};
     struct audit_part all = {AUDIT_ALL, 0};
     struct status st = status_ok();

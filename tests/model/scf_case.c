@@ -56,7 +56,7 @@ void scf_solve(struct scf_case *scf, int z, int charge)
 }
 
 struct reading scf_read(struct scf_case *scf, enum quantity_id quantity,
-                        const char *definition, int n, int l)
+                        const struct definition *definition, int n, int l)
 {
     int offer = model_offer_for(scf->model, quantity, definition);
     ck_assert_int_ge(offer, 0);
@@ -64,7 +64,7 @@ struct reading scf_read(struct scf_case *scf, enum quantity_id quantity,
 }
 
 double scf_value(struct scf_case *scf, enum quantity_id quantity,
-                 const char *definition, int n, int l)
+                 const struct definition *definition, int n, int l)
 {
     struct reading r = scf_read(scf, quantity, definition, n, l);
     ck_assert_msg(r.state == READING_OK, "%s: %s", quantity_at(quantity)->id,

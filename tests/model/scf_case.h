@@ -25,11 +25,11 @@ void scf_solve(struct scf_case *scf, int z, int charge);
 
 /* A reading of what was solved; definition NULL for the first one. */
 struct reading scf_read(struct scf_case *scf, enum quantity_id quantity,
-                        const char *definition, int n, int l);
+                        const struct definition *definition, int n, int l);
 
 /* Its value; aborts the test where there is none. */
 double scf_value(struct scf_case *scf, enum quantity_id quantity,
-                 const char *definition, int n, int l);
+                 const struct definition *definition, int n, int l);
 
 TCase *case_scf_errors(void);
 

@@ -45,13 +45,13 @@ START_TEST(definitions_of_the_effective_charge_are_kept_apart)
     double ionization =
         scf_read(&scf, QUANTITY_IONIZATION, NULL, 0, 0).value.value;
     struct reading outer =
-        scf_read(&scf, QUANTITY_ZEFF, DEFINITION_ZEFF_ENERGY, 0, 0);
+        scf_read(&scf, QUANTITY_ZEFF, &definition_zeff_energy, 0, 0);
     ck_assert(outer.n == 4 && outer.l == 0);
     near(outer.value.value, 4.0 * sqrt(ionization / RYDBERG_EV), 0.0, 1e-8,
          "Fe 4s from the energy");
     /* by size and by Gauss's law the charge falls from shell to shell */
-    const char *const definitions[] = {DEFINITION_ZEFF_SIZE,
-                                       DEFINITION_ZEFF_ENCLOSED};
+    const struct definition *const definitions[] = {&definition_zeff_size,
+                                                    &definition_zeff_enclosed};
     for (size_t d = 0; d < 2; d++) {
         double before = 26.0;
         for (int n = 1; n <= 4; n++) {

@@ -297,10 +297,10 @@ START_TEST(charges_from_the_size_are_near_the_exponents_of_1963)
             scf_solve(&scf, z, 0);
         last = z;
         struct reading outer =
-            scf_read(&scf, QUANTITY_ZEFF, DEFINITION_ZEFF_SIZE, 0, 0);
+            scf_read(&scf, QUANTITY_ZEFF, &definition_zeff_size, 0, 0);
         int which = outer.n == n && outer.l == l;
         double off =
-            scf_value(&scf, QUANTITY_ZEFF, DEFINITION_ZEFF_SIZE, n, l) *
+            scf_value(&scf, QUANTITY_ZEFF, &definition_zeff_size, n, l) *
                 (n * (2.0 * n + 1.0)) / (3.0 * n * n - l * (l + 1.0)) /
                 csv_number(&csv, i, "zeff") -
             1.0;

@@ -45,7 +45,7 @@ START_TEST(exponents_come_out_as_effective_charges)
     ck_assert_str_eq(r.remark, "");
     r = ask(26, "[Ar] 3d5", QUANTITY_ZEFF, 3, 2, false);
     near(r.value.value, 11.92, 0.005, 0, "Fe3+ 3d");
-    ck_assert_str_eq(r.provenance->definition, DEFINITION_ZEFF_EXPONENT);
+    ck_assert_ptr_eq(r.provenance->definition, &definition_zeff_exponent);
 }
 END_TEST
 

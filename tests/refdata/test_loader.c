@@ -10,7 +10,7 @@
 
 #include "base/file.h"
 #include "refdata/catalogue.h"
-#include "refdata/definition.h"
+#include "element/definition.h"
 #include "refdata/loader.h"
 #include "refdata/suites.h"
 #include "support/near.h"
@@ -208,7 +208,7 @@ START_TEST(test_a_file_keeps_everything_it_says)
     const struct entry *e = dataset_lookup(set, 26, 0, 0, 0);
     ck_assert_str_eq(set->provenance.id, "own_2026");
     ck_assert_str_eq(set->provenance.title, "Own radii");
-    ck_assert_str_eq(set->provenance.definition, "covalent radius");
+    ck_assert_ptr_eq(set->provenance.definition, &definition_covalent);
     ck_assert_str_eq(set->provenance.citations[0].authors, "A. Nobody");
     ck_assert_int_eq(set->provenance.citations[0].year, 2026);
     ck_assert_str_eq(set->provenance.citations[e->source].key, "b.1");
@@ -548,6 +548,21 @@ START_TEST(test_words_are_distinct)
 }
 END_TEST
 
+/* Numbers are subtracted within a quantity, but for scales of their own; for
+ * radii that is what the audits of unlike definitions rest on. */
+START_TEST(test_scales_are_not_subtracted_from_each_other)
+{
+    ck_assert(definition_subtracts(&definition_pauling, &definition_pauling));
+    ck_assert(!definition_subtracts(&definition_pauling, &definition_allen));
+    ck_assert(!definition_subtracts(&definition_pauling, &definition_mulliken));
+    ck_assert(definition_subtracts(&definition_covalent,
+                                   &definition_ionic_effective));
+    ck_assert(
+        !definition_subtracts(&definition_covalent, &definition_affinity));
+    ck_assert(!definition_subtracts(NULL, &definition_covalent));
+}
+END_TEST
+
 START_TEST(test_definitions_are_found_by_their_text)
 {
     for (int q = 0; q < QUANTITY_COUNT; q++) {
@@ -556,15 +571,10 @@ START_TEST(test_definitions_are_found_by_their_text)
         for (size_t i = 0; i < definition_count(id); i++) {
             const struct definition *d = definition_at(id, i);
             ck_assert_ptr_eq(definition_find(id, d->text), d);
-            ck_assert_int_eq(definition_dimension(id, d->text), d->dimension);
         }
         ck_assert_ptr_null(definition_find(id, "size"));
-        ck_assert_int_eq(definition_dimension(id, NULL),
-                         quantity_at(id)->dimension);
     }
-    ck_assert_int_eq(
-        definition_dimension(QUANTITY_ELECTRONEGATIVITY, "Mulliken scale, eV"),
-        DIMENSION_ENERGY);
+    ck_assert_int_eq(definition_mulliken.dimension, DIMENSION_ENERGY);
 }
 END_TEST
 
@@ -586,6 +596,7 @@ TCase *loader_case(void)
     tcase_add_test(tc, test_a_built_in_id_is_taken);
     tcase_add_test(tc, test_words_are_distinct);
     tcase_add_test(tc, test_definitions_are_found_by_their_text);
+    tcase_add_test(tc, test_scales_are_not_subtracted_from_each_other);
     tcase_add_test(tc, test_the_tables_are_the_files);
     tcase_add_test(tc, test_the_example_of_the_man_page_loads);
     tcase_add_test(tc, test_the_man_page_names_every_key_and_word);

@@ -103,7 +103,7 @@ START_TEST(like_is_set_against_like_unless_told_otherwise)
                       .model = model_find("slater")};
     for (int r = 0; r < study_references(study)->count; r++) {
         const struct reference *reference = &study_references(study)->items[r];
-        if (strcmp(reference->provenance->definition, "Pauling scale") != 0)
+        if (reference->provenance->definition != &definition_pauling)
             continue;
         ask.reference = reference;
         struct row other = study_row(study, &ask);

@@ -154,7 +154,7 @@ static const struct provenance *number_source(const void *record)
     static const struct citation a[] = {
         {"a", "misc", "A. Author", "T", NULL, 1999, NULL, NULL, NULL}};
     static const struct provenance sources[] = {
-        {false, "one", "One", "d", a, 1}};
+        {false, "one", "One", NULL, a, 1}};
     return *(const int *)record == 1 ? NULL : &sources[0];
 }
 
@@ -268,8 +268,8 @@ END_TEST
 START_TEST(legends_tell_each_note_and_set_once)
 {
     static const struct provenance sets[] = {
-        {false, "one", "First set", "d1", NULL, 0},
-        {false, "two", "Second set", "d2", NULL, 0}};
+        {false, "one", "First set", &definition_covalent, NULL, 0},
+        {false, "two", "Second set", &definition_pauling, NULL, 0}};
     static const struct table_column columns[] = {{"set", CELL_WORDS},
                                                   {"notes", CELL_WORDS}};
     const struct report_note first[] = {{"", "b"}, {"", ""}, {"", "a"}};
@@ -290,8 +290,8 @@ START_TEST(legends_tell_each_note_and_set_once)
                            "b    1,2,3\n"
                            "a\n"
                            "\nReference sets\n"
-                           "  a   two: Second set; d2\n"
-                           "  b   one: First set; d1\n"
+                           "  a   two: Second set; Pauling scale\n"
+                           "  b   one: First set; covalent radius\n"
                            "\nNotes\n  1   b\n  2   a\n  3   see: a\n");
     free(text);
     report_clear(&report);
@@ -359,8 +359,8 @@ START_TEST(bibtex_names_each_key_once_and_escapes_what_tex_reads)
          "J. Things", 1999, "1", "2", "10.1/x_y"},
         {"key_b", "misc", "C. Author", "Title", NULL, 0, NULL, NULL, NULL}};
     static const struct provenance p[] = {
-        {false, "one", "One", "d", citations, 2},
-        {false, "two", "Two", "d", citations, 1}};
+        {false, "one", "One", NULL, citations, 2},
+        {false, "two", "Two", NULL, citations, 1}};
     struct report report;
     struct memory m;
     struct status st = status_ok();
