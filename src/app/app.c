@@ -54,6 +54,15 @@ const struct screen_ops *app_screen(const struct app *app)
     return screen_list[app->screen];
 }
 
+void app_stop(struct app *app)
+{
+    struct session *s = &app->session;
+    session_touch(s);
+    s->stopped = true;
+    s->stopped_version = s->choice_version;
+    app->awaiting = false;
+}
+
 static int place_of(const char *id)
 {
     for (int i = 0; i < screen_list_count; i++)

@@ -9,6 +9,9 @@
 void app_show(struct app *app, int i);
 void app_follow(struct app *app);
 
+/* No more is solved, and no export waits, until the user changes something. */
+void app_stop(struct app *app);
+
 /* Opens a line that begins with a text. */
 void app_prompt_open(struct app *app, const struct prompt_ops *prompt,
                      const char *text);

@@ -104,9 +104,10 @@ enum effect app_chooser_update(struct app *app, const struct event *event)
 bool app_export_ready(struct app *app)
 {
     const struct export_ops *e = app->export;
-    app->awaiting =
-        e->lacks && e->lacks(&app->session, app->states[app->screen]) > 0;
-    return !app->awaiting;
+    int lacking =
+        e->lacks ? e->lacks(&app->session, app->states[app->screen]) : 0;
+    app->awaiting = lacking > 0 && app_has_work(app);
+    return lacking == 0;
 }
 
 bool app_export(struct app *app, FILE *out, struct status *st)

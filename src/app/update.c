@@ -91,15 +91,6 @@ static bool starts_jump(const struct app *app, const struct event *event)
            ((c >= 'A' && c <= 'Z') || (c >= '1' && c <= '9'));
 }
 
-static void stop_study(struct app *app)
-{
-    struct session *s = &app->session;
-    study_stop(s->study);
-    session_touch(s);
-    s->stopped = true;
-    s->stopped_version = s->choice_version;
-}
-
 static enum effect interrupt(struct app *app)
 {
     struct session *s = &app->session;
@@ -107,7 +98,8 @@ static enum effect interrupt(struct app *app)
     if (ops->stop && ops->stop(s, app->states[app->screen]))
         return EFFECT_REDRAW;
     if (study_progress(s->study).total > 0) {
-        stop_study(app);
+        study_stop(s->study);
+        app_stop(app);
         session_report(s, false, "stopped; what is solved stays");
         return EFFECT_REDRAW;
     }
@@ -132,8 +124,10 @@ static bool await(struct app *app, const struct event *event,
         *effect = EFFECT_WRITE;
         return true;
     }
-    if (event->kind == EVENT_INTERRUPT)
-        stop_study(app);
+    if (event->kind == EVENT_INTERRUPT) {
+        study_stop(app->session.study);
+        app_stop(app);
+    }
     session_report(&app->session, false, "%s: nothing written", app->path);
     return true;
 }

@@ -29,7 +29,12 @@ bool app_step(struct app *app, bool *changed)
     if (s->wanting && !s->stopped && ops->wants)
         ops->wants(s, app->states[app->screen]);
     s->wanting = false;
-    bool more = study_step(s->study);
+    struct status st = status_ok();
+    bool more = study_step(s->study, &st);
+    if (st.code != STATUS_OK) {
+        session_report(s, true, "%s; the solving is stopped", st.message);
+        app_stop(app);
+    }
     struct study_progress after = study_progress(s->study);
     *changed = after.done != before.done || (before.total > 0 && !more);
     if (*changed)

@@ -85,7 +85,8 @@ static bool space_make(struct atom_space *space, double first, double length,
     space->block = calloc(n * 22, sizeof *space->block);
     if (!space->radial || !space->mixer || !space->block) {
         space_clear(space);
-        return status_fail(st, STATUS_MEMORY, "atom on %zu points", n);
+        return status_fail(st, STATUS_MEMORY,
+                           "out of memory for an atom on %zu points", n);
     }
     double *at = space->block;
     space->q = at;
@@ -112,7 +113,7 @@ struct atom_solver *atom_solver_new(struct status *st)
 {
     struct atom_solver *solver = calloc(1, sizeof *solver);
     if (!solver)
-        status_fail(st, STATUS_MEMORY, "atom solver");
+        status_fail(st, STATUS_MEMORY, "out of memory for the atom solver");
     return solver;
 }
 
@@ -234,6 +235,7 @@ bool atom_begin(struct atom_solver *solver, int Z,
     const struct atom_space *before_space = s->now;
     double before = s->electrons;
     bool warm = options->warm && s->state == ATOM_CONVERGED;
+    s->state = ATOM_LOST; /* until there is something to step */
     s->Z = Z;
     s->configuration = *configuration;
     s->options = *options;

@@ -28,6 +28,17 @@ struct gradient {
     double *block;
 };
 
+/* libxc uses what it allocates without a look: what it needs, with much to
+ * spare, is asked for before and given back at once. */
+static bool room_for_functionals(void)
+{
+    enum { BYTES = 1 << 16 };
+    void *volatile room = malloc(BYTES); /* or the compiler leaves it out */
+    bool found = room != NULL;
+    free(room);
+    return found;
+}
+
 struct gradient *gradient_new(const struct mesh *mesh, struct status *st)
 {
     static const int id[FUNCTIONALS] = {XC_GGA_X_PBE, XC_GGA_C_PBE,
@@ -35,10 +46,11 @@ struct gradient *gradient_new(const struct mesh *mesh, struct status *st)
     struct gradient *g = calloc(1, sizeof *g);
     size_t n = (size_t)mesh->points;
     double *at = calloc(n * 23, sizeof *at);
-    if (!g || !at) {
+    if (!g || !at || !room_for_functionals()) {
         free(g);
         free(at);
-        status_fail(st, STATUS_MEMORY, "functionals on %zu points", n);
+        status_fail(st, STATUS_MEMORY,
+                    "out of memory for functionals on %zu points", n);
         return NULL;
     }
     g->mesh = mesh;

@@ -43,7 +43,7 @@ struct hybrid *hybrid_new(struct status *st)
 {
     struct hybrid *h = calloc(1, sizeof *h);
     if (!h)
-        status_fail(st, STATUS_MEMORY, "hybrid energy");
+        status_fail(st, STATUS_MEMORY, "out of memory for the hybrid energy");
     return h;
 }
 
@@ -74,7 +74,9 @@ static bool prepare(struct hybrid *h, const struct atom_solver *solver,
         return false;
     h->block = calloc(n * (SHELLS + 5 + SHAPE_ARRAYS), sizeof *h->block);
     if (!h->block)
-        return status_fail(st, STATUS_MEMORY, "hybrid energy on %zu points", n);
+        return status_fail(st, STATUS_MEMORY,
+                           "out of memory for a hybrid energy on %zu points",
+                           n);
     h->capacity = mesh->points;
     double *at = h->block;
     h->p = at;

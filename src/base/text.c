@@ -79,6 +79,19 @@ void text_add_bytes(struct text *t, const char *s, size_t n)
     t->data[t->length] = '\0';
 }
 
+size_t utf8_whole(const char *s, size_t n)
+{
+    size_t start = n;
+    while (start > 0 && n - start < 3 &&
+           ((unsigned char)s[start - 1] & 0xC0) == 0x80)
+        start--;
+    if (start == 0)
+        return n;
+    unsigned char lead = (unsigned char)s[start - 1];
+    size_t needed = lead >= 0xF0 ? 4 : lead >= 0xE0 ? 3 : lead >= 0xC0 ? 2 : 1;
+    return n - start + 1 < needed ? start - 1 : n;
+}
+
 void text_add(struct text *t, const char *s)
 {
     text_add_bytes(t, s, strlen(s));
@@ -93,9 +106,13 @@ void text_addf(struct text *t, const char *format, ...)
     va_end(args);
     if (n < 0)
         return;
-    if ((size_t)n >= sizeof piece)
-        t->cut = true;
-    text_add(t, piece);
+    if ((size_t)n < sizeof piece) {
+        text_add(t, piece);
+        return;
+    }
+    /* vsnprintf counts bytes and may have halved the last character. */
+    t->cut = true;
+    text_add_bytes(t, piece, utf8_whole(piece, sizeof piece - 1));
 }
 
 size_t utf8_decode(const char *s, size_t len, uint32_t *code)

@@ -39,7 +39,8 @@ void text_add(struct text *t, const char *s);
 /* Appends the first n bytes of s. */
 void text_add_bytes(struct text *t, const char *s, size_t n);
 
-/* Appends formatted output. */
+/* Appends formatted output; at most 1023 bytes of it, cut between
+ * characters. */
 void text_addf(struct text *t, const char *format, ...) PRINTF_LIKE(2, 3);
 
 /* Decodes one character of s (len bytes, len >= 1). Gives the bytes used,
@@ -50,6 +51,10 @@ size_t utf8_decode(const char *s, size_t len, uint32_t *code);
 
 /* Writes code as UTF-8 to out[4]; gives the number of bytes, 1…4. */
 size_t utf8_encode(uint32_t code, char *out);
+
+/* How many of the first n bytes of s are left when a character that does not
+ * end within them is taken away; n when they end with a whole one. */
+size_t utf8_whole(const char *s, size_t n);
 
 /* True when all len bytes are well-formed UTF-8 (no surrogates, no
  * overlong forms, at most U+10FFFF). */

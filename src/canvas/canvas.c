@@ -36,7 +36,7 @@ bool canvas_resize(struct canvas *canvas, int rows, int columns,
     /* one more, so that an empty canvas is not a NULL of unclear meaning */
     struct cell *cells = calloc(count + 1, sizeof *cells);
     if (cells == NULL)
-        return status_fail(st, STATUS_MEMORY, "no memory for %d x %d cells",
+        return status_fail(st, STATUS_MEMORY, "out of memory for %d x %d cells",
                            rows, columns);
     free(canvas->cells);
     canvas->cells = cells;

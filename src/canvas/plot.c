@@ -447,6 +447,10 @@ void plot_fill(const struct plot *plot, enum role role,
             continue;
         double part = plot_part(&plot->y, y);
         int most = 8 * in->rows;
+        /* A value far below, or none on a logarithmic axis, is far out of an
+         * int's reach. */
+        if (!(part > 0.0))
+            continue;
         int eighths = part >= 1.0 ? most : (int)lround(part * most);
         fill_column(plot, role, c, eighths);
     }

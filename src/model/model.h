@@ -34,13 +34,14 @@ struct model_offer {
     struct provenance provenance;
 };
 
-enum model_progress { MODEL_RUNNING, MODEL_DONE };
+enum model_progress { MODEL_RUNNING, MODEL_DONE, MODEL_NO_MEMORY };
 
 /* id, title, domain: as shown. work_size: bytes of a work space, zeroed by the
  * caller, opened once, used for any number of questions, closed. A closed rule
  * is done in its first step. open and close may be NULL.
  *   begin  takes a question; what is outside the model shows in read.
- *   step   one unit of work, at most some milliseconds.
+ *   step   one unit of work, at most some milliseconds. MODEL_NO_MEMORY: given
+ *          up for lack of memory, nothing to read.
  *   read   after MODEL_DONE: offer is an index into offers; n = 0 asks for
  *          the outermost subshell, else for subshell n, l. Always a reading:
  *          a number, or a state with its reason. A remark may live in the work

@@ -140,6 +140,7 @@ struct work {
     struct hybrid *hybrid;
     struct question question;
     enum phase phase;
+    bool starved;        /* no memory: nothing is to be read */
     struct half half[2]; /* the atom, the ion */
     int now;             /* which of them is at work */
     int trial;
@@ -190,8 +191,10 @@ static bool start(struct work *w, const struct configuration *configuration)
     };
     struct status st = status_ok();
     w->phase = PHASE_SOLVE;
-    return atom_begin(w->solver, w->question.species.z, configuration, &options,
-                      &st);
+    bool begun = atom_begin(w->solver, w->question.species.z, configuration,
+                            &options, &st);
+    w->starved = w->starved || (!begun && st.code == STATUS_MEMORY);
+    return begun;
 }
 
 /* Starts one of the two; where there is nothing to solve (a bare nucleus) its
@@ -216,6 +219,7 @@ static void begin(void *work, const struct question *question,
     (void)options;
     struct work *w = work;
     w->question = *question;
+    w->starved = false;
     w->count = 0;
     w->remark[0] = '\0';
     w->half[ION] = (struct half){.state = ATOM_RUNNING};
@@ -247,6 +251,7 @@ static void evaluate(struct work *w, const struct configuration *configuration,
     struct hybrid_energy energy;
     half->configuration = *configuration;
     half->evaluated = hybrid_evaluate(w->hybrid, w->solver, &energy, &st);
+    w->starved = w->starved || st.code == STATUS_MEMORY;
     if (!half->evaluated)
         return;
     bool given = is_given(&w->question.species);
@@ -373,6 +378,8 @@ static enum model_progress step(void *work)
         take(w);
         go_on(w);
     }
+    if (w->starved)
+        return MODEL_NO_MEMORY;
     if (w->phase == DONE)
         write_remark(w);
     return w->phase == DONE ? MODEL_DONE : MODEL_RUNNING;

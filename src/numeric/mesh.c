@@ -61,7 +61,8 @@ bool mesh_init(struct mesh *mesh, double first, double last, double length,
     size_t n = (size_t)mesh->points;
     double *block = calloc(ARRAYS * n, sizeof *block);
     if (!block)
-        return status_fail(st, STATUS_MEMORY, "radial mesh of %d points",
+        return status_fail(st, STATUS_MEMORY,
+                           "out of memory for a radial mesh of %d points",
                            mesh->points);
     mesh->y = block;
     mesh->slope = block + n;

@@ -28,7 +28,8 @@ struct mixer *mixer_new(int capacity, struct status *st)
     if (!m || !block) {
         free(m);
         free(block);
-        status_fail(st, STATUS_MEMORY, "mixing %d numbers", capacity);
+        status_fail(st, STATUS_MEMORY, "out of memory for mixing %d numbers",
+                    capacity);
         return NULL;
     }
     m->block = block;

@@ -18,21 +18,28 @@ enum {
  * found anew. */
 static const double REACH_KEPT = 0.01;
 
-static double *take(double **at, size_t n)
+/* A block being shared out: used numbers of it; without a block they are only
+ * counted. */
+struct share {
+    double *block;
+    size_t used;
+};
+
+static double *take(struct share *at, size_t n)
 {
-    double *p = *at;
-    *at += (n + 3) / 4 * 4;
+    double *p = at->block ? at->block + at->used : NULL;
+    at->used += (n + 3) / 4 * 4;
     return p;
 }
 
-/* Hands out the arrays, each aligned for the widest vectors; with at = NULL
+/* Hands out the arrays, each aligned for the widest vectors; with block = NULL
  * only counts the numbers needed. */
-static size_t carve(struct radial *r, double *base)
+static size_t carve(struct radial *r, double *block)
 {
     size_t n = (size_t)r->work.mesh->points;
     size_t width = (size_t)r->kernel->width;
     size_t factor = (size_t)r->work.mesh->elements * LANES_FACTOR;
-    double *at = base;
+    struct share at = {block, 0};
     r->work.stiffness = take(&at, LANES_TRIANGLE * width);
     r->work.derivative = take(&at, (size_t)LOBATTO_POINTS * LOBATTO_POINTS);
     r->work.schwarz = take(&at, n);
@@ -55,7 +62,7 @@ static size_t carve(struct radial *r, double *base)
         r->group[g].chi = take(&at, n * LANES_MAX);
         r->group[g].density = take(&at, n * LANES_MAX);
     }
-    return (size_t)(at - base);
+    return at.used;
 }
 
 static void fill_tables(struct radial *r)
@@ -100,7 +107,7 @@ struct radial *radial_new(const struct mesh *mesh, int width, struct status *st)
     /* the vectors in it need more than malloc's alignment */
     struct radial *r = aligned_alloc(LANES_ALIGN, sizeof *r);
     if (!r) {
-        status_fail(st, STATUS_MEMORY, "radial solver");
+        status_fail(st, STATUS_MEMORY, "out of memory for the radial solver");
         return NULL;
     }
     memset(r, 0, sizeof *r);
@@ -108,13 +115,13 @@ struct radial *radial_new(const struct mesh *mesh, int width, struct status *st)
     r->kernel = choose_kernel(width);
     r->room =
         (RADIAL_LEVELS_MAX + LANES_MAX - 1) / LANES_MAX + RADIAL_CHANNELS - 1;
-    static double nothing[1];
-    size_t total = carve(r, nothing) + LANES_ALIGN / sizeof(double);
+    size_t total = carve(r, NULL) + LANES_ALIGN / sizeof(double);
     /* calloc: memory that is not touched costs nothing */
     r->block = calloc(total, sizeof *r->block);
     if (!r->block) {
         free(r);
-        status_fail(st, STATUS_MEMORY, "radial solver, %d points",
+        status_fail(st, STATUS_MEMORY,
+                    "out of memory for the radial solver, %d points",
                     mesh->points);
         return NULL;
     }

@@ -14,8 +14,8 @@ bool repulsion_init(struct repulsion *tables, const struct mesh *mesh,
     memset(tables, 0, sizeof *tables);
     double *at = calloc(n * 2 * (REPULSION_K_MAX + 1), sizeof *at);
     if (!at)
-        return status_fail(st, STATUS_MEMORY, "Slater integrals, %zu points",
-                           n);
+        return status_fail(st, STATUS_MEMORY,
+                           "out of memory for Slater integrals, %zu points", n);
     tables->mesh = mesh;
     tables->block = at;
     for (int k = 0; k <= REPULSION_K_MAX; k++, at += 2 * n) {

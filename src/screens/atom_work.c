@@ -210,8 +210,13 @@ bool screen_atom_resume(struct atom_state *own)
 {
     bool any = false;
     for (int s = 0; s < SLOT_COUNT; s++) {
-        any = any || own->slots[s].stopped;
-        own->slots[s].stopped = false;
+        struct atom_slot *slot = &own->slots[s];
+        bool failed = slot->failure[0] != '\0';
+        any = any || slot->stopped || failed;
+        slot->stopped = false;
+        /* What could not even begin may lack no memory by now. */
+        if (failed)
+            slot->begun = false;
     }
     return any;
 }

@@ -338,10 +338,9 @@ static int lacks(struct session *session, int z, int charge)
         ask.reference = ask.against = NULL;
         if (study_row(session->study, &ask).state != ROW_NOT_SOLVED)
             continue;
-        if (study_want(session->study, &ask, true, &st))
-            count++;
-        else
-            session_report(session, true, "%s", st.message);
+        count++;
+        if (!study_want(session->study, &ask, true, &st))
+            session_report(session, true, "nothing written: %s", st.message);
     }
     return count;
 }

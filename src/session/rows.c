@@ -67,8 +67,9 @@ int session_lacks(struct session *s, int z, int charge,
         return 0;
     if (study_want(s->study, &ask, true, &st))
         return 1;
-    session_report(s, true, "%s", st.message);
-    return 0;
+    /* Not queued, and lacking all the same: no export tells it as a gap. */
+    session_report(s, true, "nothing written: %s", st.message);
+    return 1;
 }
 
 int session_lacks_models(struct session *s, int z, int charge)

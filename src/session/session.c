@@ -25,8 +25,10 @@ void session_report(struct session *s, bool caution, const char *format, ...)
 {
     va_list args;
     va_start(args, format);
-    vsnprintf(s->message, sizeof s->message, format, args);
+    int n = vsnprintf(s->message, sizeof s->message, format, args);
     va_end(args);
+    if (n >= (int)sizeof s->message)
+        s->message[utf8_whole(s->message, sizeof s->message - 1)] = '\0';
     s->caution = caution;
 }
 

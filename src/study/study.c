@@ -353,8 +353,10 @@ bool study_row_now(struct study *study, const struct ask *ask, struct row *row,
     if (iterates(ask)) {
         if (!study_want(study, ask, true, st))
             return false;
-        while (study_step(study))
+        while (study_step(study, st))
             ;
+        if (st->code != STATUS_OK)
+            return false;
     }
     *row = study_row(study, ask);
     return true;
@@ -386,8 +388,10 @@ bool study_want(struct study *study, const struct ask *ask, bool first,
         return true;
     if (!study->queue)
         study->queue = calloc(QUEUE_MAX, sizeof *study->queue);
-    if (!study->queue || !work_of(study, ask->model, st))
+    if (!study->queue)
         return status_fail(st, STATUS_MEMORY, "out of memory");
+    if (!work_of(study, ask->model, st))
+        return false;
     int at = find_task(study, ask->model, &species);
     if (at >= 0 && (!first || at == study->queued - 1))
         return true;
@@ -411,7 +415,7 @@ bool study_want(struct study *study, const struct ask *ask, bool first,
     return true;
 }
 
-bool study_step(struct study *study)
+bool study_step(struct study *study, struct status *st)
 {
     if (study->queued == 0)
         return false;
@@ -421,15 +425,21 @@ bool study_step(struct study *study)
         task->model->begin(work, &task->question, &study->options);
         study->running = true;
     }
-    if (task->model->step(work) == MODEL_DONE) {
-        struct status st = status_ok();
+    enum model_progress progress = task->model->step(work);
+    if (progress == MODEL_NO_MEMORY) {
+        study_stop(study);
+        return status_fail(st, STATUS_MEMORY, "%s: out of memory",
+                           task->model->id);
+    }
+    if (progress == MODEL_DONE) {
         study->running = false;
         study->queued--;
         study->done++;
-        /* Without memory the atom stays unsolved and is asked for again. */
         if (!solution_keep(&study->solutions, task->model, work,
-                           &task->question.species, &st))
+                           &task->question.species, st)) {
             study_stop(study);
+            return false;
+        }
     }
     if (study->queued > 0)
         return true;

@@ -59,18 +59,20 @@ struct row study_row(const struct study *study, const struct ask *ask);
 struct reading study_reading(const struct study *study, const struct ask *ask,
                              const struct species *species, int offer);
 
-/* study_row, but solved here and now to the end. Fails only with
- * STATUS_MEMORY. */
+/* study_row, but solved here and now to the end. Fails with STATUS_MEMORY, or
+ * as the model's work space cannot be opened. */
 MUST_CHECK bool study_row_now(struct study *study, const struct ask *ask,
                               struct row *row, struct status *st);
 
 /* Work for models that iterate. study_want queues the ask's atom unless it is
  * solved or queued; with `first` it goes to the head of the queue. study_step
- * does one step, at most some milliseconds, and says whether work is left.
- * study_stop drops the queue and what is half done, keeping what is solved. */
+ * does one step, at most some milliseconds, and says whether work is left. It
+ * fails only with STATUS_MEMORY, which drops the queue: lack of memory is no
+ * gap in the science, and the atom stays unsolved. study_stop drops the queue
+ * and what is half done, keeping what is solved. */
 MUST_CHECK bool study_want(struct study *study, const struct ask *ask,
                            bool first, struct status *st);
-bool study_step(struct study *study);
+bool study_step(struct study *study, struct status *st);
 void study_stop(struct study *study);
 
 /* Atoms solved since the queue was last empty, and all of these. */

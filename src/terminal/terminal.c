@@ -124,7 +124,7 @@ bool terminal_open(struct terminal **terminal,
     *terminal = NULL;
     struct terminal *t = calloc(1, sizeof *t);
     if (t == NULL)
-        return status_fail(st, STATUS_MEMORY, "no memory for the terminal");
+        return status_fail(st, STATUS_MEMORY, "out of memory for the terminal");
     t->input_fd = options->input ? fileno(options->input) : STDIN_FILENO;
     t->output_fd = options->output ? fileno(options->output) : STDOUT_FILENO;
     if (!check_streams(t, options, st) || !capability_check(t->output_fd, st)) {

@@ -14,8 +14,11 @@ void chooser_add(struct chooser *c, int value, bool current, const char *format,
         return;
     va_list args;
     va_start(args, format);
-    vsnprintf(c->labels[c->count], sizeof c->labels[0], format, args);
+    char *label = c->labels[c->count];
+    int n = vsnprintf(label, sizeof c->labels[0], format, args);
     va_end(args);
+    if (n >= (int)sizeof c->labels[0])
+        label[utf8_whole(label, sizeof c->labels[0] - 1)] = '\0';
     c->values[c->count] = value;
     if (current)
         c->at = c->count;

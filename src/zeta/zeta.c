@@ -53,7 +53,8 @@ struct zeta *zeta_new(struct status *st)
 {
     struct zeta *work = malloc(sizeof *work);
     if (!work) {
-        status_fail(st, STATUS_MEMORY, "no memory for the single-zeta atom");
+        status_fail(st, STATUS_MEMORY,
+                    "out of memory for the single-zeta atom");
         return NULL;
     }
     zeta_slater_tables_fill(&work->energy.tables);

@@ -62,6 +62,39 @@ START_TEST(text_is_cut_between_characters)
 }
 END_TEST
 
+/* Longer than the room in which the format is printed first. */
+START_TEST(formatted_text_is_cut_between_characters)
+{
+    static char room[3000];
+    static char word[2100];
+    static const char *const letters[] = {"\xC3\xA9", "\xE2\x84\xAB",
+                                          "\xF0\x9F\x9C\x81"};
+    for (int lead = 0; lead < 4; lead++) {
+        memset(word, 'x', (size_t)lead);
+        word[lead] = '\0';
+        while (strlen(word) < 2000)
+            snprintf(word + strlen(word), 8, "%s", letters[_i]);
+        struct text t = text_over(room, sizeof room);
+        text_addf(&t, "%s", word);
+        ck_assert(t.cut && t.length > 1000);
+        ck_assert(utf8_valid(room, t.length));
+        ck_assert_uint_eq(strlen(room), t.length);
+        ck_assert_int_eq(strncmp(room, word, t.length), 0);
+    }
+}
+END_TEST
+
+START_TEST(whole_characters_are_counted)
+{
+    ck_assert_uint_eq(utf8_whole("ab", 2), 2);
+    ck_assert_uint_eq(utf8_whole("a\xE2\x84\xAB", 4), 4);
+    ck_assert_uint_eq(utf8_whole("a\xE2\x84\xAB", 3), 1);
+    ck_assert_uint_eq(utf8_whole("a\xE2\x84\xAB", 2), 1);
+    ck_assert_uint_eq(utf8_whole("\xC3", 1), 0);
+    ck_assert_uint_eq(utf8_whole("", 0), 0);
+}
+END_TEST
+
 START_TEST(utf8_round_trips_and_refuses_malformed_bytes)
 {
     for (uint32_t c = 1; c <= 0x10FFFF; c += c < 0x1000 ? 1 : 257) {
@@ -312,6 +345,8 @@ int main(void)
     tcase_add_test(plain, context_stands_before_the_message);
     tcase_add_test(plain, long_messages_end_in_whole_characters);
     tcase_add_test(plain, text_is_cut_between_characters);
+    tcase_add_loop_test(plain, formatted_text_is_cut_between_characters, 0, 3);
+    tcase_add_test(plain, whole_characters_are_counted);
     tcase_add_test(plain, utf8_round_trips_and_refuses_malformed_bytes);
     tcase_add_test(plain, what_steers_a_text_unseen_is_a_control_character);
     tcase_add_test(plain, edit_distance_counts_edits);

@@ -224,6 +224,24 @@ START_TEST(an_ascii_canvas_gets_ascii_alone)
 }
 END_TEST
 
+/* Values so far below that their eighths of a row are beyond an int. */
+START_TEST(an_area_far_below_is_not_drawn)
+{
+    static const double below[] = {-1e6,   -3e7, -5e7,  -1e8,   -2e8,
+                                   -2.5e8, -1e9, -1e12, -1e300, -HUGE_VAL};
+    open_plot(PLOT_BLOCK, PLOT_LOG);
+    for (size_t b = 0; b < sizeof below / sizeof below[0]; b++) {
+        for (int i = 0; i < POINTS; i++) {
+            double x = plot_value(&plot.x, (double)i / (POINTS - 1));
+            points[i] = (struct plot_point){x, below[b], true};
+        }
+        plot_fill(&plot, ROLE_CURVE_5, points, POINTS);
+        for (int c = 0; c < canvas.columns; c++)
+            ck_assert_msg(top_of(ROLE_CURVE_5, c) == -1, "%g", below[b]);
+    }
+}
+END_TEST
+
 TCase *plot_cases(void)
 {
     TCase *tc = tcase_create("plot");
@@ -234,6 +252,7 @@ TCase *plot_cases(void)
     tcase_add_test(tc, areas_reach_from_the_curve_to_the_axis);
     tcase_add_test(tc, a_gap_stays_empty);
     tcase_add_test(tc, what_is_outside_is_cut_off);
+    tcase_add_test(tc, an_area_far_below_is_not_drawn);
     tcase_add_test(tc, marks_and_labels_stand_at_their_place);
     tcase_add_test(tc, a_place_too_small_is_refused);
     tcase_add_test(tc, an_ascii_canvas_gets_ascii_alone);
