@@ -35,7 +35,8 @@ void text_free(struct text *t)
 void text_empty(struct text *t)
 {
     t->length = 0;
-    t->cut = false;
+    /* Of a growing text a shortage of memory is never forgotten. */
+    t->cut = t->cut && t->grows;
     t->data[0] = '\0';
 }
 

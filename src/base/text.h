@@ -29,7 +29,7 @@ struct text text_growing(void);
 void text_free(struct text *t);
 
 /* Makes it empty again, keeping its buffer; or as long as it was at an earlier
- * length. */
+ * length. A growing text that was cut for want of memory stays so. */
 void text_empty(struct text *t);
 void text_truncate(struct text *t, size_t length);
 

@@ -74,8 +74,10 @@ static bool write_csv(FILE *out, const struct report *report,
         }
         write_line(out, &line);
     }
+    bool cut = line.cut;
     text_free(&line);
-    return fields_close(fields, st);
+    return fields_close(fields, st) &&
+           (!cut || status_fail(st, STATUS_MEMORY, "out of memory"));
 }
 
 const struct format format_csv = {

@@ -85,8 +85,10 @@ static bool write_json(FILE *out, const struct report *report,
         fwrite(line.data, 1, line.length, out);
     }
     fputs("\n]}\n", out);
+    bool cut = line.cut;
     text_free(&line);
-    return fields_close(fields, st);
+    return fields_close(fields, st) &&
+           (!cut || status_fail(st, STATUS_MEMORY, "out of memory"));
 }
 
 const struct format format_json = {
