@@ -6,19 +6,11 @@
 
 #include "additions/tally.h"
 #include "cli/generate.h"
-#include "screens/desk.h"
-#include "screens/desk_keys.h"
+#include "app/desk.h"
+#include "app/desk_keys.h"
 #include "support/run.h"
 
 static const char *manual_template;
-
-static bool shows(const char *words)
-{
-    char *text = drawn();
-    bool found = strstr(text, words) != NULL;
-    free(text);
-    return found;
-}
 
 START_TEST(the_tab_key_comes_to_it_after_all_others)
 {

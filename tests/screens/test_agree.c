@@ -5,10 +5,10 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screens/desk.h"
-#include "screens/desk_keys.h"
+#include "app/desk.h"
+#include "app/desk_keys.h"
 #include "screens/list.h"
-#include "screens/test_ui.h"
+#include "screens/suites.h"
 
 /* The first line of the screen. */
 static char *title(void)

@@ -6,7 +6,7 @@
 
 #include "screens/atom_internal.h"
 #include "screens/list.h"
-#include "screens/desk.h"
+#include "app/desk.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/near.h"

@@ -2,7 +2,7 @@
 #include <check.h>
 
 #include "screens/map_layout.h"
-#include "screens/test_ui.h"
+#include "screens/suites.h"
 
 /* True when an area lies on the screen. */
 static bool inside(struct area a, int rows, int columns)

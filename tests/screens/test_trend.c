@@ -7,21 +7,12 @@
 
 #include "screens/audit_internal.h"
 #include "screens/trend_marks.h"
-#include "screens/desk.h"
-#include "screens/desk_keys.h"
+#include "app/desk.h"
+#include "app/desk_keys.h"
 #include "support/csv.h"
 #include "support/golden.h"
 #include "support/near.h"
 #include "support/run.h"
-
-/* Solves what the screen wants solved. */
-static void settle(void)
-{
-    bool changed;
-    app_draw(&app, &canvas);
-    while (app_has_work(&app))
-        app_step(&app, &changed);
-}
 
 static void check_golden(const char *name)
 {
@@ -29,17 +20,6 @@ static void check_golden(const char *name)
     char *text = drawn();
     golden_check(name, text);
     free(text);
-}
-
-static bool shows(const char *words)
-{
-    char *text = drawn();
-    char *roles = strstr(text, "\n==");
-    if (roles)
-        *roles = '\0';
-    bool found = strstr(text, words) != NULL;
-    free(text);
-    return found;
 }
 
 /* Choosers by their words, so that a new row changes nothing here. */

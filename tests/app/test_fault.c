@@ -184,7 +184,7 @@ END_TEST
 
 int main(void)
 {
-    Suite *suite = suite_create("screens_fault");
+    Suite *suite = suite_create("app_fault");
     TCase *tc = tcase_create("fault");
     tcase_add_test(tc, a_study_without_memory_says_so);
     tcase_add_loop_test(tc, every_allocation_of_a_screen_may_fail, 0,

@@ -1,9 +1,11 @@
 /* SPDX-License-Identifier: MIT */
-#include "screens/desk.h"
+#include "app/desk.h"
 
 #include <check.h>
+#include <stdlib.h>
+#include <string.h>
 
-#include "screens/desk_keys.h"
+#include "app/desk_keys.h"
 
 struct study *study;
 struct app app;
@@ -63,4 +65,23 @@ char *drawn(void)
     char *text = canvas_to_text(&canvas);
     ck_assert_ptr_nonnull(text);
     return text;
+}
+
+void settle(void)
+{
+    bool changed;
+    app_draw(&app, &canvas);
+    while (app_has_work(&app))
+        app_step(&app, &changed);
+}
+
+bool shows(const char *words)
+{
+    char *text = drawn();
+    char *roles = strstr(text, "\n==");
+    if (roles)
+        *roles = '\0';
+    bool found = strstr(text, words) != NULL;
+    free(text);
+    return found;
 }

@@ -1,112 +1,20 @@
 /* SPDX-License-Identifier: MIT */
 /* The screens as events in and a canvas out: no terminal. */
-#include "screens/test_ui.h"
-
+#include <check.h>
 #include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
 
+#include "app/desk.h"
+#include "app/desk_keys.h"
+#include "app/suites.h"
 #include "screens/list.h"
-#include "screens/map_layout.h"
 #include "session/common.h"
-#include "screens/desk.h"
-#include "screens/desk_keys.h"
 #include "support/csv.h"
-#include "support/golden.h"
 #include "support/run.h"
 
 /* Places among the exports of the map. */
 enum { EXPORT_ROW, EXPORT_PINS, EXPORT_SHEET };
-
-/* Solves what the screen wants solved. */
-static void settle(void)
-{
-    bool changed;
-    while (app_has_work(&app))
-        app_step(&app, &changed);
-}
-
-static void check_golden(const char *name)
-{
-    settle();
-    char *text = drawn();
-    golden_check(name, text);
-    free(text);
-}
-
-/* True when the drawn characters hold the words. */
-static bool shows(const char *words)
-{
-    char *text = drawn();
-    char *roles = strstr(text, "\n==");
-    if (roles)
-        *roles = '\0';
-    bool found = strstr(text, words) != NULL;
-    free(text);
-    return found;
-}
-
-START_TEST(the_map_at_80x24)
-{
-    check_golden("map-80x24.txt");
-}
-END_TEST
-
-START_TEST(the_map_of_residuals_at_200x60)
-{
-    resize(60, 200);
-    type("vv");
-    check_golden("map-residual-200x60.txt");
-}
-END_TEST
-
-START_TEST(the_map_at_40x12_and_its_pane)
-{
-    resize(12, 40);
-    check_golden("map-40x12.txt");
-    key(KEY_CODE_ENTER);
-    check_golden("pane-40x12.txt");
-}
-END_TEST
-
-START_TEST(the_list_at_30x10)
-{
-    resize(10, 30);
-    check_golden("list-30x10.txt");
-}
-END_TEST
-
-START_TEST(three_species_compared_at_100x40)
-{
-    resize(40, 100);
-    static const int z[] = {40, 72, 22};
-    for (int i = 0; i < 3; i++) {
-        session_select(&app.session, z[i]);
-        type("p");
-    }
-    type("c");
-    check_golden("compare-100x40.txt");
-}
-END_TEST
-
-START_TEST(every_symbol_stands_on_the_map_at_80x24)
-{
-    char *text = drawn();
-    for (int z = 1; z <= Z_MAX; z++) {
-        struct map_layout l = screen_map_layout(24, 80, GRID_18);
-        struct area a = screen_map_cell(&l, z, GRID_LU_LR);
-        const char *symbol = element_at(z)->symbol;
-        for (int i = 0; symbol[i]; i++)
-            ck_assert_msg(
-                canvas.cells[a.row * 80 + a.column + 1 + i].character ==
-                    (unsigned char)symbol[i],
-                "%s", symbol);
-    }
-    ck_assert_ptr_nonnull(strstr(text, "keys"));
-    ck_assert_ptr_nonnull(strstr(text, "quit"));
-    free(text);
-}
-END_TEST
 
 START_TEST(small_terminals_say_what_they_need)
 {
@@ -184,18 +92,6 @@ START_TEST(pasted_text_never_is_a_command)
         free(before);
         key(KEY_CODE_ESCAPE);
     }
-}
-END_TEST
-
-START_TEST(the_cursor_stands_on_the_selection)
-{
-    type("Og");
-    key(KEY_CODE_ENTER);
-    app_draw(&app, &canvas);
-    struct map_layout l = screen_map_layout(24, 80, GRID_18);
-    struct area a = screen_map_cell(&l, 118, GRID_LU_LR);
-    ck_assert_int_eq(canvas.cursor_row, a.row);
-    ck_assert_int_eq(canvas.cursor_column, a.column + 1);
 }
 END_TEST
 
@@ -401,34 +297,6 @@ START_TEST(a_narrow_prompt_shows_what_is_typed)
 }
 END_TEST
 
-/* The second set belongs to the chosen quantity: below it, where others are
- * listed, it has no place, least of all in their units. */
-START_TEST(a_second_set_stays_with_its_quantity)
-{
-    app.session.choice.quantity = QUANTITY_ELECTRONEGATIVITY;
-    app.session.choice.against = reference_find(
-        study_references(app.session.study), "electronegativity_allen_2000");
-    ck_assert_ptr_nonnull(app.session.choice.against);
-    app.session.choice.units[DIMENSION_ENERGY] = unit_find("cm-1");
-    resize(60, 200);
-    settle();
-    ck_assert(shows("I, cm-1"));
-}
-END_TEST
-
-START_TEST(a_coordination_is_never_cut_to_another)
-{
-    type("Co");
-    key(KEY_CODE_ENTER);
-    type("++");
-    app.session.choice.quantity = QUANTITY_RADIUS;
-    app.session.choice.reference = reference_find(
-        study_references(app.session.study), "ionic_effective_shannon_1976");
-    settle();
-    ck_assert(shows("coordination VI; high spin"));
-}
-END_TEST
-
 START_TEST(a_view_comes_back_as_it_was_left)
 {
     char first[2048];
@@ -560,27 +428,15 @@ END_TEST
 
 int main(void)
 {
-    Suite *suite = suite_create("screen");
-    suite_add_tcase(suite, layout_case());
-    suite_add_tcase(suite, agree_case());
+    Suite *suite = suite_create("app");
     suite_add_tcase(suite, keys_case());
-    TCase *golden = tcase_create("golden screens");
-    tcase_add_checked_fixture(golden, open_app, close_app);
-    tcase_add_test(golden, the_map_at_80x24);
-    tcase_add_test(golden, the_map_of_residuals_at_200x60);
-    tcase_add_test(golden, the_map_at_40x12_and_its_pane);
-    tcase_add_test(golden, the_list_at_30x10);
-    tcase_add_test(golden, three_species_compared_at_100x40);
-    suite_add_tcase(suite, golden);
     TCase *use = tcase_create("use");
     tcase_add_checked_fixture(use, open_app, close_app);
-    tcase_add_test(use, every_symbol_stands_on_the_map_at_80x24);
     tcase_add_test(use, small_terminals_say_what_they_need);
     tcase_add_test(use, every_size_is_drawn_on_every_screen);
     tcase_add_test(use, a_capital_letter_jumps_and_arrows_move_on);
     tcase_add_test(use, erasing_takes_whole_characters);
     tcase_add_test(use, pasted_text_never_is_a_command);
-    tcase_add_test(use, the_cursor_stands_on_the_selection);
     tcase_add_test(use, charges_and_subshells_are_chosen);
     tcase_add_test(use, a_site_is_chosen_with_its_radius_in_sight);
     tcase_add_test(use, a_wrong_configuration_stays_to_be_mended);
@@ -592,8 +448,6 @@ int main(void)
     tcase_add_test(use, a_key_behind_a_whole_symbol_ends_the_jump);
     tcase_add_test(use, long_messages_are_read_whole);
     tcase_add_test(use, a_narrow_prompt_shows_what_is_typed);
-    tcase_add_test(use, a_second_set_stays_with_its_quantity);
-    tcase_add_test(use, a_coordination_is_never_cut_to_another);
     tcase_add_test(use, a_view_comes_back_as_it_was_left);
     tcase_add_test(use, a_broken_view_is_passed_over);
     tcase_add_test(use, twelve_pins_and_no_more);

@@ -5,12 +5,12 @@
 #include <stdlib.h>
 #include <string.h>
 
-#include "screens/desk.h"
-#include "screens/desk_keys.h"
+#include "app/desk.h"
+#include "app/desk_keys.h"
 #include "app/app_internal.h"
 #include "screens/list.h"
 #include "session/common.h"
-#include "screens/test_ui.h"
+#include "app/suites.h"
 
 /* Fresh screens with the i-th one in front, as many species pinned as go in. */
 static void begin(int i)

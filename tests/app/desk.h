@@ -1,8 +1,8 @@
 /* SPDX-License-Identifier: MIT */
 /* The screens over the built-in data with a canvas of 80x24, for a test case.
  */
-#ifndef TESTS_SCREENS_DESK_H
-#define TESTS_SCREENS_DESK_H
+#ifndef TESTS_APP_DESK_H
+#define TESTS_APP_DESK_H
 
 #include "app/app.h"
 
