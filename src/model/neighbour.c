@@ -13,7 +13,8 @@ enum { OUTER = 3 };
 
 static const double ERROR_EV = 0.5, ERROR_PART = 0.005;
 /* How far the difference of two levels may lie above zero for a move that
- * lowers the energy: over all ions of theory it was below 1.8 eV. */
+ * lowers the energy: of all ions of all elements, tried up to 40 eV, the
+ * largest difference that was one is 0.9 eV (Bk8+, 5f5 6p4 to 5f4 6p5). */
 static const double SCREEN_EV = 3.0;
 
 /* The set that tells what is measured. */
@@ -26,32 +27,39 @@ struct place {
     double leaving, entering;
 };
 
-/* Mean energy of the levels of a subshell with one spin, or NAN. */
-static double level_of(const struct atom_solver *solver, int n, int l, int spin)
+/* Energy of the level of a subshell with one spin and j, or NAN. */
+static double level_of(const struct atom_solver *solver, int n, int l, int spin,
+                       int twice_j)
 {
-    double sum = 0.0, occ = 0.0;
     for (int i = 0; i < atom_level_count(solver); i++) {
         struct atom_level level = atom_level_at(solver, i);
-        if (level.n != n || level.l != l || level.spin != spin)
-            continue;
-        sum += level.occ * level.energy;
-        occ += level.occ;
+        if (level.n == n && level.l == l && level.spin == spin &&
+            level.twice_j == twice_j)
+            return level.energy;
     }
-    return occ > 0.0 ? sum / occ : NAN;
+    return NAN;
 }
 
 /* A majority fills first: electrons leave the minority while it holds any, and
  * enter the majority while it has room. Where no minority level is occupied
- * that of the majority stands in, which lies lower. */
+ * that of the majority stands in, which lies lower. Of either spin the 2l
+ * states of j = l - 1/2 fill before those of l + 1/2, which lie higher by tens
+ * of electronvolts in heavy ions. */
 static struct place place_of(const struct atom_solver *solver,
                              const struct subshell *s)
 {
-    double half = 2 * s->l + 1;
-    double major = level_of(solver, s->n, s->l, 1);
-    double minor = level_of(solver, s->n, s->l, -1);
-    struct place p = {s->n, s->l, s->occ > half ? minor : major, HUGE_VAL};
-    if (s->occ <= 2.0 * half - 1.0)
-        p.entering = s->occ > half - 1.0 && isfinite(minor) ? minor : major;
+    int half = 2 * s->l + 1, below = 2 * s->l - 1, above = 2 * s->l + 1;
+    int leaves = s->occ > 2 * s->l ? above : below;
+    int enters = s->occ > 2 * s->l - 1 ? above : below;
+    double minor = level_of(solver, s->n, s->l, -1, leaves);
+    struct place p = {s->n, s->l, minor, HUGE_VAL};
+    if (!(s->occ > half))
+        p.leaving = level_of(solver, s->n, s->l, 1, leaves);
+    if (s->occ > 2 * half - 1)
+        return p;
+    p.entering = level_of(solver, s->n, s->l, -1, enters);
+    if (!(s->occ > half - 1) || !isfinite(p.entering))
+        p.entering = level_of(solver, s->n, s->l, 1, enters);
     return p;
 }
 

@@ -4,6 +4,7 @@
  * stored energies are those of NIST ASD 5.12 (2024), doi 10.18434/T4W30F.
  * Arguments: the first and the last atomic number, the step of the charges. */
 #include <check.h>
+#include <math.h>
 #include <stdio.h>
 #include <stdlib.h>
 #include <string.h>
@@ -12,40 +13,54 @@
 
 static int first_z, last_z, charge_step;
 
-/* An ion of theory for which the model has found a lower configuration. */
-static bool is_moved(const struct row *row)
+/* A species that one of the claims below does not hold for. */
+struct exception {
+    int z, charge;
+};
+
+static bool is_among(const struct row *row, const struct exception *list,
+                     size_t count)
 {
-    return strstr(row->value.remark, "below its listed configuration") != NULL;
+    for (size_t i = 0; i < count; i++)
+        if (list[i].z == row->species.z &&
+            list[i].charge == row->species.charge)
+            return true;
+    return false;
 }
 
-/* Within 12 % and 0.6 eV of the stored energy, or two of its own standard
- * uncertainties more: those of theory and of extrapolation reach 10 %. */
+/* Within 12 % and 0.6 eV of the stored energy. Of six species it is the stored
+ * value that is uncertain (theory or extrapolation, up to 9 %): for these, and
+ * only for them, two of its own standard uncertainties are added. */
 static void check_reference(const struct row *row)
 {
+    static const struct exception uncertain[] = {
+        {84, 1},   /* Po+ 15.8, stored 19.3(1.7) */
+        {94, 5},   /* Pu5+ 68.2, 80(4) */
+        {103, 10}, /* Lr10+ 172.6, 197.0(2.4) */
+        {109, 12}, /* Mt12+ 225.4, 257(3) */
+        {110, 12}, /* Ds12+ 232.6, 266(3) */
+        {110, 13}, /* Ds13+ 249.6, 288(3) */
+    };
     double value = row->value.value.value, stored = row->reference.value.value;
-    double allowed = 0.12 * stored + 0.6 +
-                     (row->reference.has_u ? 2.0 * row->reference.u.value : 0);
-    ck_assert_msg(value > stored - allowed && value < stored + allowed,
-                  "%s, charge %d: %g eV, stored %g",
+    double off = fabs(value - stored), bound = 0.12 * stored + 0.6;
+    bool named =
+        is_among(row, uncertain, sizeof uncertain / sizeof uncertain[0]);
+    ck_assert_msg(named == (off > bound), "%s, charge %d: %g eV, stored %g, %s",
                   element_at(row->species.z)->symbol, row->species.charge,
-                  value, stored);
+                  value, stored, named ? "no exception any more" : "too far");
+    ck_assert(!named || (row->reference.has_u &&
+                         off < bound + 2.0 * row->reference.u.value));
 }
 
-static const struct subshell *leaving(const struct row *row)
-{
-    return reference_emptied(&row->species);
-}
-
-/* Within a subshell each electron is harder to remove than the last. Where
- * another subshell follows, or the model has found another configuration than
- * the listed one, two energies that each err may cross by a little. */
+/* Each electron is harder to remove than the last, whatever subshell it is in.
+ * One energy falls, by 0.5 %: about the model's error there, with both ions by
+ * rule. */
 static void check_rise(const struct row *row, const struct row *next)
 {
+    static const struct exception falls[] = {{111, 16} /* Rg16+ */};
     double value = row->value.value.value, after = next->value.value.value;
-    const struct subshell *a = leaving(row), *b = leaving(next);
-    bool same = a && b && a->n == b->n && a->l == b->l && !is_moved(row) &&
-                !is_moved(next);
-    ck_assert_msg(after > (same ? value : 0.95 * value),
+    bool named = is_among(row, falls, sizeof falls / sizeof falls[0]);
+    ck_assert_msg(named == (after <= value) && after > 0.994 * value,
                   "%s, charge %d to %d: %g to %g eV",
                   element_at(row->species.z)->symbol, row->species.charge,
                   next->species.charge, value, after);
