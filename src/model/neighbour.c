@@ -156,21 +156,3 @@ struct subshell neighbour_emptied(const struct species *species)
         found = *s;
     return found;
 }
-
-bool neighbour_isoelectronic(const struct species *species,
-                             struct configuration *out)
-{
-    struct species other;
-    struct status st = status_ok();
-    if (species->origin != ORIGIN_RULE)
-        return false;
-    for (int z = species->z - 1; z > species->z - species->charge; z--) {
-        int charge = species->charge - (species->z - z);
-        if (!ground_state(z, charge, &other, &st) ||
-            other.origin == ORIGIN_RULE)
-            continue;
-        *out = other.configuration;
-        return !configuration_same(out, &species->configuration);
-    }
-    return false;
-}

@@ -40,10 +40,4 @@ int neighbour_list(const struct atom_solver *solver,
  * when there is none. */
 struct subshell neighbour_emptied(const struct species *species);
 
-/* The listed configuration of the next lighter element with as many electrons,
- * where that of the species is by rule; false when there is none or it is the
- * same. */
-bool neighbour_isoelectronic(const struct species *species,
-                             struct configuration *out);
-
 #endif

@@ -145,7 +145,7 @@ struct work {
     int now;             /* which of them is at work */
     int trial;
     int neighbour_count;
-    struct configuration neighbour[NEIGHBOURS_MAX + 1];
+    struct configuration neighbour[NEIGHBOURS_MAX];
     int count;
     struct atom_orbital orbital[SUBSHELL_MAX];
     double top[SUBSHELL_MAX]; /* highest level of each, hartree */

@@ -53,6 +53,52 @@ START_TEST(levels_between_the_limits_are_the_closed_ones)
 }
 END_TEST
 
+/* Lowest root of a symmetric matrix of two or three rows with a[0][0] <=
+ * a[1][1], by halving the interval below the first pivot. */
+static double lowest_root(double a, double b, double c, double ab, double ac,
+                          double bc)
+{
+    double low = a - fabs(ab) - fabs(ac) - fabs(b) - fabs(c) - fabs(bc),
+           high = least(a, least(b, c));
+    for (int k = 0; k < 200; k++) {
+        double x = 0.5 * (low + high), p = b - x - ab * ab / (a - x);
+        double q = bc - ab * ac / (a - x);
+        double r = c - x - ac * ac / (a - x) - q * q / p;
+        if (a - x > 0.0 && p > 0.0 && r > 0.0)
+            low = x;
+        else
+            high = x;
+    }
+    return low;
+}
+
+/* d2 J = 2 (3F, 3P, 1D), f2 J = 4 (3H, 3F, 1G) and f12 J = 6 (3H, 1I). Terms:
+ * Condon and Shortley, section 5 of chapter 7, with F_k = F^k/D_k, D = 49, 441
+ * for d and 225, 1089, 7361.64 for f. Spin-orbit: the diagonal is Landé's; what
+ * is beside it follows from the roots without repulsion, those of jj coupling
+ * (trace of the square, determinant). */
+START_TEST(levels_of_two_electrons_are_those_of_three_terms)
+{
+    for (int k = 0; k <= 8; k++) {
+        double z = 0.02 * pow(3.0, k), f[3] = {11.0, 7.1, 5.2};
+        double d2 = f[0] / 49.0, d4 = f[1] / 441.0;
+        double root = lowest_root(-2.0 * z, 0.5 * z + 15.0 * d2 - 75.0 * d4,
+                                  5.0 * d2 + 45.0 * d4, 0.0, sqrt(2.4) * z,
+                                  sqrt(2.1) * z);
+        near(atom_level_spin_orbit(2, 2, z, f), root, 1e-8, 1e-8, "d2 %g", z);
+        double f2 = f[0] / 225.0, f4 = f[1] / 1089.0, f6 = f[2] / 7361.64;
+        root =
+            lowest_root(-3.0 * z, 1.5 * z + 15.0 * f2 + 18.0 * f4 - 273.0 * f6,
+                        -5.0 * f2 + 148.0 * f4 + 91.0 * f6, 0.0,
+                        sqrt(10.0 / 3.0) * z, sqrt(11.0 / 3.0) * z);
+        near(atom_level_spin_orbit(3, 2, z, f), root, 1e-8, 1e-8, "f2 %g", z);
+        root = lowest_root(-2.5 * z, 50.0 * f2 + 60.0 * f4 + 14.0 * f6, 1e9,
+                           sqrt(1.5) * z, 0.0, 0.0);
+        near(atom_level_spin_orbit(3, 12, z, f), root, 1e-8, 1e-8, "f12 %g", z);
+    }
+}
+END_TEST
+
 /* A stored J that no level of the stored term has ("3P10" in the source) is
  * not taken: Hund's is. */
 START_TEST(a_level_that_cannot_be_is_not_taken)
@@ -82,6 +128,7 @@ TCase *case_level(void)
     TCase *tc = tcase_create("level");
     tcase_add_test(tc, levels_have_both_coupling_limits);
     tcase_add_test(tc, levels_between_the_limits_are_the_closed_ones);
+    tcase_add_test(tc, levels_of_two_electrons_are_those_of_three_terms);
     tcase_add_test(tc, a_level_that_cannot_be_is_not_taken);
     tcase_add_test(tc, open_subshells_without_a_term_are_shifted);
     return tc;
