@@ -70,8 +70,13 @@ bool status_context(struct status *st, const char *format, ...)
     if (head < 0)
         head = 0;
     size_t used = (size_t)head;
-    if (used < sizeof st->message)
-        snprintf(st->message + used, sizeof st->message - used, ": %s", tail);
-    trim_partial_character(st->message, sizeof st->message);
+    bool whole = used < sizeof st->message;
+    if (whole) {
+        size_t room = sizeof st->message - used;
+        int added = snprintf(st->message + used, room, ": %s", tail);
+        whole = added >= 0 && (size_t)added < room;
+    }
+    if (!whole)
+        trim_partial_character(st->message, sizeof st->message);
     return false;
 }
