@@ -122,7 +122,7 @@ enum descent_state descent_begin(struct descent *d, int count, const double x[],
 /* Moves to the trial and lets the inverse Hessian learn from it. */
 static void accept(struct descent *d, double value, const double gradient[])
 {
-    double s[DESCENT_MAX], y[DESCENT_MAX], hy[DESCENT_MAX];
+    double s[DESCENT_MAX] = {0.0}, y[DESCENT_MAX] = {0.0}, hy[DESCENT_MAX];
     for (int i = 0; i < d->count; i++) {
         s[i] = d->trial[i] - d->x[i];
         y[i] = gradient[i] - d->gradient[i];

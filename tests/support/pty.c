@@ -457,7 +457,8 @@ void pty_expect_mode(struct pty *pty, int mode, bool on)
 void pty_expect_output(struct pty *pty, size_t from, const char *text)
 {
     long long deadline = now_ms() + DEADLINE_MS;
-    while (!pty->output || !strstr(pty->output + from, text)) {
+    while (pty_count(pty) < from || !pty->output ||
+           !strstr(pty->output + from, text)) {
         bool any = pump(pty, 50);
         if ((!any && pty->ended) || now_ms() > deadline)
             give_up(pty, "an output", "");
