@@ -15,5 +15,6 @@ TCase *atom_cases(void);
 TCase *audit_cases(void);
 TCase *compare_cases(void);
 TCase *source_cases(void);
+TCase *good_cases(void);
 
 #endif

@@ -15,5 +15,6 @@ int main(void)
     suite_add_tcase(suite, audit_cases());
     suite_add_tcase(suite, compare_cases());
     suite_add_tcase(suite, source_cases());
+    suite_add_tcase(suite, good_cases());
     return run_suite(suite);
 }
