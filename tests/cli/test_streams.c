@@ -10,6 +10,7 @@
 #include <string.h>
 #include <sys/stat.h>
 #include <sys/wait.h>
+#include <time.h>
 #include <unistd.h>
 
 #include "base/file.h"
@@ -321,6 +322,94 @@ START_TEST(a_signal_while_a_file_is_written_leaves_no_other_file)
 }
 END_TEST
 
+/* True where a folder's disk has files without a name. */
+static bool has_unnamed(const char *folder)
+{
+    char path[256];
+    struct status st = status_ok();
+    struct file_draft draft;
+    snprintf(path, sizeof path, "%s/probe", folder);
+    ck_assert_msg(file_draft_open(&draft, path, false, &st), "%s", st.message);
+    bool unnamed = draft.temporary == NULL;
+    file_draft_discard(&draft);
+    return unnamed;
+}
+
+/* Kills a call some while after its start; true when it died of it. */
+static bool kill_after(const char *folder, long microseconds)
+{
+    int status;
+    struct timespec wait = {0, microseconds * 1000};
+    pid_t child = start_writing(folder, SIGTERM);
+    nanosleep(&wait, NULL);
+    kill(child, SIGKILL);
+    ck_assert_int_eq(waitpid(child, &status, 0), child);
+    return WIFSIGNALED(status);
+}
+
+/* The file "old" is what it was before (NULL: not there) or the whole output.
+ */
+static void check_kept_or_whole(const char *folder, const char *before,
+                                const char *whole)
+{
+    char path[256];
+    snprintf(path, sizeof path, "%s/old", folder);
+    if (access(path, F_OK) != 0) {
+        ck_assert_ptr_null(before);
+        return;
+    }
+    char *text = text_of(folder, "old");
+    ck_assert_msg(strcmp(text, whole) == 0 || (before && !strcmp(text, before)),
+                  "neither the old file nor the new one");
+    free(text);
+    ck_assert_int_eq(unlink(path), 0);
+}
+
+/* Removes all that begins with "old."; gives how much that was. */
+static int take_leftovers(const char *folder)
+{
+    int count = 0;
+    struct dirent *item;
+    DIR *all = opendir(folder);
+    ck_assert_ptr_nonnull(all);
+    while ((item = readdir(all)) != NULL)
+        if (strncmp(item->d_name, "old.", 4) == 0)
+            count += unlinkat(dirfd(all), item->d_name, 0) == 0;
+    closedir(all);
+    return count;
+}
+
+/* No handler sees it: where files need no name nothing is left of a new file,
+ * and of one that replaces another only in the moment between link and
+ * rename. */
+START_TEST(a_kill_at_any_moment_leaves_nothing)
+{
+    enum { KILLS = 40, LONGEST = 40000, RARE = 4 };
+    static const char *const names[] = {NULL};
+    const char *before = _i == 1 ? "old" : NULL;
+    char folder[] = "/tmp/outershell-streams-XXXXXX";
+    int left = 0;
+    int died = 0;
+    unsigned seed = 7;
+    scratch_begin(folder);
+    struct program_result whole =
+        program_call(OUTERSHELL, "list -m shells,slater -f json");
+    for (int i = 0; i < KILLS; i++) {
+        seed = seed * 1103515245u + 12345u;
+        if (before)
+            put_file(folder, "old", before, 0644);
+        died += kill_after(folder, (long)(seed >> 8) % LONGEST);
+        check_kept_or_whole(folder, before, whole.out);
+        left += take_leftovers(folder);
+    }
+    ck_assert_int_ge(died, KILLS / 8);
+    if (has_unnamed(folder))
+        ck_assert_int_le(left, before ? RARE : 0);
+    program_free(&whole);
+    scratch_end(folder, names);
+}
+END_TEST
+
 START_TEST(a_target_that_is_no_regular_file_is_never_replaced)
 {
     static const char *const names[] = {"pipe", "dangling", NULL};
@@ -389,6 +478,7 @@ TCase *stream_cases(void)
     tcase_add_test(c, a_disk_that_fills_up_leaves_the_old_file_and_no_other);
     tcase_add_loop_test(
         c, a_signal_while_a_file_is_written_leaves_no_other_file, 0, 3);
+    tcase_add_loop_test(c, a_kill_at_any_moment_leaves_nothing, 0, 2);
     tcase_add_test(c, a_target_that_is_no_regular_file_is_never_replaced);
     tcase_add_test(c, closed_standard_streams_harm_no_file);
     return c;
