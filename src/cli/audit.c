@@ -30,7 +30,7 @@ static bool add_models(struct request *r, struct audit *audit,
                        const struct reference *reference, struct status *st)
 {
     for (int m = 0; m < r->model_count; m++)
-        if (model_offer_for(r->models[m], quantity, NULL) >= 0 &&
+        if (model_gives(r->models[m], quantity) &&
             !add_series(r, audit, quantity, r->models[m], reference, st))
             return false;
     return r->against[quantity] == NULL || r->against[quantity] == reference ||

@@ -68,7 +68,7 @@ static bool must_solve(const struct request *r)
     for (int m = 0; m < r->model_count; m++)
         for (int q = 0; q < r->quantity_count; q++)
             if (!r->models[m]->closed &&
-                model_offer_for(r->models[m], r->quantities[q], NULL) >= 0)
+                model_gives(r->models[m], r->quantities[q]))
                 return true;
     return false;
 }

@@ -17,7 +17,7 @@ static size_t models_for(const struct request *r, enum quantity_id quantity)
 {
     size_t count = 0;
     for (int m = 0; m < r->model_count; m++)
-        if (model_offer_for(r->models[m], quantity, NULL) >= 0)
+        if (model_gives(r->models[m], quantity))
             count++;
     return count;
 }
@@ -42,7 +42,7 @@ static bool gather(struct request *r, int atom, enum quantity_id quantity,
         return study_row_now(r->study, &ask, &g->rows[g->count++], st);
     }
     for (int m = 0; m < r->model_count; m++) {
-        if (model_offer_for(r->models[m], quantity, NULL) < 0)
+        if (!model_gives(r->models[m], quantity))
             continue;
         struct ask ask = request_ask(r, atom, quantity, r->models[m]);
         if (!study_row_now(r->study, &ask, &g->rows[g->count++], st))

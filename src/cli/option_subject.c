@@ -93,7 +93,7 @@ static void model_words(struct words *words,
 static bool offered(const struct request *r, enum quantity_id quantity)
 {
     for (int i = 0; i < r->model_count; i++)
-        if (model_offer_for(r->models[i], quantity, NULL) >= 0)
+        if (model_gives(r->models[i], quantity))
             return true;
     return false;
 }
@@ -110,7 +110,7 @@ static bool check_models(const struct request *r, struct status *st)
             continue;
         struct text t = text_over(text, sizeof text);
         for (int q = 0; q < QUANTITY_COUNT; q++)
-            if (model_offer_for(r->models[m], (enum quantity_id)q, NULL) >= 0)
+            if (model_gives(r->models[m], (enum quantity_id)q))
                 names[count++] = quantity_at((enum quantity_id)q)->id;
         words_join(&t, names, count, "and");
         return status_fail(st, STATUS_USAGE,
@@ -125,7 +125,7 @@ static bool check_models(const struct request *r, struct status *st)
         enum quantity_id q = r->quantities[i];
         int count = 0;
         for (int m = 0; m < model_count(); m++)
-            if (model_offer_for(model_at(m), q, NULL) >= 0)
+            if (model_gives(model_at(m), q))
                 names[count++] = model_at(m)->id;
         if (offered(r, q) || count == 0 || !r->has_quantities)
             continue;

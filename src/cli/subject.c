@@ -15,7 +15,7 @@ bool request_chooses(const struct request *r, enum quantity_id quantity)
 bool request_offers(const struct request *r, const struct model *model)
 {
     for (int i = 0; i < r->quantity_count; i++)
-        if (model_offer_for(model, r->quantities[i], NULL) >= 0)
+        if (model_gives(model, r->quantities[i]))
             return true;
     return false;
 }

@@ -60,7 +60,8 @@ struct definition {
     X(isodensity, ISODENSITY, "radius at 0.001 electrons per cubic bohr",      \
       LENGTH, 0)                                                               \
     X(affinity, AFFINITY, "electron affinity", ENERGY, DEFINITION_SIGNED)      \
-    X(polarizability, POLARIZABILITY, "dipole polarizability", VOLUME, 0)
+    X(polarizability, POLARIZABILITY, "dipole polarizability", VOLUME, 0)      \
+    X(hardness, HARDNESS, "chemical hardness, (I - A)/2", ENERGY, 0)
 
 #define DEFINITION_EXTERN(name, quantity, text, dimension, traits)             \
     extern const struct definition definition_##name;

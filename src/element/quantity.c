@@ -25,6 +25,8 @@ static const struct quantity quantities[QUANTITY_COUNT] = {
     [QUANTITY_POLARIZABILITY] = {"polarizability", "dipole polarizability",
                                  "alpha", DIMENSION_VOLUME, 0.1, 1000.0, false,
                                  false},
+    [QUANTITY_HARDNESS] = {"hardness", "chemical hardness", "eta",
+                           DIMENSION_ENERGY, 0.0, 2e5, false, true},
 };
 
 const struct quantity *quantity_at(enum quantity_id id)

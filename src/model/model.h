@@ -7,6 +7,7 @@
 #include <stddef.h>
 
 #include "base/status.h"
+#include "element/derivation.h"
 #include "element/provenance.h"
 #include "element/reading.h"
 #include "element/species.h"
@@ -72,5 +73,14 @@ struct model {
  * be NULL. */
 int model_offer_for(const struct model *model, enum quantity_id quantity,
                     const struct definition *definition);
+
+/* The derivation by which a quantity follows from what the model offers, for
+ * atoms or for ions; NULL when the model offers the quantity itself, or not
+ * even what it follows from. */
+const struct derivation *model_derivation(const struct model *model,
+                                          enum quantity_id quantity);
+
+/* Whether the model gives the quantity, of itself or by a derivation. */
+bool model_gives(const struct model *model, enum quantity_id quantity);
 
 #endif

@@ -47,3 +47,36 @@ int model_offer_for(const struct model *model, enum quantity_id quantity,
     }
     return first;
 }
+
+/* Whether all inputs at a charge are offered. */
+static bool follows(const struct model *model, const struct derivation *d,
+                    int charge)
+{
+    struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+    const char *reason = "";
+    int count = d->inputs(charge, inputs, &reason);
+    for (int i = 0; i < count; i++)
+        if (model_offer_for(model, inputs[i].quantity, NULL) < 0)
+            return false;
+    return count > 0;
+}
+
+const struct derivation *model_derivation(const struct model *model,
+                                          enum quantity_id quantity)
+{
+    if (model_offer_for(model, quantity, NULL) >= 0)
+        return NULL;
+    for (int i = 0; i < derivation_list_count; i++) {
+        const struct derivation *d = derivation_list[i];
+        if (d->definition->quantity == quantity &&
+            (follows(model, d, 0) || follows(model, d, 1)))
+            return d;
+    }
+    return NULL;
+}
+
+bool model_gives(const struct model *model, enum quantity_id quantity)
+{
+    return model_offer_for(model, quantity, NULL) >= 0 ||
+           model_derivation(model, quantity);
+}

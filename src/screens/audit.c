@@ -36,7 +36,7 @@ static bool fill(const struct session *session, struct audit *audit,
                  struct status *st)
 {
     for (int m = 0; m < model_count(); m++) {
-        if (model_offer_for(model_at(m), session->choice.quantity, NULL) < 0)
+        if (!model_gives(model_at(m), session->choice.quantity))
             continue;
         for (int z = 1; z <= Z_MAX; z++) {
             struct ask ask;

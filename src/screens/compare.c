@@ -323,23 +323,35 @@ static void export_file(const struct session *session, const void *state,
     text_add(t, "compare.csv");
 }
 
+/* Whether one of the quantities that the ask's model gives waits to be solved:
+ * the derived ones need other charge states as well. */
+static bool lacks_any(const struct session *session, struct ask *ask)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        ask->quantity = (enum quantity_id)q;
+        ask->unit = NULL;
+        if (model_gives(ask->model, ask->quantity) &&
+            study_row(session->study, ask).state == ROW_NOT_SOLVED)
+            return true;
+    }
+    return false;
+}
+
 /* A comparison holds all quantities, whichever is chosen. */
 static int lacks(struct session *session, int z, int charge)
 {
     int count = 0;
     for (int m = 0; m < model_count(); m++) {
-        const struct model *model = model_at(m);
         struct ask ask;
         struct status st = status_ok();
-        if (model->closed || !session_ask(session, z, charge, &ask))
+        if (model_at(m)->closed || !session_ask(session, z, charge, &ask))
             continue;
-        ask.model = model;
-        ask.quantity = model->offers[0].quantity;
+        ask.model = model_at(m);
         ask.reference = ask.against = NULL;
-        if (study_row(session->study, &ask).state != ROW_NOT_SOLVED)
+        if (!lacks_any(session, &ask))
             continue;
         count++;
-        if (!study_want(session->study, &ask, true, &st))
+        if (!study_want_all(session->study, &ask, true, &st))
             session_report(session, true, "nothing written: %s", st.message);
     }
     return count;

@@ -252,7 +252,7 @@ static int pane_rows(const struct session *session, enum quantity_id quantity,
     }
     for (int m = 0; m < model_count() && count < MODELS_MAX; m++) {
         ask.model = model_at(m);
-        if (model_offer_for(ask.model, quantity, NULL) >= 0)
+        if (model_gives(ask.model, quantity))
             rows[count++] = study_row(session->study, &ask);
     }
     if (count == 0) {

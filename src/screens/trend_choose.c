@@ -6,7 +6,7 @@ static void fill_curves(struct session *session, void *state, struct chooser *c)
 {
     (void)state;
     for (int m = 0; m < model_count(); m++)
-        if (model_offer_for(model_at(m), session->choice.quantity, NULL) >= 0)
+        if (model_gives(model_at(m), session->choice.quantity))
             chooser_add(c, m, false, "[%c] %s",
                         session->choice.hidden_models >> m & 1u ? ' ' : 'x',
                         model_at(m)->id);

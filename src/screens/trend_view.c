@@ -21,7 +21,7 @@ int screen_trend_models(const struct session *session,
     int count = 0;
     for (int m = 0; m < model_count() && count < TREND_MODELS_MAX; m++)
         if (!(session->choice.hidden_models >> m & 1u) &&
-            model_offer_for(model_at(m), session->choice.quantity, NULL) >= 0)
+            model_gives(model_at(m), session->choice.quantity))
             models[count++] = model_at(m);
     return count;
 }

@@ -29,7 +29,7 @@ static void fill_models(struct session *s, void *state, struct chooser *c)
     (void)state;
     for (int m = 0; m < model_count(); m++) {
         const struct model *model = model_at(m);
-        if (model_offer_for(model, s->choice.quantity, NULL) >= 0)
+        if (model_gives(model, s->choice.quantity))
             chooser_add(c, m, s->choice.model == model, "%s: %s; %s", model->id,
                         model->title, model->domain);
     }

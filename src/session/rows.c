@@ -26,7 +26,7 @@ bool session_rows_models(const struct session *s, struct rows *rows, int z,
         return true;
     for (int m = 0; m < model_count(); m++) {
         ask.model = model_at(m);
-        if (model_offer_for(ask.model, ask.quantity, NULL) < 0)
+        if (!model_gives(ask.model, ask.quantity))
             continue;
         any = true;
         if (!session_rows_add(s, rows, &ask, st))
@@ -62,7 +62,7 @@ int session_lacks(struct session *s, int z, int charge,
     if (model->closed || !session_ask(s, z, charge, &ask))
         return 0;
     ask.model = model;
-    if (model_offer_for(model, ask.quantity, NULL) < 0 ||
+    if (!model_gives(model, ask.quantity) ||
         study_row(s->study, &ask).state != ROW_NOT_SOLVED)
         return 0;
     if (study_want(s->study, &ask, true, &st))

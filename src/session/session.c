@@ -65,11 +65,11 @@ void session_select_quantity(struct session *s, enum quantity_id quantity)
     if (!quantity_at(quantity)->per_subshell)
         c->n = c->l = 0;
     session_touch(s);
-    if (c->model && model_offer_for(c->model, quantity, NULL) >= 0)
+    if (c->model && model_gives(c->model, quantity))
         return;
     c->model = NULL;
     for (int m = 0; m < model_count() && !c->model; m++)
-        if (model_offer_for(model_at(m), quantity, NULL) >= 0)
+        if (model_gives(model_at(m), quantity))
             c->model = model_at(m);
     if (!c->model)
         c->shown = SHOWN_REFERENCE;
@@ -136,7 +136,7 @@ void session_want(struct session *s, int z, int charge,
     if (model->closed || !session_ask(s, z, charge, &ask))
         return;
     ask.model = model;
-    if (model_offer_for(model, ask.quantity, NULL) >= 0 &&
+    if (model_gives(model, ask.quantity) &&
         !study_want(s->study, &ask, first, &st))
         session_report(s, true, "%s", st.message);
 }

@@ -107,7 +107,7 @@ static void load_hidden(struct session *s, const char *value)
 static void load_model(struct session *s, const char *value)
 {
     const struct model *m = model_find(value);
-    if (m && model_offer_for(m, s->choice.quantity, NULL) >= 0)
+    if (m && model_gives(m, s->choice.quantity))
         s->choice.model = m;
 }
 

@@ -218,6 +218,31 @@ static bool add_model(const struct study *study, const struct ask *asks,
     return true;
 }
 
+/* What follows from the model's values, where it does for one of them. */
+static bool add_derived(const struct study *study, const struct ask *asks,
+                        const struct model *model, enum quantity_id quantity,
+                        const struct unit *const *units, struct comparison *c,
+                        int *capacity)
+{
+    const struct derivation *d = model_derivation(model, quantity);
+    struct reading readings[COMPARISON_MAX];
+    bool any = false;
+    for (int w = 0; d && w < c->count; w++) {
+        struct ask ask = asks[w];
+        ask.model = model;
+        ask.quantity = quantity;
+        readings[w] = study_derived(study, &ask, d);
+        any = any || readings[w].state != READING_OUTSIDE;
+    }
+    if (!any)
+        return true;
+    struct comparison_line *line =
+        add_line(c, capacity, quantity, units, readings[0].provenance);
+    for (int w = 0; line && w < c->count; w++)
+        line->readings[w] = reading_in_unit(readings[w], line->unit);
+    return line != NULL;
+}
+
 static bool add_reference(const struct reference *reference,
                           const struct ask *asks,
                           const struct unit *const *units, struct comparison *c,
@@ -251,7 +276,9 @@ static bool add_lines(struct study *study, const struct ask *asks,
     for (int q = 0; q < QUANTITY_COUNT; q++) {
         for (int m = 0; m < model_count(); m++)
             if (!add_model(study, asks, model_at(m), (enum quantity_id)q, units,
-                           c, &capacity))
+                           c, &capacity) ||
+                !add_derived(study, asks, model_at(m), (enum quantity_id)q,
+                             units, c, &capacity))
                 return false;
         for (int i = 0; i < references->count; i++)
             if (references->items[i].quantity == (enum quantity_id)q &&
@@ -286,10 +313,12 @@ static bool solve_ask(struct study *study, const struct ask *ask,
         if (model_at(m)->closed)
             continue;
         struct ask each = *ask;
-        struct row row;
         each.model = model_at(m);
-        each.quantity = each.model->offers[0].quantity;
-        if (!study_row_now(study, &each, &row, st))
+        if (!study_want_all(study, &each, true, st))
+            return false;
+        while (study_step(study, st))
+            ;
+        if (st->code != STATUS_OK)
             return false;
     }
     return true;
@@ -378,11 +407,11 @@ int study_sources(const struct study *study, struct source *sources, int max)
     for (int m = 0; m < model_count(); m++)
         count += model_sources(model_at(m), sources + count, max - count);
     for (int i = 0; i < references->count && count < max; i++)
-        if (references->items[i].derived) {
-            sources[count] =
-                (struct source){.provenance = references->items[i].provenance,
-                                .unit = "",
-                                .domain = "outermost subshells"};
+        if (references->items[i].derivation) {
+            sources[count] = (struct source){
+                .provenance = references->items[i].provenance,
+                .unit = "",
+                .domain = references->items[i].derivation->domain};
             struct text t = text_over(sources[count].quantity,
                                       sizeof sources[count].quantity);
             text_add(&t, quantity_at(references->items[i].quantity)->id);

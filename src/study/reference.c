@@ -2,47 +2,9 @@
 #include "study/reference.h"
 
 #include <assert.h>
-#include <math.h>
 #include <string.h>
 
-#include "base/units.h"
 #include "refdata/ground.h"
-
-/* The stored set that Z_eff from an energy follows from. */
-#define IONIZATION_RANK 1
-
-/* Significant digits of it at least; more where the energy is that sharp. */
-#define ZEFF_DIGITS 7
-
-static const struct citation formula = {
-    "ionization_zeff",
-    "misc",
-    "common practice, no source",
-    "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)",
-    NULL,
-    0,
-    NULL,
-    NULL,
-    NULL};
-
-/* What the derived quantity cites. */
-static void set_derived(struct reference_list *list,
-                        const struct provenance *energies)
-{
-    int count = 0;
-    list->derived_citations[count++] = formula;
-    for (int i = 0;
-         i < energies->citation_count && count < DERIVED_CITATIONS_MAX; i++)
-        list->derived_citations[count++] = energies->citations[i];
-    list->derived = (struct provenance){
-        false,
-        REFERENCE_ZEFF_FROM_IONIZATION,
-        "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
-        &definition_zeff_energy,
-        list->derived_citations,
-        count,
-    };
-}
 
 static void insert(struct reference_list *list, struct reference item)
 {
@@ -84,23 +46,80 @@ static bool is_outermost_only(const struct dataset *set)
     return true;
 }
 
+static void add_citation(struct derived_source *source,
+                         const struct citation *citation)
+{
+    for (int i = 0; i < source->provenance.citation_count; i++)
+        if (strcmp(source->citations[i].key, citation->key) == 0)
+            return;
+    if (source->provenance.citation_count < DERIVED_CITATIONS_MAX)
+        source->citations[source->provenance.citation_count++] = *citation;
+}
+
+/* Cites the formula, then every set that it works on at some charge. */
+static void set_derived(struct reference_list *list, int place)
+{
+    const struct derivation *d = derivation_list[place];
+    struct derived_source *source = &list->derived[place];
+    source->provenance = (struct provenance){
+        .id = d->id,
+        .title = d->title,
+        .definition = d->definition,
+        .citations = source->citations,
+    };
+    add_citation(source, d->citation);
+    for (int charge = 0; charge <= 1; charge++) {
+        struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+        const char *reason = "";
+        int count = d->inputs(charge, inputs, &reason);
+        for (int i = 0; i < count; i++) {
+            const struct dataset *set = list->firsts[inputs[i].quantity];
+            for (int c = 0; set && c < set->provenance.citation_count; c++)
+                add_citation(source, &set->provenance.citations[c]);
+        }
+    }
+}
+
+static void insert_derived(struct reference_list *list)
+{
+    assert(derivation_list_count <= DERIVATION_MAX);
+    for (int p = 0; p < derivation_list_count; p++) {
+        const struct derivation *d = derivation_list[p];
+        struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+        const char *reason = "";
+        d->inputs(0, inputs, &reason);
+        set_derived(list, p);
+        insert(list, (struct reference){
+                         .provenance = &list->derived[p].provenance,
+                         .quantity = d->definition->quantity,
+                         .set = list->firsts[inputs[0].quantity],
+                         .rank = d->in_front ? 0 : RANK_NONE,
+                         .derivation = d,
+                         .firsts = list->firsts,
+                         .outermost_only = d->of_emptied,
+                     });
+    }
+}
+
 void reference_list_fill(struct reference_list *list,
                          const struct catalogue *catalogue)
 {
     list->count = 0;
+    for (int q = 0; q < QUANTITY_COUNT; q++)
+        list->firsts[q] =
+            catalogue_default(catalogue_builtin(), (enum quantity_id)q);
     for (size_t i = 0; i < catalogue_count(catalogue); i++) {
         const struct dataset *set = catalogue_at(catalogue, i);
-        if (set->kind != DATASET_VALUES)
-            continue;
-        int rank = rank_of(catalogue, i);
-        insert(list, (struct reference){&set->provenance, set->quantity, set,
-                                        rank, false, is_outermost_only(set)});
-        if (set->quantity != QUANTITY_IONIZATION || rank != IONIZATION_RANK)
-            continue;
-        set_derived(list, &set->provenance);
-        insert(list, (struct reference){&list->derived, QUANTITY_ZEFF, set, 0,
-                                        true, true});
+        if (set->kind == DATASET_VALUES)
+            insert(list, (struct reference){
+                             .provenance = &set->provenance,
+                             .quantity = set->quantity,
+                             .set = set,
+                             .rank = rank_of(catalogue, i),
+                             .outermost_only = is_outermost_only(set),
+                         });
     }
+    insert_derived(list);
 }
 
 const struct reference *reference_find(const struct reference_list *list,
@@ -140,39 +159,53 @@ static const char *not_emptied(const struct species *species,
     return "";
 }
 
-/* Z_eff = n sqrt(I/Ry); du/dI = Z_eff/(2I). */
-static struct reading zeff_from_ionization(const struct reference *reference,
-                                           const struct species *species,
-                                           const struct subshell *asked)
+/* The stored value of an input. */
+static struct reading read_input(const struct reference *reference,
+                                 const struct species *species,
+                                 struct derivation_input input)
 {
-    const char *reason = not_emptied(species, asked);
-    struct reading energy =
-        dataset_reading(reference->set, species->z, species->charge, 0, 0);
-    if (reason[0])
-        return reading_gap(QUANTITY_ZEFF, READING_MISSING, reason,
+    const struct dataset *set = reference->firsts[input.quantity];
+    return set ? dataset_reading(set, species->z, species->charge + input.step,
+                                 0, 0)
+               : reading_gap(input.quantity, READING_MISSING,
+                             "no set holds what it follows from", NULL);
+}
+
+static struct reading derive(const struct reference *reference,
+                             const struct species *species,
+                             const struct subshell *asked)
+{
+    const struct derivation *d = reference->derivation;
+    struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+    struct reading readings[DERIVATION_INPUTS_MAX];
+    const char *reason = "";
+    int count = d->inputs(species->charge, inputs, &reason);
+    if (d->of_emptied && count > 0) {
+        reason = not_emptied(species, asked);
+        count = reason[0] ? 0 : count;
+    }
+    if (count == 0)
+        return reading_gap(reference->quantity, READING_MISSING, reason,
                            reference->provenance);
-    if (energy.state != READING_OK)
-        return reading_gap(QUANTITY_ZEFF, READING_MISSING, energy.reason,
-                           reference->provenance);
-    double ev = energy.value.value;
-    double z_eff = asked->n * sqrt(ev / RYDBERG_EV);
+    for (int i = 0; i < count; i++) {
+        readings[i] = read_input(reference, species, inputs[i]);
+        if (readings[i].state != READING_OK)
+            return reading_gap(reference->quantity, READING_MISSING,
+                               readings[i].reason, reference->provenance);
+    }
     struct reading r =
-        reading_computed(QUANTITY_ZEFF, z_eff, reference->provenance);
-    r.n = asked->n;
-    r.l = asked->l;
-    r.remark = energy.remark;
-    r.evidence = energy.evidence;
-    r.has_u = energy.has_u;
-    if (r.has_u) {
-        r.u = number_round(0.5 * z_eff * energy.u.value / ev, 2, 0);
-        r.value = number_round(z_eff, ZEFF_DIGITS, r.u.decimals);
+        derivation_reading(d, readings, count, d->of_emptied ? asked->n : 0,
+                           reference->provenance);
+    if (d->of_emptied) {
+        r.n = asked->n;
+        r.l = asked->l;
     }
     return r;
 }
 
 bool reference_has_sites(const struct reference *reference)
 {
-    return !reference->derived &&
+    return !reference->derivation &&
            reference->set->default_coordination != COORDINATION_NONE;
 }
 
@@ -255,18 +288,18 @@ struct reading reference_read(const struct reference *reference,
     const struct subshell *outer =
         configuration_outermost(&species->configuration);
     bool is_outer = n == 0 || (outer && outer->n == n && outer->l == l);
-    if (reference->outermost_only && !reference->derived && !is_outer)
+    if (reference->outermost_only && !reference->derivation && !is_outer)
         return reading_gap(reference->quantity, READING_MISSING,
                            "this set holds outermost subshells only",
                            reference->provenance);
-    if (reference->derived && species->origin == ORIGIN_USER)
+    if (reference->derivation && species->origin == ORIGIN_USER)
         return reading_gap(reference->quantity, READING_MISSING,
                            "stored for the ground configuration only",
                            reference->provenance);
-    if (reference->derived)
-        return zeff_from_ionization(
-            reference, species,
-            n == 0 ? outer : subshell_of(&species->configuration, n, l));
+    if (reference->derivation)
+        return derive(reference, species,
+                      n == 0 ? outer
+                             : subshell_of(&species->configuration, n, l));
     /* A set by subshells is asked for the very subshell. */
     bool by_subshell = quantity_at(reference->quantity)->per_subshell &&
                        !reference->outermost_only;

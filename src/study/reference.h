@@ -5,43 +5,50 @@
 #define STUDY_REFERENCE_H
 
 #include "base/text.h"
+#include "element/derivation.h"
 #include "element/reading.h"
 #include "element/species.h"
 #include "refdata/catalogue.h"
 
-/* Z_eff = n sqrt(I/Ry) from the built-in ionization energies I, of the
- * subshell that loses the electron: the one that holds fewer in the stored
- * configuration of the ion than in that of the atom. A set that
- * the user adds has no such companion: what is cited for one id never depends
- * on what else was loaded. Effective charges of the user's own are a set of
- * their own, with the definition "from the energy, n sqrt(E/Ry)". */
+/* Z_eff = n sqrt(I/Ry), of the subshell that loses the electron: the one that
+ * holds fewer in the stored configuration of the ion than in that of the
+ * atom. */
 #define REFERENCE_ZEFF_FROM_IONIZATION CATALOGUE_ZEFF_FROM_IONIZATION
 
 #define REFERENCE_MAX 128
 
-/* One reference for one quantity. set: the stored set it is or follows from.
- * rank: order among the references of its quantity, 1 first; sets that the user
- * added stand behind the built-in ones, whatever rank they claim.
+/* One reference for one quantity. set: the stored set it is; for a quantity
+ * that follows from others (derivation, else NULL) the built-in set of its
+ * first input, while firsts[quantity] has those of all. Sets that the user adds
+ * have no such companions: what is cited for one id never depends on what else
+ * was loaded. rank: order among the references of its quantity, 1 first; sets
+ * that the user added stand behind the built-in ones, whatever rank they claim.
  * outermost_only: it says nothing of inner subshells. */
 struct reference {
     const struct provenance *provenance;
     enum quantity_id quantity;
     const struct dataset *set;
     int rank;
-    bool derived;
+    const struct derivation *derivation;
+    const struct dataset *const *firsts;
     bool outermost_only;
 };
 
 /* All references of a catalogue, sorted by quantity, then rank, then their
  * order there. */
-#define DERIVED_CITATIONS_MAX 4
+#define DERIVED_CITATIONS_MAX 64
 struct reference_list {
     int count;
     struct reference items[REFERENCE_MAX];
-    /* Z_eff from the ionization energy: cites its formula, then the set that
-     * it follows from. Items point here, so a list is not copied. */
-    struct provenance derived;
-    struct citation derived_citations[DERIVED_CITATIONS_MAX];
+    /* The first built-in set of each quantity, or NULL. Items point here, so a
+     * list is not copied. */
+    const struct dataset *firsts[QUANTITY_COUNT];
+    /* By place in derivation_list: cites the formula, then the sets that it
+     * works on. */
+    struct derived_source {
+        struct provenance provenance;
+        struct citation citations[DERIVED_CITATIONS_MAX];
+    } derived[DERIVATION_MAX];
 };
 
 void reference_list_fill(struct reference_list *list,

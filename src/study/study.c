@@ -12,6 +12,7 @@
 /* Models that can stand in the registry, and atoms that can wait. */
 #define WORK_MAX 16
 #define QUEUE_MAX 1024
+#define MISSING_TEXT_MAX 80
 
 /* Single-bond radii of all elements: the radius in the Allred-Rochow scale. */
 #define COVALENT_SET "covalent_single_pyykko_2009"
@@ -30,7 +31,11 @@ struct ground {
 
 struct study {
     const struct catalogue *catalogue;
-    struct ground *grounds; /* grounds[Z_MAX + 1] */
+    /* What a model's derived values come from, by place of model and
+     * derivation. */
+    struct provenance derived[WORK_MAX][DERIVATION_MAX];
+    char missing[QUANTITY_COUNT][MISSING_TEXT_MAX]; /* no such input */
+    struct ground *grounds;                         /* grounds[Z_MAX + 1] */
     struct reference_list references;
     struct model_options options;
     void *works[WORK_MAX]; /* by place in the registry; made when needed */
@@ -41,6 +46,25 @@ struct study {
     bool running; /* the last task of the queue has begun */
     int done, total;
 };
+
+/* A derived value of a model is the model's, under the derivation's
+ * definition. */
+static void set_derived(struct study *study)
+{
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        struct text t = text_over(study->missing[q], MISSING_TEXT_MAX);
+        text_addf(&t, "the model gives no %s",
+                  quantity_at((enum quantity_id)q)->title);
+    }
+    for (int m = 0; m < model_count(); m++)
+        for (int d = 0; d < derivation_list_count; d++) {
+            const struct model *model = model_at(m);
+            struct provenance *p = &study->derived[m][d];
+            int offer = model_offer_for(model, QUANTITY_IONIZATION, NULL);
+            *p = model->offers[offer < 0 ? 0 : offer].provenance;
+            p->definition = derivation_list[d]->definition;
+        }
+}
 
 struct study *study_new(const struct catalogue *catalogue, struct status *st)
 {
@@ -59,6 +83,7 @@ struct study *study_new(const struct catalogue *catalogue, struct status *st)
     study->catalogue = catalogue;
     study->covalent = catalogue_find(catalogue, COVALENT_SET);
     reference_list_fill(&study->references, catalogue);
+    set_derived(study);
     return study;
 }
 
@@ -233,6 +258,56 @@ static struct reading value_of(const struct study *study, const struct ask *ask,
                        &model->offers[offer].provenance);
 }
 
+static const struct provenance *
+derived_provenance(const struct study *study, const struct model *model,
+                   const struct derivation *derivation)
+{
+    int d = 0;
+    while (derivation_list[d] != derivation)
+        d++;
+    return &study->derived[model_index(model)][d];
+}
+
+/* What a model gives of an input: the same quantity for another charge state.
+ */
+static struct reading input_of(const struct study *study, const struct ask *ask,
+                               struct derivation_input input)
+{
+    struct ask each = {.z = ask->z,
+                       .charge = ask->charge + input.step,
+                       .model = ask->model,
+                       .quantity = input.quantity,
+                       .configuration =
+                           input.step == 0 ? ask->configuration : NULL};
+    struct species species;
+    struct status st = status_ok();
+    int offer = model_offer_for(ask->model, input.quantity, NULL);
+    if (offer < 0 || !study_species(study, &each, &species, &st))
+        return reading_gap(input.quantity, READING_OUTSIDE,
+                           study->missing[input.quantity], NULL);
+    return value_of(study, &each, &species, offer);
+}
+
+struct reading study_derived(const struct study *study, const struct ask *ask,
+                             const struct derivation *derivation)
+{
+    const struct provenance *p =
+        derived_provenance(study, ask->model, derivation);
+    struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+    struct reading readings[DERIVATION_INPUTS_MAX];
+    const char *reason = "";
+    int count = derivation->inputs(ask->charge, inputs, &reason);
+    if (count == 0)
+        return reading_gap(ask->quantity, READING_OUTSIDE, reason, p);
+    for (int i = 0; i < count; i++) {
+        readings[i] = input_of(study, ask, inputs[i]);
+        if (readings[i].state != READING_OK)
+            return reading_gap(ask->quantity, readings[i].state,
+                               readings[i].reason, p);
+    }
+    return derivation_reading(derivation, readings, count, 0, p);
+}
+
 struct reading study_reading(const struct study *study, const struct ask *ask,
                              const struct species *species, int offer)
 {
@@ -319,6 +394,13 @@ struct row study_row(const struct study *study, const struct ask *ask)
         value = value_of(study, ask, &row.species, offer);
         definition = ask->model->offers[offer].provenance.definition;
     }
+    const struct derivation *derivation =
+        offer < 0 && ask->model ? model_derivation(ask->model, ask->quantity)
+                                : NULL;
+    if (derivation) {
+        value = study_derived(study, ask, derivation);
+        definition = derivation->definition;
+    }
     if (!reference)
         reference = reference_default(&study->references, ask->quantity,
                                       &row.species, ask->n, ask->l, ask->site,
@@ -344,7 +426,7 @@ struct row study_row(const struct study *study, const struct ask *ask)
 static bool iterates(const struct ask *ask)
 {
     return ask->model && !ask->model->closed &&
-           model_offer_for(ask->model, ask->quantity, NULL) >= 0;
+           model_gives(ask->model, ask->quantity);
 }
 
 bool study_row_now(struct study *study, const struct ask *ask, struct row *row,
@@ -376,12 +458,33 @@ static int find_task(const struct study *study, const struct model *model,
     return -1;
 }
 
+/* A derived quantity needs other charge states as well. */
+static bool want_inputs(struct study *study, const struct ask *ask, bool first,
+                        struct status *st)
+{
+    const struct derivation *d = model_derivation(ask->model, ask->quantity);
+    struct derivation_input inputs[DERIVATION_INPUTS_MAX];
+    const char *reason = "";
+    int count = d ? d->inputs(ask->charge, inputs, &reason) : 0;
+    for (int i = 0; i < count; i++) {
+        struct ask each = {.z = ask->z,
+                           .charge = ask->charge + inputs[i].step,
+                           .model = ask->model,
+                           .quantity = inputs[i].quantity};
+        if (inputs[i].step != 0 && !study_want(study, &each, first, st))
+            return false;
+    }
+    return true;
+}
+
 bool study_want(struct study *study, const struct ask *ask, bool first,
                 struct status *st)
 {
     struct species species;
     if (!iterates(ask))
         return true;
+    if (!want_inputs(study, ask, first, st))
+        return false;
     if (!study_species(study, ask, &species, st))
         return false;
     if (solution_find(&study->solutions, ask->model, &species))
@@ -412,6 +515,19 @@ bool study_want(struct study *study, const struct ask *ask, bool first,
     study->queue[place] = task;
     study->queued++;
     study->total++;
+    return true;
+}
+
+bool study_want_all(struct study *study, const struct ask *ask, bool first,
+                    struct status *st)
+{
+    struct ask each = *ask;
+    for (int q = 0; q < QUANTITY_COUNT; q++) {
+        each.quantity = (enum quantity_id)q;
+        if (model_gives(each.model, each.quantity) &&
+            !study_want(study, &each, first, st))
+            return false;
+    }
     return true;
 }
 

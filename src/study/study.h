@@ -59,6 +59,11 @@ struct row study_row(const struct study *study, const struct ask *ask);
 struct reading study_reading(const struct study *study, const struct ask *ask,
                              const struct species *species, int offer);
 
+/* What the ask's model gives of a quantity by a derivation, in base units. Not
+ * started either. */
+struct reading study_derived(const struct study *study, const struct ask *ask,
+                             const struct derivation *derivation);
+
 /* study_row, but solved here and now to the end. Fails with STATUS_MEMORY, or
  * as the model's work space cannot be opened. */
 MUST_CHECK bool study_row_now(struct study *study, const struct ask *ask,
@@ -72,6 +77,9 @@ MUST_CHECK bool study_row_now(struct study *study, const struct ask *ask,
  * and what is half done, keeping what is solved. */
 MUST_CHECK bool study_want(struct study *study, const struct ask *ask,
                            bool first, struct status *st);
+/* The same for all quantities of the ask's model, derived ones too. */
+MUST_CHECK bool study_want_all(struct study *study, const struct ask *ask,
+                               bool first, struct status *st);
 bool study_step(struct study *study, struct status *st);
 void study_stop(struct study *study);
 

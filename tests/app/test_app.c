@@ -157,8 +157,7 @@ END_TEST
 
 START_TEST(quantities_without_a_model_show_their_reference)
 {
-    type("w");
-    key(KEY_CODE_END);
+    type("wpol");
     key(KEY_CODE_ENTER);
     ck_assert_int_eq(app.session.choice.quantity, QUANTITY_POLARIZABILITY);
     ck_assert_int_eq(app.session.choice.shown, SHOWN_REFERENCE);
@@ -212,7 +211,7 @@ START_TEST(exports_ask_for_a_file_and_hold_what_is_shown)
     struct csv csv = csv_read_text(row);
     int offering = 0;
     for (int m = 0; m < model_count(); m++)
-        offering += model_offer_for(model_at(m), QUANTITY_ZEFF, NULL) >= 0;
+        offering += model_gives(model_at(m), QUANTITY_ZEFF);
     ck_assert_uint_eq(csv_rows(&csv), (size_t)offering);
     ck_assert_str_eq(csv_cell(&csv, 0, "symbol"), "Fe");
     csv_free(&csv);

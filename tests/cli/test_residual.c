@@ -99,7 +99,7 @@ static const char *closed_models(enum quantity_id quantity, char *out,
     struct text t = text_over(out, size);
     for (int m = 0; m < model_count(); m++)
         if (model_at(m)->closed &&
-            model_offer_for(model_at(m), quantity, NULL) >= 0)
+            model_gives(model_at(m), quantity))
             text_addf(&t, "%s%s", t.length ? "," : " --model ",
                       model_at(m)->id);
     return out;

@@ -32,7 +32,7 @@ static void check_choice(const struct session *s)
     require(session_ask(s, c->z, c->charge, &ask));
     require(same_quantity(s, c->reference) && same_quantity(s, c->against));
     if (c->model)
-        require(model_offer_for(c->model, c->quantity, NULL) >= 0);
+        require(model_gives(c->model, c->quantity));
     else
         require(c->shown == SHOWN_REFERENCE);
     require(c->n == 0 || quantity_at(c->quantity)->per_subshell);

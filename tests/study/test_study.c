@@ -255,8 +255,8 @@ START_TEST(references_stand_in_the_order_of_their_ranks)
     for (int i = 1; i < list->count; i++) {
         const struct reference *r = &list->items[i], *before = r - 1;
         ck_assert_int_le(before->quantity, r->quantity);
-        ck_assert(r->derived || r->set->rank > 0);
-        if (before->quantity != r->quantity || before->derived || r->derived)
+        ck_assert(r->derivation || r->set->rank > 0);
+        if (before->quantity != r->quantity || before->derivation || r->derivation)
             continue;
         ck_assert_msg(before->set->rank < r->set->rank, "%s before %s",
                       before->provenance->id, r->provenance->id);
