@@ -24,10 +24,10 @@ static int points(const struct atom_solver *s)
     return s->elements * P + 1;
 }
 
-/* Density per y of subshell i into D; its electrons are returned and the mean
- * energy of the levels set. */
-static double subshell_density(const struct atom_solver *s, int i, double *D,
-                               double *energy)
+/* Density per y of subshell i into D, or of its levels of one j unless twice_j
+ * is 0; its electrons are returned and the mean energy of the levels set. */
+static double subshell_density(const struct atom_solver *s, int i, int twice_j,
+                               double *D, double *energy)
 {
     struct atom_space *space = s->now;
     const struct subshell *shell = &s->configuration.shells[i];
@@ -36,7 +36,8 @@ static double subshell_density(const struct atom_solver *s, int i, double *D,
     memset(D, 0, (size_t)points(s) * sizeof *D);
     for (int k = 0; k < s->count; k++) {
         const struct atom_level *level = &s->label[k];
-        if (level->n != shell->n || level->l != shell->l)
+        if (level->n != shell->n || level->l != shell->l ||
+            (twice_j > 0 && level->twice_j != twice_j))
             continue;
         radial_density(space->radial, k, one);
         for (int j = 0; j < points(s); j++)
@@ -111,10 +112,19 @@ struct atom_orbital atom_subshell_at(const struct atom_solver *solver, int i)
     const struct subshell *shell = &solver->configuration.shells[i];
     struct atom_orbital o = {.n = shell->n, .l = shell->l};
     double *D = solver->now->out;
-    o.occ = subshell_density(solver, i, D, &o.energy);
+    o.occ = subshell_density(solver, i, 0, D, &o.energy);
     if (o.occ > 0.0)
         measure(solver, &o, D, o.occ, solver->now->scratch);
     return o;
+}
+
+double atom_subshell_peak_of(const struct atom_solver *solver, int i,
+                             int twice_j)
+{
+    double energy, *D = solver->now->out;
+    if (subshell_density(solver, i, twice_j, D, &energy) <= 0.0)
+        return 0.0;
+    return outermost_maximum(solver, D, solver->now->scratch) / solver->Z;
 }
 
 struct atom_orbital atom_level_orbital(const struct atom_solver *solver, int i)
@@ -158,7 +168,7 @@ void atom_curve_at(const struct atom_solver *solver, enum atom_curve curve,
     if (subshell >= 0 && curve != ATOM_CURVE_ZEFF) {
         assert(subshell < solver->configuration.count);
         double *D = space->out, *within = D + space->mesh.points;
-        whole = subshell_density(solver, subshell, D, &energy);
+        whole = subshell_density(solver, subshell, 0, D, &energy);
         int l = solver->configuration.shells[subshell].l;
         if (l > 0 && solver->a2 <= 0.0)
             power = 2.0 * l + 2.0;

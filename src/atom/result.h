@@ -24,6 +24,11 @@ struct atom_orbital {
 int atom_subshell_count(const struct atom_solver *solver);
 struct atom_orbital atom_subshell_at(const struct atom_solver *solver, int i);
 
+/* peak_radius of the levels of subshell i with one j, both spins together; 0
+ * when there are none. */
+double atom_subshell_peak_of(const struct atom_solver *solver, int i,
+                             int twice_j);
+
 /* The same for level i of atom_level_at. */
 struct atom_orbital atom_level_orbital(const struct atom_solver *solver, int i);
 

@@ -173,8 +173,11 @@ static double coupled(const struct open_subshell *open, int count,
     return lambda * 0.5 * (j * (j + 1.0) - l * (l + 1.0) - s * (s + 1.0));
 }
 
-/* Where LS coupling ends: ζ/F². Up to there second-order terms stay below what
- * the model is good for. */
+/* Where LS coupling ends: ζ/F². A judgement that few numbers hang on: with 0,
+ * where every d and f subshell goes between the couplings, 97 measured first
+ * ionization energies err by 0.101 eV on the average instead of 0.100, the 273
+ * of charge 1 to 6 by 0.270 instead of 0.272. Below it the stored term counts,
+ * which the levels of one subshell know nothing of. */
 static const double STRONG = 0.1;
 
 static bool is_strong(const struct open_subshell *s)

@@ -12,6 +12,7 @@
 #include "model/models.h"
 #include "model/neighbour.h"
 #include "model/scf.h"
+#include "model/scf_offers.h"
 #include "model/rule.h"
 
 #define ISODENSITY 0.001 /* electrons/bohr^3, as the reference sets */
@@ -20,81 +21,7 @@
  * Am. Chem. Soc. 122, 2780 (2000), doi 10.1021/ja992866e). */
 #define ALLEN_PER_RYDBERG 2.30016
 
-static const struct citation citations[] = {
-    {"kohn1965", "article", "W. Kohn and L. J. Sham",
-     "Self-consistent equations including exchange and correlation effects",
-     "Phys. Rev.", 1965, "140", "A1133", "10.1103/PhysRev.140.A1133"},
-    {"macdonald1979", "article", "A. H. MacDonald and S. H. Vosko",
-     "A relativistic density functional formalism", "J. Phys. C", 1979, "12",
-     "2977", "10.1088/0022-3719/12/15/007"},
-    {"vosko1980", "article", "S. H. Vosko, L. Wilk and M. Nusair",
-     "Accurate spin-dependent electron liquid correlation energies for local "
-     "spin density calculations: a critical analysis",
-     "Can. J. Phys.", 1980, "58", "1200", "10.1139/p80-159"},
-    {"perdew1996", "article", "J. P. Perdew, K. Burke and M. Ernzerhof",
-     "Generalized gradient approximation made simple", "Phys. Rev. Lett.", 1996,
-     "77", "3865", "10.1103/PhysRevLett.77.3865"},
-    {"perdew1996b", "article", "J. P. Perdew, M. Ernzerhof and K. Burke",
-     "Rationale for mixing exact exchange with density functional "
-     "approximations",
-     "J. Chem. Phys.", 1996, "105", "9982", "10.1063/1.472933"},
-    {"perdew2009", "article",
-     "J. P. Perdew, A. Ruzsinszky, G. I. Csonka, L. A. Constantin and J. Sun",
-     "Workhorse semilocal density functional for condensed matter physics and "
-     "quantum chemistry",
-     "Phys. Rev. Lett.", 2009, "103", "026403",
-     "10.1103/PhysRevLett.103.026403"},
-    {"mann2000", "article", "J. B. Mann, T. L. Meek and L. C. Allen",
-     "Configuration energies of the main group elements", "J. Am. Chem. Soc.",
-     2000, "122", "2780", "10.1021/ja992866e"},
-};
-
-#define PROVENANCE(what, count)                                                \
-    {                                                                          \
-        true, "scf", "self-consistent Kohn-Sham atom", what, citations, count  \
-    }
-enum {
-    SOURCES_DENSITY = 3,
-    SOURCES_GRADIENT = 4,
-    SOURCES_ENERGY = 6,
-    SOURCES_ALLEN = 7
-};
-
-const struct provenance *scf_atom_source(bool gradient)
-{
-    static const struct provenance sources[] = {
-        PROVENANCE(NULL, SOURCES_DENSITY), PROVENANCE(NULL, SOURCES_GRADIENT)};
-    return &sources[gradient];
-}
-
-enum {
-    OFFER_ZEFF,
-    OFFER_ZEFF_SIZE,
-    OFFER_ZEFF_ENCLOSED,
-    OFFER_RADIUS,
-    OFFER_ISODENSITY,
-    OFFER_IONIZATION,
-    OFFER_ALLEN,
-    OFFER_COUNT
-};
-
-static const struct model_offer offers[OFFER_COUNT] = {
-    [OFFER_ZEFF] = {QUANTITY_ZEFF,
-                    PROVENANCE(&definition_zeff_energy, SOURCES_ENERGY)},
-    [OFFER_ZEFF_SIZE] = {QUANTITY_ZEFF,
-                         PROVENANCE(&definition_zeff_size, SOURCES_DENSITY)},
-    [OFFER_ZEFF_ENCLOSED] = {QUANTITY_ZEFF,
-                             PROVENANCE(&definition_zeff_enclosed,
-                                        SOURCES_DENSITY)},
-    [OFFER_RADIUS] = {QUANTITY_RADIUS,
-                      PROVENANCE(&definition_radial_maximum, SOURCES_DENSITY)},
-    [OFFER_ISODENSITY] = {QUANTITY_ISODENSITY,
-                          PROVENANCE(&definition_isodensity, SOURCES_DENSITY)},
-    [OFFER_IONIZATION] = {QUANTITY_IONIZATION,
-                          PROVENANCE(&definition_ionization, SOURCES_ENERGY)},
-    [OFFER_ALLEN] = {QUANTITY_ELECTRONEGATIVITY,
-                     PROVENANCE(&definition_allen, SOURCES_ALLEN)},
-};
+static const struct model_offer *const offers = scf_offers;
 
 /* Standard uncertainty of a first ionization energy in eV, by block: the root
  * mean square of its deviations from NIST ASD 5.12, Z = 1…103, as this model
@@ -135,6 +62,14 @@ enum phase { PHASE_SOLVE, PHASE_ENERGY, DONE };
 
 #define REMARK_MAX 320
 
+/* The highest level that is occupied of the outermost subshell, when that has
+ * two of different j: l - 1/2 is filled before l + 1/2. */
+struct frontier {
+    int n, l;
+    double peak_radius; /* bohr */
+    char remark[48];
+};
+
 struct work {
     struct atom_solver *solver;
     struct hybrid *hybrid;
@@ -150,7 +85,8 @@ struct work {
     struct atom_orbital orbital[SUBSHELL_MAX];
     double top[SUBSHELL_MAX]; /* highest level of each, hartree */
     double isodensity;        /* bohr */
-    char remark[REMARK_MAX];  /* of the ionization energy */
+    struct frontier frontier;
+    char remark[REMARK_MAX]; /* of the ionization energy */
 };
 
 enum { ATOM, ION };
@@ -262,6 +198,25 @@ static void evaluate(struct work *w, const struct configuration *configuration,
     half->with_pbe = energy.with_pbe + shift;
 }
 
+static void keep_frontier(struct work *w)
+{
+    const struct subshell *outer =
+        configuration_outermost(&w->question.species.configuration);
+    w->frontier = (struct frontier){0};
+    for (int i = 0; outer && outer->l > 0 && i < w->count; i++) {
+        if (w->orbital[i].n != outer->n || w->orbital[i].l != outer->l)
+            continue;
+        int twice_j = 2 * outer->l + (outer->occ > 2 * outer->l ? 1 : -1);
+        struct text t =
+            text_over(w->frontier.remark, sizeof w->frontier.remark);
+        w->frontier.n = outer->n;
+        w->frontier.l = outer->l;
+        w->frontier.peak_radius = atom_subshell_peak_of(w->solver, i, twice_j);
+        text_addf(&t, "of %d%c%d/2, the highest occupied level", outer->n,
+                  "spdf"[outer->l], twice_j);
+    }
+}
+
 /* Keeps what is read off the density of the atom. */
 static void keep(struct work *w)
 {
@@ -276,6 +231,7 @@ static void keep(struct work *w)
             if (w->orbital[i].n == level.n && w->orbital[i].l == level.l)
                 w->top[i] = fmax(w->top[i], level.energy);
     }
+    keep_frontier(w);
     w->isodensity = atom_isodensity_radius(w->solver, ISODENSITY);
 }
 
@@ -485,6 +441,21 @@ static struct reading read_zeff(const struct work *w,
     return r;
 }
 
+/* Of the outermost subshell its highest level, of the others the mean over j.
+ */
+static struct reading read_radius(const struct work *w,
+                                  const struct atom_orbital *o)
+{
+    const struct frontier *f = &w->frontier;
+    bool resolved = f->n == o->n && f->l == o->l && f->peak_radius > 0.0;
+    struct reading r = reading_computed(
+        QUANTITY_RADIUS, (resolved ? f->peak_radius : o->peak_radius) * BOHR_PM,
+        &offers[OFFER_RADIUS].provenance);
+    if (resolved)
+        r.remark = f->remark;
+    return r;
+}
+
 static struct reading read_subshell(const struct work *w, int offer, int n,
                                     int l)
 {
@@ -497,11 +468,12 @@ static struct reading read_subshell(const struct work *w, int offer, int n,
     struct reading r;
     if (offer == OFFER_ZEFF)
         r = read_zeff(w, o);
+    else if (offer == OFFER_RADIUS)
+        r = read_radius(w, o);
     else
         r = reading_computed(offers[offer].quantity,
-                             offer == OFFER_RADIUS ? o->peak_radius * BOHR_PM
-                             : offer == OFFER_ZEFF_SIZE ? o->zeff_size
-                                                        : o->zeff_enclosed,
+                             offer == OFFER_ZEFF_SIZE ? o->zeff_size
+                                                      : o->zeff_enclosed,
                              &offers[offer].provenance);
     r.n = asked->n;
     r.l = asked->l;
@@ -580,7 +552,7 @@ const struct model model_scf = {
     .title = "self-consistent Kohn-Sham atom, solved live",
     .domain = "every element, charge >= 0, any configuration",
     .closed = false,
-    .offers = offers,
+    .offers = scf_offers,
     .offer_count = OFFER_COUNT,
     .work_size = sizeof(struct work),
     .open = open_work,

@@ -89,6 +89,39 @@ START_TEST(an_unbound_anion_gives_gaps_with_the_reason)
 }
 END_TEST
 
+/* Maxima of 6p1/2 in relativistic atoms with Slater's exchange: 131.9 and 121.5
+ * pm (J. T. Waber, D. T. Cromer, J. Chem. Phys. 42, 4116 (1965); the two values
+ * from memory). The mean over j is 15 % larger. */
+START_TEST(the_outermost_radius_is_that_of_the_highest_level)
+{
+    static const struct {
+        int z;
+        double radius;
+    } maximum[] = {{81, 131.9}, {82, 121.5}};
+    struct scf_case scf;
+    scf_open(&scf);
+    for (int i = 0; i < 2; i++) {
+        scf_solve(&scf, maximum[i].z, 0);
+        struct reading r = scf_read(&scf, QUANTITY_RADIUS, NULL, 0, 0);
+        ck_assert_int_eq(r.state, READING_OK);
+        near(r.value.value, maximum[i].radius, 0.0, 0.06, "Z = %d",
+             maximum[i].z);
+        ck_assert_str_eq(r.remark, "of 6p1/2, the highest occupied level");
+        r = scf_read(&scf, QUANTITY_RADIUS, NULL, 6, 1);
+        ck_assert_str_eq(r.remark, "of 6p1/2, the highest occupied level");
+        r = scf_read(&scf, QUANTITY_RADIUS, NULL, 5, 2);
+        ck_assert(!r.remark || !strstr(r.remark, "/2"));
+    }
+    scf_solve(&scf, 83, 0); /* the third electron goes to 6p3/2 */
+    struct reading r = scf_read(&scf, QUANTITY_RADIUS, NULL, 0, 0);
+    ck_assert_str_eq(r.remark, "of 6p3/2, the highest occupied level");
+    double bismuth = r.value.value;
+    scf_solve(&scf, 82, 0);
+    ck_assert(bismuth > scf_value(&scf, QUANTITY_RADIUS, NULL, 0, 0));
+    scf_close(&scf);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("model scf");
@@ -98,5 +131,6 @@ int main(void)
     tcase_add_test(c, a_one_electron_ion_is_nearly_exact);
     tcase_add_test(c, definitions_of_the_effective_charge_are_kept_apart);
     tcase_add_test(c, an_unbound_anion_gives_gaps_with_the_reason);
+    tcase_add_test(c, the_outermost_radius_is_that_of_the_highest_level);
     return run_suite(suite);
 }
