@@ -39,12 +39,8 @@ static struct comparison_pair *pair_new(const struct provenance *first,
     struct comparison_pair *pair = calloc(1, sizeof *pair);
     if (!pair)
         return NULL;
-    int count = 0;
-    const struct provenance *sources[] = {first, second};
-    for (int s = 0; s < 2; s++)
-        for (int i = 0; i < sources[s]->citation_count; i++)
-            if (count < PAIR_CITATIONS_MAX)
-                pair->citations[count++] = sources[s]->citations[i];
+    pair->first = first;
+    pair->second = second;
     struct text t = text_over(pair->id, sizeof pair->id);
     text_addf(&t, "%s - %s", second->id, first->id);
     pair->provenance = (struct provenance){
@@ -52,8 +48,6 @@ static struct comparison_pair *pair_new(const struct provenance *first,
         .title = "disagreement of two sets",
         .definition = first->definition == second->definition ? &disagreement_of
                                                               : &unlike,
-        .citations = pair->citations,
-        .citation_count = count,
     };
     return pair;
 }
@@ -110,6 +104,23 @@ bool comparison_add_pair(struct comparison *comparison,
         lines[at].readings[w] = disagreement(
             &lines[a].readings[w], &lines[b].readings[w], &pair->provenance);
     return true;
+}
+
+bool comparison_pair_readings(const struct comparison *comparison,
+                              const struct comparison_line *line, int which,
+                              struct reading readings[2])
+{
+    for (int i = 0; i < comparison->pair_count; i++) {
+        const struct comparison_pair *pair = comparison->pairs[i];
+        if (line->provenance != &pair->provenance)
+            continue;
+        int a = line_of(comparison, pair->first);
+        int b = line_of(comparison, pair->second);
+        readings[0] = comparison->lines[a].readings[which];
+        readings[1] = comparison->lines[b].readings[which];
+        return true;
+    }
+    return false;
 }
 
 bool comparison_difference(const struct comparison_line *line, int which,

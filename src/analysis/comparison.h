@@ -25,11 +25,10 @@ struct comparison_fact {
 };
 
 /* How far a second reference is from the first, as a source of lines. */
-#define PAIR_CITATIONS_MAX 8
 struct comparison_pair {
-    struct provenance provenance;
+    struct provenance provenance; /* cites nothing itself: see below */
+    const struct provenance *first, *second;
     char id[128];
-    struct citation citations[PAIR_CITATIONS_MAX];
 };
 
 /* lines[line_count] and facts[fact_count] are owned; comparison_clear frees
@@ -58,6 +57,12 @@ MUST_CHECK bool comparison_add_pair(struct comparison *comparison,
                                     const struct provenance *first,
                                     const struct provenance *second,
                                     struct status *st);
+
+/* The two readings behind one cell of a line that comparison_add_pair added,
+ * which rest on works of their own; false for any other line. */
+bool comparison_pair_readings(const struct comparison *comparison,
+                              const struct comparison_line *line, int which,
+                              struct reading readings[2]);
 
 /* Difference of atom `which` from atom 0 in a line: false when either has no
  * number or which is 0. percent is of the size of the first; has_percent only

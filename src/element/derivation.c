@@ -8,14 +8,6 @@
 /* ---- Z_eff = n sqrt(I/Ry): one electron in the field of a point charge ----
  */
 
-static const struct citation common_practice = {
-    .key = "ionization_zeff",
-    .kind = "misc",
-    .authors = "common practice, no source",
-    .title =
-        "Effective nuclear charge from the ionization energy, n sqrt(I/Ry)",
-};
-
 static int zeff_inputs(int charge,
                        struct derivation_input inputs[DERIVATION_INPUTS_MAX],
                        const char **reason)
@@ -38,7 +30,7 @@ const struct derivation derivation_zeff = {
     .title = "Z_eff from the stored ionization energy, n sqrt(I/Ry)",
     .domain = "the subshell that loses the electron",
     .definition = &definition_zeff_energy,
-    .citation = &common_practice,
+    .unsourced = "formula n sqrt(I/Ry): common practice, no source",
     .in_front = true,
     .of_emptied = true,
     .inputs = zeff_inputs,
@@ -50,8 +42,7 @@ const struct derivation derivation_zeff = {
 static const struct citation mulliken1934 = {
     .key = "mulliken1934",
     .kind = "article",
-    .authors = "R. S. Mulliken",
-    /* from memory */
+    .authors = CITATION_NAMES("R. S. Mulliken"),
     .title = "A New Electroaffinity Scale; Together with Data on Valence "
              "States and on Valence Ionization Potentials and Electron "
              "Affinities",
@@ -60,6 +51,7 @@ static const struct citation mulliken1934 = {
     .volume = "2",
     .pages = "782",
     .doi = "10.1063/1.1749394",
+    .from_memory = "title",
 };
 
 /* The scale was made for atoms; A is never taken as zero. */
@@ -94,8 +86,7 @@ const struct derivation derivation_mulliken = {
 static const struct citation parr1983 = {
     .key = "parr1983",
     .kind = "article",
-    .authors = "R. G. Parr and R. G. Pearson",
-    /* from memory */
+    .authors = CITATION_NAMES("R. G. Parr", "R. G. Pearson"),
     .title = "Absolute hardness: companion parameter to absolute "
              "electronegativity",
     .container = "J. Am. Chem. Soc.",
@@ -103,6 +94,7 @@ static const struct citation parr1983 = {
     .volume = "105",
     .pages = "7512",
     .doi = "10.1021/ja00364a005",
+    .from_memory = "title",
 };
 
 /* Of an ion A is the ionization energy that made it. */

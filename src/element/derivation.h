@@ -31,7 +31,8 @@ struct derivation {
     const char *title;
     const char *domain;
     const struct definition *definition;
-    const struct citation *citation;
+    const struct citation *citation; /* of the formula, or NULL and: */
+    const char *unsourced;           /* what no work is cited for */
     bool in_front;
     bool of_emptied;
     int (*inputs)(int charge,

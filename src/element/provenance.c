@@ -3,26 +3,12 @@
 
 #include <string.h>
 
-void citation_text(struct text *t, const struct citation *c)
+static int name_count(const char *const *names)
 {
-    const char *first = c->authors ? c->authors : c->title;
-    /* A container may stand alone: "Journal 1, 2". */
-    if (first)
-        text_add(t, first);
-    /* An article is found by its journal; anything else by its title. */
-    if (c->authors && c->title && c->container &&
-        strcmp(c->kind, "article") != 0)
-        text_addf(t, ", %s", c->title);
-    if (c->container)
-        text_addf(t, first ? ", %s" : "%s", c->container);
-    if (c->volume)
-        text_addf(t, " %s", c->volume);
-    if (c->pages)
-        text_addf(t, ", %s", c->pages);
-    if (c->year)
-        text_addf(t, " (%d)", c->year);
-    if (c->doi)
-        text_addf(t, ", doi %s", c->doi);
+    int count = 0;
+    while (names && names[count])
+        count++;
+    return count;
 }
 
 const char *provenance_definition(const struct provenance *provenance)
@@ -31,11 +17,83 @@ const char *provenance_definition(const struct provenance *provenance)
                                   : provenance->title;
 }
 
-void provenance_text(struct text *t, const struct provenance *provenance)
+/* "A, B and C". */
+static void add_names(struct text *t, const struct citation *c)
 {
-    for (int i = 0; provenance && i < provenance->citation_count; i++) {
+    int persons = name_count(c->authors);
+    int count = persons + name_count(c->organizations);
+    for (int i = 0; i < count; i++) {
         if (i > 0)
-            text_add(t, "; ");
-        citation_text(t, &provenance->citations[i]);
+            text_add(t, i == count - 1 ? " and " : ", ");
+        text_add(t,
+                 i < persons ? c->authors[i] : c->organizations[i - persons]);
+    }
+}
+
+/* A part with what stands before it, unless it is the first of all. */
+static void add_part(struct text *t, size_t start, const char *before,
+                     const char *part)
+{
+    if (!part)
+        return;
+    if (t->length > start)
+        text_add(t, before);
+    text_add(t, part);
+}
+
+static void add_remark(struct text *t, bool *begun, const char *before,
+                       const char *remark)
+{
+    if (!remark)
+        return;
+    text_add(t, *begun ? "; " : " [");
+    text_add(t, before);
+    text_add(t, remark);
+    *begun = true;
+}
+
+void citation_text(struct text *t, const struct citation *c,
+                   enum citation_form form)
+{
+    size_t start = t->length;
+    bool begun = false;
+    /* An article is found by its journal; anything else by its title. */
+    bool title = form == CITATION_FULL || !c->container ||
+                 strcmp(c->kind, "article") != 0;
+    add_names(t, c);
+    add_part(t, start, ", ", title ? c->title : NULL);
+    add_part(t, start, ", ", c->container);
+    add_part(t, start, c->container ? " " : ", volume ", c->volume);
+    add_part(t, start, ", ", c->pages);
+    if (c->year)
+        text_addf(t, t->length > start ? " (%d)" : "%d", c->year);
+    add_part(t, start, ", doi ", c->doi);
+    add_remark(t, &begun, "", c->note);
+    add_remark(t, &begun, "not known: ", c->not_known);
+    if (form == CITATION_FULL)
+        add_remark(t, &begun, "from memory: ", c->from_memory);
+    text_add(t, begun ? "]" : "");
+}
+
+bool cited_holds(struct cited_source source, int i)
+{
+    const struct provenance *p = source.provenance;
+    return !source.only || i < p->common || source.only == &p->citations[i];
+}
+
+void cited_text(struct text *t, struct cited_source source,
+                enum citation_form form)
+{
+    const struct provenance *p = source.provenance;
+    if (!p)
+        return;
+    bool begun = p->unsourced != NULL;
+    text_add(t, begun ? p->unsourced : "");
+    for (int i = 0; i < p->citation_count; i++) {
+        if (!cited_holds(source, i))
+            continue;
+        text_add(t, begun ? "; " : "");
+        citation_text(t, &p->citations[i], form);
+        begun = true;
     }
 }

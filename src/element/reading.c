@@ -69,6 +69,11 @@ struct reading reading_in_unit(struct reading reading, const struct unit *unit)
     return reading;
 }
 
+struct cited_source reading_cited(const struct reading *reading)
+{
+    return (struct cited_source){reading->provenance, reading->cited};
+}
+
 void reading_text(struct text *t, const struct reading *reading)
 {
     char value[NUMBER_TEXT_MAX];

@@ -42,6 +42,9 @@ struct reading {
     struct number u;
     bool has_u;
     const struct provenance *provenance;
+    /* The one work of the provenance that this very value rests on; NULL where
+     * it rests on all of them. */
+    const struct citation *cited;
     const char *reason;
     const char *remark;
     enum evidence evidence; /* of a stored value; unstated when computed */
@@ -59,6 +62,9 @@ struct reading reading_gap(enum quantity_id quantity, enum reading_state state,
 
 /* The same reading in another unit of its dimension. */
 struct reading reading_in_unit(struct reading reading, const struct unit *unit);
+
+/* What it rests on. */
+struct cited_source reading_cited(const struct reading *reading);
 
 /* Appends a number in the concise form of tables, "6.634126(5)"; "31 +- 0.5"
  * where the uncertainty has finer digits than the value. */

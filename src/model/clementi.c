@@ -4,19 +4,19 @@
  * The paper's table of exponents is a reference set, not this model. */
 #include <stddef.h>
 
+#include "model/citations.h"
 #include "model/models.h"
 #include "model/rule.h"
 
 static const struct citation citations[] = {
-    {"clementi1963", "article", "E. Clementi and D. L. Raimondi",
-     "Atomic Screening Constants from SCF Functions", "J. Chem. Phys.", 1963,
-     "38", "2686", "10.1063/1.1733573"},
+    CITATION_CLEMENTI_1963,
 };
 
 #define PROVENANCE(what)                                                       \
     {                                                                          \
-        true, "clementi", "Clementi-Raimondi rules of 1963", what, citations,  \
-            1                                                                  \
+        .computed = true, .id = "clementi",                                    \
+        .title = "Clementi-Raimondi rules of 1963", .definition = (what),      \
+        .citations = citations, .citation_count = 1                            \
     }
 
 static const struct model_offer offers[RULE_OFFERS] = {

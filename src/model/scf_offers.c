@@ -2,40 +2,83 @@
 /* Sources of the scf model and what each of its numbers rests on. */
 #include "model/scf_offers.h"
 
+#include "model/citations.h"
 #include "model/scf.h"
 
 static const struct citation citations[] = {
-    {"kohn1965", "article", "W. Kohn and L. J. Sham",
-     "Self-consistent equations including exchange and correlation effects",
-     "Phys. Rev.", 1965, "140", "A1133", "10.1103/PhysRev.140.A1133"},
-    {"macdonald1979", "article", "A. H. MacDonald and S. H. Vosko",
-     "A relativistic density functional formalism", "J. Phys. C", 1979, "12",
-     "2977", "10.1088/0022-3719/12/15/007"},
-    {"vosko1980", "article", "S. H. Vosko, L. Wilk and M. Nusair",
-     "Accurate spin-dependent electron liquid correlation energies for local "
-     "spin density calculations: a critical analysis",
-     "Can. J. Phys.", 1980, "58", "1200", "10.1139/p80-159"},
-    {"perdew1996", "article", "J. P. Perdew, K. Burke and M. Ernzerhof",
-     "Generalized gradient approximation made simple", "Phys. Rev. Lett.", 1996,
-     "77", "3865", "10.1103/PhysRevLett.77.3865"},
-    {"perdew1996b", "article", "J. P. Perdew, M. Ernzerhof and K. Burke",
-     "Rationale for mixing exact exchange with density functional "
-     "approximations",
-     "J. Chem. Phys.", 1996, "105", "9982", "10.1063/1.472933"},
-    {"perdew2009", "article",
-     "J. P. Perdew, A. Ruzsinszky, G. I. Csonka, L. A. Constantin and J. Sun",
-     "Workhorse semilocal density functional for condensed matter physics and "
-     "quantum chemistry",
-     "Phys. Rev. Lett.", 2009, "103", "026403",
-     "10.1103/PhysRevLett.103.026403"},
-    {"mann2000", "article", "J. B. Mann, T. L. Meek and L. C. Allen",
-     "Configuration energies of the main group elements", "J. Am. Chem. Soc.",
-     2000, "122", "2780", "10.1021/ja992866e"},
+    {.key = "kohn1965",
+     .kind = "article",
+     .authors = CITATION_NAMES("W. Kohn", "L. J. Sham"),
+     .title =
+         "Self-consistent equations including exchange and correlation effects",
+     .container = "Physical Review",
+     .year = 1965,
+     .volume = "140",
+     .pages = "A1133",
+     .doi = "10.1103/PhysRev.140.A1133",
+     .from_memory = "title, volume, pages, doi"},
+    {.key = "macdonald1979",
+     .kind = "article",
+     .authors = CITATION_NAMES("A. H. MacDonald", "S. H. Vosko"),
+     .title = "A relativistic density functional formalism",
+     .container = "Journal of Physics C",
+     .year = 1979,
+     .volume = "12",
+     .pages = "2977",
+     .doi = "10.1088/0022-3719/12/15/007",
+     .from_memory = "title, volume, pages, doi"},
+    {.key = "vosko1980",
+     .kind = "article",
+     .authors = CITATION_NAMES("S. H. Vosko", "L. Wilk", "M. Nusair"),
+     .title = "Accurate spin-dependent electron liquid correlation energies "
+              "for local spin density calculations: a critical analysis",
+     .container = "Canadian Journal of Physics",
+     .year = 1980,
+     .volume = "58",
+     .pages = "1200",
+     .doi = "10.1139/p80-159",
+     .from_memory = "title, volume, pages, doi"},
+    {.key = "perdew1996",
+     .kind = "article",
+     .authors = CITATION_NAMES("J. P. Perdew", "K. Burke", "M. Ernzerhof"),
+     .title = "Generalized gradient approximation made simple",
+     .container = "Physical Review Letters",
+     .year = 1996,
+     .volume = "77",
+     .pages = "3865",
+     .doi = "10.1103/PhysRevLett.77.3865",
+     .from_memory = "title, volume, pages, doi"},
+    {.key = "perdew1996b",
+     .kind = "article",
+     .authors = CITATION_NAMES("J. P. Perdew", "M. Ernzerhof", "K. Burke"),
+     .title = "Rationale for mixing exact exchange with density functional "
+              "approximations",
+     .container = "Journal of Chemical Physics",
+     .year = 1996,
+     .volume = "105",
+     .pages = "9982",
+     .doi = "10.1063/1.472933",
+     .from_memory = "title, volume, pages, doi"},
+    {.key = "perdew2009",
+     .kind = "article",
+     .authors = CITATION_NAMES("J. P. Perdew", "A. Ruzsinszky", "G. I. Csonka",
+                               "L. A. Constantin", "J. Sun"),
+     .title = "Workhorse semilocal density functional for condensed matter "
+              "physics and quantum chemistry",
+     .container = "Physical Review Letters",
+     .year = 2009,
+     .volume = "103",
+     .pages = "026403",
+     .doi = "10.1103/PhysRevLett.103.026403",
+     .from_memory = "title, volume, pages, doi"},
+    CITATION_MANN_2000_MAIN,
 };
 
 #define PROVENANCE(what, count)                                                \
     {                                                                          \
-        true, "scf", "self-consistent Kohn-Sham atom", what, citations, count  \
+        .computed = true, .id = "scf",                                         \
+        .title = "self-consistent Kohn-Sham atom", .definition = (what),       \
+        .citations = citations, .citation_count = (count)                      \
     }
 enum {
     SOURCES_DENSITY = 3,

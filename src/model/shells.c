@@ -7,14 +7,11 @@
 #include "model/models.h"
 #include "model/rule.h"
 
-static const struct citation citations[] = {
-    {"shell_counting", "misc", "common practice, no source",
-     "Shell counting by Gauss's law", NULL, 0, NULL, NULL, NULL},
-};
-
 #define PROVENANCE(what)                                                       \
     {                                                                          \
-        true, "shells", "Shell counting by Gauss's law", what, citations, 1    \
+        .computed = true, .id = "shells",                                      \
+        .title = "Shell counting by Gauss's law", .definition = (what),        \
+        .unsourced = "common practice, no source"                              \
     }
 
 static const struct model_offer offers[RULE_OFFERS] = {

@@ -1,6 +1,7 @@
 /* SPDX-License-Identifier: MIT */
 /* The calculation behind the 1963 exponents, solved live (zeta/zeta.h). */
 #include "base/units.h"
+#include "model/citations.h"
 #include "model/models.h"
 #include "model/rule.h"
 #include "zeta/zeta.h"
@@ -11,29 +12,39 @@
 #define Z_LAST 103
 
 static const struct citation citations[] = {
-    {"clementi1963", "article", "E. Clementi and D. L. Raimondi",
-     "Atomic Screening Constants from SCF Functions", "J. Chem. Phys.", 1963,
-     "38", "2686", "10.1063/1.1733573"},
-    {"koopmans1934", "article", "T. Koopmans",
-     "Über die Zuordnung von Wellenfunktionen und Eigenwerten zu den einzelnen "
-     "Elektronen eines Atoms",
-     "Physica", 1934, "1", "104", "10.1016/S0031-8914(34)90011-2"},
+    CITATION_CLEMENTI_1963,
+    {.key = "koopmans1934",
+     .kind = "article",
+     .authors = CITATION_NAMES("T. Koopmans"),
+     .title = "Über die Zuordnung von Wellenfunktionen und Eigenwerten zu den "
+              "einzelnen Elektronen eines Atoms",
+     .container = "Physica",
+     .year = 1934,
+     .volume = "1",
+     .pages = "104",
+     .doi = "10.1016/S0031-8914(34)90011-2",
+     .from_memory = "title, container, volume, pages"},
 };
 
 /* The energy of the average of configuration goes back to this book; the
  * record says in an export which of the two energies a number belongs to. */
 static const struct citation average_citations[] = {
-    {"slater1960", "book", "J. C. Slater",
-     "Quantum Theory of Atomic Structure, vol. 1 (average of configuration)",
-     "McGraw-Hill", 1960, NULL, NULL, NULL},
-    {"clementi1963", "article", "E. Clementi and D. L. Raimondi",
-     "Atomic Screening Constants from SCF Functions", "J. Chem. Phys.", 1963,
-     "38", "2686", "10.1063/1.1733573"},
+    {.key = "slater1960",
+     .kind = "book",
+     .authors = CITATION_NAMES("J. C. Slater"),
+     .title = "Quantum Theory of Atomic Structure, vol. 1 (average of "
+              "configuration)",
+     .container = "McGraw-Hill",
+     .year = 1960,
+     .from_memory = "title, container"},
+    CITATION_CLEMENTI_1963,
 };
 
 #define PROVENANCE(what, cited, count)                                         \
     {                                                                          \
-        true, "single-zeta", "single-zeta Hartree-Fock", what, cited, count    \
+        .computed = true, .id = "single-zeta",                                 \
+        .title = "single-zeta Hartree-Fock", .definition = (what),             \
+        .citations = (cited), .citation_count = (count)                        \
     }
 
 enum { OFFER_ZEFF, OFFER_RADIUS, OFFER_IONIZATION, OFFER_COUNT };

@@ -4,6 +4,7 @@
 #include "model/slater.h"
 
 #include "base/units.h"
+#include "model/citations.h"
 #include "model/models.h"
 #include "model/rule.h"
 
@@ -13,19 +14,25 @@
 #define N_EXTENDED 7    /* n* given here, but not by Slater */
 
 static const struct citation citations[] = {
-    {"slater1930", "article", "J. C. Slater", "Atomic Shielding Constants",
-     "Phys. Rev.", 1930, "36", "57", "10.1103/PhysRev.36.57"},
-    {"allred1958", "article", "A. L. Allred and E. G. Rochow",
-     "A scale of electronegativity based on electrostatic force",
-     "J. Inorg. Nucl. Chem.", 1958, "5", "264", "10.1016/0022-1902(58)80003-2"},
-    {"pyykko2009", "article", "P. Pyykko and M. Atsumi",
-     "Molecular single-bond covalent radii for elements 1-118", "Chem. Eur. J.",
-     2009, "15", "186", "10.1002/chem.200800987"},
+    {.key = "slater1930",
+     .kind = "article",
+     .authors = CITATION_NAMES("J. C. Slater"),
+     .title = "Atomic shielding constants",
+     .container = "Physical Review",
+     .year = 1930,
+     .volume = "36",
+     .pages = "57",
+     .doi = "10.1103/PhysRev.36.57",
+     .from_memory = "title"},
+    CITATION_ALLRED_1958,
+    CITATION_PYYKKO_2009,
 };
 
 #define PROVENANCE(what, count)                                                \
     {                                                                          \
-        true, "slater", "Slater's rules", what, citations, count               \
+        .computed = true, .id = "slater", .title = "Slater's rules",           \
+        .definition = (what), .citations = citations,                          \
+        .citation_count = (count)                                              \
     }
 
 enum {

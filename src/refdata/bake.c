@@ -51,24 +51,58 @@ static void put_strings(FILE *out, const struct dataset *set, size_t i)
     fprintf(out, "\n};\n");
 }
 
+/* A list of names as an array of its own; nothing for NULL. */
+static void put_names(FILE *out, const char *kind, const char *const *names,
+                      size_t i, int k)
+{
+    if (!names)
+        return;
+    fprintf(out, "static const char *const %s_%zu_%d[] = {", kind, i, k);
+    for (; *names; names++) {
+        put_string(out, *names);
+        fputs(", ", out);
+    }
+    fputs("NULL};\n", out);
+}
+
+static void put_citation(FILE *out, const struct citation *c, size_t i, int k)
+{
+    const struct {
+        const char *name, *text;
+    } texts[] = {
+        {"key", c->key},
+        {"kind", c->kind},
+        {"title", c->title},
+        {"container", c->container},
+        {"volume", c->volume},
+        {"pages", c->pages},
+        {"doi", c->doi},
+        {"note", c->note},
+        {"from_memory", c->from_memory},
+        {"not_known", c->not_known},
+    };
+    fprintf(out, "{.year = %d", c->year);
+    if (c->authors)
+        fprintf(out, ", .authors = authors_%zu_%d", i, k);
+    if (c->organizations)
+        fprintf(out, ", .organizations = organizations_%zu_%d", i, k);
+    for (size_t t = 0; t < sizeof texts / sizeof *texts; t++) {
+        fprintf(out, ", .%s = ", texts[t].name);
+        put_string(out, texts[t].text);
+    }
+    fprintf(out, "},\n");
+}
+
 static void put_citations(FILE *out, const struct dataset *set, size_t i)
 {
-    fprintf(out, "static const struct citation citations_%zu[] = {\n", i);
-    for (int k = 0; k < set->provenance.citation_count; k++) {
-        const struct citation *c = &set->provenance.citations[k];
-        const char *const texts[] = {c->key,   c->kind,      c->authors,
-                                     c->title, c->container, c->volume,
-                                     c->pages, c->doi};
-        static const char *const names[] = {"key",   "kind",      "authors",
-                                            "title", "container", "volume",
-                                            "pages", "doi"};
-        fprintf(out, "{.year = %d", c->year);
-        for (size_t t = 0; t < sizeof texts / sizeof *texts; t++) {
-            fprintf(out, ", .%s = ", names[t]);
-            put_string(out, texts[t]);
-        }
-        fprintf(out, "},\n");
+    const struct provenance *p = &set->provenance;
+    for (int k = 0; k < p->citation_count; k++) {
+        put_names(out, "authors", p->citations[k].authors, i, k);
+        put_names(out, "organizations", p->citations[k].organizations, i, k);
     }
+    fprintf(out, "static const struct citation citations_%zu[] = {\n", i);
+    for (int k = 0; k < p->citation_count; k++)
+        put_citation(out, &p->citations[k], i, k);
     fprintf(out, "};\n");
 }
 

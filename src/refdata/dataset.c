@@ -171,15 +171,28 @@ static struct number in_base(struct number n, double per_base)
     return number_round(n.value * power, 1, places);
 }
 
+/* The one work that an entry rests on, NULL for all of the set. That there is
+ * no entry rests, in a set whose entries name their works, on the first. */
+static const struct citation *cited_of(const struct dataset *set,
+                                       const struct entry *entry)
+{
+    int source = entry            ? entry->source
+                 : set->count > 0 ? set->values[0].source != 0
+                                  : 0;
+    return source ? &set->provenance.citations[source - 1] : NULL;
+}
+
 struct reading dataset_entry_reading(const struct dataset *set,
                                      const struct entry *entry)
 {
-    if (!entry)
-        return reading_gap(set->quantity, READING_MISSING, set->absent,
-                           &set->provenance);
-    if (entry->gap != GAP_NONE)
-        return reading_gap(set->quantity, READING_MISSING,
-                           dataset_text(set, entry->note), &set->provenance);
+    if (!entry || entry->gap != GAP_NONE) {
+        struct reading gap =
+            reading_gap(set->quantity, READING_MISSING,
+                        entry ? dataset_text(set, entry->note) : set->absent,
+                        &set->provenance);
+        gap.cited = cited_of(set, entry);
+        return gap;
+    }
     struct reading r = {
         .state = READING_OK,
         .quantity = set->quantity,
@@ -189,6 +202,7 @@ struct reading dataset_entry_reading(const struct dataset *set,
         .u = entry->u,
         .has_u = entry->has_u,
         .provenance = &set->provenance,
+        .cited = cited_of(set, entry),
         .reason = "",
         .remark = dataset_text(set, entry->remark),
         .evidence = (enum evidence)entry->evidence,

@@ -127,7 +127,7 @@ struct entry {
     uint8_t spin;
     uint8_t evidence;
     uint8_t gap;
-    uint8_t source; /* index into the data set's citations */
+    uint8_t source; /* its citation, 1 for the set's first; 0: all of them */
     bool has_u;
     bool preferred;
 };

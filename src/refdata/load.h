@@ -50,6 +50,13 @@ bool load_entry_context(struct load *ld, const cJSON *object, int place);
 void load_index(struct dataset *set, int count, int (*z_of)(const void *row),
                 const void *rows, size_t row_size);
 
+/* The citations of the set, from ld->root. */
+bool load_citations(struct load *ld);
+
+/* Whether an id is in order; else a failed status that says what was
+ * expected. */
+bool load_check_id(const char *id, const char *what, struct status *st);
+
 /* A copied text member; *out stays as it is when the key is absent. */
 bool load_member(struct load *ld, const cJSON *object, const char *key,
                  const char **out);

@@ -178,14 +178,15 @@ static bool load_source(struct load *ld, const cJSON *object, struct entry *e)
     const struct provenance *p = &ld->out->set.provenance;
     const char *key = object_text(object, "source");
     int i = 0;
-    while (key && i < p->citation_count &&
-           strcmp(p->citations[i].key, key) != 0)
+    if (!key)
+        return true;
+    while (i < p->citation_count && strcmp(p->citations[i].key, key) != 0)
         i++;
     if (i == p->citation_count)
         return status_fail(ld->st, STATUS_DATA,
                            "source '%s': expected the key of a citation",
                            quoted(key).text);
-    e->source = (uint8_t)i;
+    e->source = (uint8_t)(i + 1);
     return true;
 }
 
@@ -205,8 +206,7 @@ static bool compose_remark(struct load *ld, const cJSON *object,
     const struct dataset *set = &ld->out->set;
     const char *variant = object_text(object, "variant");
     const char *note = object_text(object, "note");
-    char line[4 * FIELD_TEXT_MAX];
-    struct text t = text_over(line, sizeof line);
+    struct text t = text_growing();
     add_part(&t, "", variant ? variant : "");
     add_part(&t, "coordination ",
              coordination_id((enum coordination)e->coordination));
@@ -219,9 +219,12 @@ static bool compose_remark(struct load *ld, const cJSON *object,
         if (e->marks >> i & 1 && strcmp(set->marks[i].meaning, kind) != 0)
             add_part(&t, "", set->marks[i].meaning);
     add_part(&t, "", note ? note : "");
-    return load_text(ld, object, "variant", &e->variant) &&
-           load_text(ld, object, "note", &e->note) &&
-           pool_add(&ld->pool, line, &e->remark, ld->st);
+    bool ok = !t.cut || status_fail(ld->st, STATUS_MEMORY, "out of memory");
+    ok = ok && load_text(ld, object, "variant", &e->variant) &&
+         load_text(ld, object, "note", &e->note) &&
+         pool_add(&ld->pool, t.data, &e->remark, ld->st);
+    text_free(&t);
+    return ok;
 }
 
 static bool load_value_entry(struct load *ld, const cJSON *object,
@@ -349,8 +352,15 @@ bool load_values(struct load *ld, const cJSON *entries)
     if (!all)
         return status_fail(ld->st, STATUS_MEMORY, "out of memory");
     bool ok = place_values(ld, entries, all, count);
+    /* Where some entries name their source, the others rest on the first. */
+    bool named = false;
     for (int i = 0; ok && i < count; i++)
+        named = named || all[i].e.source != 0;
+    for (int i = 0; ok && i < count; i++) {
         values[i] = all[i].e;
+        if (named && values[i].source == 0)
+            values[i].source = 1;
+    }
     free(all);
     ld->out->set.values = values;
     if (ok)

@@ -37,14 +37,6 @@ static const struct field root_fields[] = {
 #define ROOT_FIELD_COUNT (sizeof root_fields / sizeof root_fields[0])
 #define VALUES_ONLY_FROM 9
 
-static const struct field citation_fields[] = {
-    {"key", FIELD_TEXT, true},        {"type", FIELD_TEXT, true},
-    {"authors", FIELD_TEXTS, false},  {"title", FIELD_TEXT, false},
-    {"container", FIELD_TEXT, false}, {"year", FIELD_INTEGER, false},
-    {"volume", FIELD_TEXT, false},    {"pages", FIELD_TEXT, false},
-    {"doi", FIELD_TEXT, false},
-};
-
 static const struct field mark_fields[] = {
     {"id", FIELD_TEXT, true},
     {"meaning", FIELD_TEXT, true},
@@ -52,16 +44,12 @@ static const struct field mark_fields[] = {
 
 #define FIELD_COUNT(fields) (sizeof(fields) / sizeof(fields)[0])
 
-/* Publication years that are not a slip of the keyboard. */
-#define YEAR_MIN 1800
-#define YEAR_MAX 2100
-#define CITATIONS_MAX 100
 #define NOTES_MAX 100
 #define ID_BYTES_MAX 48
 
 static const char id_characters[] = "abcdefghijklmnopqrstuvwxyz0123456789_-.";
 
-static bool check_id(const char *id, const char *what, struct status *st)
+bool load_check_id(const char *id, const char *what, struct status *st)
 {
     if (strlen(id) <= ID_BYTES_MAX && id[strspn(id, id_characters)] == '\0' &&
         id[0] >= 'a' && id[0] <= 'z')
@@ -70,75 +58,6 @@ static bool check_id(const char *id, const char *what, struct status *st)
                        "%s '%s': expected a letter and then letters, digits, "
                        "'_', '-' or '.', all lower case, at most %d",
                        what, quoted(id).text, ID_BYTES_MAX);
-}
-
-static bool load_citation(struct load *ld, const cJSON *object, bool first,
-                          struct citation *c)
-{
-    if (!object_check(object, citation_fields, FIELD_COUNT(citation_fields),
-                      ld->st))
-        return false;
-    static const char *const types[] = {"article", "book", "incollection",
-                                        "techreport", "misc"};
-    int type;
-    const char *key = object_text(object, "key");
-    if (!check_id(key, "key", ld->st) ||
-        !load_word(ld, object, "type", types, FIELD_COUNT(types), &type))
-        return false;
-    c->kind = types[type];
-    c->year = object_integer(object, "year", 0);
-    if (object_member(object, "year") &&
-        (c->year < YEAR_MIN || c->year > YEAR_MAX))
-        return status_fail(ld->st, STATUS_DATA,
-                           "year %d: expected one from %d to %d", c->year,
-                           YEAR_MIN, YEAR_MAX);
-    /* A table that goes from hand to hand can be without a year. */
-    bool needs_year = strcmp(c->kind, "misc") != 0;
-    if (first &&
-        (!object_member(object, "authors") || !object_member(object, "title") ||
-         (needs_year && c->year == 0)))
-        return status_fail(ld->st, STATUS_DATA,
-                           "the first citation needs authors, title and, "
-                           "unless it is misc, year");
-    if (!object_member(object, "title") && !object_member(object, "container"))
-        return status_fail(ld->st, STATUS_DATA,
-                           "a title or a container is needed");
-    return load_member(ld, object, "key", &c->key) &&
-           load_list(ld, object, "authors", " and ", &c->authors) &&
-           load_member(ld, object, "title", &c->title) &&
-           load_member(ld, object, "container", &c->container) &&
-           load_member(ld, object, "volume", &c->volume) &&
-           load_member(ld, object, "pages", &c->pages) &&
-           load_member(ld, object, "doi", &c->doi);
-}
-
-static bool load_citations(struct load *ld)
-{
-    const cJSON *list = object_member(ld->root, "citations");
-    int count = cJSON_GetArraySize(list);
-    if (count > CITATIONS_MAX)
-        return status_fail(ld->st, STATUS_DATA, "citations: more than %d",
-                           CITATIONS_MAX);
-    struct citation *citations =
-        arena_array(&ld->out->arena, (size_t)count, sizeof *citations, ld->st);
-    if (!citations)
-        return false;
-    int place = 0;
-    const cJSON *object;
-    cJSON_ArrayForEach(object, list)
-    {
-        struct citation *c = &citations[place++];
-        bool ok = load_citation(ld, object, place == 1, c);
-        for (int i = 0; ok && i < place - 1; i++)
-            if (strcmp(citations[i].key, c->key) == 0)
-                ok = status_fail(ld->st, STATUS_DATA,
-                                 "key '%s' stands there twice", c->key);
-        if (!ok)
-            return status_context(ld->st, "citation %d", place);
-    }
-    ld->out->set.provenance.citations = citations;
-    ld->out->set.provenance.citation_count = count;
-    return true;
 }
 
 static bool load_notes(struct load *ld)
@@ -329,7 +248,7 @@ static bool load_entries(struct load *ld)
 static bool load_checked_root(struct load *ld)
 {
     return object_check(ld->root, root_fields, ROOT_FIELD_COUNT, ld->st) &&
-           check_id(object_text(ld->root, "id"), "id", ld->st) &&
+           load_check_id(object_text(ld->root, "id"), "id", ld->st) &&
            load_member(ld, ld->root, "id", &ld->out->set.provenance.id) &&
            load_head(ld) && load_entries(ld);
 }
@@ -342,7 +261,8 @@ static bool load_root(struct load *ld)
     /* Even a wrong file may say which set it wants to be. */
     const cJSON *id =
         cJSON_IsObject(ld->root) ? object_member(ld->root, "id") : NULL;
-    if (id && cJSON_IsString(id) && check_id(id->valuestring, "id", &unused))
+    if (id && cJSON_IsString(id) &&
+        load_check_id(id->valuestring, "id", &unused))
         return status_context(ld->st, "set %s", id->valuestring);
     return false;
 }

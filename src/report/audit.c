@@ -481,7 +481,9 @@ void report_audit(struct report *report, unsigned parts,
         report_legends(report);
     }
     for (int i = 0; i < audit->count && (parts & REPORT_SOURCES); i++) {
-        report_source(report, audit->series[i].value);
-        report_source(report, audit->series[i].reference);
+        report_source(report,
+                      (struct cited_source){audit->series[i].value, NULL});
+        report_source(report,
+                      (struct cited_source){audit->series[i].reference, NULL});
     }
 }

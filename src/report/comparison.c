@@ -161,9 +161,18 @@ static void put_abundance(const void *record, struct text *t)
     put_fact(record, "abundance", t);
 }
 
-static const struct provenance *citation(const void *record)
+/* A disagreement rests on what both of its readings rest on. */
+static void put_citation(const void *record, struct text *t)
 {
-    return ((const struct record *)record)->line->provenance;
+    const struct record *r = record;
+    struct reading pair[2];
+    if (!comparison_pair_readings(r->comparison, r->line, r->which, pair)) {
+        cited_text(t, reading_cited(r->reading), CITATION_SHORT);
+        return;
+    }
+    cited_text(t, reading_cited(&pair[0]), CITATION_SHORT);
+    text_add(t, "; ");
+    cited_text(t, reading_cited(&pair[1]), CITATION_SHORT);
 }
 
 static void put_version(const void *record, struct text *t)
@@ -193,7 +202,7 @@ static const struct report_column columns[] = {
     {"caution", COLUMN_TEXT, .put = put_caution},
     {"supply", COLUMN_TEXT, .put = put_supply},
     {"abundance", COLUMN_TEXT, .put = put_abundance},
-    {"source", COLUMN_TEXT, .source = citation},
+    {"source", COLUMN_TEXT, .put = put_citation},
     {"version", COLUMN_TEXT, .put = put_version},
 };
 
@@ -360,5 +369,6 @@ void report_comparison(struct report *report, unsigned parts,
     if (parts & REPORT_BLOCKS)
         add_blocks(report, c);
     for (int i = 0; i < c->line_count && (parts & REPORT_SOURCES); i++)
-        report_source(report, c->lines[i].provenance);
+        for (int w = 0; w < c->count; w++)
+            report_source(report, reading_cited(&c->lines[i].readings[w]));
 }

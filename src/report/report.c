@@ -134,12 +134,13 @@ void report_member(struct report *report, const char *key,
     va_end(args);
 }
 
-void report_source(struct report *report, const struct provenance *source)
+void report_source(struct report *report, struct cited_source source)
 {
-    if (!source)
+    if (!source.provenance)
         return;
     for (size_t i = 0; i < report->source_count; i++)
-        if (report->sources[i] == source)
+        if (report->sources[i].provenance == source.provenance &&
+            report->sources[i].only == source.only)
             return;
     if (grow(report, &report->sources, report->source_count,
              &report->source_capacity, sizeof *report->sources))

@@ -24,7 +24,7 @@ enum column_kind { COLUMN_TEXT, COLUMN_NUMBER, COLUMN_TRUTH };
 
 /* One field of every record. id: heading in CSV, key in JSON. put writes the
  * field of a record, nothing where there is none. A column with `source` holds
- * the citations of what that gives (NULL: an empty field) in place of put; its
+ * the citations of what that gives (nothing: an empty field) in place of put; its
  * text is made once for each source. repeats: the field is the same in
  * neighbouring records for which the records' same_group holds. json_only: left
  * out of CSV. */
@@ -32,7 +32,7 @@ struct report_column {
     const char *id;
     enum column_kind kind;
     void (*put)(const void *record, struct text *t);
-    const struct provenance *(*source)(const void *record);
+    struct cited_source (*source)(const void *record);
     bool repeats;
     bool json_only;
 };
@@ -126,7 +126,7 @@ struct report {
     size_t note_count, note_capacity;
     struct report_note *notes;
     size_t source_count, source_capacity;
-    const struct provenance **sources;
+    struct cited_source *sources;
     struct report_store *store;
     bool failed;
 };
@@ -146,9 +146,9 @@ void report_member(struct report *report, const char *key,
                    enum column_kind kind, const char *format, ...)
     PRINTF_LIKE(4, 5);
 
-/* Adds a source, each once in the order of their first use; NULL is passed
+/* Adds a source, each once in the order of their first use; nothing is passed
  * over. */
-void report_source(struct report *report, const struct provenance *source);
+void report_source(struct report *report, struct cited_source source);
 
 void report_gap(struct report *report);
 void report_line(struct report *report, const char *text);

@@ -189,19 +189,19 @@ static void put_reference_remark(const void *record, struct text *t)
     text_add(t, ((const struct row *)record)->reference.remark);
 }
 
-static const struct provenance *model_source(const void *record)
+static struct cited_source model_source(const void *record)
 {
-    return ((const struct row *)record)->value.provenance;
+    return reading_cited(&((const struct row *)record)->value);
 }
 
-static const struct provenance *reference_source(const void *record)
+static struct cited_source reference_source(const void *record)
 {
-    return ((const struct row *)record)->reference.provenance;
+    return reading_cited(&((const struct row *)record)->reference);
 }
 
-static const struct provenance *against_source(const void *record)
+static struct cited_source against_source(const void *record)
 {
-    return ((const struct row *)record)->against.provenance;
+    return reading_cited(&((const struct row *)record)->against);
 }
 
 #define TEXT .kind = COLUMN_TEXT
@@ -426,8 +426,8 @@ void report_rows(struct report *report, unsigned parts, const struct row *rows,
     if (parts & REPORT_BLOCKS)
         add_blocks(report, rows, count, shown);
     for (size_t i = 0; i < count && (parts & REPORT_SOURCES); i++) {
-        report_source(report, rows[i].value.provenance);
-        report_source(report, rows[i].reference.provenance);
-        report_source(report, rows[i].against.provenance);
+        report_source(report, reading_cited(&rows[i].value));
+        report_source(report, reading_cited(&rows[i].reference));
+        report_source(report, reading_cited(&rows[i].against));
     }
 }

@@ -381,7 +381,7 @@ void report_solved(struct report *report, unsigned parts,
     if (parts & REPORT_RECORDS)
         add_members(report, atom);
     if (parts & REPORT_SOURCES)
-        report_source(report, source);
+        report_source(report, (struct cited_source){source, NULL});
     if (!(parts & REPORT_BLOCKS))
         return;
     add_head(report, atom);

@@ -11,6 +11,12 @@ static const struct provenance *provenance_of(const void *record)
     return ((const struct source *)record)->provenance;
 }
 
+static void put_source(const void *record, struct text *t)
+{
+    cited_text(t, (struct cited_source){provenance_of(record), NULL},
+               CITATION_FULL);
+}
+
 static void put_kind(const void *record, struct text *t)
 {
     text_add(t, provenance_of(record)->computed ? "model" : "data set");
@@ -68,7 +74,7 @@ static const struct report_column columns[] = {
     {"unit", COLUMN_TEXT, .put = put_unit},
     {"values", COLUMN_NUMBER, .put = put_values},
     {"terms", COLUMN_TEXT, .put = put_terms},
-    {"source", COLUMN_TEXT, .source = provenance_of},
+    {"source", COLUMN_TEXT, .put = put_source},
     {"notes", COLUMN_TEXT, .put = put_notes},
 };
 
@@ -100,9 +106,11 @@ static void add_content(struct report *report, const struct source *s)
 static void add_citations(struct report *report, const struct provenance *p)
 {
     struct text t = text_growing();
+    if (p->unsourced)
+        add_words(report, "source:", p->unsourced);
     for (int i = 0; i < p->citation_count; i++) {
         text_empty(&t);
-        citation_text(&t, &p->citations[i]);
+        citation_text(&t, &p->citations[i], CITATION_FULL);
         report->failed = report->failed || t.cut;
         add_words(report, "source:", t.data);
     }
@@ -146,5 +154,6 @@ void report_sources(struct report *report, unsigned parts,
     if (parts & REPORT_BLOCKS)
         add_blocks(report, sources, count);
     for (int i = 0; i < count && (parts & REPORT_SOURCES); i++)
-        report_source(report, sources[i].provenance);
+        report_source(report,
+                      (struct cited_source){sources[i].provenance, NULL});
 }

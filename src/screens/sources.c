@@ -10,12 +10,11 @@
 
 static void flow_source(struct flow *flow, const struct source *s)
 {
-    char line[1024];
     const struct provenance *p = s->provenance;
-    struct text t = text_over(line, sizeof line);
+    struct text t = text_growing();
     text_addf(&t, "%s  %s", p->id, p->title);
-    flow_text(flow, ROLE_HEADING, 0, line);
-    t = text_over(line, sizeof line);
+    flow_text(flow, ROLE_HEADING, 0, t.data);
+    text_empty(&t);
     text_addf(&t, "%s for %s", p->computed ? "model" : "data set", s->quantity);
     if (s->unit && s->unit[0])
         text_addf(&t, " in %s", s->unit);
@@ -23,15 +22,18 @@ static void flow_source(struct flow *flow, const struct source *s)
         text_addf(&t, ", %d values", s->count);
     if (s->domain && s->domain[0])
         text_addf(&t, "; %s", s->domain);
-    flow_text(flow, ROLE_TEXT, 2, line);
+    flow_text(flow, ROLE_TEXT, 2, t.data);
+    if (p->unsourced)
+        flow_text(flow, ROLE_TEXT, 2, p->unsourced);
     for (int i = 0; i < p->citation_count; i++) {
-        t = text_over(line, sizeof line);
-        citation_text(&t, &p->citations[i]);
-        flow_text(flow, ROLE_TEXT, 2, line);
+        text_empty(&t);
+        citation_text(&t, &p->citations[i], CITATION_FULL);
+        flow_text(flow, ROLE_TEXT, 2, t.data);
     }
     for (int i = 0; i < s->note_count; i++)
         flow_text(flow, ROLE_QUIET, 4, s->notes[i]);
     flow_blank(flow);
+    text_free(&t);
 }
 
 struct sources_state {

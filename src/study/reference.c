@@ -66,8 +66,10 @@ static void set_derived(struct reference_list *list, int place)
         .title = d->title,
         .definition = d->definition,
         .citations = source->citations,
+        .unsourced = d->unsourced,
     };
-    add_citation(source, d->citation);
+    if (d->citation)
+        add_citation(source, d->citation);
     for (int charge = 0; charge <= 1; charge++) {
         struct derivation_input inputs[DERIVATION_INPUTS_MAX];
         const char *reason = "";
@@ -76,6 +78,9 @@ static void set_derived(struct reference_list *list, int place)
             const struct dataset *set = list->firsts[inputs[i].quantity];
             for (int c = 0; set && c < set->provenance.citation_count; c++)
                 add_citation(source, &set->provenance.citations[c]);
+            /* What every value rests on; of a second set each names its own. */
+            if (source->provenance.common == 0)
+                source->provenance.common = source->provenance.citation_count;
         }
     }
 }
@@ -171,6 +176,24 @@ static struct reading read_input(const struct reference *reference,
                              "no set holds what it follows from", NULL);
 }
 
+/* The work that a derived value rests on beside those of every value: the one
+ * that an input names as its own; where no input names one, none (then the
+ * first, which all rest on). NULL where an input rests on all of its set. */
+static const struct citation *
+own_work(const struct provenance *p, const struct reading *readings, int count)
+{
+    const struct citation *own = p->citations;
+    for (int i = 0; i < count; i++) {
+        const struct citation *cited = readings[i].cited;
+        if (!cited && readings[i].provenance->citation_count > 1)
+            return NULL;
+        for (int c = p->common; cited && c < p->citation_count; c++)
+            if (strcmp(p->citations[c].key, cited->key) == 0)
+                own = &p->citations[c];
+    }
+    return own;
+}
+
 static struct reading derive(const struct reference *reference,
                              const struct species *species,
                              const struct subshell *asked)
@@ -196,6 +219,7 @@ static struct reading derive(const struct reference *reference,
     struct reading r =
         derivation_reading(d, readings, count, d->of_emptied ? asked->n : 0,
                            reference->provenance);
+    r.cited = own_work(reference->provenance, readings, count);
     if (d->of_emptied) {
         r.n = asked->n;
         r.l = asked->l;

@@ -7,7 +7,7 @@
 #define SOURCES_KEPT 32 /* citations remembered at once, the oldest goes */
 
 struct kept_source {
-    const struct provenance *source;
+    struct cited_source source;
     struct text encoded;
 };
 
@@ -90,10 +90,11 @@ void fields_record(struct fields *f, size_t i)
 
 /* The citations of a source, encoded. */
 static const struct text *source_text(struct fields *f,
-                                      const struct provenance *source)
+                                      struct cited_source source)
 {
     for (int i = 0; i < f->source_count; i++)
-        if (f->sources[i].source == source)
+        if (f->sources[i].source.provenance == source.provenance &&
+            f->sources[i].source.only == source.only)
             return &f->sources[i].encoded;
     struct kept_source *kept = &f->sources[f->source_next];
     if (f->source_count < SOURCES_KEPT) {
@@ -103,7 +104,7 @@ static const struct text *source_text(struct fields *f,
     f->source_next = (f->source_next + 1) % SOURCES_KEPT;
     kept->source = source;
     text_empty(&kept->encoded);
-    provenance_text(&kept->encoded, source);
+    cited_text(&kept->encoded, source, CITATION_SHORT);
     f->encode(&kept->encoded, 0, &f->scratch);
     f->failed = f->failed || kept->encoded.cut;
     return &kept->encoded;
@@ -117,8 +118,8 @@ void fields_append(struct fields *f, int column, struct text *line)
     if (c->repeats) {
         made = &f->shared[column];
     } else if (c->source) {
-        const struct provenance *source = c->source(f->record);
-        if (source)
+        struct cited_source source = c->source(f->record);
+        if (source.provenance)
             made = source_text(f, source);
         else
             f->encode(line, line->length, &f->scratch);

@@ -12,18 +12,22 @@
 #include "support/near.h"
 #include "support/run.h"
 
-static const struct provenance rule = {true, "rule", "", &definition_covalent,
-                                       NULL, 0};
-static const struct provenance same = {false, "same", "", &definition_covalent,
-                                       NULL,  0};
+static const struct provenance rule = {.computed = true,
+                                       .id = "rule",
+                                       .title = "",
+                                       .definition = &definition_covalent};
+static const struct provenance same = {
+    .id = "same", .title = "", .definition = &definition_covalent};
 static const struct provenance other = {
-    false, "other", "", &definition_metallic_12, NULL, 0};
+    .id = "other", .title = "", .definition = &definition_metallic_12};
 
 /* Scales of electronegativity. */
 static const struct provenance pauling = {
-    false, "pauling", "", &definition_pauling, NULL, 0};
-static const struct provenance allen = {true, "allen", "", &definition_allen,
-                                        NULL, 0};
+    .id = "pauling", .title = "", .definition = &definition_pauling};
+static const struct provenance allen = {.computed = true,
+                                        .id = "allen",
+                                        .title = "",
+                                        .definition = &definition_allen};
 
 static struct reading stored(enum quantity_id q, double value, int decimals,
                              const struct provenance *p)
@@ -265,10 +269,14 @@ static void add_run(struct audit *audit, const struct provenance *model,
 
 START_TEST(an_audit_leaves_one_out_and_ranks_on_common_species)
 {
-    static const struct provenance good = {
-        true, "good", "", &definition_covalent, NULL, 0};
-    static const struct provenance few = {true, "few", "", &definition_covalent,
-                                          NULL, 0};
+    static const struct provenance good = {.computed = true,
+                                           .id = "good",
+                                           .title = "",
+                                           .definition = &definition_covalent};
+    static const struct provenance few = {.computed = true,
+                                          .id = "few",
+                                          .title = "",
+                                          .definition = &definition_covalent};
     struct audit audit = {0};
     struct audit_part all = {AUDIT_ALL, 0};
     struct audit_part d = {AUDIT_BLOCK, 'd'};
@@ -304,10 +312,15 @@ END_TEST
  * calculation no test: neither makes a model best. */
 START_TEST(no_model_is_best_across_unlike_definitions)
 {
-    static const struct provenance near_by = {
-        true, "near", "", &definition_metallic_12, NULL, 0};
-    static const struct provenance copy = {
-        true, "copy", "", &definition_covalent, NULL, 0};
+    static const struct provenance near_by = {.computed = true,
+                                              .id = "near",
+                                              .title = "",
+                                              .definition =
+                                                  &definition_metallic_12};
+    static const struct provenance copy = {.computed = true,
+                                           .id = "copy",
+                                           .title = "",
+                                           .definition = &definition_covalent};
     struct audit audit = {0};
     struct audit_part all = {AUDIT_ALL, 0};
     struct status st = status_ok();

@@ -168,41 +168,6 @@ START_TEST(json_carries_the_fields_of_csv)
 }
 END_TEST
 
-static int entry_keys(const char *text, char keys[][64], int max)
-{
-    int count = 0;
-    for (const char *p = text; (p = strchr(p, '@')) != NULL; p++) {
-        if (p > text && p[-1] != '\n')
-            continue;
-        const char *open = strchr(p, '{');
-        ck_assert_ptr_nonnull(open);
-        ck_assert_int_lt(count, max);
-        snprintf(keys[count++], 64, "%.*s", (int)strcspn(open + 1, ","),
-                 open + 1);
-    }
-    return count;
-}
-
-START_TEST(bibtex_entries_have_unique_keys_and_closed_braces)
-{
-    static char keys[200][64];
-    struct program_result r = done("sources --format bibtex");
-    int count = entry_keys(r.out, keys, 200);
-    int depth = 0;
-    ck_assert_int_gt(count, 10);
-    for (int i = 0; i < count; i++)
-        for (int k = 0; k < i; k++)
-            ck_assert_str_ne(keys[i], keys[k]);
-    for (const char *p = r.out; *p; p++) {
-        bool escaped = p > r.out && p[-1] == '\\';
-        depth += *p == '{' && !escaped ? 1 : *p == '}' && !escaped ? -1 : 0;
-        ck_assert_int_ge(depth, 0);
-    }
-    ck_assert_int_eq(depth, 0);
-    program_free(&r);
-}
-END_TEST
-
 /* A locale with a decimal comma is made for the purpose where that can be
  * done; else the program sees the C locale, as a user there would. */
 START_TEST(no_locale_brings_a_decimal_comma)
@@ -423,7 +388,6 @@ TCase *output_cases(void)
     tcase_add_test(c,
                    csv_has_the_agreed_heading_and_ends_its_lines_as_rfc_4180);
     tcase_add_test(c, json_carries_the_fields_of_csv);
-    tcase_add_test(c, bibtex_entries_have_unique_keys_and_closed_braces);
     tcase_add_test(c, no_locale_brings_a_decimal_comma);
     tcase_add_test(c, the_same_choice_in_other_words_prints_the_same);
     tcase_add_test(

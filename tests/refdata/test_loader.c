@@ -209,10 +209,10 @@ START_TEST(test_a_file_keeps_everything_it_says)
     ck_assert_str_eq(set->provenance.id, "own_2026");
     ck_assert_str_eq(set->provenance.title, "Own radii");
     ck_assert_ptr_eq(set->provenance.definition, &definition_covalent);
-    ck_assert_str_eq(set->provenance.citations[0].authors, "A. Nobody");
+    ck_assert_str_eq(set->provenance.citations[0].authors[0], "A. Nobody");
     ck_assert_int_eq(set->provenance.citations[0].year, 2026);
-    ck_assert_str_eq(set->provenance.citations[e->source].key, "b.1");
-    ck_assert_str_eq(set->provenance.citations[1].doi, "10.1/x");
+    ck_assert_str_eq(set->provenance.citations[e->source - 1].key, "b.1");
+    ck_assert_str_eq(set->provenance.citations[1].doi, "10.1000/x");
     ck_assert_ptr_null(set->provenance.citations[1].title);
     ck_assert_str_eq(set->licence, "own work");
     ck_assert_int_eq(set->note_count, 2);

@@ -194,7 +194,8 @@ START_TEST(every_model_and_data_set_is_a_source_with_a_citation)
     const struct catalogue *all = catalogue_builtin();
     ck_assert_int_lt(count, SOURCES_MAX);
     for (int i = 0; i < count; i++) {
-        ck_assert_int_ge(sources[i].provenance->citation_count, 1);
+        ck_assert(sources[i].provenance->citation_count > 0 ||
+                  sources[i].provenance->unsourced);
         ck_assert(sources[i].provenance->computed ||
                   sources[i].domain[0] != '\0');
     }
@@ -219,6 +220,94 @@ START_TEST(every_model_and_data_set_is_a_source_with_a_citation)
 }
 END_TEST
 
+static bool names(const char *list, const char *field)
+{
+    const char *at = list ? strstr(list, field) : NULL;
+    return at != NULL;
+}
+
+/* ISO 26324: "10.", the registrant, "/", the item. */
+static bool is_doi(const char *doi)
+{
+    size_t digits =
+        strncmp(doi, "10.", 3) == 0 ? strspn(doi + 3, "0123456789") : 0;
+    return digits >= 4 && digits <= 9 && doi[3 + digits] == '/' &&
+           doi[4 + digits] != '\0' && !strpbrk(doi, " {}\\\"<>");
+}
+
+/* Each has author and year and, an article, what finds it, or says that it is
+ * not known; nothing is there that is said not to be known. */
+static void check_record(const struct citation *c)
+{
+    const struct {
+        const char *field;
+        bool there, needed;
+    } fields[] = {
+        {"authors", c->authors || c->organizations, true},
+        {"year", c->year > 0, true},
+        {"title", c->title != NULL, true},
+        {"container", c->container != NULL, strcmp(c->kind, "misc") != 0},
+        {"volume", c->volume || names(c->note, "no volume numbers"),
+         strcmp(c->kind, "article") == 0},
+        {"pages", c->pages != NULL, strcmp(c->kind, "article") == 0},
+    };
+    for (size_t i = 0; i < sizeof fields / sizeof fields[0]; i++) {
+        bool unknown = names(c->not_known, fields[i].field);
+        ck_assert_msg(!fields[i].needed || fields[i].there != unknown, "%s: %s",
+                      c->key, fields[i].field);
+        ck_assert_msg(fields[i].there ||
+                          !names(c->from_memory, fields[i].field),
+                      "%s: %s from memory", c->key, fields[i].field);
+    }
+    ck_assert_msg(!c->doi || is_doi(c->doi), "%s: doi %s", c->key, c->doi);
+    for (int kind = 0; kind < 2; kind++)
+        for (const char *const *n = kind ? c->organizations : c->authors;
+             n && *n; n++)
+            ck_assert_msg(!strstr(*n, " and ") || kind == 1, "%s: %s", c->key,
+                          *n);
+}
+
+static bool same_word(const char *a, const char *b)
+{
+    return a == b || (a && b && strcmp(a, b) == 0);
+}
+
+/* One work has one key and one record, in models and data sets alike. */
+static void check_pair(const struct citation *a, const struct citation *b)
+{
+    bool key = strcmp(a->key, b->key) == 0;
+    bool doi = a->doi && same_word(a->doi, b->doi);
+    ck_assert_msg(!doi || key, "%s and %s: one doi", a->key, b->key);
+    if (!key)
+        return;
+    ck_assert_msg(same_word(a->doi, b->doi) && same_word(a->title, b->title) &&
+                      same_word(a->container, b->container) &&
+                      same_word(a->volume, b->volume) &&
+                      same_word(a->pages, b->pages) &&
+                      same_word(a->note, b->note) &&
+                      same_word(a->from_memory, b->from_memory) &&
+                      same_word(a->not_known, b->not_known) &&
+                      same_word(a->kind, b->kind) && a->year == b->year,
+                  "%s: two records", a->key);
+}
+
+START_TEST(every_citation_is_whole_or_says_what_is_not_known)
+{
+    struct source *sources = calloc(SOURCES_MAX, sizeof *sources);
+    ck_assert_ptr_nonnull(sources);
+    int count = study_sources(study, sources, SOURCES_MAX);
+    for (int i = 0; i < count; i++)
+        for (int c = 0; c < sources[i].provenance->citation_count; c++) {
+            const struct citation *a = &sources[i].provenance->citations[c];
+            check_record(a);
+            for (int j = 0; j <= i; j++)
+                for (int d = 0; d < sources[j].provenance->citation_count; d++)
+                    check_pair(a, &sources[j].provenance->citations[d]);
+        }
+    free(sources);
+}
+END_TEST
+
 int main(void)
 {
     Suite *suite = suite_create("facts");
@@ -232,6 +321,7 @@ int main(void)
     tcase_add_test(c, a_comparison_is_in_the_units_asked_for);
     tcase_add_test(c, a_comparison_of_what_does_not_exist_is_refused);
     tcase_add_test(c, every_model_and_data_set_is_a_source_with_a_citation);
+    tcase_add_test(c, every_citation_is_whole_or_says_what_is_not_known);
     suite_add_tcase(suite, c);
     return run_suite(suite);
 }
