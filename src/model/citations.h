@@ -13,7 +13,7 @@
         .title = "Atomic screening constants from SCF functions",              \
         .container = "Journal of Chemical Physics", .year = 1963,              \
         .volume = "38", .pages = "2686", .doi = "10.1063/1.1733573",           \
-        .from_memory = "title"                                                 \
+        .from_memory = "title, doi"                                            \
     }
 
 #define CITATION_ALLRED_1958                                                   \
@@ -23,7 +23,7 @@
         .title = "A scale of electronegativity based on electrostatic force",  \
         .container = "Journal of Inorganic and Nuclear Chemistry",             \
         .year = 1958, .volume = "5", .pages = "264",                           \
-        .doi = "10.1016/0022-1902(58)80003-2", .from_memory = "title"          \
+        .doi = "10.1016/0022-1902(58)80003-2", .from_memory = "title, doi"     \
     }
 
 #define CITATION_PYYKKO_2009                                                   \
@@ -42,7 +42,7 @@
         .title = "Configuration energies of the main group elements",          \
         .container = "Journal of the American Chemical Society", .year = 2000, \
         .volume = "122", .pages = "2780", .doi = "10.1021/ja992866e",          \
-        .from_memory = "title"                                                 \
+        .from_memory = "title, doi"                                            \
     }
 
 #endif

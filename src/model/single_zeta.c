@@ -23,7 +23,7 @@ static const struct citation citations[] = {
      .volume = "1",
      .pages = "104",
      .doi = "10.1016/S0031-8914(34)90011-2",
-     .from_memory = "title, container, volume, pages"},
+     .from_memory = "title, container, volume, pages, doi"},
 };
 
 /* The energy of the average of configuration goes back to this book; the

@@ -23,7 +23,7 @@ static const struct citation citations[] = {
      .volume = "36",
      .pages = "57",
      .doi = "10.1103/PhysRev.36.57",
-     .from_memory = "title"},
+     .from_memory = "title, doi"},
     CITATION_ALLRED_1958,
     CITATION_PYYKKO_2009,
 };
