@@ -49,17 +49,6 @@ static const struct field mark_fields[] = {
 
 static const char id_characters[] = "abcdefghijklmnopqrstuvwxyz0123456789_-.";
 
-bool load_check_id(const char *id, const char *what, struct status *st)
-{
-    if (strlen(id) <= ID_BYTES_MAX && id[strspn(id, id_characters)] == '\0' &&
-        id[0] >= 'a' && id[0] <= 'z')
-        return true;
-    return status_fail(st, STATUS_DATA,
-                       "%s '%s': expected a letter and then letters, digits, "
-                       "'_', '-' or '.', all lower case, at most %d",
-                       what, quoted(id).text, ID_BYTES_MAX);
-}
-
 static bool load_notes(struct load *ld)
 {
     const cJSON *list = object_member(ld->root, "notes");
