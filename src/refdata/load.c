@@ -137,6 +137,10 @@ void load_index(struct dataset *set, int count, int (*z_of)(const void *row),
     set->count = count;
 }
 
+#define ID_BYTES_MAX 48
+
+static const char id_characters[] = "abcdefghijklmnopqrstuvwxyz0123456789_-.";
+
 bool load_check_id(const char *id, const char *what, struct status *st)
 {
     if (strlen(id) <= ID_BYTES_MAX && id[strspn(id, id_characters)] == '\0' &&

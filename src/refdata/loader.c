@@ -45,9 +45,6 @@ static const struct field mark_fields[] = {
 #define FIELD_COUNT(fields) (sizeof(fields) / sizeof(fields)[0])
 
 #define NOTES_MAX 100
-#define ID_BYTES_MAX 48
-
-static const char id_characters[] = "abcdefghijklmnopqrstuvwxyz0123456789_-.";
 
 static bool load_notes(struct load *ld)
 {

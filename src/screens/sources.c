@@ -8,12 +8,15 @@
 #include "screens/list.h"
 #include "study/facts.h"
 
-static void flow_source(struct flow *flow, const struct source *s)
+/* False where memory was short: then a text is not whole. */
+static bool flow_source(struct flow *flow, const struct source *s)
 {
     const struct provenance *p = s->provenance;
     struct text t = text_growing();
+    bool whole = true;
     text_addf(&t, "%s  %s", p->id, p->title);
     flow_text(flow, ROLE_HEADING, 0, t.data);
+    whole = whole && !t.cut;
     text_empty(&t);
     text_addf(&t, "%s for %s", p->computed ? "model" : "data set", s->quantity);
     if (s->unit && s->unit[0])
@@ -23,17 +26,20 @@ static void flow_source(struct flow *flow, const struct source *s)
     if (s->domain && s->domain[0])
         text_addf(&t, "; %s", s->domain);
     flow_text(flow, ROLE_TEXT, 2, t.data);
+    whole = whole && !t.cut;
     if (p->unsourced)
         flow_text(flow, ROLE_TEXT, 2, p->unsourced);
     for (int i = 0; i < p->citation_count; i++) {
         text_empty(&t);
         citation_text(&t, &p->citations[i], CITATION_FULL);
         flow_text(flow, ROLE_TEXT, 2, t.data);
+        whole = whole && !t.cut;
     }
     for (int i = 0; i < s->note_count; i++)
         flow_text(flow, ROLE_QUIET, 4, s->notes[i]);
     flow_blank(flow);
     text_free(&t);
+    return whole;
 }
 
 struct sources_state {
@@ -47,8 +53,11 @@ static void draw(struct session *session, void *state, struct canvas *canvas)
     struct area area = {1, 1, canvas->rows - 3, canvas->columns - 2};
     struct flow flow = {canvas, area, own->scroll, 0};
     int count = study_sources(session->study, sources, SOURCES_MAX);
+    bool whole = true;
     for (int i = 0; i < count; i++)
-        flow_source(&flow, &sources[i]);
+        whole = flow_source(&flow, &sources[i]) && whole;
+    if (!whole)
+        session_report(session, true, "out of memory");
     /* A scroll past the end comes back to the last full page. */
     int last = flow.used > area.rows ? flow.used - area.rows : 0;
     if (own->scroll <= last)

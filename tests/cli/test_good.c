@@ -66,7 +66,10 @@ static void check_bibtex(const char *call, const char *text)
     int depth = 0;
     int entries = 0;
     for (const char *c = text; *c; c++) {
-        if (depth == 0 && *c == '@') {
+        if (depth == 0 && *c == '%') { /* a comment goes to the line's end */
+            c += strcspn(c, "\n");
+            ck_assert_msg(*c == '\n', "%s: an open comment", call);
+        } else if (depth == 0 && *c == '@') {
             size_t type = strspn(c + 1, "abcdefghijklmnopqrstuvwxyz");
             ck_assert_msg(type > 0 && c[1 + type] == '{', "%s: %.40s", call, c);
             c += type + 1;
