@@ -90,6 +90,7 @@ bool audit_add(struct audit *audit, const struct row *row, struct status *st)
     s->points[s->count++] = (struct audit_point){
         .z = (short)row->species.z,
         .charge = (short)row->species.charge,
+        .site = row->species.site,
         .state = row->state,
         .evidence = row->reference.evidence,
         .has_reference = row->reference.state == READING_OK,
@@ -139,7 +140,8 @@ struct summary audit_summary_without(const struct audit_series *series,
         if (p->z == z || !audit_holds(part, p))
             continue;
         if (p->state == ROW_OK)
-            summary_add_residual(&summary, p->z, p->charge, p->residual,
+            summary_add_residual(&summary, p->z, p->charge, p->site,
+                                 p->residual,
                                  p->has_percent ? &p->percent : NULL);
         else
             summary.gaps++;
@@ -235,13 +237,17 @@ static int count_compared(const struct audit_series *s, struct audit_part part)
     return count;
 }
 
-/* Marks the species for which a series has a residual. */
+/* Marks the ions for which a series has a residual, when `before` series have
+ * been marked: an ion at several sites counts once. */
 static void mark_species(const struct audit_series *s, struct audit_part part,
-                         unsigned char have[Z_MAX + 1][CHARGES])
+                         unsigned char have[Z_MAX + 1][CHARGES], int before)
 {
-    for (int i = 0; i < s->count; i++)
-        if (compared(&s->points[i], part))
-            have[s->points[i].z][s->points[i].charge - CHARGE_LOW]++;
+    for (int i = 0; i < s->count; i++) {
+        const struct audit_point *p = &s->points[i];
+        unsigned char *marks = &have[p->z][p->charge - CHARGE_LOW];
+        if (compared(p, part) && *marks == before)
+            *marks = (unsigned char)(before + 1);
+    }
 }
 
 static double mean_of_common(const struct audit_series *s,
@@ -302,7 +308,7 @@ struct audit_rank audit_rank(const struct audit *audit,
             taking_part[kept++] = taking_part[m];
     models = kept;
     for (int m = 0; m < models; m++)
-        mark_species(&audit->series[taking_part[m]], part, have);
+        mark_species(&audit->series[taking_part[m]], part, have, m);
     for (int m = 0; m < models; m++) {
         double mean = mean_of_common(&audit->series[taking_part[m]], part, have,
                                      models, &rank.species);

@@ -40,6 +40,7 @@ void audit_part_text(struct audit_part part, struct text *t);
 /* One species. residual and percent in the series' unit; only in ROW_OK. */
 struct audit_point {
     short z, charge;
+    struct site site;
     enum row_state state;
     enum evidence evidence; /* of the reference value */
     bool has_reference, has_percent;

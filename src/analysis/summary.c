@@ -5,7 +5,8 @@
 #include <math.h>
 
 void summary_add_residual(struct summary *summary, int z, int charge,
-                          double residual, const double *percent)
+                          struct site site, double residual,
+                          const double *percent)
 {
     summary->count++;
     summary->sum += residual;
@@ -19,6 +20,7 @@ void summary_add_residual(struct summary *summary, int z, int charge,
         summary->largest = residual;
         summary->largest_z = z;
         summary->largest_charge = charge;
+        summary->largest_site = site;
     }
 }
 
@@ -26,7 +28,7 @@ void summary_add(struct summary *summary, const struct row *row)
 {
     if (row->state == ROW_OK)
         summary_add_residual(summary, row->species.z, row->species.charge,
-                             row->residual.value,
+                             row->species.site, row->residual.value,
                              row->has_percent ? &row->percent.value : NULL);
     else
         summary->gaps++;

@@ -16,13 +16,15 @@ struct summary {
     double largest; /* the residual of largest size, with its sign */
     int largest_z;  /* 0 while count is 0 */
     int largest_charge;
+    struct site largest_site;
 };
 
 void summary_add(struct summary *summary, const struct row *row);
 
 /* One residual of a species, with its percentage where there is one. */
 void summary_add_residual(struct summary *summary, int z, int charge,
-                          double residual, const double *percent);
+                          struct site site, double residual,
+                          const double *percent);
 
 /* Of the residuals; count must be at least 1. */
 double summary_mean(const struct summary *summary);

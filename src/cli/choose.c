@@ -6,6 +6,7 @@
 #include <string.h>
 
 #include "base/text.h"
+#include "cli/command.h"
 
 #define LINE_MAX_BYTES 256
 #define BLANKS " \t\r\n\f\v"
@@ -14,9 +15,11 @@ static bool add_atom(struct request *r, struct request_atom atom,
                      const char *word, struct status *st)
 {
     short *place = &r->place[atom.z][atom.charge - CHARGE_LOWEST];
-    if (*place > 0) {
-        bool *named = &r->atoms[*place - 1].named;
-        *named = *named || atom.named;
+    for (; *place > 0; place = &r->atoms[*place - 1].next) {
+        struct request_atom *old = &r->atoms[*place - 1];
+        if (!site_same(old->site, atom.site))
+            continue;
+        old->named = old->named || atom.named;
         return true;
     }
     if (r->atom_count == REQUEST_ATOM_MAX)
@@ -26,6 +29,52 @@ static bool add_atom(struct request *r, struct request_atom atom,
     r->atoms[r->atom_count++] = atom;
     *place = (short)r->atom_count;
     return true;
+}
+
+/* Every site that the sets to be read hold for an ion, in their order, each
+ * once. none: why there is none, where there is none. */
+static bool add_every_site(struct request *r, struct request_atom atom,
+                           const char *word, struct status *none,
+                           struct status *st)
+{
+    const struct reference *sets[REFERENCE_MAX];
+    char ion[ION_TEXT_MAX];
+    int count = request_site_sets(r, atom.charge != 0, sets, REFERENCE_MAX);
+    bool any = false;
+    for (int s = 0; s < count; s++) {
+        const struct dataset *set = sets[s]->set;
+        for (int i = set->first[atom.z]; i < set->first[atom.z + 1]; i++) {
+            const struct entry *e = &set->values[i];
+            if (e->charge != atom.charge || e->gap != GAP_NONE)
+                continue;
+            any = true;
+            atom.site = (struct site){(enum coordination)e->coordination,
+                                      (enum spin_state)e->spin};
+            if (!add_atom(r, atom, word, st))
+                return false;
+        }
+    }
+    if (!any)
+        (void)status_fail(none, STATUS_USAGE,
+                          "%s: no site of %s is stored; expected an ion such "
+                          "as Fe3+, or another --reference",
+                          word, ion_print(atom.z, atom.charge, ion));
+    return true;
+}
+
+/* The atom at the site that it carries or that the options give. */
+static bool add_at_site(struct request *r, const struct chosen *c,
+                        struct request_atom atom, const char *word,
+                        struct status *none, struct status *st)
+{
+    if (c->every_site)
+        return add_every_site(r, atom, word, none, st);
+    atom.site = site_filled(c->site, r->site);
+    if (c->site.coordination == COORDINATION_NONE)
+        r->site_taken.coordination = r->site.coordination;
+    if (c->site.spin == SPIN_NONE)
+        r->site_taken.spin = r->site.spin;
+    return add_atom(r, atom, word, st);
 }
 
 /* Whether the atom exists at its charge and holds the configuration. */
@@ -51,13 +100,15 @@ static bool take_charges(struct request *r, struct chosen c,
     if (c.has_charge)
         charges.low = charges.high = c.charge;
     for (int q = charges.low; q <= charges.high && q <= Z_MAX; q++) {
-        struct request_atom atom = {c.z, q, named};
-        if (!single && !c.has_charge && q >= c.z)
+        struct request_atom atom = {.z = c.z, .charge = q, .named = named};
+        if (!single && !c.has_charge && !c.every_site && q >= c.z)
             break;
         if (exists(r, atom, &why)) {
-            any = true;
-            if (!add_atom(r, atom, word, st))
+            struct status none = status_ok();
+            if (!add_at_site(r, &c, atom, word, &none, st))
                 return false;
+            any = any || none.code == STATUS_OK;
+            why = none.code != STATUS_OK ? none : why;
         } else if (why.code != STATUS_USAGE) {
             *st = why;
             return false;
@@ -73,6 +124,34 @@ static bool take_charges(struct request *r, struct chosen c,
     return false;
 }
 
+/* A site is no idle word: the command and some set that it reads must know
+ * sites. */
+static bool check_site(const struct request *r, const struct chosen *c,
+                       struct request_charges charges, const char *word,
+                       struct status *st)
+{
+    char ion[ION_TEXT_MAX];
+    const struct reference *set;
+    bool ions =
+        c->has_charge ? c->charge != 0 : charges.low != 0 || charges.high != 0;
+    if (!c->every_site && !site_named(c->site))
+        return true;
+    if (!command_takes(r->call->command, &option_coordination))
+        return status_fail(
+            st, STATUS_USAGE, "%s: %s has no use for a site; expected %s", word,
+            r->call->command->name, ion_print(c->z, c->charge, ion));
+    if (request_site_sets(r, ions, &set, 1) == 0)
+        return status_fail(st, STATUS_USAGE,
+                           "%s: none of the sets taken tells sites apart; "
+                           "expected an ion and its radius, or another "
+                           "--reference",
+                           word);
+    return !c->every_site || !site_named(r->site) ||
+           status_fail(st, STATUS_USAGE,
+                       "%s: all sites cannot go with --coordination or --spin",
+                       word);
+}
+
 static bool take(struct request *r, const struct selection *s,
                  struct request_charges charges, const char *word,
                  struct status *st)
@@ -86,7 +165,8 @@ static bool take(struct request *r, const struct selection *s,
                                "--charge %s: contradicts %s, which carries its "
                                "own charge",
                                given, word);
-        if (!take_charges(r, *c, charges, s->count == 1, word, st))
+        if (!check_site(r, c, charges, word, st) ||
+            !take_charges(r, *c, charges, s->count == 1, word, st))
             return false;
     }
     return true;

@@ -46,7 +46,9 @@ struct command {
 /* What a selection is, for the `about` of commands that take some. */
 #define COMMAND_SELECTION                                                      \
     "A selection is a symbol, name or atomic number (Fe, iron, 26), an ion "   \
-    "that carries its charge (Fe3+, Cs+, O2-), a run by atomic number "        \
+    "that carries its charge (Fe3+, Cs+, O2-) and may carry its site "         \
+    "(Co3+@VI,low, Sr2+@12, Fe2+@all for every stored one), a run by atomic "  \
+    "number "                                                                  \
     "(Sc-Zn), period:4, group:13, block:d, block:4f, or an isoelectronic "     \
     "series (electrons:10); - reads selections from "                          \
     "standard input, one per line. What is chosen twice counts once."

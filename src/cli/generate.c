@@ -18,7 +18,7 @@ static const struct reference_list *references(void)
 {
     static struct reference_list list;
     if (list.count == 0)
-        reference_list_fill(&list, catalogue_builtin());
+        reference_list_fill(&list, catalogue_builtin(), NULL);
     return &list;
 }
 

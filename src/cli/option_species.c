@@ -174,31 +174,19 @@ static bool has_ion(const struct request *r)
     return false;
 }
 
-/* True when one of the sets that will be read tells sites apart. */
-static bool has_sites(const struct request *r)
-{
-    /* An ion's radius stands against such a set where none is named. */
-    if (request_chooses(r, QUANTITY_RADIUS) &&
-        !r->references[QUANTITY_RADIUS] && has_ion(r))
-        return true;
-    for (int i = 0; i < r->set_count; i++)
-        if (reference_has_sites(r->sets[i]))
-            return true;
-    for (int q = 0; q < QUANTITY_COUNT; q++) {
-        const struct reference *sets[] = {r->references[q], r->against[q]};
-        for (int i = 0; i < 2; i++)
-            if (sets[i] && reference_has_sites(sets[i]))
-                return true;
-    }
-    /* Some commands take every set where none is named. */
-    return r->call->command->manner.all_sets && r->set_count == 0;
-}
-
 /* A site is no idle word: some set that is read must know it. */
 static bool check_site(const struct request *r, const struct option *self,
                        const char *value, struct status *st)
 {
-    return has_sites(r) ||
+    const struct reference *set;
+    bool taken = self == &option_spin
+                     ? r->site_taken.spin == r->site.spin
+                     : r->site_taken.coordination == r->site.coordination;
+    if (r->atom_count > 0 && !taken)
+        return status_fail(st, STATUS_USAGE,
+                           "--%s %s: every chosen ion carries its own site",
+                           self->name, value);
+    return request_site_sets(r, has_ion(r), &set, 1) > 0 ||
            status_fail(st, STATUS_USAGE,
                        "--%s %s: none of the sets taken tells sites apart; "
                        "expected --reference ionic_effective_shannon_1976 or "

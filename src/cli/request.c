@@ -99,7 +99,7 @@ struct ask request_ask(const struct request *r, int atom,
                       .reference = r->references[quantity],
                       .against = r->against[quantity],
                       .evidence = r->evidence,
-                      .site = r->site,
+                      .site = r->atoms[atom].site,
                       .unit = r->units[q->dimension]};
     if (r->has_configuration)
         ask.configuration = &r->configuration;

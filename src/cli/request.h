@@ -28,7 +28,9 @@
 struct request_atom {
     int z;
     int charge;
+    struct site site; /* none: the default of each set */
     bool named;
+    short next; /* another site of the same ion: its place in atoms, plus 1 */
 };
 
 /* Charges asked for, both ends included; text: as given, NULL where none was.
@@ -42,7 +44,7 @@ struct request_charges {
  * has_… is false). references[quantity], units[dimension]: NULL where none was
  * chosen; against[quantity] likewise, the second reference. evidence: kinds of
  * reference values, 0 for all. n = 0: the outermost subshell. output: NULL for
- * standard output. */
+ * standard output. site: of the chosen that carry none themselves. */
 struct request {
     const struct call *call;
     struct catalogue catalogue;
@@ -64,12 +66,12 @@ struct request {
     const struct unit *units[DIMENSION_COUNT];
     struct configuration configuration;
     int n, l;
-    struct site site;
+    struct site site, site_taken; /* as given; the part that some atom took */
     struct request_charges charges;
     struct atom_method method;
     int atom_count;
     struct request_atom atoms[REQUEST_ATOM_MAX];
-    short place[Z_MAX + 1][REQUEST_CHARGES]; /* in atoms, plus 1 */
+    short place[Z_MAX + 1][REQUEST_CHARGES]; /* of the first, plus 1 */
     const struct format *format;
     const char *output;
     bool force;
@@ -92,6 +94,11 @@ bool request_chooses(const struct request *request, enum quantity_id quantity);
 
 /* Whether a model offers one of the chosen quantities. */
 bool request_offers(const struct request *request, const struct model *model);
+
+/* The sets that will be read and tell sites apart, at most max; gives their
+ * number. An ion's radius is read from such a set where none is named. */
+int request_site_sets(const struct request *request, bool ions,
+                      const struct reference **sets, int max);
 
 /* Writes the ids of the chosen quantities. */
 void request_quantities(const struct request *request, struct text *t);

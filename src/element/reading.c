@@ -74,6 +74,12 @@ struct cited_source reading_cited(const struct reading *reading)
     return (struct cited_source){reading->provenance, reading->cited};
 }
 
+struct site reading_site(const struct reading *reading, struct site asked)
+{
+    bool found = reading->state == READING_OK && site_named(reading->site);
+    return found ? reading->site : asked;
+}
+
 void reading_text(struct text *t, const struct reading *reading)
 {
     char value[NUMBER_TEXT_MAX];

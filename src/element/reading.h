@@ -11,6 +11,7 @@
 #include "element/evidence.h"
 #include "element/provenance.h"
 #include "element/quantity.h"
+#include "element/site.h"
 
 /* state, its id in CSV, its word on screen */
 #define READING_STATE_LIST(X)                                                  \
@@ -37,7 +38,8 @@ const char *reading_state_word(enum reading_state state);
 struct reading {
     enum reading_state state;
     enum quantity_id quantity;
-    int n, l; /* the subshell it belongs to; n = 0 when none */
+    int n, l;         /* the subshell it belongs to; n = 0 when none */
+    struct site site; /* that a stored value was found at; none elsewhere */
     struct number value;
     struct number u;
     bool has_u;
@@ -65,6 +67,10 @@ struct reading reading_in_unit(struct reading reading, const struct unit *unit);
 
 /* What it rests on. */
 struct cited_source reading_cited(const struct reading *reading);
+
+/* The site of what is said about a species asked about at a site (none where
+ * none was named): that of the stored value where it has one. */
+struct site reading_site(const struct reading *reading, struct site asked);
 
 /* Appends a number in the concise form of tables, "6.634126(5)"; "31 +- 0.5"
  * where the uncertainty has finer digits than the value. */

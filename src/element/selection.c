@@ -8,15 +8,21 @@
 #include "base/text.h"
 
 #define ACCEPTED                                                               \
-    "expected a symbol, name or number, an ion such as Fe3+, a run such as "   \
-    "Sc-Zn, period:4, group:13, block:d, block:4f or electrons:10"
+    "expected a symbol, name or number, an ion such as Fe3+ or Fe3+@VI, a "    \
+    "run "                                                                     \
+    "such as Sc-Zn, period:4, group:13, block:d, block:4f or electrons:10"
+
+/* Longer than any word that names something. */
+#define WORD_PART_MAX 64
 
 static void add(struct selection *s, struct chosen item)
 {
     for (int i = 0; i < s->count; i++)
         if (s->items[i].z == item.z &&
             s->items[i].has_charge == item.has_charge &&
-            s->items[i].charge == item.charge)
+            s->items[i].charge == item.charge &&
+            s->items[i].every_site == item.every_site &&
+            site_same(s->items[i].site, item.site))
             return;
     if (s->count < SELECTION_MAX)
         s->items[s->count++] = item;
@@ -28,8 +34,72 @@ void selection_all(struct selection *selection)
         add(selection, (struct chosen){.z = z});
 }
 
+/* "III" or "3" to its number, 0 when it is neither. */
+static int oxidation_number(const char *text)
+{
+    static const char *const roman[] = {"I",  "II",  "III",  "IV", "V",
+                                        "VI", "VII", "VIII", "IX"};
+    int number = 0;
+    for (int i = 0; i < (int)(sizeof roman / sizeof roman[0]); i++)
+        if (text_same_ignoring_case(text, roman[i]))
+            return i + 1;
+    return text_to_int(text, &number) && number > 0 ? number : 0;
+}
+
+/* The charge of "3+", "+3", "(III)", "++", "^3+"; 0 when it is none. */
+static int charge_meant(const char *text)
+{
+    char inner[8];
+    text += *text == '^';
+    size_t length = strlen(text);
+    size_t signs = strspn(text, text[0] == '-' ? "-" : "+");
+    char last = length ? text[length - 1] : '\0';
+    if (length == 0 || length >= sizeof inner)
+        return 0;
+    if (signs == length)
+        return text[0] == '-' ? -(int)signs : (int)signs;
+    bool bracket = text[0] == '(' && last == ')';
+    bool trailing = last == '+' || last == '-';
+    if (!bracket && !trailing && signs != 1)
+        return 0;
+    size_t from = trailing ? 0 : 1;
+    size_t count = length - from - (bracket || trailing ? 1 : 0);
+    memcpy(inner, text + from, count);
+    inner[count] = '\0';
+    int size = oxidation_number(inner);
+    return text[0] == '-' || last == '-' ? -size : size;
+}
+
+/* An ion that was written in another way: "Co+3", "Co(III)", "cobalt3+",
+ * "co3+". False when nothing of the kind can be read in the word. */
+static bool ion_meant(const char *word, int *z, int *charge)
+{
+    char name[16];
+    size_t letters = strspn(word, "ABCDEFGHIJKLMNOPQRSTUVWXYZ"
+                                  "abcdefghijklmnopqrstuvwxyz");
+    if (letters == 0 || letters >= sizeof name)
+        return false;
+    memcpy(name, word, letters);
+    name[letters] = '\0';
+    const struct element *e = element_find(name);
+    if (!e)
+        e = element_nearest(name);
+    *charge = charge_meant(word + letters);
+    if (!e || *charge == 0 || *charge > e->z)
+        return false;
+    *z = e->z;
+    return true;
+}
+
 static bool unknown(const char *word, const char *part, struct status *st)
 {
+    int z, charge;
+    char ion[ION_TEXT_MAX];
+    if (ion_meant(word, &z, &charge))
+        return status_fail(st, STATUS_USAGE,
+                           "%s: an ion is written by symbol, charge and sign; "
+                           "did you mean %s?",
+                           word, ion_print(z, charge, ion));
     const struct element *near = element_nearest(part);
     if (near)
         return status_fail(st, STATUS_USAGE,
@@ -70,7 +140,7 @@ static bool parse_ion(const char *word, struct chosen *item, bool *is_ion,
         return status_fail(st, STATUS_USAGE,
                            "%s: %s has only %d electron%s to lose", word,
                            e->name, e->z, e->z == 1 ? "" : "s");
-    *item = (struct chosen){e->z, charge, true};
+    *item = (struct chosen){.z = e->z, .charge = charge, .has_charge = true};
     return true;
 }
 
@@ -90,7 +160,8 @@ int selection_first_z(int electrons)
 static void add_isoelectronic(struct selection *s, int electrons)
 {
     for (int z = selection_first_z(electrons); z <= Z_MAX; z++)
-        add(s, (struct chosen){z, z - electrons, true});
+        add(s, (struct chosen){
+                   .z = z, .charge = z - electrons, .has_charge = true});
 }
 
 /* "4f", the block row in which that subshell is filled: its period, or 0. */
@@ -154,18 +225,27 @@ static bool parse_run(struct selection *s, const char *word, const char *dash,
         return unknown(word, first, st);
     if (!b)
         return unknown(word, dash + 1, st);
+    int z, charge;
+    char ion[ION_TEXT_MAX];
+    if (a->z > b->z && ion_meant(word, &z, &charge))
+        return status_fail(st, STATUS_USAGE,
+                           "%s: a run goes upwards in atomic number; expected "
+                           "%s-%s, or %s for the ion",
+                           word, b->symbol, a->symbol,
+                           ion_print(z, charge, ion));
     if (a->z > b->z)
         return status_fail(st, STATUS_USAGE,
                            "%s: a run goes upwards in atomic number; expected "
                            "%s-%s",
                            word, b->symbol, a->symbol);
-    for (int z = a->z; z <= b->z; z++)
+    for (z = a->z; z <= b->z; z++)
         add(s, (struct chosen){.z = z});
     return true;
 }
 
-bool selection_add(struct selection *selection, const char *word,
-                   struct status *st)
+/* What a word without a site names. */
+static bool add_plain(struct selection *selection, const char *word,
+                      struct status *st)
 {
     const char *colon = strchr(word, ':');
     if (colon)
@@ -189,14 +269,35 @@ bool selection_add(struct selection *selection, const char *word,
     return unknown(word, word, st);
 }
 
-const char *ion_print(int z, int charge, char out[ION_TEXT_MAX])
+/* The part before the '@' says which, the part behind it where: the site goes
+ * to all that the first part adds. */
+static bool add_at_site(struct selection *selection, const char *word,
+                        const char *at, struct status *st)
 {
-    int size = abs(charge);
-    const char *symbol = element_at(z)->symbol;
-    const char *sign = charge == 0 ? "" : charge > 0 ? "+" : "-";
-    if (size <= 1)
-        snprintf(out, ION_TEXT_MAX, "%s%s", symbol, sign);
-    else
-        snprintf(out, ION_TEXT_MAX, "%s%d%s", symbol, size, sign);
-    return out;
+    char plain[WORD_PART_MAX];
+    struct site site;
+    bool every;
+    struct selection named = {0};
+    size_t length = (size_t)(at - word);
+    if (length == 0 || length >= sizeof plain)
+        return unknown(word, "", st);
+    memcpy(plain, word, length);
+    plain[length] = '\0';
+    if (!add_plain(&named, plain, st) ||
+        !site_parse(at + 1, word, &site, &every, st))
+        return false;
+    for (int i = 0; i < named.count; i++) {
+        named.items[i].site = site;
+        named.items[i].every_site = every;
+        add(selection, named.items[i]);
+    }
+    return true;
+}
+
+bool selection_add(struct selection *selection, const char *word,
+                   struct status *st)
+{
+    const char *at = strchr(word, '@');
+    return at ? add_at_site(selection, word, at, st)
+              : add_plain(selection, word, st);
 }

@@ -7,15 +7,19 @@
 
 #include "base/status.h"
 #include "element/element.h"
+#include "element/species.h"
 
 #define SELECTION_MAX 512
 
 /* Chosen elements in the order in which they were named, none twice at the
- * same charge. has_charge: the word was an ion and carries its charge. */
+ * same charge and site. has_charge: the word was an ion and carries its charge.
+ * every_site: all stored sites were meant; then site is none. */
 struct chosen {
     int z;
     int charge;
     bool has_charge;
+    bool every_site;
+    struct site site;
 };
 struct selection {
     int count;
@@ -25,9 +29,10 @@ struct selection {
 /* Adds what one word names: symbol, name or atomic number (Fe, iron, 26); an
  * ion (Fe3+, Cs+, O2-, iron written by its symbol); a run by atomic number
  * (Sc-Zn, 21-30); period:4, group:13, block:d, the row of a block (block:4f),
- * an isoelectronic series (electrons:10), which carries its charges. Fails with
+ * an isoelectronic series (electrons:10), which carries its charges. A site may
+ * stand behind any of them (Co3+@VI,low, Sr2+@12, Fe2+@all). Fails with
  * STATUS_USAGE naming the word, what would be accepted and, where one is near,
- * the element that may have been meant. */
+ * the element or ion that may have been meant. */
 MUST_CHECK bool selection_add(struct selection *selection, const char *word,
                               struct status *st);
 
@@ -36,10 +41,5 @@ int selection_first_z(int electrons);
 
 /* All elements by atomic number. */
 void selection_all(struct selection *selection);
-
-/* Writes an ion as the trade does, "Fe3+", "Cs+", "O2-", and a neutral atom
- * by its symbol. Returns out. */
-#define ION_TEXT_MAX 20
-const char *ion_print(int z, int charge, char out[ION_TEXT_MAX]);
 
 #endif

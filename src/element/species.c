@@ -3,7 +3,10 @@
 
 #include <stddef.h>
 #include <stdio.h>
+#include <stdlib.h>
 #include <string.h>
+
+#include "element/element.h"
 
 const char *configuration_origin_text(enum configuration_origin origin)
 {
@@ -64,6 +67,35 @@ bool term_parse(const char *text, struct term *term)
         return true;
     term->twice_j = parse_j(j);
     return term->twice_j >= 0;
+}
+
+const char *ion_print(int z, int charge, char out[ION_TEXT_MAX])
+{
+    int size = abs(charge);
+    const char *symbol = element_at(z)->symbol;
+    const char *sign = charge == 0 ? "" : charge > 0 ? "+" : "-";
+    if (size <= 1)
+        snprintf(out, ION_TEXT_MAX, "%s%s", symbol, sign);
+    else
+        snprintf(out, ION_TEXT_MAX, "%s%d%s", symbol, size, sign);
+    return out;
+}
+
+const char *ion_print_at(int z, int charge, struct site site,
+                         char out[ION_TEXT_MAX])
+{
+    char at[SITE_TEXT_MAX];
+    ion_print(z, charge, out);
+    size_t length = strlen(out);
+    if (site_named(site))
+        snprintf(out + length, ION_TEXT_MAX - length, "@%s",
+                 site_print(site, at));
+    return out;
+}
+
+const char *species_print(const struct species *species, char out[ION_TEXT_MAX])
+{
+    return ion_print_at(species->z, species->charge, species->site, out);
 }
 
 void species_configuration_text(struct text *t, const struct species *species)

@@ -7,6 +7,7 @@
 
 #include "base/text.h"
 #include "element/configuration.h"
+#include "element/site.h"
 
 /* Where a configuration comes from. */
 enum configuration_origin {
@@ -34,9 +35,12 @@ struct term {
  * the text is not of that form (then all are unknown). */
 bool term_parse(const char *text, struct term *term);
 
+/* The site is that of an ion in a solid; none where none was named. The same
+ * ion at two sites is two species; a free atom's properties do not know it. */
 struct species {
     int z;
     int charge;
+    struct site site;
     struct configuration configuration;
     enum configuration_origin origin;
     struct term term;
@@ -45,6 +49,17 @@ struct species {
      * one subshell or there is none; 0 when nobody has looked. */
     int emptied;
 };
+
+/* Writes an ion as the trade does, "Fe3+", "Cs+", "O2-", and a neutral atom
+ * by its symbol. Returns out. */
+#define ION_TEXT_MAX 20
+const char *ion_print(int z, int charge, char out[ION_TEXT_MAX]);
+
+/* The same with its site where one was named: "Co3+@VI,low". */
+const char *ion_print_at(int z, int charge, struct site site,
+                         char out[ION_TEXT_MAX]);
+const char *species_print(const struct species *species,
+                          char out[ION_TEXT_MAX]);
 
 /* Appends a configuration with where it comes from when that is not a table:
  * "[Ar] 3d6 (by rule)". */

@@ -29,53 +29,6 @@ const char *gap_word(enum gap gap)
     return words[gap];
 }
 
-const char *spin_id(enum spin_state spin)
-{
-    static const char *const ids[] = {SPIN_LIST(ID3)};
-    return ids[spin];
-}
-
-const char *spin_word(enum spin_state spin)
-{
-    static const char *const words[] = {SPIN_LIST(WORDS3)};
-    return words[spin];
-}
-
-const char *coordination_id(enum coordination coordination)
-{
-    static const char *const ids[] = {COORDINATION_LIST(ID3)};
-    return ids[coordination];
-}
-
-int coordination_number(enum coordination coordination)
-{
-    static const int numbers[] = {COORDINATION_LIST(WORDS3)};
-    return numbers[coordination];
-}
-
-bool coordination_find(const char *text, enum coordination *found)
-{
-    size_t digits = strspn(text, "0123456789");
-    char number[4];
-    for (int c = COORDINATION_NONE + 1; c < COORDINATION_COUNT; c++) {
-        enum coordination coordination = (enum coordination)c;
-        const char *id = coordination_id(coordination);
-        const char *shape = id + strspn(id, "IVX");
-        snprintf(number, sizeof number, "%d",
-                 coordination_number(coordination));
-        bool same = digits > 0
-                        ? digits == strlen(number) &&
-                              strncmp(text, number, digits) == 0 &&
-                              text_same_ignoring_case(text + digits, shape)
-                        : text_same_ignoring_case(text, id);
-        if (!same)
-            continue;
-        *found = coordination;
-        return true;
-    }
-    return false;
-}
-
 const char *dataset_configuration_status_id(enum configuration_status status)
 {
     static const char *const ids[] = {CONFIGURATION_STATUS_LIST(ID3)};
@@ -198,6 +151,8 @@ struct reading dataset_entry_reading(const struct dataset *set,
         .quantity = set->quantity,
         .n = entry->n,
         .l = entry->l,
+        .site = {(enum coordination)entry->coordination,
+                 (enum spin_state)entry->spin},
         .value = entry->value,
         .u = entry->u,
         .has_u = entry->has_u,

@@ -16,6 +16,7 @@
 #include "element/provenance.h"
 #include "element/quantity.h"
 #include "element/reading.h"
+#include "element/site.h"
 
 /* Which of the arrays a data set fills; its id in the file. */
 #define DATASET_KIND_LIST(X)                                                   \
@@ -34,32 +35,6 @@
     X(GAP_NO_DATA, "no_data", "no data")                                       \
     X(GAP_WITHHELD, "withheld", "left out: sources disagree")
 
-/* Spin state of an ion at a site. */
-#define SPIN_LIST(X)                                                           \
-    X(SPIN_NONE, "", "")                                                       \
-    X(SPIN_LOW, "low", "low spin")                                             \
-    X(SPIN_HIGH, "high", "high spin")
-
-/* Coordination as the trade writes it; the coordination number. */
-#define COORDINATION_LIST(X)                                                   \
-    X(COORDINATION_NONE, "", 0)                                                \
-    X(COORDINATION_I, "I", 1)                                                  \
-    X(COORDINATION_II, "II", 2)                                                \
-    X(COORDINATION_III, "III", 3)                                              \
-    X(COORDINATION_III_PY, "IIIPY", 3)                                         \
-    X(COORDINATION_IV, "IV", 4)                                                \
-    X(COORDINATION_IV_PY, "IVPY", 4)                                           \
-    X(COORDINATION_IV_SQ, "IVSQ", 4)                                           \
-    X(COORDINATION_V, "V", 5)                                                  \
-    X(COORDINATION_VI, "VI", 6)                                                \
-    X(COORDINATION_VII, "VII", 7)                                              \
-    X(COORDINATION_VIII, "VIII", 8)                                            \
-    X(COORDINATION_IX, "IX", 9)                                                \
-    X(COORDINATION_X, "X", 10)                                                 \
-    X(COORDINATION_XI, "XI", 11)                                               \
-    X(COORDINATION_XII, "XII", 12)                                             \
-    X(COORDINATION_XIV, "XIV", 14)
-
 /* What is known of a stored configuration. */
 #define CONFIGURATION_STATUS_LIST(X)                                           \
     X(CONFIGURATION_LISTED, "listed", "listed by the source")                  \
@@ -76,8 +51,6 @@
 #define WORD_ENUM2(name, id) name,
 enum dataset_kind { DATASET_KIND_LIST(WORD_ENUM2) DATASET_KIND_COUNT };
 enum gap { GAP_LIST(WORD_ENUM3) GAP_COUNT };
-enum spin_state { SPIN_LIST(WORD_ENUM3) SPIN_COUNT };
-enum coordination { COORDINATION_LIST(WORD_ENUM3) COORDINATION_COUNT };
 enum configuration_status {
     CONFIGURATION_STATUS_LIST(WORD_ENUM3) CONFIGURATION_STATUS_COUNT
 };
@@ -89,15 +62,6 @@ enum radioactive { RADIOACTIVE_LIST(WORD_ENUM3) RADIOACTIVE_COUNT };
 const char *dataset_kind_id(enum dataset_kind kind);
 const char *gap_id(enum gap gap);
 const char *gap_word(enum gap gap);
-const char *spin_id(enum spin_state spin);
-const char *spin_word(enum spin_state spin);
-const char *coordination_id(enum coordination coordination);
-int coordination_number(enum coordination coordination); /* 0 for none */
-
-/* As someone types it: roman in any case or by its number, with the shape
- * behind it: "VI", "vi", "6", "IVSQ", "4sq". False when there is none. */
-bool coordination_find(const char *text, enum coordination *found);
-
 const char *dataset_configuration_status_id(enum configuration_status status);
 const char *radioactive_id(enum radioactive radioactive);
 const char *radioactive_word(enum radioactive radioactive);

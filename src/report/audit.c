@@ -104,8 +104,9 @@ static void put_largest_symbol(const void *record, struct text *t)
     const struct record *r = record;
     char ion[ION_TEXT_MAX];
     if (r->summary.count > 0)
-        text_add(
-            t, ion_print(r->summary.largest_z, r->summary.largest_charge, ion));
+        text_add(t,
+                 ion_print_at(r->summary.largest_z, r->summary.largest_charge,
+                              r->summary.largest_site, ion));
 }
 
 /* "measured 82, extrapolated 18": the kinds of the stored values taken. */
@@ -319,7 +320,9 @@ static void add_line(struct report *report, struct report_table *table,
                        places, false);
     report_cell_number(report, table, any, sum.largest, places, true);
     report_cell(report, table,
-                any ? ion_print(sum.largest_z, sum.largest_charge, ion) : "-");
+                any ? ion_print_at(sum.largest_z, sum.largest_charge,
+                                   sum.largest_site, ion)
+                    : "-");
     report_cell(report, table, s->unit->id);
     const struct report_note notes[] = {
         {"not like with like; the model gives: ",

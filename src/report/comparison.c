@@ -69,6 +69,20 @@ static void put_charge(const void *record, struct text *t)
     text_addf(t, "%d", species_of(record)->charge);
 }
 
+static void put_coordination(const void *record, struct text *t)
+{
+    const struct record *r = record;
+    struct site site = reading_site(r->reading, species_of(r)->site);
+    text_add(t, coordination_id(site.coordination));
+}
+
+static void put_spin(const void *record, struct text *t)
+{
+    const struct record *r = record;
+    struct site site = reading_site(r->reading, species_of(r)->site);
+    text_add(t, spin_id(site.spin));
+}
+
 static void put_configuration(const void *record, struct text *t)
 {
     species_configuration_text(t, species_of(record));
@@ -190,6 +204,8 @@ static const struct report_column columns[] = {
     {"z", COLUMN_NUMBER, .put = put_z},
     {"symbol", COLUMN_TEXT, .put = put_symbol},
     {"charge", COLUMN_NUMBER, .put = put_charge},
+    {"coordination", COLUMN_TEXT, .put = put_coordination},
+    {"spin", COLUMN_TEXT, .put = put_spin},
     {"configuration", COLUMN_TEXT, .put = put_configuration},
     {"subshell", COLUMN_TEXT, .put = put_subshell},
     {"value", COLUMN_NUMBER, .put = put_value},
@@ -224,7 +240,7 @@ static void add_facts(struct report *report, const struct comparison *c)
     char ion[ION_TEXT_MAX];
     for (int w = 0; w < c->count; w++) {
         const struct species *s = &c->species[w];
-        report_heading(report, "%s  %s", ion_print(s->z, s->charge, ion),
+        report_heading(report, "%s  %s", species_print(s, ion),
                        element_at(s->z)->name);
         for (int f = 0; f < c->fact_count; f++)
             if (c->facts[f].text[w][0] != '\0')
@@ -284,14 +300,13 @@ open_table(struct report *report, const struct comparison *c, int from, int to)
     struct table_column heads[4 + 3 * OTHERS_MAX];
     int count = 0;
     struct text t = text_over(less, sizeof less);
-    text_addf(&t, "less %s",
-              ion_print(c->species[0].z, c->species[0].charge, names[0]));
+    text_addf(&t, "less %s", species_print(&c->species[0], names[0]));
     heads[count++] = (struct table_column){"", CELL_WORDS};
     heads[count++] = (struct table_column){"", CELL_WORDS};
     heads[count++] = (struct table_column){names[0], CELL_NUMBER};
     for (int w = from; w < to; w++) {
         char *name = names[1 + w - from];
-        ion_print(c->species[w].z, c->species[w].charge, name);
+        species_print(&c->species[w], name);
         heads[count++] = (struct table_column){name, CELL_NUMBER};
         heads[count++] = (struct table_column){less, CELL_SIGNED};
         heads[count++] = (struct table_column){"%", CELL_SIGNED};

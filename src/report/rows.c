@@ -29,6 +29,23 @@ static void put_charge(const void *record, struct text *t)
     text_addf(t, "%d", row->species.charge);
 }
 
+/* The site of the reference value, of which the row speaks; where it has none,
+ * that which was asked about. */
+static struct site site_of(const struct row *row)
+{
+    return reading_site(&row->reference, row->species.site);
+}
+
+static void put_coordination(const void *record, struct text *t)
+{
+    text_add(t, coordination_id(site_of(record).coordination));
+}
+
+static void put_spin(const void *record, struct text *t)
+{
+    text_add(t, spin_id(site_of(record).spin));
+}
+
 static void put_configuration(const void *record, struct text *t)
 {
     const struct row *row = record;
@@ -93,6 +110,46 @@ static void put_uncertainty(const void *record, struct text *t)
     const struct row *row = record;
     put_number(row->value.state == READING_OK && row->value.has_u, row->value.u,
                t);
+}
+
+/* The uncertainties that are stored or computed are all of one kind. */
+static void put_uncertainty_kind(const void *record, struct text *t)
+{
+    const struct row *row = record;
+    if (row->value.state == READING_OK && row->value.has_u)
+        text_add(t, "standard");
+}
+
+static void put_definition_of(const struct provenance *p, struct text *t)
+{
+    if (p)
+        text_add(t, p->definition->text);
+}
+
+static void put_definition(const void *record, struct text *t)
+{
+    put_definition_of(((const struct row *)record)->value.provenance, t);
+}
+
+static void put_reference_definition(const void *record, struct text *t)
+{
+    put_definition_of(((const struct row *)record)->reference.provenance, t);
+}
+
+/* Of a value that is there, also of one that was left out for its kind. */
+static void put_reference_kind(const void *record, struct text *t)
+{
+    const struct row *row = record;
+    if (row->reference.state == READING_OK ||
+        row->reference.evidence != EVIDENCE_UNSTATED)
+        text_add(t, evidence_id(row->reference.evidence));
+}
+
+/* No stored value is suspected yet. */
+static void put_suspect(const void *record, struct text *t)
+{
+    (void)record;
+    (void)t;
 }
 
 static void put_reference_set(const void *record, struct text *t)
@@ -174,19 +231,19 @@ static void put_version(const void *record, struct text *t)
     text_add(t, OUTERSHELL_VERSION);
 }
 
-static void put_reason(const void *record, struct text *t)
+/* Why there is no residual, and what is to be known of the two values. */
+static void put_note(const void *record, struct text *t)
 {
-    text_add(t, ((const struct row *)record)->reason);
-}
-
-static void put_model_remark(const void *record, struct text *t)
-{
-    text_add(t, ((const struct row *)record)->value.remark);
-}
-
-static void put_reference_remark(const void *record, struct text *t)
-{
-    text_add(t, ((const struct row *)record)->reference.remark);
+    const struct row *row = record;
+    const char *const parts[] = {row->reason, row->value.remark,
+                                 row->reference.remark};
+    bool begun = false;
+    for (size_t i = 0; i < sizeof parts / sizeof parts[0]; i++)
+        if (parts[i][0] != '\0') {
+            text_add(t, begun ? "; " : "");
+            text_add(t, parts[i]);
+            begun = true;
+        }
 }
 
 static struct cited_source model_source(const void *record)
@@ -213,25 +270,30 @@ const struct report_column report_rows_columns[] = {
     {"symbol", TEXT, .put = put_symbol, OF_SPECIES},
     {"name", TEXT, .put = put_name, OF_SPECIES},
     {"charge", NUMBER, .put = put_charge, OF_SPECIES},
+    {"coordination", TEXT, .put = put_coordination},
+    {"spin", TEXT, .put = put_spin},
     {"configuration", TEXT, .put = put_configuration, OF_SPECIES},
     {"subshell", TEXT, .put = put_subshell},
     {"quantity", TEXT, .put = put_quantity},
     {"unit", TEXT, .put = put_unit},
     {"model", TEXT, .put = put_model},
+    {"definition", TEXT, .put = put_definition},
     {"value", NUMBER, .put = put_value},
     {"uncertainty", NUMBER, .put = put_uncertainty},
+    {"uncertainty_kind", TEXT, .put = put_uncertainty_kind},
+    {"state", TEXT, .put = put_state},
+    {"note", TEXT, .put = put_note},
     {"reference_set", TEXT, .put = put_reference_set},
+    {"reference_definition", TEXT, .put = put_reference_definition},
+    {"reference_kind", TEXT, .put = put_reference_kind},
     {"reference_value", NUMBER, .put = put_reference},
     {"reference_uncertainty", NUMBER, .put = put_reference_u},
     {"residual", NUMBER, .put = put_residual},
     {"residual_percent", NUMBER, .put = put_percent},
-    {"state", TEXT, .put = put_state},
+    {"suspect", TEXT, .put = put_suspect},
     {"model_source", TEXT, .source = model_source},
     {"reference_source", TEXT, .source = reference_source},
     {"version", TEXT, .put = put_version},
-    {"reason", TEXT, .put = put_reason, .json_only = true},
-    {"model_remark", TEXT, .put = put_model_remark, .json_only = true},
-    {"reference_remark", TEXT, .put = put_reference_remark, .json_only = true},
     /* Only where a second reference was asked for. */
     {"against_set", TEXT, .put = put_against_set},
     {"against_value", NUMBER, .put = put_against},
@@ -341,7 +403,7 @@ static void add_row(struct report *r, struct report_table *table,
     char shell[SUBSHELL_TEXT_MAX];
     int places = row->unit->decimals;
     bool compared = row->state == ROW_OK;
-    report_cell(r, table, ion_print(row->species.z, row->species.charge, ion));
+    report_cell(r, table, species_print(&row->species, ion));
     report_cell(r, table, quantity_at(row->quantity)->id);
     report_cell(r, table, row->n ? subshell_print(row->n, row->l, shell) : "");
     if (shown.models) {

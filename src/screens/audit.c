@@ -223,8 +223,9 @@ static void summary_text(const struct audit_state *own,
               number_print_places(summary_rms(&sum), places, number));
     text_addf(t, ", largest %s%s", sum.largest > 0 ? "+" : "",
               number_print_places(sum.largest, places, number));
-    text_addf(t, " %s (%s)", s->unit->id,
-              ion_print(sum.largest_z, sum.largest_charge, ion));
+    text_addf(
+        t, " %s (%s)", s->unit->id,
+        ion_print_at(sum.largest_z, sum.largest_charge, sum.largest_site, ion));
 }
 
 static void rank_text(const struct audit_state *own,

@@ -112,7 +112,7 @@ void screen_audit_scatter_draw(const struct session *session,
     struct plot_point at = {p->reference, p->value, true};
     plot_marks(&plot, ROLE_CHOSEN, MARK_CURSOR, &at, 1);
     (void)plot_label(&plot, ROLE_TITLE, at.x, at.y,
-                     ion_print(p->z, p->charge, ion));
+                     ion_print_at(p->z, p->charge, p->site, ion));
 }
 
 static void draw_outlier(struct canvas *canvas, struct area a, int row,
@@ -127,7 +127,7 @@ static void draw_outlier(struct canvas *canvas, struct area a, int row,
     enum role sign = p->residual < 0 ? ROLE_BELOW : ROLE_ABOVE;
     canvas_textf(canvas, row, a.column, a.columns,
                  chosen ? ROLE_CHOSEN : ROLE_TEXT, "%s%-5s", chosen ? ">" : " ",
-                 ion_print(p->z, p->charge, ion));
+                 ion_print_at(p->z, p->charge, p->site, ion));
     number_fit(p->residual, places, 8, residual);
     canvas_right(canvas, row, a.column + 6, 10, sign, residual);
     if (p->residual > 0)

@@ -117,24 +117,8 @@ static int atom_at(const struct compare_state *own, int i)
     return i == 0 ? 0 : i + own->column_scroll;
 }
 
-/* The spin that a stored radius stands for; its coordination is in the label
- * of the line. */
-static void add_spin(const struct session *session,
-                     const struct species *species,
-                     const struct reading *stored, struct text *t)
-{
-    char site[SESSION_TEXT_MAX];
-    struct text s = text_over(site, sizeof site);
-    session_stored_site(session, species, stored, &s);
-    for (int spin = SPIN_NONE + 1; spin < SPIN_COUNT; spin++)
-        if (strstr(site, spin_word((enum spin_state)spin)))
-            text_addf(t, " %s", spin_id((enum spin_state)spin));
-}
-
-static void draw_value(const struct session *session,
-                       const struct compare_state *own, struct canvas *canvas,
-                       int row, int column, const struct comparison_line *line,
-                       int which)
+static void draw_value(struct canvas *canvas, int row, int column,
+                       const struct comparison_line *line, int which)
 {
     char buffer[SESSION_TEXT_MAX];
     char out[NUMBER_TEXT_MAX];
@@ -147,7 +131,8 @@ static void draw_value(const struct session *session,
     }
     if (!line->provenance->computed) {
         reading_text(&t, r);
-        add_spin(session, &own->comparison.species[which], r, &t);
+        if (r->site.spin != SPIN_NONE) /* the label tells the coordination */
+            text_addf(&t, " %s", spin_id(r->site.spin));
     }
     if (t.length == 0 || t.length > VALUE_COLUMNS)
         snprintf(buffer, sizeof buffer, "%s",
@@ -194,8 +179,8 @@ static void draw_line(const struct session *session,
     for (int i = 0; i < atoms; i++) {
         int which = atom_at(own, i);
         if (which < own->comparison.count)
-            draw_value(session, own, canvas, row,
-                       label_columns(session) + i * ATOM_COLUMNS, line, which);
+            draw_value(canvas, row, label_columns(session) + i * ATOM_COLUMNS,
+                       line, which);
     }
 }
 
@@ -229,7 +214,7 @@ static void draw_atoms(const struct session *session,
         int column = label_columns(session) + i * ATOM_COLUMNS;
         if (which >= c->count)
             continue;
-        ion_print(c->species[which].z, c->species[which].charge, ion);
+        species_print(&c->species[which], ion);
         canvas_right(canvas, 1, column, VALUE_COLUMNS, ROLE_PIN, ion);
         if (which > 0)
             canvas_right(canvas, 1, column + VALUE_COLUMNS,

@@ -183,13 +183,13 @@ static void draw_set(struct canvas *canvas, struct area a, int row,
 
 /* The site that a stored radius stands for, in a line of its own below the
  * rows; gives the rows used. */
-static int draw_site(const struct session *session, struct canvas *canvas,
-                     struct area a, const struct row *rows, int count)
+static int draw_site(struct canvas *canvas, struct area a,
+                     const struct row *rows, int count)
 {
     char site[SESSION_TEXT_MAX];
     for (int i = 0; i < count && a.rows > 0; i++) {
         struct text t = text_over(site, sizeof site);
-        session_stored_site(session, &rows[i].species, &rows[i].reference, &t);
+        session_stored_site(&rows[i].reference, &t);
         if (t.length == 0)
             continue;
         canvas_textf(canvas, a.row, NAME, a.columns - NAME, ROLE_TEXT,
@@ -295,7 +295,7 @@ static int draw_group(const struct session *session, struct canvas *canvas,
     /* Of the chosen quantity the line of the source says it. */
     return quantity == session->choice.quantity
                ? used
-               : used + draw_site(session, canvas, below, rows, count);
+               : used + draw_site(canvas, below, rows, count);
 }
 
 /* The set, what it holds, and what its source says of this value. */
@@ -372,9 +372,10 @@ static int draw_usual(const struct session *session, const struct audit *usual,
             series->unit->id);
         if (s.percent_count > 0)
             text_addf(&t, " (%.0f %%)", summary_mean_absolute_percent(&s));
-        text_addf(&t, ", largest %s%s (%s)", s.largest > 0 ? "+" : "",
-                  number_print_places(s.largest, places, number),
-                  ion_print(s.largest_z, s.largest_charge, ion));
+        text_addf(
+            &t, ", largest %s%s (%s)", s.largest > 0 ? "+" : "",
+            number_print_places(s.largest, places, number),
+            ion_print_at(s.largest_z, s.largest_charge, s.largest_site, ion));
         if (a.columns >= 100)
             text_addf(&t, "; %d residuals, %d gaps", s.count, s.gaps);
     }

@@ -109,16 +109,15 @@ static int draw_stored(struct canvas *canvas, struct area a, int row,
     return 2;
 }
 
-static int draw_stored_pair(const struct session *session,
-                            struct canvas *canvas, struct area a, int row,
+static int draw_stored_pair(struct canvas *canvas, struct area a, int row,
                             const struct row *r)
 {
     char first[SESSION_TEXT_MAX];
     char second[SESSION_TEXT_MAX];
     struct text f = text_over(first, sizeof first);
     struct text s = text_over(second, sizeof second);
-    session_stored_site(session, &r->species, &r->reference, &f);
-    session_stored_site(session, &r->species, &r->against, &s);
+    session_stored_site(&r->reference, &f);
+    session_stored_site(&r->against, &s);
     char text[NUMBER_TEXT_MAX + 4];
     char percent[NUMBER_TEXT_MAX + 4];
     int used = 0;
@@ -168,9 +167,9 @@ static struct summary along(const struct trend *trend, int curve)
     for (int i = 0; i < trend->walk.count; i++) {
         const struct trend_value *v = &trend->series[curve].values[i];
         if (v->has_residual)
-            summary_add_residual(&s, trend->walk.steps[i].z,
-                                 trend->walk.steps[i].charge, v->residual,
-                                 v->has_percent ? &v->percent : NULL);
+            summary_add_residual(
+                &s, trend->walk.steps[i].z, trend->walk.steps[i].charge,
+                trend->site, v->residual, v->has_percent ? &v->percent : NULL);
         else
             s.gaps++;
     }
@@ -210,7 +209,8 @@ static void draw_along(const struct trend *trend, struct canvas *canvas,
         canvas_textf(canvas, row, a.column + 3 + NAME_COLUMNS + VALUE_COLUMNS,
                      a.columns - 3 - NAME_COLUMNS - VALUE_COLUMNS, ROLE_TEXT,
                      "at most %s (%s)", text,
-                     ion_print(sum.largest_z, sum.largest_charge, ion));
+                     ion_print_at(sum.largest_z, sum.largest_charge,
+                                  sum.largest_site, ion));
     }
 }
 
@@ -229,7 +229,7 @@ void screen_trend_table_draw(const struct session *session,
         return;
     }
     draw_head(session, canvas, area, &r);
-    row += draw_stored_pair(session, canvas, area, row, &r) + 1;
+    row += draw_stored_pair(canvas, area, row, &r) + 1;
     if (trend->series_count > 0 && row < bottom) {
         int column = area.column + 2 + NAME_COLUMNS;
         canvas_textf(canvas, row, area.column, NAME_COLUMNS, ROLE_HEADING,
@@ -314,7 +314,7 @@ void screen_trend_lines_draw(const struct session *session,
         text_add(&text, r.reference.reason);
     char site[SESSION_TEXT_MAX];
     struct text where = text_over(site, sizeof site);
-    session_stored_site(session, &r.species, &r.reference, &where);
+    session_stored_site(&r.reference, &where);
     if (where.length > 0)
         text_addf(&text, " at %s", site);
     bool measured = !screen_trend_unmeasured(r.reference.evidence);

@@ -12,13 +12,8 @@ void session_asked_site(const struct session *s, const struct provenance *set,
     reference_asked_site(reference, s->choice.site, t);
 }
 
-void session_stored_site(const struct session *s, const struct species *species,
-                         const struct reading *stored, struct text *t)
+void session_stored_site(const struct reading *stored, struct text *t)
 {
-    if (stored->state != READING_OK || !stored->provenance)
-        return;
-    const struct reference *reference =
-        reference_find(study_references(s->study), stored->provenance->id);
-    if (reference)
-        reference_site_text(reference, species, s->choice.site, t);
+    if (stored->state == READING_OK)
+        site_words(t, stored->site);
 }

@@ -10,9 +10,8 @@
 void session_asked_site(const struct session *s, const struct provenance *set,
                         struct text *t);
 
-/* Writes the site of a stored value of a species, "VI, high spin"; nothing
- * where its set tells none apart or holds no value. */
-void session_stored_site(const struct session *s, const struct species *species,
-                         const struct reading *stored, struct text *t);
+/* Writes the site of a stored value, "VI, high spin"; nothing where its set
+ * tells none apart or holds no value. */
+void session_stored_site(const struct reading *stored, struct text *t);
 
 #endif

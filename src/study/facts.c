@@ -253,8 +253,7 @@ static bool add_reference(const struct reference *reference,
     bool any = false;
     for (int w = 0; w < c->count; w++) {
         readings[w] = reference_read(reference, &c->species[w],
-                                     by_subshell ? asks[w].n : 0, asks[w].l,
-                                     asks[w].site);
+                                     by_subshell ? asks[w].n : 0, asks[w].l);
         any = any || readings[w].state == READING_OK;
     }
     if (!any)

@@ -107,7 +107,8 @@ static void insert_derived(struct reference_list *list)
 }
 
 void reference_list_fill(struct reference_list *list,
-                         const struct catalogue *catalogue)
+                         const struct catalogue *catalogue,
+                         struct absence_list *absences)
 {
     list->count = 0;
     for (int q = 0; q < QUANTITY_COUNT; q++)
@@ -122,6 +123,7 @@ void reference_list_fill(struct reference_list *list,
                              .set = set,
                              .rank = rank_of(catalogue, i),
                              .outermost_only = is_outermost_only(set),
+                             .absences = absences,
                          });
     }
     insert_derived(list);
@@ -236,9 +238,9 @@ bool reference_has_sites(const struct reference *reference)
 /* The entry of an ion at a site, NULL when there is none. Another site is
  * never put in its place. */
 static const struct entry *entry_at_site(const struct reference *reference,
-                                         const struct species *species,
-                                         struct site site)
+                                         const struct species *species)
 {
+    const struct site site = species->site;
     const struct dataset *set = reference->set;
     enum coordination coordination = site.coordination != COORDINATION_NONE
                                          ? site.coordination
@@ -255,45 +257,24 @@ static const struct entry *entry_at_site(const struct reference *reference,
 }
 
 static struct reading read_at_site(const struct reference *reference,
-                                   const struct species *species,
-                                   struct site site)
+                                   const struct species *species)
 {
-    const struct entry *entry = entry_at_site(reference, species, site);
+    const struct entry *entry = entry_at_site(reference, species);
     if (entry)
         return dataset_entry_reading(reference->set, entry);
-    return reading_gap(reference->quantity, READING_MISSING,
-                       "nothing stored for this coordination and spin",
-                       reference->provenance);
-}
-
-static void add_site(enum coordination coordination, enum spin_state spin,
-                     struct text *t)
-{
-    text_add(t, coordination_id(coordination));
-    if (spin != SPIN_NONE)
-        text_addf(t, ", %s", spin_word(spin));
-}
-
-void reference_site_text(const struct reference *reference,
-                         const struct species *species, struct site site,
-                         struct text *t)
-{
-    if (!reference_has_sites(reference))
-        return;
-    const struct entry *entry = entry_at_site(reference, species, site);
-    if (entry && entry->gap == GAP_NONE)
-        add_site((enum coordination)entry->coordination,
-                 (enum spin_state)entry->spin, t);
+    return reading_gap(
+        reference->quantity, READING_MISSING,
+        absence_text(reference->absences, reference->set, species),
+        reference->provenance);
 }
 
 void reference_asked_site(const struct reference *reference, struct site site,
                           struct text *t)
 {
-    if (reference_has_sites(reference))
-        add_site(site.coordination != COORDINATION_NONE
-                     ? site.coordination
-                     : reference->set->default_coordination,
-                 site.spin, t);
+    if (!reference_has_sites(reference))
+        return;
+    struct site base = {reference->set->default_coordination, SPIN_NONE};
+    site_words(t, site_filled(site, base));
 }
 
 static const struct subshell *subshell_of(const struct configuration *c, int n,
@@ -306,8 +287,7 @@ static const struct subshell *subshell_of(const struct configuration *c, int n,
 }
 
 struct reading reference_read(const struct reference *reference,
-                              const struct species *species, int n, int l,
-                              struct site site)
+                              const struct species *species, int n, int l)
 {
     const struct subshell *outer =
         configuration_outermost(&species->configuration);
@@ -331,13 +311,11 @@ struct reading reference_read(const struct reference *reference,
         n = outer->n;
         l = outer->l;
     }
-    bool at_site =
-        reference_has_sites(reference) &&
-        (site.coordination != COORDINATION_NONE || site.spin != SPIN_NONE);
     struct reading r =
-        at_site ? read_at_site(reference, species, site)
-                : dataset_reading(reference->set, species->z, species->charge,
-                                  by_subshell ? n : 0, by_subshell ? l : 0);
+        reference_has_sites(reference)
+            ? read_at_site(reference, species)
+            : dataset_reading(reference->set, species->z, species->charge,
+                              by_subshell ? n : 0, by_subshell ? l : 0);
     if (r.state != READING_OK || species->origin != ORIGIN_USER)
         return r;
     /* An energy belongs to the level that it was measured for; a size that was
@@ -353,7 +331,7 @@ struct reading reference_read(const struct reference *reference,
 
 const struct reference *
 reference_default(const struct reference_list *list, enum quantity_id quantity,
-                  const struct species *species, int n, int l, struct site site,
+                  const struct species *species, int n, int l,
                   const struct definition *definition, bool inner)
 {
     const struct reference *first = NULL, *like = NULL, *of_ions = NULL;
@@ -366,7 +344,7 @@ reference_default(const struct reference_list *list, enum quantity_id quantity,
         if (first && r->rank == RANK_ADDED)
             break;
         if (definition && own == definition) {
-            if (reference_read(r, species, n, l, site).state == READING_OK)
+            if (reference_read(r, species, n, l).state == READING_OK)
                 return r;
             like = like ? like : r;
         }
@@ -376,7 +354,7 @@ reference_default(const struct reference_list *list, enum quantity_id quantity,
         first = first ? first : r;
     }
     if (!first && inner)
-        return reference_default(list, quantity, species, n, l, site,
-                                 definition, false);
+        return reference_default(list, quantity, species, n, l, definition,
+                                 false);
     return of_ions ? of_ions : like ? like : first;
 }

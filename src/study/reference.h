@@ -9,6 +9,7 @@
 #include "element/reading.h"
 #include "element/species.h"
 #include "refdata/catalogue.h"
+#include "study/absence.h"
 
 /* Z_eff = n sqrt(I/Ry), of the subshell that loses the electron: the one that
  * holds fewer in the stored configuration of the ion than in that of the
@@ -23,7 +24,8 @@
  * have no such companions: what is cited for one id never depends on what else
  * was loaded. rank: order among the references of its quantity, 1 first; sets
  * that the user added stand behind the built-in ones, whatever rank they claim.
- * outermost_only: it says nothing of inner subshells. */
+ * outermost_only: it says nothing of inner subshells. absences: where reasons
+ * for gaps are kept that name the nearest stored sites; NULL for none. */
 struct reference {
     const struct provenance *provenance;
     enum quantity_id quantity;
@@ -32,6 +34,7 @@ struct reference {
     const struct derivation *derivation;
     const struct dataset *const *firsts;
     bool outermost_only;
+    struct absence_list *absences;
 };
 
 /* All references of a catalogue, sorted by quantity, then rank, then their
@@ -51,40 +54,29 @@ struct reference_list {
     } derived[DERIVATION_MAX];
 };
 
+/* absences: see struct reference; borrowed, may be NULL. */
 void reference_list_fill(struct reference_list *list,
-                         const struct catalogue *catalogue);
+                         const struct catalogue *catalogue,
+                         struct absence_list *absences);
 
 /* By the id of its data set (or of the derived one); NULL when none. */
 const struct reference *reference_find(const struct reference_list *list,
                                        const char *id);
 
-/* The site of an ion, for sets that tell them apart: COORDINATION_NONE is the
- * set's own default, SPIN_NONE the spin that its source prefers there. */
-struct site {
-    enum coordination coordination;
-    enum spin_state spin;
-};
-
 /* The reference that a row takes when none was chosen: the first set with the
  * model's own definition (NULL: none) that holds a value for the species at its
  * site; for an ion else the first that was found for ions; else the first with
  * that definition, else the first of the quantity that covers such a subshell.
- * NULL when the quantity has none. n, l, site as in reference_read; inner: the
+ * NULL when the quantity has none. n, l as in reference_read; inner: the
  * subshell asked about is neither the outermost nor the one that loses the
  * electron. */
 const struct reference *
 reference_default(const struct reference_list *list, enum quantity_id quantity,
-                  const struct species *species, int n, int l, struct site site,
+                  const struct species *species, int n, int l,
                   const struct definition *definition, bool inner);
 
 /* True when the set tells sites apart. */
 bool reference_has_sites(const struct reference *reference);
-
-/* Writes the site of the value that reference_read gives, "VI, high spin";
- * nothing when the set knows none or holds no value there. */
-void reference_site_text(const struct reference *reference,
-                         const struct species *species, struct site site,
-                         struct text *t);
 
 /* Writes the site that is asked of a set, whatever the ion: "VI", and the spin
  * where one was chosen; nothing when it knows none. */
@@ -97,10 +89,10 @@ void reference_asked_site(const struct reference *reference, struct site site,
 const struct subshell *reference_emptied(const struct species *species);
 
 /* Its value for a species, in base units; n = 0 asks for the outermost
- * subshell or for a quantity without subshells. Always a reading; a gap says
- * why. */
+ * subshell or for a quantity without subshells. A set that tells sites apart is
+ * read at the species' own; no other site is ever put in its place. Always a
+ * reading; a gap says why. */
 struct reading reference_read(const struct reference *reference,
-                              const struct species *species, int n, int l,
-                              struct site site);
+                              const struct species *species, int n, int l);
 
 #endif

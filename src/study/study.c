@@ -37,6 +37,7 @@ struct study {
     char missing[QUANTITY_COUNT][MISSING_TEXT_MAX]; /* no such input */
     struct ground *grounds;                         /* grounds[Z_MAX + 1] */
     struct reference_list references;
+    struct absence_list *absences;
     struct model_options options;
     void *works[WORK_MAX]; /* by place in the registry; made when needed */
     const struct dataset *covalent;
@@ -74,7 +75,10 @@ struct study *study_new(const struct catalogue *catalogue, struct status *st)
         return NULL;
     }
     study->grounds = calloc(Z_MAX + 1, sizeof *study->grounds);
-    if (!study->grounds) {
+    study->absences = calloc(1, sizeof *study->absences);
+    if (!study->grounds || !study->absences) {
+        free(study->grounds);
+        free(study->absences);
         free(study);
         status_fail(st, STATUS_MEMORY, "out of memory");
         return NULL;
@@ -82,7 +86,7 @@ struct study *study_new(const struct catalogue *catalogue, struct status *st)
     assert(model_count() <= WORK_MAX);
     study->catalogue = catalogue;
     study->covalent = catalogue_find(catalogue, COVALENT_SET);
-    reference_list_fill(&study->references, catalogue);
+    reference_list_fill(&study->references, catalogue, study->absences);
     set_derived(study);
     return study;
 }
@@ -99,6 +103,8 @@ void study_free(struct study *study)
     solution_free(&study->solutions);
     free(study->queue);
     free(study->grounds);
+    absence_clear(study->absences);
+    free(study->absences);
     free(study);
 }
 
@@ -183,6 +189,7 @@ bool study_species(const struct study *study, const struct ask *ask,
     if (!ground)
         return false;
     *species = ground->species;
+    species->site = ask->site;
     if (!ask->configuration ||
         configuration_same(ask->configuration, &species->configuration))
         return true;
@@ -196,6 +203,7 @@ bool study_species(const struct study *study, const struct ask *ask,
     *species = (struct species){
         .z = ask->z,
         .charge = ask->charge,
+        .site = ask->site,
         .configuration = *ask->configuration,
         .origin = ORIGIN_USER,
         .term = {"", -1, -1, -1},
@@ -403,13 +411,12 @@ struct row study_row(const struct study *study, const struct ask *ask)
     }
     if (!reference)
         reference = reference_default(&study->references, ask->quantity,
-                                      &row.species, ask->n, ask->l, ask->site,
-                                      definition, is_inner(ask, &row.species));
+                                      &row.species, ask->n, ask->l, definition,
+                                      is_inner(ask, &row.species));
     struct reading stored =
-        reference
-            ? reference_read(reference, &row.species, ask->n, ask->l, ask->site)
-            : reading_gap(ask->quantity, READING_MISSING,
-                          "no reference set for this quantity", NULL);
+        reference ? reference_read(reference, &row.species, ask->n, ask->l)
+                  : reading_gap(ask->quantity, READING_MISSING,
+                                "no reference set for this quantity", NULL);
     if (reference && !definition)
         definition = reference->provenance->definition;
     row.unit = unit_of(ask, definition);
@@ -417,9 +424,9 @@ struct row study_row(const struct study *study, const struct ask *ask)
     row.repeats = reference && offer >= 0 && is_repeated(ask->model, reference);
     assert(!ask->against || ask->against->quantity == ask->quantity);
     if (ask->against)
-        row_disagree(
-            &row, chosen_kind(ask, reference_read(ask->against, &row.species,
-                                                  ask->n, ask->l, ask->site)));
+        row_disagree(&row,
+                     chosen_kind(ask, reference_read(ask->against, &row.species,
+                                                     ask->n, ask->l)));
     return row;
 }
 

@@ -11,7 +11,8 @@
 #include "study/reference.h"
 
 /* A question for one row. Zero fields are defaults: the outermost subshell,
- * the ground configuration, the default reference, the base unit. model may be
+ * the ground configuration, the default reference, the base unit. The site is
+ * part of the species. model may be
  * NULL: the stored value alone. */
 struct ask {
     int z;

@@ -76,8 +76,10 @@ void trend_fill(struct trend *trend, const struct study *study,
                 int count)
 {
     struct walk walk = trend->walk;
-    *trend = (struct trend){
-        .walk = walk, .quantity = ask->quantity, .unit = ask->unit};
+    *trend = (struct trend){.walk = walk,
+                            .quantity = ask->quantity,
+                            .unit = ask->unit,
+                            .site = ask->site};
     for (int m = 0; m < count && m < TREND_MODELS_MAX; m++)
         trend->series[trend->series_count++].model = models[m];
     for (int i = 0; i < walk.count; i++) {

@@ -42,6 +42,7 @@ struct trend {
     struct walk walk;
     enum quantity_id quantity;
     const struct unit *unit;
+    struct site site; /* of every step */
     int series_count;
     struct trend_series series[TREND_MODELS_MAX];
     int set_count;

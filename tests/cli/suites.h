@@ -14,6 +14,7 @@ TCase *stream_cases(void);
 TCase *atom_cases(void);
 TCase *audit_cases(void);
 TCase *compare_cases(void);
+TCase *site_cases(void);
 TCase *source_cases(void);
 TCase *good_cases(void);
 

@@ -14,6 +14,7 @@ int main(void)
     suite_add_tcase(suite, atom_cases());
     suite_add_tcase(suite, audit_cases());
     suite_add_tcase(suite, compare_cases());
+    suite_add_tcase(suite, site_cases());
     suite_add_tcase(suite, source_cases());
     suite_add_tcase(suite, good_cases());
     return run_suite(suite);

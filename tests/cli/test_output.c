@@ -99,10 +99,11 @@ END_TEST
 START_TEST(csv_has_the_agreed_heading_and_ends_its_lines_as_rfc_4180)
 {
     static const char heading[] =
-        "z,symbol,name,charge,configuration,subshell,quantity,unit,model,value,"
-        "uncertainty,reference_set,reference_value,reference_uncertainty,"
-        "residual,residual_percent,state,model_source,reference_source,version"
-        "\r\n";
+        "z,symbol,name,charge,coordination,spin,configuration,subshell,"
+        "quantity,unit,model,definition,value,uncertainty,uncertainty_kind,"
+        "state,note,reference_set,reference_definition,reference_kind,"
+        "reference_value,reference_uncertainty,residual,residual_percent,"
+        "suspect,model_source,reference_source,version\r\n";
     struct program_result r = done("list Fe " CLOSED " --format csv");
     ck_assert_int_eq(strncmp(r.out, heading, strlen(heading)), 0);
     for (const char *p = r.out; *p; p++)

@@ -117,7 +117,7 @@ START_TEST(residuals_are_exact_for_every_element_model_and_reference_set)
                                        " --unit cm-1"};
     size_t compared = 0;
     int calls = 0;
-    reference_list_fill(&list, catalogue_builtin());
+    reference_list_fill(&list, catalogue_builtin(), NULL);
     ck_assert_int_gt(list.count, 20);
     for (int i = 0; i < list.count; i++) {
         const struct reference *ref = &list.items[i];

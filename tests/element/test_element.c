@@ -238,13 +238,76 @@ START_TEST(selections_name_what_the_trade_names)
 }
 END_TEST
 
+/* What stands behind '@' is read as people write it and printed in one way. */
+START_TEST(a_site_goes_with_its_ion)
+{
+    static const struct {
+        const char *word, *printed;
+    } cases[] = {
+        {"Co3+@VI,low", "Co3+@VI,low"},
+        {"Co3+@6,LOW", "Co3+@VI,low"},
+        {"Sr2+@xii", "Sr2+@XII"},
+        {"Cu2+@4sq", "Cu2+@IVSQ"},
+        {"Fe3+@high", "Fe3+@high"},
+        {"Cs+@12", "Cs+@XII"},
+        {"O2-@IV", "O2-@IV"},
+        {"Fe@VIII", "Fe@VIII"},
+        {"Sn2+@IIIPY,low", "Sn2+@IIIPY,low"},
+    };
+    struct status st = status_ok();
+    for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
+        struct selection s = {0};
+        char out[ION_TEXT_MAX];
+        ck_assert_msg(selection_add(&s, cases[i].word, &st), "%s", st.message);
+        ck_assert_int_eq(s.count, 1);
+        ck_assert_str_eq(
+            ion_print_at(s.items[0].z, s.items[0].charge, s.items[0].site, out),
+            cases[i].printed);
+        /* What is printed is read as the same. */
+        ck_assert(selection_add(&s, out, &st) && s.count == 1);
+    }
+    struct selection s = {0};
+    ck_assert(selection_add(&s, "Co3+@VI,low", &st) &&
+              selection_add(&s, "Co3+@VI,high", &st) &&
+              selection_add(&s, "Co3+", &st) && s.count == 3);
+    ck_assert(selection_add(&s, "Fe2+@all", &st) && s.items[3].every_site &&
+              !site_named(s.items[3].site));
+    s.count = 0;
+    ck_assert(selection_add(&s, "electrons:10@VI", &st) && s.count > 5 &&
+              s.items[2].site.coordination == COORDINATION_VI);
+}
+END_TEST
+
+/* Other ways to write an ion are understood well enough to name the right one.
+ */
+START_TEST(an_ion_written_in_another_way_is_answered_with_the_right_one)
+{
+    static const char *const cases[][2] = {
+        {"Co+3", "Co3+"},    {"Co(III)", "Co3+"}, {"cobalt3+", "Co3+"},
+        {"co3+", "Co3+"},    {"iron3+", "Fe3+"},  {"Fe(iii)", "Fe3+"},
+        {"Fe+++", "Fe3+"},   {"O-2", "O2-"},      {"Fe^3+", "Fe3+"},
+        {"oxygen2-", "O2-"}, {"Ce(4)", "Ce4+"},   {"co3+@VI", "Co3+"},
+    };
+    for (size_t i = 0; i < sizeof cases / sizeof cases[0]; i++) {
+        struct status st = status_ok();
+        struct selection s = {0};
+        ck_assert(!selection_add(&s, cases[i][0], &st));
+        ck_assert_int_eq(st.code, STATUS_USAGE);
+        ck_assert_msg(strstr(st.message, cases[i][1]), "%s", st.message);
+    }
+}
+END_TEST
+
 START_TEST(wrong_selections_are_refused_and_name_the_word)
 {
     static const char *const wrong[] = {
-        "Xx",      "fe",        "0",       "119",     "-",       "Fe-",
-        "Zn-Sc",   "period:8",  "group:0", "group:x", "block:g", "block:sp",
-        "Fe27+",   "Fe0+",      "Fe03+",   "era:3",   "Li-Xx",   "",
-        "period:", "period:+4", "H2+",     "2+",      "Fe3+x",   "-Fe",
+        "Xx",         "fe",       "0",        "119",         "-",
+        "Fe-",        "Zn-Sc",    "period:8", "group:0",     "group:x",
+        "block:g",    "block:sp", "Fe27+",    "Fe0+",        "Fe03+",
+        "era:3",      "Li-Xx",    "",         "period:",     "period:+4",
+        "H2+",        "2+",       "Fe3+x",    "-Fe",         "Fe3+@",
+        "Fe3+@13",    "@VI",      "Fe3+@VI,", "Fe3+@VI,mid", "Fe3+@,low",
+        "Fe3+@VI@VI", "Fe(X)y",
     };
     for (size_t i = 0; i < sizeof wrong / sizeof wrong[0]; i++) {
         struct status st = status_ok();
@@ -372,6 +435,9 @@ int main(void)
     tcase_add_test(nouns, terms_are_read);
     tcase_add_test(nouns, selections_name_what_the_trade_names);
     tcase_add_test(nouns, wrong_selections_are_refused_and_name_the_word);
+    tcase_add_test(nouns, a_site_goes_with_its_ion);
+    tcase_add_test(
+        nouns, an_ion_written_in_another_way_is_answered_with_the_right_one);
     tcase_add_test(nouns, quantities_and_states_have_distinct_ids);
     tcase_add_test(nouns, a_reading_changes_its_unit_and_a_gap_stays_one);
     tcase_add_test(nouns, walks_hold_their_species_once_in_order);

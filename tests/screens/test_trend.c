@@ -57,7 +57,7 @@ START_TEST(two_covalent_sets_down_a_group_at_120x40)
     type(".");
     check_golden("trend-two-sets-120x40.txt");
     ck_assert(shows("second - first: -16.0 pm (-12.1 %)"));
-    ck_assert(shows("132(3), derived from measurements"));
+    ck_assert(shows("132(3) at low spin, derived from measurements"));
     /* The pane shows other quantities too, for which there is no second set. */
     choose("u", "angstrom");
     type("m");

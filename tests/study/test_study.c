@@ -241,7 +241,7 @@ START_TEST(an_ion_is_read_at_its_site_and_no_other)
                  "Z=%d, site %zu", sites[i].z, i);
         else
             ck_assert_msg(row.reference.state == READING_MISSING &&
-                              strstr(row.reference.reason, "coordination"),
+                              strstr(row.reference.reason, "not stored; "),
                           "site %zu", i);
     }
 }
