@@ -152,8 +152,7 @@ START_TEST(a_site_that_is_not_stored_names_the_nearest)
 }
 END_TEST
 
-/* NIST ASD 5.12: Fe 7.9024681(12)
- * eV, measured. */
+/* NIST ASD 5.12: Fe 7.9024681(12) eV, measured. */
 START_TEST(a_row_names_kind_and_definition_of_its_reference)
 {
     char *text = printed("list Fe --quantity ionization --model slater "
@@ -163,7 +162,8 @@ START_TEST(a_row_names_kind_and_definition_of_its_reference)
         {"coordination", ""},
         {"spin", ""},
         {"definition", "ionization energy"},
-        {"uncertainty_kind", "standard"},
+        {"uncertainty", ""}, /* the rule states none, so it has no kind */
+        {"uncertainty_kind", ""},
         {"reference_definition", "ionization energy"},
         {"reference_kind", "measured"},
         {"reference_uncertainty", "0.0000012"},
