@@ -16,7 +16,7 @@ struct app {
     void *states[SCREENS_MAX];
     int screen;          /* place in the list */
     int before;          /* where a screen that returns was opened */
-    struct key_set keys; /* of the screen shown */
+    struct key_set keys; /* of the screen it was asked on */
 
     const struct prompt_ops *prompt; /* NULL: no line is typed */
     struct field field;
@@ -24,7 +24,7 @@ struct app {
     const struct chooser_ops *chooser; /* NULL: no list is open */
     struct chooser list;
 
-    const struct export_ops *export; /* of the screen shown */
+    const struct export_ops *export; /* of the screen it was asked on */
     char path[FIELD_TEXT_MAX];
     bool replace;
     bool awaiting; /* an export waits until its atoms are solved */

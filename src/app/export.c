@@ -1,7 +1,10 @@
 /* SPDX-License-Identifier: MIT */
 /* What the user takes away: what the screen exports, and where to. */
+#include <assert.h>
+
 #include "app/app_internal.h"
 #include "report/report.h"
+#include "screens/list.h"
 #include "write/format.h"
 
 /* Filled and taken here, since it chooses among the screen's exports. */
@@ -101,11 +104,22 @@ enum effect app_chooser_update(struct app *app, const struct event *event)
     return EFFECT_REDRAW;
 }
 
+/* State of the screen whose export it is: while one waited for its atoms the
+ * screen shown may have become another. */
+static void *exporter(const struct app *app)
+{
+    for (int i = 0; i < screen_list_count; i++)
+        for (int e = 0; e < screen_list[i]->export_count; e++)
+            if (&screen_list[i]->exports[e] == app->export)
+                return app->states[i];
+    assert(!"an export belongs to a screen");
+    return NULL;
+}
+
 bool app_export_ready(struct app *app)
 {
     const struct export_ops *e = app->export;
-    int lacking =
-        e->lacks ? e->lacks(&app->session, app->states[app->screen]) : 0;
+    int lacking = e->lacks ? e->lacks(&app->session, exporter(app)) : 0;
     app->awaiting = lacking > 0 && app_has_work(app);
     return lacking == 0;
 }
@@ -114,8 +128,8 @@ bool app_export(struct app *app, FILE *out, struct status *st)
 {
     struct report report;
     report_begin(&report);
-    bool ok = app->export->report(&app->session, app->states[app->screen],
-                                  format_csv.uses, &report, st) &&
+    bool ok = app->export->report(&app->session, exporter(app), format_csv.uses,
+                                  &report, st) &&
               format_write(&format_csv, out, &report, &write_plain, st);
     report_clear(&report);
     return ok;
@@ -123,5 +137,5 @@ bool app_export(struct app *app, FILE *out, struct status *st)
 
 void app_export_command(struct app *app, struct text *t)
 {
-    app->export->command(&app->session, app->states[app->screen], t);
+    app->export->command(&app->session, exporter(app), t);
 }

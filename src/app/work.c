@@ -22,6 +22,11 @@ bool app_step(struct app *app, bool *changed)
     if (own_work(app)) {
         *changed = false;
         ops->step(s, app->states[app->screen], changed);
+        /* A list or line that is open belongs to the screen that is left. */
+        if (s->go) {
+            app->chooser = NULL;
+            app->prompt = NULL;
+        }
         app_follow(app);
         return true;
     }
