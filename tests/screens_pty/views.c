@@ -96,7 +96,7 @@ static const struct {
 } choosers[] = {
     {"w", "─ Quantity ─", "i", "ionization energy, eV"},
     {"b", "─ Model ─", "c", "e   clementi"},
-    {"o", "─ Subshell ─", "3", "3p"},
+    {"o", "─ Subshell ─", "3", "neutral, 3s"},
     {"r", "─ Reference ─", "zz", "reference zeff_clementi_1963"},
 };
 
