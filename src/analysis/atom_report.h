@@ -49,8 +49,8 @@ struct atom_method {
 extern const struct atom_method method_default;
 
 /* A level, or a whole subshell (twice_j and spin 0, energy the mean over its
- * electrons). twice_j: 2j, 0 where levels are not parted by j; spin: +1
- * majority, -1 minority, 0 where they are not parted by spin. energy in
+ * electrons). twice_j: 2j, 0 where levels are not told apart by j; spin: +1
+ * majority, -1 minority, 0 where they are not told apart by spin. energy in
  * hartree, lengths in bohr. peak_radius: outermost maximum of the radial
  * density. Z_eff: n sqrt(-2 energy); mean radius of hydrogen's n l over this
  * one's; Z less all electrons inside peak_radius. */

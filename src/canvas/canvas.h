@@ -74,7 +74,7 @@ void canvas_paint(struct canvas *canvas, int row, int column, int rows,
 void canvas_reverse(struct canvas *canvas, int row, int column, int rows,
                     int columns);
 
-/* Writes the canvas as two text grids parted by a line of '=': characters in
+/* Writes the canvas as two text grids separated by a line of '=': characters in
  * UTF-8, then the letters of the roles, '@' where reverse. Trailing blanks are
  * cut, every row ends in a newline. The caller frees the result; NULL when
  * memory is short. */

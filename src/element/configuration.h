@@ -19,7 +19,7 @@ struct configuration {
 
 /* Reads a configuration: an optional noble-gas core in square brackets, then
  * subshells with their occupation (`3d6`, a missing number means one, `3d5.5`
- * is allowed), parted by spaces; order does not matter. Refused with the reason
+ * is allowed), separated by spaces; order does not matter. Refused with the reason
  * (STATUS_USAGE): unknown core, a label that is none, an overfull or repeated
  * subshell, one that the core holds already, nothing at all. */
 MUST_CHECK bool configuration_parse(const char *text,
